@@ -1,0 +1,38 @@
+package sojourn.document;
+
+import com.fasterxml.jackson.databind.JsonNode;
+import com.fasterxml.jackson.databind.node.ObjectNode;
+import java.util.Optional;
+import java.util.function.Function;
+
+/**
+ * One declaration of what a piece of a document looks like: it reads a located node into a {@code T}, writes the node
+ * out resolved, and emits the JSON Schema that accepts the same nodes.
+ *
+ * @param <T> what a well-formed node means
+ */
+public interface Shape<T> {
+    /** Reads {@code node}; every fault is added to {@code problems}; empty exactly if this node had a fault. */
+    Optional<T> read(Node node, Problems problems);
+
+    /** The node written out in full: defaults filled in, numbers as numbers. Only for a node that reads without fault. */
+    JsonNode resolved(Node node);
+
+    /** The JSON Schema (draft 2020-12) of this shape; a fresh object each time. */
+    ObjectNode schema();
+
+    /** What is expected, for messages: "a number from 0 to 1", "one of daily, weekly, monthly". */
+    String expected();
+
+    /** Whether a node of this kind could be meant for this shape (a map, a list, a number, a word); decides between alternatives. */
+    boolean mayBe(Node node);
+
+    /** The same shape with its value converted; {@code conversion} must not fail. */
+    <U> Shape<U> as(Function<? super T, ? extends U> conversion);
+
+    /**
+     * The same shape with a rule that no JSON Schema can state; {@code rule} gives the refusal of a bad value. A refusal may
+     * name a key of the node, at whose value the fault is then placed.
+     */
+    Shape<T> refuse(Function<? super T, Optional<Refusal>> rule);
+}

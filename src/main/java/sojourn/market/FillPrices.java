@@ -1,0 +1,37 @@
+package sojourn.market;
+
+import java.util.OptionalDouble;
+
+/** The whole price table, for filling orders and marking positions. Deciding code must not see it. */
+public final class FillPrices {
+    private final PriceTable table;
+
+    FillPrices(PriceTable table) {
+        this.table = table;
+    }
+
+    /** The calendar. */
+    public TimeAxis axis() {
+        return table.axis();
+    }
+
+    /** Close of a bar. */
+    public double close(int asset, int bar) {
+        return table.bars(asset).close().at(bar);
+    }
+
+    /** Open of a bar; empty where the file has none. */
+    public OptionalDouble open(int asset, int bar) {
+        return table.bars(asset)
+                .open()
+                .map(column -> column.at(bar))
+                .filter(value -> !value.isNaN())
+                .map(OptionalDouble::of)
+                .orElseGet(OptionalDouble::empty);
+    }
+
+    /** What cash earned on a bar, simple. */
+    public double cashReturn(int bar) {
+        return table.cash().earned(bar);
+    }
+}

@@ -1,0 +1,109 @@
+package sojourn.market;
+
+import java.time.LocalDate;
+import java.util.List;
+import java.util.Optional;
+import java.util.OptionalDouble;
+
+/**
+ * What was known after the close of one bar: dates, prices and cash returns of that bar and of every bar before it. No method
+ * returns anything later; asking for a later bar is refused.
+ */
+public final class Known {
+    private final PriceTable table;
+    private final int bar;
+
+    Known(PriceTable table, int bar) {
+        if (bar < 0 || bar >= table.size()) {
+            throw new IndexOutOfBoundsException("bar " + bar + " of a table of " + table.size());
+        }
+        this.table = table;
+        this.bar = bar;
+    }
+
+    /** The last known bar. */
+    public int bar() {
+        return bar;
+    }
+
+    /** The date of the last known bar. */
+    public LocalDate date() {
+        return table.axis().date(bar);
+    }
+
+    /** The date of a known bar. */
+    public LocalDate date(int knownBar) {
+        return table.axis().date(known(knownBar));
+    }
+
+    /** What was known after the close of an earlier bar. */
+    public Known at(int knownBar) {
+        return new Known(table, known(knownBar));
+    }
+
+    /** Length of the bars. */
+    public BarLength barLength() {
+        return table.barLength();
+    }
+
+    /** Asset names. */
+    public List<String> assets() {
+        return table.assets();
+    }
+
+    /** Close of a known bar. */
+    public double close(int asset, int knownBar) {
+        return table.bars(asset).close().at(known(knownBar));
+    }
+
+    /** Closes from {@code start} to the last known bar, a copy. */
+    public double[] closes(int asset, int start) {
+        return table.bars(asset).close().range(start, bar + 1);
+    }
+
+    /** Open of a known bar; empty where the file has none. */
+    public OptionalDouble open(int asset, int knownBar) {
+        return optional(table.bars(asset).open(), knownBar);
+    }
+
+    /** High of a known bar; empty where the file has none. */
+    public OptionalDouble high(int asset, int knownBar) {
+        return optional(table.bars(asset).high(), knownBar);
+    }
+
+    /** Low of a known bar; empty where the file has none. */
+    public OptionalDouble low(int asset, int knownBar) {
+        return optional(table.bars(asset).low(), knownBar);
+    }
+
+    /** Volume of a known bar; empty where the file has none. */
+    public OptionalDouble volume(int asset, int knownBar) {
+        return optional(table.bars(asset).volume(), knownBar);
+    }
+
+    /** What cash earned on a known bar, simple. */
+    public double cashReturn(int knownBar) {
+        return table.cash().earned(known(knownBar));
+    }
+
+    /** What cash is expected to earn on the next bar at the rate known now, simple, over a bar of nominal length. */
+    public double expectedCashReturn() {
+        return table.cash().expectedNext(bar);
+    }
+
+    private OptionalDouble optional(Optional<PriceTable.Column> column, int knownBar) {
+        int index = known(knownBar);
+        if (column.isEmpty()) {
+            return OptionalDouble.empty();
+        }
+        double value = column.get().at(index);
+        return Double.isNaN(value) ? OptionalDouble.empty() : OptionalDouble.of(value);
+    }
+
+    private int known(int asked) {
+        if (asked < 0 || asked > bar) {
+            throw new IndexOutOfBoundsException("bar " + asked + " is not known at the close of bar " + bar);
+        }
+        return asked;
+    }
+}

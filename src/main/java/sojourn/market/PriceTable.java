@@ -1,0 +1,125 @@
+package sojourn.market;
+
+import java.util.Arrays;
+import java.util.List;
+import java.util.Optional;
+
+/**
+ * Prices of some assets and the return of cash on one calendar. The table itself shows no price: deciding code asks
+ * {@link #knownAt} for what was known at a close, trading code asks {@link #fillPrices}.
+ */
+public final class PriceTable {
+    private final TimeAxis axis;
+    private final List<String> assets;
+    private final Bars[] bars;
+    private final CashReturns cash;
+
+    /**
+     * One asset's bars, flat arrays of one value a bar. Closes are positive and finite everywhere; the other columns are there
+     * or not as a whole, and NaN on a bar means the file had no value there.
+     */
+    public record Bars(
+            Column close,
+            Optional<Column> open,
+            Optional<Column> high,
+            Optional<Column> low,
+            Optional<Column> volume) {}
+
+    /** An immutable column of doubles. */
+    public static final class Column {
+        private final double[] values;
+
+        private Column(double[] values) {
+            this.values = values;
+        }
+
+        /** Copies {@code values}. Not modified. */
+        public static Column of(double... values) {
+            return new Column(values.clone());
+        }
+
+        /** The value of a bar. */
+        public double at(int bar) {
+            return values[bar];
+        }
+
+        /** Number of bars. */
+        public int size() {
+            return values.length;
+        }
+
+        double[] range(int start, int end) {
+            return Arrays.copyOfRange(values, start, end);
+        }
+    }
+
+    private PriceTable(TimeAxis axis, List<String> assets, Bars[] bars, CashReturns cash) {
+        this.axis = axis;
+        this.assets = assets;
+        this.bars = bars;
+        this.cash = cash;
+    }
+
+    /** From one {@link Bars} an asset, in the same order as {@code assets}. */
+    public static PriceTable of(TimeAxis axis, List<String> assets, List<Bars> bars, CashReturns cash) {
+        if (assets.size() != bars.size()) {
+            throw new IllegalArgumentException(assets.size() + " names for " + bars.size() + " series");
+        }
+        for (Bars one : bars) {
+            if (one.close().size() != axis.size()) {
+                throw new IllegalArgumentException(
+                        "a series of " + one.close().size() + " bars on a calendar of " + axis.size());
+            }
+        }
+        if (cash.size() != axis.size()) {
+            throw new IllegalArgumentException("cash has " + cash.size() + " bars, the calendar " + axis.size());
+        }
+        return new PriceTable(axis, List.copyOf(assets), bars.toArray(Bars[]::new), cash);
+    }
+
+    /** Number of bars. */
+    public int size() {
+        return axis.size();
+    }
+
+    /** Length of the bars. */
+    public BarLength barLength() {
+        return axis.bars();
+    }
+
+    /** Asset names, in the order of the strategy file. */
+    public List<String> assets() {
+        return assets;
+    }
+
+    /** The index of an asset's name; refuses an unknown one. */
+    public int asset(String name) {
+        int index = assets.indexOf(name);
+        if (index < 0) {
+            throw new IllegalArgumentException("no asset '" + name + "'; known: " + assets);
+        }
+        return index;
+    }
+
+    /** What was known after the close of {@code bar}. */
+    public Known knownAt(int bar) {
+        return new Known(this, bar);
+    }
+
+    /** The whole table. Only {@code trade}, and what stands below it, may ask for this. */
+    public FillPrices fillPrices() {
+        return new FillPrices(this);
+    }
+
+    TimeAxis axis() {
+        return axis;
+    }
+
+    Bars bars(int asset) {
+        return bars[asset];
+    }
+
+    CashReturns cash() {
+        return cash;
+    }
+}

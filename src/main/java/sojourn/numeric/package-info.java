@@ -1,0 +1,10 @@
+/**
+ * Named numerical ideas that everything else stands on: compensated sums, sums of logarithms, the normal quantile,
+ * random streams that mean the same numbers everywhere, and argument checks. Plain doubles go in and come out; nothing
+ * here knows about markets, files or dates. Start with {@link sojourn.numeric.RandomStream} and
+ * {@link sojourn.numeric.CompensatedSum}.
+ */
+@NullMarked
+package sojourn.numeric;
+
+import org.jspecify.annotations.NullMarked;

@@ -1,0 +1,77 @@
+package sojourn.walk;
+
+import sojourn.numeric.Check;
+import sojourn.regime.WindowMoments;
+
+/** What was known of the regimes at one close: probabilities, how they move on, and what each regime means for returns. */
+public final class Reading {
+    private final int fit;
+    private final double[] filtered;
+    private final double[] transition;
+    private final WindowMoments moments;
+
+    private Reading(int fit, double[] filtered, double[] transition, WindowMoments moments) {
+        this.fit = fit;
+        this.filtered = filtered;
+        this.transition = transition;
+        this.moments = moments;
+    }
+
+    /**
+     * Copies its arrays. Neither modified.
+     *
+     * @param fit the number of the fit in force, from 1
+     * @param filtered probability of each regime at this close, sums to 1
+     * @param transition states × states, row-major: probability of the next regime (column) given this one (row)
+     * @param moments of the fit in force
+     */
+    public static Reading of(int fit, double[] filtered, double[] transition, WindowMoments moments) {
+        int states = filtered.length;
+        Check.that(
+                transition.length == states * states && moments.states() == states,
+                states + " probabilities, " + transition.length + " transitions, moments of " + moments.states());
+        return new Reading(fit, filtered.clone(), transition.clone(), moments);
+    }
+
+    /** The fit in force, counted from 1. */
+    public int fit() {
+        return fit;
+    }
+
+    /** Number of regimes. */
+    public int states() {
+        return filtered.length;
+    }
+
+    /** Probability of regime {@code k} now, given all observations up to this close. */
+    public double filtered(int k) {
+        return filtered[k];
+    }
+
+    /** Probability of each regime now, a copy. */
+    public double[] filtered() {
+        return filtered.clone();
+    }
+
+    /** Probability of each regime {@code bars} bars ahead: p A^bars, by repeated steps. */
+    public double[] predicted(int bars) {
+        Check.within(bars, 0, Integer.MAX_VALUE, "bars");
+        int states = filtered.length;
+        double[] now = filtered.clone();
+        for (int step = 0; step < bars; step++) {
+            double[] next = new double[states];
+            for (int i = 0; i < states; i++) {
+                for (int j = 0; j < states; j++) {
+                    next[j] += now[i] * transition[i * states + j];
+                }
+            }
+            now = next;
+        }
+        return now;
+    }
+
+    /** What one bar, {@code barsAhead} bars from now, is expected to return. */
+    public Forecast forecast(int barsAhead) {
+        return Forecast.mixing(predicted(barsAhead), moments);
+    }
+}
