@@ -56,9 +56,9 @@ public final class Known {
         return table.bars(asset).close().at(known(knownBar));
     }
 
-    /** Closes from {@code start} to the last known bar, a copy. */
+    /** Closes from the known bar {@code start} to the last known bar, a copy. */
     public double[] closes(int asset, int start) {
-        return table.bars(asset).close().range(start, bar + 1);
+        return table.bars(asset).close().range(known(start), bar + 1);
     }
 
     /** Open of a known bar; empty where the file has none. */

@@ -3,6 +3,8 @@ package sojourn.market;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
+import java.util.function.UnaryOperator;
+import sojourn.numeric.Check;
 
 /**
  * Prices of some assets and the return of cash on one calendar. The table itself shows no price: deciding code asks
@@ -15,15 +17,35 @@ public final class PriceTable {
     private final CashReturns cash;
 
     /**
-     * One asset's bars, flat arrays of one value a bar. Closes are positive and finite everywhere; the other columns are there
+     * One asset's bars, a value a bar in each column. Closes are positive and finite everywhere; the other columns are there
      * or not as a whole, and NaN on a bar means the file had no value there.
      */
     public record Bars(
-            Column close,
-            Optional<Column> open,
-            Optional<Column> high,
-            Optional<Column> low,
-            Optional<Column> volume) {}
+            Column close, Optional<Column> open, Optional<Column> high, Optional<Column> low, Optional<Column> volume) {
+        /** Refuses columns of different lengths and closes that are not positive and finite. */
+        public Bars {
+            for (int bar = 0; bar < close.size(); bar++) {
+                Check.above(close.at(bar), 0, "close of bar " + bar);
+            }
+            for (Optional<Column> other : List.of(open, high, low, volume)) {
+                if (other.isPresent() && other.get().size() != close.size()) {
+                    throw new IllegalArgumentException(
+                            "a column of " + other.get().size() + " bars beside one of " + close.size());
+                }
+            }
+        }
+
+        /** Closes alone. */
+        public static Bars ofCloses(double... closes) {
+            return new Bars(Column.of(closes), Optional.empty(), Optional.empty(), Optional.empty(), Optional.empty());
+        }
+
+        /** Every column converted alike. */
+        Bars each(UnaryOperator<Column> change) {
+            return new Bars(
+                    change.apply(close), open.map(change), high.map(change), low.map(change), volume.map(change));
+        }
+    }
 
     /** An immutable column of doubles. */
     public static final class Column {
@@ -50,6 +72,12 @@ public final class PriceTable {
 
         double[] range(int start, int end) {
             return Arrays.copyOfRange(values, start, end);
+        }
+
+        /** The values at {@code bars}, in that order. Not modified. */
+        Column at(int[] bars) {
+            return new Column(
+                    Arrays.stream(bars).mapToDouble(bar -> values[bar]).toArray());
         }
     }
 

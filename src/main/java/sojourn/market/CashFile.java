@@ -1,0 +1,97 @@
+package sojourn.market;
+
+import java.time.LocalDate;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+import java.util.OptionalDouble;
+import sojourn.market.CsvTable.Row;
+
+/** Reads rates of interest, percent a year, from the text of a file. An empty rate means that the one before goes on. */
+final class CashFile {
+    /** Percent a year; beyond it something else than a rate is written. */
+    private static final double MOST = 100;
+
+    /** Percent a year; if all rates lie below it they may be fractions. */
+    private static final double PERHAPS_A_FRACTION = 0.2;
+
+    private final Faults faults;
+    private final int column;
+    private final DatedRows dated;
+    private final List<Double> rates = new ArrayList<>();
+    private final MissingValues missing = new MissingValues("rate");
+
+    private CashFile(CsvTable table, String file, CashSource.Dated source, Faults faults) {
+        this.faults = faults;
+        CsvColumns named = new CsvColumns(table, faults);
+        int date = named.required("date", source.layout().date());
+        this.column = named.required("column", source.column());
+        this.dated = new DatedRows(date, source.layout().dateFormat(), BarLength.DAILY, file, faults);
+    }
+
+    /** A rate file's content. */
+    record Content(CashRates rates, int rows, LocalDate first, LocalDate last) {}
+
+    /** The rates in {@code text}; empty if there is any fault. */
+    static Optional<Content> read(TextFile text, CashSource.Dated source, Faults faults, List<Finding> findings) {
+        Optional<CsvTable> table =
+                CsvTable.of(text.file(), text.text(), source.layout().separator(), faults);
+        if (table.isEmpty()) {
+            return Optional.empty();
+        }
+        CashFile file = new CashFile(table.get(), text.file(), source, faults);
+        if (!faults.none()) {
+            return Optional.empty();
+        }
+        table.get().forEachRow(faults, file::take);
+        file.dated.finish(table.get(), "rate");
+        if (!faults.none()) {
+            return Optional.empty();
+        }
+        file.missing.finding(text.file()).ifPresent(findings::add);
+        file.perhapsFractions(text.file()).ifPresent(findings::add);
+        List<LocalDate> dates = file.dated.dates();
+        double[] rates = file.rates.stream().mapToDouble(Double::doubleValue).toArray();
+        return Optional.of(new Content(
+                CashRates.inFile(text.file(), dates, rates, file.dated.lines(), source.dayCount()),
+                rates.length,
+                dates.get(0),
+                dates.get(dates.size() - 1)));
+    }
+
+    private void take(Row row) {
+        Optional<LocalDate> date = dated.dateOf(row);
+        if (date.isEmpty()) {
+            return;
+        }
+        String text = row.cell(column);
+        if (text.isEmpty()) {
+            missing.add(date.get(), row.line());
+            return;
+        }
+        OptionalDouble rate = Decimal.parse(text);
+        if (rate.isEmpty()) {
+            faults.add(row.problem(column, "rate '" + text + "' is not a number", Decimal.remedy(text)));
+        } else if (Math.abs(rate.getAsDouble()) > MOST) {
+            faults.add(row.problem(
+                    column,
+                    "rate " + text + " lies beyond 100 percent a year",
+                    "write rates in percent a year, e.g. 2.5"));
+        } else {
+            dated.keep(date.get(), row);
+            rates.add(rate.getAsDouble());
+        }
+    }
+
+    private Optional<Finding> perhapsFractions(String file) {
+        double most = rates.stream().mapToDouble(Math::abs).max().orElse(0);
+        if (most == 0 || most >= PERHAPS_A_FRACTION) {
+            return Optional.empty();
+        }
+        return Optional.of(new Finding(
+                file,
+                0,
+                "no rate is above " + most + " percent a year",
+                "look whether the rates are fractions; they are read as percent a year"));
+    }
+}

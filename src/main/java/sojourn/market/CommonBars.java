@@ -1,0 +1,147 @@
+package sojourn.market;
+
+import java.time.LocalDate;
+import java.util.ArrayList;
+import java.util.HashSet;
+import java.util.List;
+import java.util.Set;
+import java.util.TreeSet;
+import java.util.stream.Collectors;
+import sojourn.document.InputException;
+import sojourn.document.Problem;
+import sojourn.market.PriceTable.Bars;
+
+/**
+ * Several series on the dates that all of them have. Whatever is cut off the end of the series, the bars that remain are the
+ * same as without the cut.
+ *
+ * @param axis the calendar, at least two bars
+ * @param bars one entry a series, in their order
+ * @param findings dates that fell away, and the unfinished last period
+ */
+record CommonBars(TimeAxis axis, List<Bars> bars, List<Finding> findings) {
+    CommonBars {
+        bars = List.copyOf(bars);
+        findings = List.copyOf(findings);
+    }
+
+    /** Puts {@code series}, at least one, on the calendar; refuses those with fewer than two bars in common. */
+    static CommonBars of(List<PriceSeries> series, Calendar calendar) {
+        List<LocalDate> days = commonDates(series);
+        if (days.size() < 2) {
+            throw new InputException(tooFewInCommon(series, days.size()));
+        }
+        List<Finding> findings = new ArrayList<>(fallenAway(series, days));
+        List<Bars> daily = new ArrayList<>();
+        for (PriceSeries one : series) {
+            int[] rows = one.rowsOf(days);
+            daily.add(one.bars().each(column -> column.at(rows)));
+        }
+        if (calendar.rowLength() == calendar.bars()) {
+            return new CommonBars(TimeAxis.of(calendar.bars(), days), daily, findings);
+        }
+        PeriodBars periods = new PeriodBars(days, calendar.bars());
+        if (periods.dates().size() < 2) {
+            throw new InputException(
+                    tooFewPeriods(series, days, calendar.bars(), periods.dates().size()));
+        }
+        findings.add(unfinished(periods.unfinished(), calendar.bars()));
+        return new CommonBars(
+                TimeAxis.of(calendar.bars(), periods.dates()),
+                daily.stream().map(periods::of).toList(),
+                findings);
+    }
+
+    private static List<LocalDate> commonDates(List<PriceSeries> series) {
+        Set<LocalDate> common = new TreeSet<>(series.get(0).dates());
+        for (PriceSeries one : series) {
+            common.retainAll(new HashSet<>(one.dates()));
+        }
+        return List.copyOf(common);
+    }
+
+    private static List<Finding> fallenAway(List<PriceSeries> series, List<LocalDate> days) {
+        Set<LocalDate> kept = new HashSet<>(days);
+        List<Finding> findings = new ArrayList<>();
+        for (PriceSeries one : series) {
+            List<LocalDate> gone =
+                    one.dates().stream().filter(date -> !kept.contains(date)).toList();
+            if (!gone.isEmpty()) {
+                LocalDate last = gone.get(gone.size() - 1);
+                String lackedBy = series.stream()
+                        .filter(other -> other != one)
+                        .map(other -> other.asset() + " lacks " + countIn(gone, other))
+                        .collect(Collectors.joining(", "));
+                findings.add(new Finding(
+                        one.file(),
+                        0,
+                        gone.size() + " of " + one.size() + " rows of " + one.asset()
+                                + " fall away because another series lacks the date, the first " + gone.get(0)
+                                + ", the last " + last + " (" + lackedBy + ")",
+                        "use series of the same trading days if these rows matter"));
+            }
+        }
+        return findings;
+    }
+
+    private static long countIn(List<LocalDate> gone, PriceSeries other) {
+        Set<LocalDate> has = new HashSet<>(other.dates());
+        return gone.stream().filter(date -> !has.contains(date)).count();
+    }
+
+    private static Problem tooFewInCommon(List<PriceSeries> series, int common) {
+        for (PriceSeries one : series) {
+            if (one.size() < 2) {
+                return new Problem(
+                        one.file(),
+                        0,
+                        0,
+                        one.asset() + " has one row only, of " + one.first(),
+                        "give at least two rows");
+            }
+        }
+        for (PriceSeries one : series) {
+            for (PriceSeries other : series) {
+                int shared = commonDates(List.of(one, other)).size();
+                if (shared < 2) {
+                    return tooFew(List.of(one, other), shared);
+                }
+            }
+        }
+        return tooFew(series, common);
+    }
+
+    private static Problem tooFew(List<PriceSeries> series, int common) {
+        String ranges = series.stream()
+                .map(one -> one.asset() + " runs from " + one.first() + " to " + one.last())
+                .collect(Collectors.joining(", "));
+        return new Problem(
+                series.get(series.size() - 1).file(),
+                0,
+                0,
+                ranges + "; they have " + (common == 0 ? "no date" : "one date only") + " in common",
+                "use files whose dates overlap, written in the same way");
+    }
+
+    private static Problem tooFewPeriods(
+            List<PriceSeries> series, List<LocalDate> days, BarLength length, int complete) {
+        return new Problem(
+                series.get(0).file(),
+                0,
+                0,
+                "the common days from " + days.get(0) + " to " + days.get(days.size() - 1) + " hold " + complete
+                        + " complete " + length.period() + (complete == 1 ? "" : "s"),
+                "give more days, or shorter bars");
+    }
+
+    private static Finding unfinished(List<LocalDate> days, BarLength length) {
+        String range = days.size() == 1
+                ? "the day " + days.get(0)
+                : "the " + days.size() + " days from " + days.get(0) + " to " + days.get(days.size() - 1);
+        return new Finding(
+                "",
+                0,
+                range + " make no bar: no later " + length.period() + " has begun",
+                "nothing to do; the bar appears with the first day of the next " + length.period());
+    }
+}

@@ -1,0 +1,100 @@
+package sojourn.market;
+
+import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import sojourn.document.Problems;
+
+/** The front door for files: reads every price file and the rates, and puts the prices on one calendar. */
+public final class PriceReader {
+    private final Path folder;
+    private final Calendar calendar;
+    private final Problems problems = new Problems();
+    private final List<Finding> findings = new ArrayList<>();
+    private final List<InputFile> files = new ArrayList<>();
+
+    private PriceReader(Path folder, Calendar calendar) {
+        this.folder = folder;
+        this.calendar = calendar;
+    }
+
+    /**
+     * Reads a market. Every fault of every file is told at once, in one {@link sojourn.document.InputException}.
+     *
+     * @param folder where paths start: the folder of the strategy file
+     * @param sources the section {@code prices}, in its order
+     * @param calendar the section {@code calendar}, or {@link Calendar#DAILY}
+     * @param cash the section {@code cash}, or {@link CashSource#NOTHING}
+     * @param used names of the assets that are observed, held or compared with: they alone define the common bars and stand in
+     *     the table, in the order of {@code sources}; the files of the others are read and checked only
+     */
+    public static Market read(
+            Path folder, Map<String, PriceSource> sources, Calendar calendar, CashSource cash, List<String> used) {
+        if (used.isEmpty() || !sources.keySet().containsAll(used)) {
+            throw new IllegalArgumentException("used assets " + used + " must be some of " + sources.keySet());
+        }
+        return new PriceReader(folder, calendar).market(sources, cash, used);
+    }
+
+    private Market market(Map<String, PriceSource> sources, CashSource cash, List<String> used) {
+        Map<String, PriceSeries> series = new LinkedHashMap<>();
+        sources.forEach((asset, source) -> prices(asset, source).ifPresent(read -> series.put(asset, read)));
+        Optional<CashRates> rates = rates(cash);
+        problems.throwIfAny();
+        series.keySet().stream().filter(asset -> !used.contains(asset)).forEach(this::notUsed);
+        series.keySet().retainAll(used);
+        Market market = Market.of(List.copyOf(series.values()), calendar, rates.orElseThrow());
+        findings.addAll(market.findings());
+        return new Market(market.table(), findings, files);
+    }
+
+    private Optional<PriceSeries> prices(String asset, PriceSource source) {
+        String name = source.layout().csv();
+        Faults faults = new Faults(name);
+        Optional<TextFile> text = TextFile.read(folder, name, faults);
+        Optional<PriceSeries> read =
+                text.flatMap(found -> PriceFile.read(asset, found, source, calendar.rowLength(), faults, findings));
+        faults.addTo(problems);
+        read.ifPresent(series -> files.add(new InputFile(
+                asset,
+                name,
+                text.orElseThrow().sha256(),
+                series.size(),
+                series.first(),
+                series.last(),
+                series.digest())));
+        return read;
+    }
+
+    private Optional<CashRates> rates(CashSource cash) {
+        if (cash instanceof CashSource.Constant constant) {
+            return Optional.of(CashRates.constant(constant.percentPerYear(), constant.dayCount()));
+        }
+        CashSource.Dated dated = (CashSource.Dated) cash;
+        String name = dated.layout().csv();
+        Faults faults = new Faults(name);
+        Optional<TextFile> text = TextFile.read(folder, name, faults);
+        Optional<CashFile.Content> read = text.flatMap(found -> CashFile.read(found, dated, faults, findings));
+        faults.addTo(problems);
+        read.ifPresent(content -> files.add(new InputFile(
+                AssetName.CASH,
+                name,
+                text.orElseThrow().sha256(),
+                content.rows(),
+                content.first(),
+                content.last(),
+                content.rates().digest())));
+        return read.map(CashFile.Content::rates);
+    }
+
+    private void notUsed(String asset) {
+        findings.add(new Finding(
+                "",
+                0,
+                "nothing uses " + asset + ": it is neither observed nor held nor compared with, and stands in no table",
+                "remove it from prices, or use it"));
+    }
+}

@@ -1,0 +1,77 @@
+package sojourn.market;
+
+import java.util.Map;
+import java.util.Optional;
+import sojourn.document.Field;
+import sojourn.document.Shape;
+import sojourn.document.Shapes;
+
+/**
+ * One entry of the section {@code prices}: the file and the columns that hold an asset's prices. A column that is not stated
+ * is used if the file has one of its default name ({@code open}, {@code high}, {@code low}, {@code volume}).
+ *
+ * @param layout where the file lies and how it is written
+ * @param close name of the column of closes
+ * @param open name of the column of opens, if stated
+ * @param high name of the column of highs, if stated
+ * @param low name of the column of lows, if stated
+ * @param volume name of the column of volumes, if stated
+ */
+public record PriceSource(
+        CsvLayout layout,
+        String close,
+        Optional<String> open,
+        Optional<String> high,
+        Optional<String> low,
+        Optional<String> volume) {
+    private static final Field<String> CSV =
+            Field.required("csv", Shapes.text(), "Path of the price file, from the folder of the strategy file.");
+    private static final Field<String> CLOSE =
+            Field.defaulted("close", Shapes.text(), "close", "Name of the column of closes.");
+    private static final Field<Optional<String>> OPEN = column("open", "opens");
+    private static final Field<Optional<String>> HIGH = column("high", "highs");
+    private static final Field<Optional<String>> LOW = column("low", "lows");
+    private static final Field<Optional<String>> VOLUME = column("volume", "volumes");
+
+    /** One asset's entry. */
+    public static final Shape<PriceSource> SHAPE = Shapes.object(
+            "price file",
+            f -> new PriceSource(
+                    CsvLayout.from(f.get(CSV), f), f.get(CLOSE), f.get(OPEN), f.get(HIGH), f.get(LOW), f.get(VOLUME)),
+            CSV,
+            CsvLayout.DATE,
+            CLOSE,
+            OPEN,
+            HIGH,
+            LOW,
+            VOLUME,
+            CsvLayout.DATE_FORMAT,
+            CsvLayout.SEPARATOR);
+
+    /** The section {@code prices}: assets by name, in the order written. */
+    public static final Shape<Map<String, PriceSource>> SECTION = Shapes.named(AssetName.SHAPE, SHAPE);
+
+    private static Field<Optional<String>> column(String key, String what) {
+        return Field.maybe(
+                key,
+                Shapes.text(),
+                "Name of the column of " + what + "; if not given, " + key + " if the file has it.");
+    }
+
+    /** Default columns of the file at {@code csv}. */
+    public static PriceSource of(String csv) {
+        return new PriceSource(
+                CsvLayout.of(csv), "close", Optional.empty(), Optional.empty(), Optional.empty(), Optional.empty());
+    }
+
+    /** The same columns of another file. */
+    public PriceSource withCsv(String csv) {
+        CsvLayout other = new CsvLayout(csv, layout.date(), layout.dateFormat(), layout.separator());
+        return new PriceSource(other, close, open, high, low, volume);
+    }
+
+    /** The same file with its closes in another column. */
+    public PriceSource withClose(String column) {
+        return new PriceSource(layout, column, open, high, low, volume);
+    }
+}

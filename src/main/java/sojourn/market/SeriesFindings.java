@@ -1,0 +1,156 @@
+package sojourn.market;
+
+import java.time.temporal.ChronoUnit;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Locale;
+import sojourn.market.Calendar.Rows;
+
+/** What looks odd in one series: long gaps, frozen prices, leaps, rows that are no days. Each kind gives one finding. */
+final class SeriesFindings {
+    /** Calendar days beyond the length of one row's period. */
+    private static final int LONG_GAP_DAYS = 10;
+
+    private static final int FROZEN_ROWS = 10;
+    private static final double LEAP = 0.40;
+
+    private final PriceSeries series;
+    private final Calendar calendar;
+    private final List<Finding> found = new ArrayList<>();
+
+    private SeriesFindings(PriceSeries series, Calendar calendar) {
+        this.series = series;
+        this.calendar = calendar;
+    }
+
+    static List<Finding> of(PriceSeries series, Calendar calendar) {
+        SeriesFindings findings = new SeriesFindings(series, calendar);
+        findings.spacing();
+        findings.gaps();
+        findings.frozen();
+        findings.leaps();
+        return List.copyOf(findings.found);
+    }
+
+    /** Rows said to be days of which no period holds two are bars already. */
+    private void spacing() {
+        if (calendar.rows() == Rows.BARS && calendar.bars() != BarLength.DAILY || series.size() < 3) {
+            return;
+        }
+        for (BarLength length : List.of(BarLength.MONTHLY, BarLength.WEEKLY)) {
+            if (onePerPeriod(length)) {
+                add(
+                        series.line(0),
+                        "no " + length.period() + " has more than one row of " + series.asset()
+                                + ", though each row is taken for a day",
+                        "write calendar: {bars: " + length.word() + ", rows: bars} if each row is a whole "
+                                + length.period());
+                return;
+            }
+        }
+    }
+
+    private boolean onePerPeriod(BarLength length) {
+        for (int row = 1; row < series.size(); row++) {
+            if (length.periodStart(series.dates().get(row))
+                    .equals(length.periodStart(series.dates().get(row - 1)))) {
+                return false;
+            }
+        }
+        return true;
+    }
+
+    private void gaps() {
+        BarLength rowLength = calendar.rowLength();
+        long limit = LONG_GAP_DAYS + (rowLength == BarLength.DAILY ? 0 : rowLength.longestDays());
+        int first = -1;
+        int longest = -1;
+        int count = 0;
+        for (int row = 1; row < series.size(); row++) {
+            if (gap(row) > limit) {
+                first = first < 0 ? row : first;
+                longest = longest < 0 || gap(row) > gap(longest) ? row : longest;
+                count++;
+            }
+        }
+        if (count > 0) {
+            add(
+                    series.line(first),
+                    counted(count, "gap") + " of more than " + limit + " calendar days in " + series.asset()
+                            + ", the first from " + span(first) + ", the longest from " + span(longest) + " ("
+                            + gap(longest) + " days)",
+                    "look whether rows are missing");
+        }
+    }
+
+    private long gap(int row) {
+        return ChronoUnit.DAYS.between(
+                series.dates().get(row - 1), series.dates().get(row));
+    }
+
+    private String span(int row) {
+        return series.dates().get(row - 1) + " to " + series.dates().get(row);
+    }
+
+    private void frozen() {
+        int first = -1;
+        int longest = 0;
+        int count = 0;
+        int start = 0;
+        for (int row = 1; row <= series.size(); row++) {
+            if (row < series.size() && series.close(row) == series.close(start)) {
+                continue;
+            }
+            if (row - start >= FROZEN_ROWS) {
+                first = first < 0 ? start : first;
+                longest = Math.max(longest, row - start);
+                count++;
+            }
+            start = row;
+        }
+        if (count > 0) {
+            add(
+                    series.line(first),
+                    counted(count, "run") + " of at least " + FROZEN_ROWS + " identical closes of " + series.asset()
+                            + ", the first from " + series.dates().get(first) + ", the longest of " + longest + " rows",
+                    "look whether old prices were carried forward; leave the cell empty where there was no price");
+        }
+    }
+
+    private void leaps() {
+        int first = -1;
+        int greatest = -1;
+        int count = 0;
+        for (int row = 1; row < series.size(); row++) {
+            if (Math.abs(change(row)) > LEAP) {
+                first = first < 0 ? row : first;
+                greatest = greatest < 0 || Math.abs(change(row)) > Math.abs(change(greatest)) ? row : greatest;
+                count++;
+            }
+        }
+        if (count > 0) {
+            add(
+                    series.line(first),
+                    counted(count, "move") + " of " + series.asset()
+                            + " beyond ±40 % from one row to the next, the first on " + moved(first)
+                            + ", the greatest on " + moved(greatest),
+                    "look for a split that was not adjusted for, or a price that is off by a factor of 100");
+        }
+    }
+
+    private double change(int row) {
+        return series.close(row) / series.close(row - 1) - 1;
+    }
+
+    private String moved(int row) {
+        return String.format(Locale.ROOT, "%s (%+.1f %%)", series.dates().get(row), 100 * change(row));
+    }
+
+    private static String counted(int count, String noun) {
+        return count + " " + noun + (count == 1 ? "" : "s");
+    }
+
+    private void add(int line, String what, String suggestion) {
+        found.add(new Finding(series.file(), line, what, suggestion));
+    }
+}
