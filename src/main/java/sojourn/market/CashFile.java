@@ -18,7 +18,7 @@ final class CashFile {
     private final Faults faults;
     private final int column;
     private final DatedRows dated;
-    private final List<Double> rates = new ArrayList<>();
+    private final List<Rate> rates = new ArrayList<>();
     private final MissingValues missing = new MissingValues("rate");
 
     private CashFile(CsvTable table, String file, CashSource.Dated source, Faults faults) {
@@ -28,6 +28,8 @@ final class CashFile {
         this.column = named.required("column", source.column());
         this.dated = new DatedRows(date, source.layout().dateFormat(), BarLength.DAILY, file, faults);
     }
+
+    private record Rate(LocalDate date, int line, double percentPerYear) {}
 
     /** A rate file's content. */
     record Content(CashRates rates, int rows, LocalDate first, LocalDate last) {}
@@ -44,19 +46,21 @@ final class CashFile {
             return Optional.empty();
         }
         table.get().forEachRow(faults, file::take);
-        file.dated.finish(table.get(), "rate");
+        file.dated.finish(table.get(), file.missing);
         if (!faults.none()) {
             return Optional.empty();
         }
         file.missing.finding(text.file()).ifPresent(findings::add);
         file.perhapsFractions(text.file()).ifPresent(findings::add);
-        List<LocalDate> dates = file.dated.dates();
-        double[] rates = file.rates.stream().mapToDouble(Double::doubleValue).toArray();
-        return Optional.of(new Content(
-                CashRates.inFile(text.file(), dates, rates, file.dated.lines(), source.dayCount()),
-                rates.length,
-                dates.get(0),
-                dates.get(dates.size() - 1)));
+        return Optional.of(file.content(text.file(), source.dayCount()));
+    }
+
+    private Content content(String file, DayCount dayCount) {
+        List<LocalDate> dates = rates.stream().map(Rate::date).toList();
+        double[] percents = rates.stream().mapToDouble(Rate::percentPerYear).toArray();
+        int[] lines = rates.stream().mapToInt(Rate::line).toArray();
+        CashRates read = CashRates.inFile(file, dates, percents, lines, dayCount);
+        return new Content(read, dates.size(), dates.get(0), dates.get(dates.size() - 1));
     }
 
     private void take(Row row) {
@@ -78,13 +82,15 @@ final class CashFile {
                     "rate " + text + " lies beyond 100 percent a year",
                     "write rates in percent a year, e.g. 2.5"));
         } else {
-            dated.keep(date.get(), row);
-            rates.add(rate.getAsDouble());
+            rates.add(new Rate(date.get(), row.line(), rate.getAsDouble()));
         }
     }
 
     private Optional<Finding> perhapsFractions(String file) {
-        double most = rates.stream().mapToDouble(Math::abs).max().orElse(0);
+        double most = rates.stream()
+                .mapToDouble(rate -> Math.abs(rate.percentPerYear()))
+                .max()
+                .orElse(0);
         if (most == 0 || most >= PERHAPS_A_FRACTION) {
             return Optional.empty();
         }

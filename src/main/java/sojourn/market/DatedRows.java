@@ -1,8 +1,6 @@
 package sojourn.market;
 
 import java.time.LocalDate;
-import java.util.ArrayList;
-import java.util.List;
 import java.util.Optional;
 import sojourn.market.CsvTable.Row;
 
@@ -13,9 +11,8 @@ final class DatedRows {
     private final BarLength rowLength;
     private final Faults faults;
     private final Faults disorder;
-    private final List<LocalDate> dates = new ArrayList<>();
-    private final List<Integer> lines = new ArrayList<>();
     private Optional<LocalDate> previous = Optional.empty();
+    private int rows;
     private int steps;
     private int backward;
 
@@ -42,17 +39,12 @@ final class DatedRows {
         }
         previous.ifPresent(before -> follow(before, date.get(), row));
         previous = date;
+        rows++;
         return date;
     }
 
-    /** Counts the row, dated {@code date}, as one of the series. */
-    void keep(LocalDate date, Row row) {
-        dates.add(date);
-        lines.add(row.line());
-    }
-
-    /** Hands over the faults of order (those of a file that runs backwards as one), and a lack of rows with a {@code value}. */
-    void finish(CsvTable table, String value) {
+    /** Hands over the faults of order (those of a file that runs backwards as one), and that of a file without any value. */
+    void finish(CsvTable table, MissingValues missing) {
         if (steps > 1 && backward == steps) {
             Faults one = new Faults("");
             one.add(table.headerProblem("dates run from the newest to the oldest", "sort the rows, oldest first"));
@@ -60,19 +52,11 @@ final class DatedRows {
         } else {
             faults.add(disorder);
         }
-        if (faults.none() && dates.isEmpty()) {
+        if (faults.none() && rows == missing.count()) {
             faults.add(table.headerProblem(
-                    previous.isEmpty() ? "no row follows the header" : "no row has a " + value,
+                    rows == 0 ? "no row follows the header" : "no row has a " + missing.name(),
                     "give a row for each date"));
         }
-    }
-
-    List<LocalDate> dates() {
-        return List.copyOf(dates);
-    }
-
-    int[] lines() {
-        return lines.stream().mapToInt(Integer::intValue).toArray();
     }
 
     private void follow(LocalDate before, LocalDate date, Row row) {

@@ -15,6 +15,14 @@ final class MissingValues {
         this.name = name;
     }
 
+    String name() {
+        return name;
+    }
+
+    int count() {
+        return count;
+    }
+
     void add(LocalDate date, int line) {
         if (count == 0) {
             first = date;

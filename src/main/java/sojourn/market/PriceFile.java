@@ -2,46 +2,40 @@ package sojourn.market;
 
 import java.time.LocalDate;
 import java.util.ArrayList;
-import java.util.LinkedHashMap;
 import java.util.List;
-import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.OptionalInt;
+import java.util.function.ToDoubleFunction;
 import sojourn.market.CsvTable.Row;
+import sojourn.market.PriceColumn.Bound;
 import sojourn.market.PriceTable.Bars;
 import sojourn.market.PriceTable.Column;
 
 /** Reads one asset's prices from the text of a file. An empty close means that the asset had no price on that day. */
 final class PriceFile {
-    private static final String CLOSE = "close";
-    private static final String OPEN = "open";
-    private static final String HIGH = "high";
-    private static final String LOW = "low";
-    private static final String VOLUME = "volume";
-
     private final Faults faults;
-    private final Map<String, Integer> columns = new LinkedHashMap<>();
-    private final Map<String, List<Double>> values = new LinkedHashMap<>();
+    private final PriceColumn close;
+    private final PriceColumn open;
+    private final PriceColumn high;
+    private final PriceColumn low;
+    private final PriceColumn volume;
     private final DatedRows dated;
+    private final List<PriceRow> rows = new ArrayList<>();
     private final RangeCheck range = new RangeCheck();
-    private final MissingValues missing = new MissingValues(CLOSE);
+    private final MissingValues missing = new MissingValues("close");
 
     private PriceFile(CsvTable table, String file, PriceSource source, BarLength rowLength, Faults faults) {
         this.faults = faults;
         CsvColumns named = new CsvColumns(table, faults);
         int date = named.required("date", source.layout().date());
-        columns.put(CLOSE, named.required(CLOSE, source.close()));
-        put(OPEN, named.optional(OPEN, source.open()));
-        put(HIGH, named.optional(HIGH, source.high()));
-        put(LOW, named.optional(LOW, source.low()));
-        put(VOLUME, named.optional(VOLUME, source.volume()));
-        columns.keySet().forEach(name -> values.put(name, new ArrayList<>()));
+        this.close =
+                new PriceColumn("close", OptionalInt.of(named.required("close", source.close())), Bound.ABOVE_ZERO);
+        this.open = new PriceColumn("open", named.optional("open", source.open()), Bound.ABOVE_ZERO);
+        this.high = new PriceColumn("high", named.optional("high", source.high()), Bound.ABOVE_ZERO);
+        this.low = new PriceColumn("low", named.optional("low", source.low()), Bound.ABOVE_ZERO);
+        this.volume = new PriceColumn("volume", named.optional("volume", source.volume()), Bound.NOT_BELOW_ZERO);
         this.dated = new DatedRows(date, source.layout().dateFormat(), rowLength, file, faults);
-    }
-
-    private void put(String name, OptionalInt column) {
-        column.ifPresent(index -> columns.put(name, index));
     }
 
     /**
@@ -67,19 +61,13 @@ final class PriceFile {
             return Optional.empty();
         }
         table.get().forEachRow(faults, file::take);
-        file.dated.finish(table.get(), CLOSE);
+        file.dated.finish(table.get(), file.missing);
         if (!faults.none()) {
             return Optional.empty();
         }
         file.missing.finding(text.file()).ifPresent(findings::add);
         file.range.finding(text.file()).ifPresent(findings::add);
-        Bars bars = new Bars(
-                file.column(CLOSE).orElseThrow(),
-                file.column(OPEN),
-                file.column(HIGH),
-                file.column(LOW),
-                file.column(VOLUME));
-        return Optional.of(PriceSeries.inFile(asset, file.dated.dates(), bars, text.file(), file.dated.lines()));
+        return Optional.of(file.series(asset, text.file()));
     }
 
     private void take(Row row) {
@@ -87,56 +75,65 @@ final class PriceFile {
         if (date.isEmpty()) {
             return;
         }
-        if (row.cell(columns.get(CLOSE)).isEmpty()) {
+        if (close.text(row).isEmpty()) {
             missing.add(date.get(), row.line());
             return;
         }
-        Map<String, Double> read = new LinkedHashMap<>();
-        columns.forEach((name, column) -> value(row, name, column).ifPresent(value -> read.put(name, value)));
-        if (read.size() < columns.size() || highBelowLow(row, read)) {
-            return;
+        OptionalDouble closed = close.read(row, faults);
+        OptionalDouble opened = open.read(row, faults);
+        OptionalDouble highest = high.read(row, faults);
+        OptionalDouble lowest = low.read(row, faults);
+        OptionalDouble traded = volume.read(row, faults);
+        if (closed.isPresent()
+                && opened.isPresent()
+                && highest.isPresent()
+                && lowest.isPresent()
+                && traded.isPresent()) {
+            keep(
+                    row,
+                    new PriceRow(
+                            date.get(),
+                            row.line(),
+                            closed.getAsDouble(),
+                            opened.getAsDouble(),
+                            highest.getAsDouble(),
+                            lowest.getAsDouble(),
+                            traded.getAsDouble()));
         }
-        range.look(date.get(), row.line(), read);
-        dated.keep(date.get(), row);
-        read.forEach((name, value) -> values.get(name).add(value));
     }
 
-    /** The number in a cell; NaN for an empty one; empty, and a fault, for anything that is no price or volume. */
-    private OptionalDouble value(Row row, String name, int column) {
-        String text = row.cell(column);
-        if (text.isEmpty()) {
-            return OptionalDouble.of(Double.NaN);
-        }
-        OptionalDouble number = Decimal.parse(text);
-        if (number.isEmpty()) {
-            faults.add(row.problem(column, name + " '" + text + "' is not a number", Decimal.remedy(text)));
-        } else if (Double.isInfinite(number.getAsDouble())) {
-            faults.add(row.problem(column, name + " " + text + " is too large", "mend the number"));
-            return OptionalDouble.empty();
-        } else if (name.equals(VOLUME) ? number.getAsDouble() < 0 : number.getAsDouble() <= 0) {
+    private void keep(Row row, PriceRow prices) {
+        if (prices.high() < prices.low()) {
             faults.add(row.problem(
-                    column,
-                    name + " " + text + (name.equals(VOLUME) ? " is below 0" : " is not above 0"),
-                    "mend it, or leave the cell empty if there is none"));
-            return OptionalDouble.empty();
+                    high.index().orElseThrow(),
+                    "high " + high.text(row) + " lies below low " + low.text(row),
+                    "mend one of the two"));
+        } else {
+            range.look(prices);
+            rows.add(prices);
         }
-        return number;
     }
 
-    private boolean highBelowLow(Row row, Map<String, Double> read) {
-        double high = read.getOrDefault(HIGH, Double.NaN);
-        double low = read.getOrDefault(LOW, Double.NaN);
-        if (!(high < low)) {
-            return false;
-        }
-        faults.add(row.problem(
-                columns.getOrDefault(HIGH, 0), "high " + high + " lies below low " + low, "mend one of the two"));
-        return true;
+    private PriceSeries series(String asset, String file) {
+        Bars bars = new Bars(
+                column(PriceRow::close),
+                column(open, PriceRow::open),
+                column(high, PriceRow::high),
+                column(low, PriceRow::low),
+                column(volume, PriceRow::volume));
+        return PriceSeries.inFile(
+                asset,
+                rows.stream().map(PriceRow::date).toList(),
+                bars,
+                file,
+                rows.stream().mapToInt(PriceRow::line).toArray());
     }
 
-    private Optional<Column> column(String name) {
-        return Optional.ofNullable(values.get(name))
-                .map(list ->
-                        Column.of(list.stream().mapToDouble(Double::doubleValue).toArray()));
+    private Optional<Column> column(PriceColumn named, ToDoubleFunction<PriceRow> value) {
+        return named.present() ? Optional.of(column(value)) : Optional.empty();
+    }
+
+    private Column column(ToDoubleFunction<PriceRow> value) {
+        return Column.of(rows.stream().mapToDouble(value).toArray());
     }
 }

@@ -1,7 +1,5 @@
 package sojourn.market;
 
-import java.time.LocalDate;
-import java.util.Map;
 import java.util.Optional;
 
 /**
@@ -16,21 +14,21 @@ final class RangeCheck {
     private int firstLine;
     private String firstPlace = "";
 
-    /** Looks at one row's values by name; absent or NaN values are not compared. */
-    void look(LocalDate date, int line, Map<String, Double> row) {
-        double high = row.getOrDefault("high", Double.NaN) * (1 + DUST);
-        double low = row.getOrDefault("low", Double.NaN) * (1 - DUST);
-        for (String name : new String[] {"close", "open"}) {
-            double price = row.getOrDefault(name, Double.NaN);
-            if (price > high || price < low) {
-                if (count == 0) {
-                    firstLine = line;
-                    firstPlace = name + " of " + date;
-                }
-                count++;
-                return;
-            }
+    /** Looks at one row; what is NaN is not compared. */
+    void look(PriceRow row) {
+        boolean closeOutside = outside(row.close(), row);
+        if (!closeOutside && !outside(row.open(), row)) {
+            return;
         }
+        if (count == 0) {
+            firstLine = row.line();
+            firstPlace = (closeOutside ? "close of " : "open of ") + row.date();
+        }
+        count++;
+    }
+
+    private static boolean outside(double price, PriceRow row) {
+        return price > row.high() * (1 + DUST) || price < row.low() * (1 - DUST);
     }
 
     Optional<Finding> finding(String file) {

@@ -34,7 +34,7 @@ final class SeriesFindings {
 
     /** Rows said to be days of which no period holds two are bars already. */
     private void spacing() {
-        if (calendar.rows() == Rows.BARS && calendar.bars() != BarLength.DAILY || series.size() < 3) {
+        if ((calendar.rows() == Rows.BARS && calendar.bars() != BarLength.DAILY) || series.size() < 3) {
             return;
         }
         for (BarLength length : List.of(BarLength.MONTHLY, BarLength.WEEKLY)) {
@@ -62,7 +62,7 @@ final class SeriesFindings {
 
     private void gaps() {
         BarLength rowLength = calendar.rowLength();
-        long limit = LONG_GAP_DAYS + (rowLength == BarLength.DAILY ? 0 : rowLength.longestDays());
+        int limit = LONG_GAP_DAYS + (rowLength == BarLength.DAILY ? 0 : rowLength.longestDays());
         int first = -1;
         int longest = -1;
         int count = 0;

@@ -1,0 +1,71 @@
+package sojourn.market;
+
+import java.util.OptionalDouble;
+import java.util.OptionalInt;
+import sojourn.market.CsvTable.Row;
+
+/**
+ * One column of a price file, by the key that the strategy file knows it by.
+ *
+ * @param key open, high, low, close or volume
+ * @param index where the file has it, if it has it
+ * @param bound what its numbers must keep to
+ */
+record PriceColumn(String key, OptionalInt index, Bound bound) {
+    /** What a number must keep to. */
+    enum Bound {
+        ABOVE_ZERO("is not above 0") {
+            @Override
+            boolean allows(double number) {
+                return number > 0;
+            }
+        },
+        NOT_BELOW_ZERO("is below 0") {
+            @Override
+            boolean allows(double number) {
+                return number >= 0;
+            }
+        };
+
+        private final String fault;
+
+        Bound(String fault) {
+            this.fault = fault;
+        }
+
+        abstract boolean allows(double number);
+    }
+
+    /** Whether the file has the column. */
+    boolean present() {
+        return index.isPresent();
+    }
+
+    /** The text of the column's cell; empty if the file has no such column. */
+    String text(Row row) {
+        return index.isPresent() ? row.cell(index.getAsInt()) : "";
+    }
+
+    /** The number in the column's cell; NaN if there is none; empty, and a fault, for what is no price or volume. */
+    OptionalDouble read(Row row, Faults faults) {
+        String text = text(row);
+        if (text.isEmpty()) {
+            return OptionalDouble.of(Double.NaN);
+        }
+        OptionalDouble number = Decimal.parse(text);
+        if (number.isEmpty()) {
+            fault(row, faults, "'" + text + "' is not a number", Decimal.remedy(text));
+        } else if (Double.isInfinite(number.getAsDouble())) {
+            fault(row, faults, text + " is too large", "mend the number");
+        } else if (!bound.allows(number.getAsDouble())) {
+            fault(row, faults, text + " " + bound.fault, "mend it, or leave the cell empty if there is none");
+        } else {
+            return number;
+        }
+        return OptionalDouble.empty();
+    }
+
+    private void fault(Row row, Faults faults, String what, String remedy) {
+        faults.add(row.problem(index.orElse(0), key + " " + what, remedy));
+    }
+}

@@ -1,0 +1,6 @@
+package sojourn.market;
+
+import java.time.LocalDate;
+
+/** One row of a price file; NaN where the file has no such column or no value in it. The close is always there. */
+record PriceRow(LocalDate date, int line, double close, double open, double high, double low, double volume) {}
