@@ -1,5 +1,7 @@
 package sojourn.document;
 
+import com.fasterxml.jackson.databind.JsonNode;
+import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.util.Optional;
 
 /**
@@ -12,7 +14,7 @@ public final class Field<T> {
     private final String key;
     private final Shape<?> shape;
     private final Kind kind;
-    private final String yamlDefault;
+    private final Optional<Node> whenMissing;
     private final String help;
 
     /** How a key may be missing. */
@@ -22,27 +24,37 @@ public final class Field<T> {
         MAYBE
     }
 
-    private Field(String key, Shape<?> shape, Kind kind, String yamlDefault, String help) {
+    private Field(String key, Shape<?> shape, Kind kind, Optional<Node> whenMissing, String help) {
         this.key = key;
         this.shape = shape;
         this.kind = kind;
-        this.yamlDefault = yamlDefault;
+        this.whenMissing = whenMissing;
         this.help = help;
     }
 
     /** A key that must be there. {@code help} is one sentence, with the unit. */
     public static <T> Field<T> required(String key, Shape<T> shape, String help) {
-        return new Field<>(key, shape, Kind.REQUIRED, "", help);
+        return new Field<>(key, shape, Kind.REQUIRED, Optional.empty(), help);
     }
 
-    /** A key that, when missing, counts as if {@code yamlDefault} were written; the same shape reads it. */
+    /**
+     * A key that, when missing, counts as if {@code yamlDefault} were written; the same shape reads it.
+     *
+     * @throws IllegalArgumentException if the shape refuses the default
+     */
     public static <T> Field<T> defaulted(String key, Shape<T> shape, String yamlDefault, String help) {
-        return new Field<>(key, shape, Kind.DEFAULTED, yamlDefault, help);
+        Problems faults = new Problems();
+        Optional<Node> tree = Composer.compose("default of '" + key + "'", yamlDefault, faults);
+        tree.ifPresent(node -> shape.read(node, faults));
+        if (!faults.isEmpty()) {
+            throw new IllegalArgumentException(faults.list().get(0).toString());
+        }
+        return new Field<>(key, shape, Kind.DEFAULTED, tree, help);
     }
 
     /** A key that may be missing. */
     public static <T> Field<Optional<T>> maybe(String key, Shape<T> shape, String help) {
-        return new Field<>(key, shape, Kind.MAYBE, "", help);
+        return new Field<>(key, shape, Kind.MAYBE, Optional.empty(), help);
     }
 
     /** The key. */
@@ -55,15 +67,29 @@ public final class Field<T> {
         return help;
     }
 
-    Shape<?> shape() {
-        return shape;
-    }
-
     Kind kind() {
         return kind;
     }
 
-    String yamlDefault() {
-        return yamlDefault;
+    /** What {@link Fields#get} gives; empty if the value is at fault, or missing and required. */
+    Optional<?> value(Optional<Node> written, Problems problems) {
+        Optional<?> value = written.or(() -> whenMissing).flatMap(node -> shape.read(node, problems));
+        if (kind != Kind.MAYBE) {
+            return value;
+        }
+        return written.isEmpty() || value.isPresent() ? Optional.of(value) : Optional.empty();
+    }
+
+    /** The value, or its default, written out; empty if there is neither. */
+    Optional<JsonNode> resolved(Optional<Node> written) {
+        return written.or(() -> whenMissing).map(shape::resolved);
+    }
+
+    /** The schema of the value, with the help text first and the default last. */
+    ObjectNode schema() {
+        ObjectNode schema = Json.object().put("description", help);
+        schema.setAll(shape.schema());
+        whenMissing.ifPresent(node -> schema.set("default", shape.resolved(node)));
+        return schema;
     }
 }

@@ -1,16 +1,32 @@
 package sojourn.document;
 
 /** A located piece of a document. */
-public interface Node {
+public sealed interface Node permits MapNode, ListNode, ScalarNode, BrokenNode {
+    /** Where it stands. */
+    Place place();
+
     /** The file, as the user named it. */
-    String file();
+    default String file() {
+        return place().file();
+    }
 
     /** 1-based. */
-    int line();
+    default int line() {
+        return place().line();
+    }
 
     /** 1-based. */
-    int column();
+    default int column() {
+        return place().column();
+    }
 
     /** JSON pointer from the root: "" for the root, "/prices/stocks/csv" for a value. */
-    String path();
+    default String path() {
+        return place().path();
+    }
+
+    /** What messages call it: "'csv'", "item 2 of 'states'". */
+    default String name() {
+        return place().name();
+    }
 }

@@ -1,6 +1,7 @@
 package sojourn.document;
 
 import java.util.ArrayList;
+import java.util.Comparator;
 import java.util.List;
 
 /** Collects every fault of one input, so that the user hears of all of them in one go. */
@@ -17,9 +18,23 @@ public final class Problems {
         found.add(new Problem(node.file(), node.line(), node.column(), what, remedy));
     }
 
-    /** The faults so far, in the order they were found. */
+    /** Adds a fault at a place: a key's, say. */
+    public void add(Place place, String what, String remedy) {
+        found.add(new Problem(place.file(), place.line(), place.column(), what, remedy));
+    }
+
+    /**
+     * The faults so far, each once: files in the order in which they first had one, and each file's faults from its first line
+     * to its last.
+     */
     public List<Problem> list() {
-        return List.copyOf(found);
+        List<String> files = found.stream().map(Problem::file).distinct().toList();
+        return found.stream()
+                .distinct()
+                .sorted(Comparator.comparingInt((Problem p) -> files.indexOf(p.file()))
+                        .thenComparingInt(Problem::line)
+                        .thenComparingInt(Problem::column))
+                .toList();
     }
 
     /** Whether there is none so far. */
@@ -30,7 +45,7 @@ public final class Problems {
     /** Throws them all as one {@link InputException} if there is any. */
     public void throwIfAny() {
         if (!found.isEmpty()) {
-            throw new InputException(found);
+            throw new InputException(list());
         }
     }
 }

@@ -27,12 +27,21 @@ public interface Shape<T> {
     /** Whether a node of this kind could be meant for this shape (a map, a list, a number, a word); decides between alternatives. */
     boolean mayBe(Node node);
 
+    /** What a node that is not of this shape was probably meant to be: "did you mean 'weekly'? ", or "" if there is no telling. */
+    default String hint(Node node) {
+        return "";
+    }
+
     /** The same shape with its value converted; {@code conversion} must not fail. */
-    <U> Shape<U> as(Function<? super T, ? extends U> conversion);
+    default <U> Shape<U> as(Function<? super T, ? extends U> conversion) {
+        return new ConvertedShape<>(this, conversion);
+    }
 
     /**
      * The same shape with a rule that no JSON Schema can state; {@code rule} gives the refusal of a bad value. A refusal may
      * name a key of the node, at whose value the fault is then placed.
      */
-    Shape<T> refuse(Function<? super T, Optional<Refusal>> rule);
+    default Shape<T> refuse(Function<? super T, Optional<Refusal>> rule) {
+        return new RefusingShape<>(this, rule);
+    }
 }

@@ -1,0 +1,104 @@
+package sojourn.document;
+
+import com.fasterxml.jackson.databind.JsonNode;
+import com.fasterxml.jackson.databind.node.ObjectNode;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+import sojourn.numeric.Check;
+
+/** A finite number; each bound may be absent. */
+record DoubleShape(Optional<Bound> low, Optional<Bound> high) implements NumberShape {
+    static final DoubleShape ANY = new DoubleShape(Optional.empty(), Optional.empty());
+
+    /** A bound, which itself belongs to the range or does not. */
+    record Bound(double value, Edge edge) {}
+
+    enum Edge {
+        INCLUDED,
+        EXCLUDED
+    }
+
+    @Override
+    public NumberShape atLeast(double bound) {
+        return new DoubleShape(bound(bound, Edge.INCLUDED), high);
+    }
+
+    @Override
+    public NumberShape atMost(double bound) {
+        return new DoubleShape(low, bound(bound, Edge.INCLUDED));
+    }
+
+    @Override
+    public NumberShape above(double bound) {
+        return new DoubleShape(bound(bound, Edge.EXCLUDED), high);
+    }
+
+    @Override
+    public NumberShape below(double bound) {
+        return new DoubleShape(low, bound(bound, Edge.EXCLUDED));
+    }
+
+    @Override
+    public Optional<Double> read(Node node, Problems problems) {
+        if (mayBe(node)) {
+            double value = ((ScalarNode) node).nearestDouble();
+            if (allows(value)) {
+                return Optional.of(value);
+            }
+        }
+        return Wording.mismatch(this, node, problems);
+    }
+
+    private boolean allows(double value) {
+        boolean highEnough = low.map(b -> b.edge() == Edge.INCLUDED ? value >= b.value() : value > b.value())
+                .orElse(true);
+        boolean lowEnough = high.map(b -> b.edge() == Edge.INCLUDED ? value <= b.value() : value < b.value())
+                .orElse(true);
+        return highEnough && lowEnough;
+    }
+
+    @Override
+    public JsonNode resolved(Node node) {
+        return Json.number(((ScalarNode) node).nearestDouble());
+    }
+
+    @Override
+    public ObjectNode schema() {
+        ObjectNode schema = Json.typed("number");
+        low.ifPresent(
+                b -> schema.set(b.edge() == Edge.INCLUDED ? "minimum" : "exclusiveMinimum", Json.bound(b.value())));
+        high.ifPresent(
+                b -> schema.set(b.edge() == Edge.INCLUDED ? "maximum" : "exclusiveMaximum", Json.bound(b.value())));
+        return schema;
+    }
+
+    @Override
+    public String expected() {
+        if (low.isPresent()
+                && high.isPresent()
+                && low.get().edge() == Edge.INCLUDED
+                && high.get().edge() == Edge.INCLUDED) {
+            return "a number from " + Json.shown(low.get().value()) + " to "
+                    + Json.shown(high.get().value());
+        }
+        List<String> bounds = new ArrayList<>();
+        low.ifPresent(b -> bounds.add((b.edge() == Edge.INCLUDED ? "at least " : "above ") + Json.shown(b.value())));
+        high.ifPresent(b -> bounds.add((b.edge() == Edge.INCLUDED ? "at most " : "below ") + Json.shown(b.value())));
+        return bounds.isEmpty() ? "a number" : "a number " + String.join(" and ", bounds);
+    }
+
+    @Override
+    public boolean mayBe(Node node) {
+        return WholeNumbers.isNumber(node);
+    }
+
+    @Override
+    public String hint(Node node) {
+        return WholeNumbers.unquoteHint(node);
+    }
+
+    private static Optional<Bound> bound(double value, Edge edge) {
+        return Optional.of(new Bound(Check.finite(value, "bound"), edge));
+    }
+}

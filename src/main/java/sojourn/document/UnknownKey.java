@@ -1,0 +1,19 @@
+package sojourn.document;
+
+import java.util.Collection;
+import java.util.Optional;
+
+/** The message about a key that means nothing. */
+final class UnknownKey {
+    private UnknownKey() {}
+
+    /** Adds the message; returns the key of {@code missing} that was probably meant. */
+    static Optional<String> tell(
+            String key, Place keyPlace, Collection<String> missing, Collection<String> known, Problems problems) {
+        problems.add(
+                keyPlace,
+                "unknown key '" + Wording.shortened(key) + "'",
+                Wording.didYouMean(key, missing) + "known keys: " + String.join(", ", known));
+        return Nearest.to(key, missing);
+    }
+}

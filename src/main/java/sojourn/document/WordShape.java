@@ -1,0 +1,47 @@
+package sojourn.document;
+
+import com.fasterxml.jackson.databind.JsonNode;
+import com.fasterxml.jackson.databind.node.ArrayNode;
+import com.fasterxml.jackson.databind.node.ObjectNode;
+import java.util.Map;
+import java.util.Optional;
+
+/** One of some words; the map's own order is that of messages and schema. */
+record WordShape<T>(Map<String, T> meanings) implements Shape<T> {
+    @Override
+    public Optional<T> read(Node node, Problems problems) {
+        Optional<T> meaning =
+                mayBe(node) ? Optional.ofNullable(meanings.get(((ScalarNode) node).text())) : Optional.empty();
+        return meaning.isPresent() ? meaning : Wording.mismatch(this, node, problems);
+    }
+
+    @Override
+    public JsonNode resolved(Node node) {
+        return Json.text(((ScalarNode) node).text());
+    }
+
+    @Override
+    public ObjectNode schema() {
+        ObjectNode schema = Json.typed("string");
+        ArrayNode words = schema.putArray("enum");
+        meanings.keySet().forEach(words::add);
+        return schema;
+    }
+
+    @Override
+    public String expected() {
+        return meanings.size() == 1
+                ? "the word " + meanings.keySet().iterator().next()
+                : "one of " + String.join(", ", meanings.keySet());
+    }
+
+    @Override
+    public boolean mayBe(Node node) {
+        return TextShape.isText(node);
+    }
+
+    @Override
+    public String hint(Node node) {
+        return mayBe(node) ? Wording.didYouMean(((ScalarNode) node).text(), meanings.keySet()) : "";
+    }
+}
