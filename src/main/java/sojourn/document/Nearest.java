@@ -4,7 +4,7 @@ import java.util.Locale;
 import java.util.Optional;
 
 /** The known word that a misspelt one was probably meant to be. */
-final class Nearest {
+public final class Nearest {
     private static final int LONGEST = 100;
 
     private Nearest() {}
@@ -13,7 +13,7 @@ final class Nearest {
      * The known word at the least edit distance (insertion, deletion, substitution, swap of neighbours; capitals do not
      * count), the first of equals; empty if none is within 2 edits or a third of the word's length.
      */
-    static Optional<String> to(String word, Iterable<String> known) {
+    public static Optional<String> to(String word, Iterable<String> known) {
         Optional<String> nearest = Optional.empty();
         int least = Integer.MAX_VALUE;
         if (word.length() > LONGEST) {

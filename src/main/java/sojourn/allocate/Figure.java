@@ -1,0 +1,38 @@
+package sojourn.allocate;
+
+import java.math.BigDecimal;
+import java.math.RoundingMode;
+
+/** Numbers in sentences: two decimals, or as many more as it takes not to say something untrue. */
+final class Figure {
+    private static final int DECIMALS = 2;
+
+    private Figure() {}
+
+    /** Two decimals. */
+    static String of(double value) {
+        return new BigDecimal(value).setScale(DECIMALS, RoundingMode.HALF_EVEN).toPlainString();
+    }
+
+    /** A level as written in the file, with at least two decimals. */
+    static String level(double level) {
+        BigDecimal written = BigDecimal.valueOf(level);
+        return written.setScale(Math.max(DECIMALS, written.scale())).toPlainString();
+    }
+
+    /** {@code value} with enough decimals to stand on the same side of {@code level} as it does in truth. */
+    static String beside(double value, double level) {
+        BigDecimal exact = new BigDecimal(value);
+        BigDecimal limit = BigDecimal.valueOf(level);
+        if (value == level) {
+            return level(level);
+        }
+        int decimals = DECIMALS;
+        BigDecimal shown = exact.setScale(decimals, RoundingMode.HALF_EVEN);
+        while (Integer.signum(shown.compareTo(limit)) != Double.compare(value, level) && decimals < exact.scale()) {
+            decimals++;
+            shown = exact.setScale(decimals, RoundingMode.HALF_EVEN);
+        }
+        return shown.toPlainString();
+    }
+}

@@ -1,0 +1,74 @@
+package sojourn.allocate;
+
+import java.util.List;
+import sojourn.numeric.Check;
+import sojourn.walk.Reading;
+
+/**
+ * A rule of the strategy file, deciding. At every close, decision bar or not: probability, confirmation, hysteresis. On decision
+ * bars: weights, stay-at-least, step, limits, band, order. The first decision is on the first decision bar at or after the first
+ * reading.
+ */
+public final class RulePolicy implements Policy {
+    private static final Because NO_READING = Because.of("there is no accepted fit at this close");
+
+    private final Rule rule;
+    private final Mechanism mechanism;
+    private final Pacing pacing;
+
+    private RulePolicy(Rule rule, Mechanism mechanism, Pacing pacing) {
+        this.rule = rule;
+        this.mechanism = mechanism;
+        this.pacing = pacing;
+    }
+
+    /**
+     * With the names of the rule resolved; they must be known (see {@link Rule#misfits}), and the stated weights within the limits.
+     *
+     * @param schedule the closes to decide at
+     * @param stayAtLeast bars, 1 for a rule without states
+     * @param noTradeBand a fraction of wealth
+     */
+    public static RulePolicy of(
+            Rule rule,
+            Limits limits,
+            Schedule schedule,
+            int stayAtLeast,
+            double noTradeBand,
+            List<String> regimes,
+            List<String> assets) {
+        List<Misfit> beyond = limits.misfits(rule);
+        Check.that(beyond.isEmpty(), "weights beyond the limits: " + beyond);
+        List<Misfit> stays = Pacing.misfits(rule, stayAtLeast);
+        Check.that(stays.isEmpty(), "nothing to stay in: " + stays);
+        Pacing pacing = new Pacing(schedule, stayAtLeast, rule.stepToward(), limits, noTradeBand);
+        return new RulePolicy(rule, rule.mechanism(regimes, assets), pacing);
+    }
+
+    @Override
+    public Decision at(Situation situation, Stance stance) {
+        if (situation.reading().isEmpty()) {
+            return Decision.none(stance, NO_READING);
+        }
+        Reading reading = situation.reading().get();
+        double[] probabilities = rule.probability().of(reading);
+        Stance lived = mechanism.live(probabilities, stance);
+        Because because = mechanism.because(probabilities, stance, lived);
+        if (!pacing.decides(situation)) {
+            return Decision.none(lived, because);
+        }
+        int state = pacing.allowedState(lived, situation.bar());
+        Weights wanted = mechanism.weights(probabilities, state, lived);
+        return pacing.decide(situation, lived, state, wanted, explained(because, lived, state, stance));
+    }
+
+    /** Adds what the rule's own sentence cannot know: a state kept by stay-at-least, a change that comes after the fact. */
+    private Because explained(Because because, Stance lived, int state, Stance stance) {
+        if (state != lived.lived()) {
+            String kept = mechanism.name(state);
+            return because.and("stay-at-least " + pacing.stayAtLeast() + " bars keeps it at " + kept);
+        }
+        boolean late = !lived.undecided() && state != lived.decided() && lived.lived() == stance.lived();
+        return late ? because.and("first decision since the change to " + mechanism.name(state)) : because;
+    }
+}

@@ -1,0 +1,110 @@
+package sojourn.allocate;
+
+import java.util.Arrays;
+import java.util.List;
+import java.util.Map;
+import sojourn.numeric.Check;
+
+/** Shares of wealth, one an asset, in the order of the price table; what they leave of 1 is cash. Immutable. */
+public final class Weights {
+    /** Differences of weights up to this are rounding. */
+    static final double SLACK = 1e-12;
+
+    private final double[] shares;
+    private final double cash;
+
+    private Weights(double[] shares) {
+        this.shares = shares;
+        double rest = 1;
+        for (double share : shares) {
+            rest -= share;
+        }
+        // 1 - 0.7 - 0.2 - 0.1 is not quite 0, and full weight must not borrow a rounding error
+        this.cash = Math.abs(rest) <= SLACK ? 0 : rest;
+    }
+
+    /** Copies {@code shares}; each must be finite. Not modified. */
+    public static Weights of(double... shares) {
+        for (double share : shares) {
+            Check.finite(share, "weight");
+        }
+        return new Weights(shares.clone());
+    }
+
+    /** Nothing but cash. */
+    public static Weights none(int assets) {
+        return new Weights(new double[assets]);
+    }
+
+    /** From weights by name; an asset that is not named gets 0, a name that is no asset is refused. */
+    public static Weights named(Map<String, Double> byName, List<String> assets) {
+        double[] shares = new double[assets.size()];
+        byName.forEach((name, share) -> {
+            int asset = assets.indexOf(name);
+            Check.that(asset >= 0, "no asset '" + name + "'; known: " + assets);
+            shares[asset] = share;
+        });
+        return of(shares);
+    }
+
+    /** Number of assets. */
+    public int size() {
+        return shares.length;
+    }
+
+    /** The share of one asset. */
+    public double at(int asset) {
+        return shares[asset];
+    }
+
+    /** What the assets leave of 1; negative if borrowed; exactly 0 where only rounding differs from it. */
+    public double cash() {
+        return cash;
+    }
+
+    /** The sum of the absolute shares. */
+    public double gross() {
+        double gross = 0;
+        for (double share : shares) {
+            gross += Math.abs(share);
+        }
+        return gross;
+    }
+
+    /** {@code fraction} of the way from {@code from} to these. */
+    Weights after(double fraction, Weights from) {
+        if (fraction == 1) {
+            return this;
+        }
+        double[] between = new double[shares.length];
+        for (int i = 0; i < between.length; i++) {
+            between[i] = from.shares[i] + fraction * (shares[i] - from.shares[i]);
+        }
+        return new Weights(between);
+    }
+
+    /** Whether any share differs from {@code other}'s by more than {@code band}, rounding aside. */
+    boolean strictlyOutside(double band, Weights other) {
+        for (int i = 0; i < shares.length; i++) {
+            if (Math.abs(shares[i] - other.shares[i]) > band + SLACK) {
+                return true;
+            }
+        }
+        return false;
+    }
+
+    @Override
+    public boolean equals(Object other) {
+        return other instanceof Weights that && Arrays.equals(shares, that.shares);
+    }
+
+    @Override
+    public int hashCode() {
+        return Arrays.hashCode(shares);
+    }
+
+    @Override
+    public String toString() {
+        return Arrays.toString(shares);
+    }
+}

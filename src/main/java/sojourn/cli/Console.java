@@ -1,0 +1,12 @@
+package sojourn.cli;
+
+import java.io.PrintWriter;
+
+/**
+ * Where a command writes.
+ *
+ * @param out results
+ * @param err messages and progress
+ * @param terminal whether somebody is watching
+ */
+record Console(PrintWriter out, PrintWriter err, Terminal terminal) {}

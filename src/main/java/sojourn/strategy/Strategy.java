@@ -1,0 +1,127 @@
+package sojourn.strategy;
+
+import java.util.ArrayList;
+import java.util.Collections;
+import java.util.LinkedHashMap;
+import java.util.LinkedHashSet;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.Set;
+import sojourn.allocate.Limits;
+import sojourn.allocate.Rule;
+import sojourn.document.Field;
+import sojourn.document.Shape;
+import sojourn.document.Shapes;
+import sojourn.market.Calendar;
+import sojourn.market.CashSource;
+import sojourn.market.PriceSource;
+import sojourn.measure.JudgeSettings;
+import sojourn.trade.TradeSettings;
+import sojourn.walk.Observation;
+import sojourn.walk.RefitSettings;
+import sojourn.walk.RegimeSettings;
+import sojourn.allocate.Rules;
+
+/**
+ * One strategy, as its file says.
+ *
+ * @param name the strategy's name
+ * @param hypothesis why it should work
+ * @param calendar what a bar is
+ * @param prices price files by asset, in the order of the file
+ * @param cash what cash earns
+ * @param regimes the regime model and what it sees
+ * @param refit when and how it is fitted
+ * @param rule what to hold
+ * @param limits what a target may not exceed
+ * @param trade when decisions are made and what trading costs
+ * @param judge what the result is held against
+ */
+public record Strategy(
+        String name,
+        Optional<String> hypothesis,
+        Calendar calendar,
+        Map<String, PriceSource> prices,
+        CashSource cash,
+        RegimeSettings regimes,
+        RefitSettings refit,
+        Rule rule,
+        Limits limits,
+        TradeSettings trade,
+        JudgeSettings judge) {
+    private static final Field<String> NAME = Field.required(
+            "strategy",
+            Shapes.textLike("[^\\p{Cntrl}]*[A-Za-z0-9][^\\p{Cntrl}]*", "a name with a letter or digit in it, on one line"),
+            "the strategy's name");
+    private static final Field<Optional<String>> HYPOTHESIS =
+            Field.maybe("hypothesis", Shapes.text(), "why it should work, written before it is run");
+    private static final Field<Calendar> CALENDAR =
+            Field.defaulted("calendar", Calendar.SHAPE, "{}", "what a bar is");
+    private static final Field<Map<String, PriceSource>> PRICES =
+            Field.required("prices", PriceSource.SECTION, "price files by asset");
+    private static final Field<CashSource> CASH =
+            Field.defaulted("cash", CashSource.SHAPE, "{percent-per-year: 0}", "what cash earns");
+    private static final Field<RegimeSettings> REGIMES =
+            Field.required("regimes", RegimeSettings.SHAPE, "the regime model and what it sees");
+    private static final Field<RefitSettings> REFIT =
+            Field.required("refit", RefitSettings.SHAPE, "when and how the model is fitted");
+    private static final Field<Rule> ALLOCATE =
+            Field.required("allocate", Rules.SHAPE, "what to hold: exactly one rule");
+    private static final Field<Limits> LIMITS =
+            Field.defaulted("limits", Limits.SHAPE, "{}", "what a target may not exceed");
+    private static final Field<TradeSettings> TRADE =
+            Field.defaulted("trade", TradeSettings.SHAPE, "{}", "when to decide and what trading costs");
+    private static final Field<JudgeSettings> JUDGE =
+            Field.required("judge", JudgeSettings.SHAPE, "what the result is held against");
+
+    /** The shape of the whole file. */
+    public static final Shape<Strategy> SHAPE = Shapes.object(
+            "strategy file",
+            f -> new Strategy(
+                    f.get(NAME),
+                    f.get(HYPOTHESIS),
+                    f.get(CALENDAR),
+                    f.get(PRICES),
+                    f.get(CASH),
+                    f.get(REGIMES),
+                    f.get(REFIT),
+                    f.get(ALLOCATE),
+                    f.get(LIMITS),
+                    f.get(TRADE),
+                    f.get(JUDGE)),
+            NAME,
+            HYPOTHESIS,
+            CALENDAR,
+            PRICES,
+            CASH,
+            REGIMES,
+            REFIT,
+            ALLOCATE,
+            LIMITS,
+            TRADE,
+            JUDGE);
+
+    /** Copies the price sources, in order. */
+    public Strategy {
+        prices = Collections.unmodifiableMap(new LinkedHashMap<>(prices));
+    }
+
+    /** The assets that are observed, held or compared with, in the order of {@code prices}; they define the common bars. */
+    public List<String> usedAssets() {
+        Set<String> named = new LinkedHashSet<>();
+        for (Observation observation : regimes.observe()) {
+            named.add(observation.asset());
+        }
+        named.add(regimes.orderedBy());
+        rule.statedWeights().values().forEach(weights -> named.addAll(weights.keySet()));
+        named.addAll(judge.buyAndHold().keySet());
+        List<String> used = new ArrayList<>();
+        for (String asset : prices.keySet()) {
+            if (named.contains(asset)) {
+                used.add(asset);
+            }
+        }
+        return List.copyOf(used);
+    }
+}

@@ -1,0 +1,16 @@
+package sojourn.trade;
+
+import java.util.OptionalDouble;
+import sojourn.market.FillPrices;
+
+/** On which bar and at what price an order fills that was decided at a close. */
+public interface FillRule {
+    /** The bar that an order decided at the close of {@code decidedOn} is due on; grows with {@code decidedOn}. */
+    int dueOn(int decidedOn);
+
+    /** The price of an asset for orders filled on {@code bar}; empty if it does not trade then. */
+    OptionalDouble price(FillPrices prices, int asset, int bar);
+
+    /** From the close of the decision to the end of the first whole bar that the position is held for. */
+    int barsToFirstReturn();
+}

@@ -1,0 +1,42 @@
+package sojourn.trade;
+
+import java.util.LinkedHashMap;
+import java.util.Map;
+import sojourn.document.Shape;
+import sojourn.document.Shapes;
+
+/** When orders fill, as the strategy file says it. */
+public enum FillTime {
+    /** At the close of the bar after the decision. */
+    NEXT_CLOSE("next-close") {
+        @Override
+        public FillRule delayed(int bars) {
+            return new NextClose(bars);
+        }
+    };
+
+    /** Reads the word of the strategy file. */
+    public static final Shape<FillTime> SHAPE = Shapes.word(words());
+
+    private final String word;
+
+    FillTime(String word) {
+        this.word = word;
+    }
+
+    /** The word of the strategy file. */
+    public String word() {
+        return word;
+    }
+
+    /** The rule, {@code bars} further bars later. */
+    public abstract FillRule delayed(int bars);
+
+    private static Map<String, FillTime> words() {
+        Map<String, FillTime> words = new LinkedHashMap<>();
+        for (FillTime time : values()) {
+            words.put(time.word, time);
+        }
+        return words;
+    }
+}

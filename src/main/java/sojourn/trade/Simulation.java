@@ -1,0 +1,188 @@
+package sojourn.trade;
+
+import java.util.ArrayDeque;
+import java.util.ArrayList;
+import java.util.Deque;
+import java.util.List;
+import java.util.Optional;
+import java.util.OptionalInt;
+import sojourn.allocate.Decision;
+import sojourn.allocate.Policy;
+import sojourn.allocate.Situation;
+import sojourn.allocate.Stance;
+import sojourn.allocate.Weights;
+import sojourn.market.Known;
+import sojourn.market.PriceTable;
+import sojourn.numeric.Check;
+import sojourn.walk.Signal;
+
+/**
+ * Runs one policy through the prices, one bar after another. On each bar, in this order: interest on the cash of the close before;
+ * fills of orders that are due; the mark at the close; the decision with what is known at that close. Whoever decides is shown the
+ * weights at the close as if every pending order had filled, and nothing later.
+ */
+public final class Simulation {
+    private final PriceTable table;
+    private final Signal signal;
+    private final Policy policy;
+    private final Terms terms;
+    private final List<String> regimes;
+    private final Account account;
+    private final Deque<Order> pending = new ArrayDeque<>();
+    private final List<Order> replaced = new ArrayList<>();
+    private Stance stance = Stance.first();
+    private Optional<Weights> target = Optional.empty();
+    private OptionalInt ruinedOn = OptionalInt.empty();
+
+    private Simulation(PriceTable table, Signal signal, Policy policy, Terms terms) {
+        this.table = table;
+        this.signal = signal;
+        this.policy = policy;
+        this.terms = terms;
+        this.regimes = List.copyOf(signal.regimes());
+        this.account = new Account(table.fillPrices(), table.assets().size(), terms);
+    }
+
+    /**
+     * The track from the policy's first decision on; empty if it never decides.
+     *
+     * @param fromBar the first bar at whose close the policy is asked: 0 for a strategy, the strategy's first decision for a
+     *     yardstick that is to start with it
+     */
+    public static Optional<Track> run(PriceTable table, Signal signal, Policy policy, Terms terms, int fromBar) {
+        Check.within(fromBar, 0, table.size() - 1, "fromBar");
+        return new Simulation(table, signal, policy, terms).walk(fromBar);
+    }
+
+    private Optional<Track> walk(int fromBar) {
+        int start = fromBar;
+        Optional<Decision> first = Optional.empty();
+        while (first.isEmpty() && start < table.size()) {
+            Decision decision = ask(start, Weights.none(table.assets().size()));
+            if (decision.kind() == Decision.Kind.NONE) {
+                start++;
+            } else {
+                first = Optional.of(decision);
+            }
+        }
+        return first.isEmpty() ? Optional.empty() : Optional.of(track(start, first.get()));
+    }
+
+    private Track track(int start, Decision first) {
+        Track.Rows rows = new Track.Rows(table.size() - start, table.assets().size());
+        take(start, first);
+        fillDue(start);
+        write(rows, 0, start, first.change());
+        for (int bar = start + 1; bar < table.size(); bar++) {
+            write(rows, bar - start, bar, ruinedOn.isPresent() ? rest() : step(bar));
+        }
+        return new Track(
+                table.assets(),
+                terms.capital(),
+                start,
+                rows,
+                account.fills(),
+                unfilled(),
+                ruinedOn,
+                account.writtenOff(),
+                stance);
+    }
+
+    private Decision.Change step(int bar) {
+        account.accrue(bar);
+        fillDue(bar);
+        double wealth = mark(bar);
+        if (ruinedOn.isPresent()) {
+            return Decision.Change.SAME;
+        }
+        Order last = pending.peekLast();
+        Decision decision = ask(bar, last == null ? account.weights(bar, wealth) : last.target());
+        take(bar, decision);
+        fillDue(bar); // honest fill rules have nothing due here
+        mark(bar);
+        return decision.change();
+    }
+
+    private Decision.Change rest() {
+        account.rest();
+        return Decision.Change.SAME;
+    }
+
+    private Decision ask(int bar, Weights weights) {
+        Known known = table.knownAt(bar);
+        Situation situation = new Situation(
+                known, signal.at(known), regimes, weights, terms.fill().barsToFirstReturn());
+        Decision decision = policy.at(situation, stance);
+        stance = decision.next();
+        return decision;
+    }
+
+    private void take(int bar, Decision decision) {
+        if (decision.target().isPresent()) {
+            target = decision.target();
+        }
+        if (decision.kind() == Decision.Kind.ORDER) {
+            Weights ordered = decision.target().orElseThrow();
+            pending.add(new Order(bar, terms.fill().dueOn(bar), ordered, decision.because()));
+        }
+    }
+
+    /** First in, first out; an order still waiting for a price gives way to the next one due. */
+    private void fillDue(int bar) {
+        while (ruinedOn.isEmpty() && due(bar)) {
+            Order order = pending.removeFirst();
+            if (due(bar)) {
+                replaced.add(order);
+                continue;
+            }
+            Account.Outcome outcome = account.fill(order, bar, terms.fill());
+            if (outcome == Account.Outcome.RUIN) {
+                ruin(bar);
+            } else if (outcome == Account.Outcome.BLOCKED) {
+                pending.addFirst(order);
+                return;
+            }
+        }
+    }
+
+    private boolean due(int bar) {
+        return !pending.isEmpty() && pending.getFirst().dueOn() <= bar;
+    }
+
+    private List<Order> unfilled() {
+        List<Order> unfilled = new ArrayList<>(replaced);
+        unfilled.addAll(pending);
+        return unfilled;
+    }
+
+    private double mark(int bar) {
+        double wealth = account.wealth(bar);
+        if (!(wealth > 0) && ruinedOn.isEmpty()) {
+            ruin(bar);
+        }
+        return wealth;
+    }
+
+    private void ruin(int bar) {
+        account.ruin(bar);
+        ruinedOn = OptionalInt.of(bar);
+    }
+
+    private void write(Track.Rows rows, int row, int bar, Decision.Change change) {
+        int assets = table.assets().size();
+        double wealth = ruinedOn.isPresent() ? 0 : account.wealth(bar);
+        rows.wealth[row] = wealth;
+        rows.cash[row] = account.cash();
+        rows.interest[row] = account.interest();
+        rows.cost[row] = account.cost();
+        rows.turnover[row] = account.turnover();
+        rows.switched[row] = change == Decision.Change.SWITCHED;
+        Weights held = wealth > 0 ? account.weights(bar, wealth) : Weights.none(assets);
+        Weights decided = target.orElseThrow();
+        for (int i = 0; i < assets; i++) {
+            rows.units[row * assets + i] = account.units(i);
+            rows.weights[row * assets + i] = held.at(i);
+            rows.targets[row * assets + i] = decided.at(i);
+        }
+    }
+}

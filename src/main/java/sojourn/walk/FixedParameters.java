@@ -1,0 +1,94 @@
+package sojourn.walk;
+
+import java.util.List;
+import java.util.Optional;
+import sojourn.document.Field;
+import sojourn.document.Refusal;
+import sojourn.document.Shape;
+import sojourn.document.Shapes;
+
+/**
+ * Parameters that are declared instead of fitted: an external prior, which every output says so of. One entry a regime, in the
+ * order of {@code states}.
+ *
+ * @param initial probability of each regime at the first observation of the window; sums to 1
+ * @param transition probability of the next regime (column) given this one (row); each row sums to 1
+ * @param mean of the observation in each regime, per bar
+ * @param sd standard deviation of the observation in each regime, per bar
+ */
+public record FixedParameters(
+        List<Double> initial, List<List<Double>> transition, List<Double> mean, List<Double> sd) {
+    private static final int MOST_STATES = 6;
+    private static final double SUM_SLACK = 1e-9;
+
+    private static final Shape<List<Double>> PROBABILITIES =
+            Shapes.list(Shapes.number().atLeast(0).atMost(1), 1, MOST_STATES);
+    private static final Field<List<Double>> INITIAL = Field.required(
+            "initial", PROBABILITIES, "probability of each regime at the window's first observation; sums to 1");
+    private static final Field<List<List<Double>>> TRANSITION = Field.required(
+            "transition",
+            Shapes.list(PROBABILITIES, 1, MOST_STATES),
+            "a row a regime: probabilities of the next regime, each row sums to 1");
+    private static final Field<List<Double>> MEAN = Field.required(
+            "mean", Shapes.list(Shapes.number(), 1, MOST_STATES), "mean of the observation in each regime, per bar");
+    private static final Field<List<Double>> SD = Field.required(
+            "sd",
+            Shapes.list(Shapes.number().above(0), 1, MOST_STATES),
+            "standard deviation of the observation in each regime, per bar");
+
+    static final Shape<FixedParameters> SHAPE = Shapes.object(
+                    "fixed",
+                    f -> new FixedParameters(f.get(INITIAL), f.get(TRANSITION), f.get(MEAN), f.get(SD)),
+                    INITIAL,
+                    TRANSITION,
+                    MEAN,
+                    SD)
+            .refuse(FixedParameters::fault);
+
+    /** Copies its lists. */
+    public FixedParameters {
+        initial = List.copyOf(initial);
+        transition = transition.stream().map(List::copyOf).toList();
+        mean = List.copyOf(mean);
+        sd = List.copyOf(sd);
+    }
+
+    private Optional<Refusal> fault() {
+        int states = initial.size();
+        String each = "give one for each of the " + states + " regimes of 'initial'";
+        if (mean.size() != states) {
+            return Optional.of(new Refusal("mean", "'mean' has " + mean.size() + " numbers", each));
+        }
+        if (sd.size() != states) {
+            return Optional.of(new Refusal("sd", "'sd' has " + sd.size() + " numbers", each));
+        }
+        if (transition.size() != states || transition.stream().anyMatch(row -> row.size() != states)) {
+            return Optional.of(new Refusal(
+                    "transition", "'transition' is not " + states + " rows of " + states + " numbers", each));
+        }
+        if (!sumsToOne(initial)) {
+            return Optional.of(new Refusal("initial", "'initial' sums to " + sum(initial), "make it sum to 1"));
+        }
+        for (int i = 0; i < states; i++) {
+            if (!sumsToOne(transition.get(i))) {
+                return Optional.of(new Refusal(
+                        "transition",
+                        "row " + (i + 1) + " of 'transition' sums to " + sum(transition.get(i)),
+                        "make each row sum to 1"));
+            }
+        }
+        return Optional.empty();
+    }
+
+    private static boolean sumsToOne(List<Double> probabilities) {
+        return Math.abs(sum(probabilities) - 1) <= SUM_SLACK;
+    }
+
+    private static double sum(List<Double> terms) {
+        double sum = 0;
+        for (double term : terms) {
+            sum += term;
+        }
+        return sum;
+    }
+}

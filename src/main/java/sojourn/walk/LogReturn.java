@@ -1,0 +1,37 @@
+package sojourn.walk;
+
+import java.util.OptionalDouble;
+import sojourn.document.Shape;
+import sojourn.document.Shapes;
+import sojourn.market.Known;
+
+/**
+ * ln(close_t / close_{t-1}); none on the first bar.
+ *
+ * @param asset the asset's name
+ */
+public record LogReturn(String asset) implements Observation {
+    static final String WORD = "log-return";
+
+    static final Shape<LogReturn> SHAPE = Shapes.text().as(LogReturn::new);
+
+    @Override
+    public OptionalDouble at(Known known) {
+        int t = known.bar();
+        if (t == 0) {
+            return OptionalDouble.empty();
+        }
+        int index = known.assets().indexOf(asset);
+        return OptionalDouble.of(StrictMath.log(known.close(index, t) / known.close(index, t - 1)));
+    }
+
+    @Override
+    public String word() {
+        return WORD;
+    }
+
+    @Override
+    public String column() {
+        return "log_return_" + asset;
+    }
+}

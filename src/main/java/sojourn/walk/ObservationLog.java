@@ -1,0 +1,114 @@
+package sojourn.walk;
+
+import java.util.Arrays;
+import java.util.OptionalDouble;
+import java.util.OptionalInt;
+import sojourn.market.Known;
+import sojourn.regime.Observations;
+
+/**
+ * Observations and asset returns as they came in, one row a bar from the bar of the first observation on. Rows are only ever
+ * appended at a close, so a window taken now cannot hold anything later.
+ */
+final class ObservationLog {
+    private final Observation observation;
+    private final int assets;
+    private int firstBar = -1;
+    private int rows;
+    private int present;
+    private double[] values = new double[64];
+    private boolean[] missing = new boolean[64];
+    private double[] returns;
+
+    ObservationLog(Observation observation, int assets) {
+        this.observation = observation;
+        this.assets = assets;
+        this.returns = new double[64 * assets];
+    }
+
+    /** Takes in the bar that {@code known} ends with. */
+    void append(Known known) {
+        OptionalDouble value = observation.at(known);
+        if (rows == 0 && value.isEmpty()) {
+            return;
+        }
+        if (rows == 0) {
+            firstBar = known.bar();
+        }
+        grow();
+        values[rows] = value.orElse(0);
+        missing[rows] = value.isEmpty();
+        present += value.isPresent() ? 1 : 0;
+        for (int asset = 0; asset < assets; asset++) {
+            returns[rows * assets + asset] = known.close(asset, known.bar()) / known.close(asset, known.bar() - 1) - 1;
+        }
+        rows++;
+    }
+
+    /** Observations present so far. */
+    int present() {
+        return present;
+    }
+
+    /** Whether the last bar has an observation. */
+    boolean lastPresent() {
+        return rows > 0 && !missing[rows - 1];
+    }
+
+    /** The first row of a window that ends now: row 0, or the row of the last so-manieth observation. */
+    int windowStart(OptionalInt rolling) {
+        if (rolling.isEmpty() || present <= rolling.getAsInt()) {
+            return 0;
+        }
+        int wanted = rolling.getAsInt();
+        int row = rows;
+        while (wanted > 0) {
+            row--;
+            wanted -= missing[row] ? 0 : 1;
+        }
+        return row;
+    }
+
+    /** The bar of a row. */
+    int bar(int row) {
+        return firstBar + row;
+    }
+
+    /** The last row. */
+    int lastRow() {
+        return rows - 1;
+    }
+
+    /** The rows from {@code start} to now. */
+    Observations window(int start) {
+        return Observations.of(
+                1, Arrays.copyOfRange(values, start, rows), Arrays.copyOfRange(missing, start, rows));
+    }
+
+    /** The last row alone. */
+    Observations last() {
+        return window(rows - 1);
+    }
+
+    /** Simple returns of all assets, rows from {@code start} to now, row-major. */
+    double[] assetReturns(int start) {
+        return Arrays.copyOfRange(returns, start * assets, rows * assets);
+    }
+
+    /** Simple returns of one asset, rows from {@code start} to now. */
+    double[] returnsOf(int asset, int start) {
+        double[] column = new double[rows - start];
+        for (int row = start; row < rows; row++) {
+            column[row - start] = returns[row * assets + asset];
+        }
+        return column;
+    }
+
+    private void grow() {
+        if (rows == values.length) {
+            values = Arrays.copyOf(values, 2 * rows);
+            missing = Arrays.copyOf(missing, 2 * rows);
+            returns = Arrays.copyOf(returns, 2 * rows * assets);
+        }
+    }
+}

@@ -1,0 +1,131 @@
+package sojourn.walk;
+
+import java.util.LinkedHashMap;
+import java.util.LinkedHashSet;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import sojourn.document.Field;
+import sojourn.document.Refusal;
+import sojourn.document.Shape;
+import sojourn.document.Shapes;
+import sojourn.regime.EmissionFamily;
+import sojourn.regime.ModelKind;
+
+/**
+ * The section {@code regimes} of a strategy file.
+ *
+ * @param model the kind of regime model
+ * @param observe what it sees at each close; one series
+ * @param states the regimes' names, from lowest to highest volatility
+ * @param emission how an observation is distributed in a regime
+ * @param orderBy the asset whose returns order the regimes; the observed asset when empty
+ * @param fixed parameters that are declared instead of fitted
+ */
+public record RegimeSettings(
+        ModelKind model,
+        List<Observation> observe,
+        List<String> states,
+        EmissionFamily emission,
+        Optional<String> orderBy,
+        Optional<FixedParameters> fixed) {
+    private static final int MOST_STATES = 6;
+
+    private static final Field<ModelKind> MODEL =
+            Field.defaulted("model", Shapes.word(models()), "hidden-markov", "the kind of regime model");
+    private static final Field<List<Observation>> OBSERVE = Field.required(
+            "observe", Shapes.list(Observation.shape(), 1, 1), "what the model sees at each close, e.g. log-return of an asset");
+    private static final Field<List<String>> STATES = Field.required(
+            "states",
+            Shapes.list(
+                    Shapes.textLike("[a-z][a-z0-9_]*", "a name of lower-case letters, digits and underscores"),
+                    1,
+                    MOST_STATES),
+            "names of the regimes, from lowest to highest volatility");
+    private static final Field<EmissionFamily> EMISSION = Field.defaulted(
+            "emission", Shapes.word(emissions()), "normal", "how an observation is distributed within a regime");
+    private static final Field<Optional<String>> ORDER_BY = Field.maybe(
+            "order-by", Shapes.text(), "the asset whose volatility orders the regimes; the observed one if left out");
+    private static final Field<FixedParameters> FIXED = Field.required(
+            "fixed", FixedParameters.SHAPE, "declared parameters: an external prior, marked so on every output");
+    private static final Field<Optional<FixedParameters>> PARAMETERS = Field.maybe(
+            "parameters",
+            Shapes.object("parameters", f -> f.get(FIXED), FIXED),
+            "declares parameters instead of fitting them");
+
+    /** The section's shape. */
+    public static final Shape<RegimeSettings> SHAPE = Shapes.object(
+                    "regimes",
+                    f -> new RegimeSettings(
+                            f.get(MODEL),
+                            f.get(OBSERVE),
+                            f.get(STATES),
+                            f.get(EMISSION),
+                            f.get(ORDER_BY),
+                            f.get(PARAMETERS)),
+                    MODEL,
+                    OBSERVE,
+                    STATES,
+                    EMISSION,
+                    ORDER_BY,
+                    PARAMETERS)
+            .refuse(RegimeSettings::fault);
+
+    /** Copies its lists. */
+    public RegimeSettings {
+        observe = List.copyOf(observe);
+        states = List.copyOf(states);
+    }
+
+    /** The asset whose returns order the regimes. */
+    public String orderedBy() {
+        return orderBy.orElseGet(() -> observe.get(0).asset());
+    }
+
+    private Optional<Refusal> fault() {
+        if (new LinkedHashSet<>(states).size() < states.size()) {
+            return Optional.of(new Refusal("states", "two regimes have the same name", "give each its own name"));
+        }
+        if (model == ModelKind.ONE_REGIME && states.size() != 1) {
+            return Optional.of(new Refusal(
+                    "states",
+                    "the model one-regime has one regime, not " + states.size(),
+                    "name one, or choose another model"));
+        }
+        if (fixed.isEmpty()) {
+            return Optional.empty();
+        }
+        FixedParameters given = fixed.get();
+        if (given.initial().size() != states.size()) {
+            return Optional.of(new Refusal(
+                    "parameters",
+                    "'parameters' describe " + given.initial().size() + " regimes, 'states' names " + states.size(),
+                    "make the two agree"));
+        }
+        if (model != ModelKind.HIDDEN_MARKOV) {
+            return Optional.of(new Refusal(
+                    "parameters", "declared parameters are those of a hidden Markov model", "set model: hidden-markov"));
+        }
+        if (emission == EmissionFamily.NORMAL_ZERO_MEAN && given.mean().stream().anyMatch(mean -> mean != 0)) {
+            return Optional.of(new Refusal(
+                    "parameters", "a zero-mean emission has means other than 0", "write mean: 0 for each regime"));
+        }
+        return Optional.empty();
+    }
+
+    private static Map<String, ModelKind> models() {
+        Map<String, ModelKind> words = new LinkedHashMap<>();
+        for (ModelKind kind : ModelKind.values()) {
+            words.put(kind.word(), kind);
+        }
+        return words;
+    }
+
+    private static Map<String, EmissionFamily> emissions() {
+        Map<String, EmissionFamily> words = new LinkedHashMap<>();
+        for (EmissionFamily family : EmissionFamily.values()) {
+            words.put(family.word(), family);
+        }
+        return words;
+    }
+}

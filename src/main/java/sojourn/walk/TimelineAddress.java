@@ -1,0 +1,55 @@
+package sojourn.walk;
+
+import java.nio.ByteBuffer;
+import java.security.MessageDigest;
+import java.security.NoSuchAlgorithmException;
+import java.util.HexFormat;
+import sojourn.market.Known;
+import sojourn.market.PriceTable;
+
+/**
+ * The address of a timeline: a hash chain that starts from the settings and takes in bar after bar exactly what a walk may see
+ * (date, closes, the cash rate). Equal addresses mean equal timelines; the address at an earlier bar is that of the shorter
+ * history.
+ */
+public final class TimelineAddress {
+    private static final int SHOWN_DIGITS = 16;
+
+    private TimelineAddress() {}
+
+    /**
+     * The address after the last bar.
+     *
+     * @param settings the resolved sections that the walk depends on, in one fixed form. Not modified.
+     */
+    public static String of(byte[] settings, PriceTable table) {
+        return at(settings, table, table.size() - 1);
+    }
+
+    /** The address after {@code lastBar}; {@code settings} is not modified. */
+    public static String at(byte[] settings, PriceTable table, int lastBar) {
+        MessageDigest digest = sha256();
+        byte[] link = digest.digest(settings);
+        ByteBuffer row = ByteBuffer.allocate(Long.BYTES * (2 + table.assets().size()));
+        for (int bar = 0; bar <= lastBar; bar++) {
+            Known known = table.knownAt(bar);
+            row.clear();
+            row.putLong(known.date().toEpochDay());
+            for (int asset = 0; asset < table.assets().size(); asset++) {
+                row.putLong(Double.doubleToLongBits(known.close(asset, bar)));
+            }
+            row.putLong(Double.doubleToLongBits(known.expectedCashReturn()));
+            digest.update(link);
+            link = digest.digest(row.array());
+        }
+        return HexFormat.of().formatHex(link).substring(0, SHOWN_DIGITS);
+    }
+
+    private static MessageDigest sha256() {
+        try {
+            return MessageDigest.getInstance("SHA-256");
+        } catch (NoSuchAlgorithmException e) {
+            throw new IllegalStateException("every Java platform has SHA-256", e);
+        }
+    }
+}
