@@ -3,8 +3,6 @@ package sojourn.market;
 import java.time.DayOfWeek;
 import java.time.LocalDate;
 import java.time.temporal.TemporalAdjusters;
-import java.util.LinkedHashMap;
-import java.util.Map;
 
 /** The length of a bar, with the periods per year that it is declared to have. */
 public enum BarLength {
@@ -68,13 +66,5 @@ public enum BarLength {
     /** The noun: day, week, month. */
     String period() {
         return period;
-    }
-
-    static Map<String, BarLength> words() {
-        Map<String, BarLength> words = new LinkedHashMap<>();
-        for (BarLength one : values()) {
-            words.put(one.word, one);
-        }
-        return words;
     }
 }

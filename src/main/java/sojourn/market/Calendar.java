@@ -1,7 +1,6 @@
 package sojourn.market;
 
-import java.util.LinkedHashMap;
-import java.util.Map;
+import java.util.List;
 import sojourn.document.Field;
 import sojourn.document.Shape;
 import sojourn.document.Shapes;
@@ -17,16 +16,16 @@ public record Calendar(BarLength bars, Days days, Rows rows) {
     /** Without the section: daily bars of common days. */
     public static final Calendar DAILY = new Calendar(BarLength.DAILY, Days.COMMON, Rows.DAYS);
 
-    private static final Field<BarLength> BARS =
-            Field.defaulted("bars", Shapes.word(BarLength.words()), "daily", "Length of the bars.");
+    private static final Field<BarLength> BARS = Field.defaulted(
+            "bars", Shapes.word(List.of(BarLength.values()), BarLength::word), "daily", "Length of the bars.");
     private static final Field<Days> DAYS = Field.defaulted(
             "days",
-            Shapes.word(Map.of("common", Days.COMMON)),
+            Shapes.word(List.of(Days.values()), Days::word),
             "common",
             "Days that count: those that every series has.");
     private static final Field<Rows> ROWS = Field.defaulted(
             "rows",
-            Shapes.word(Rows.words()),
+            Shapes.word(List.of(Rows.values()), Rows::word),
             "days",
             "What one row of a price file is: a day, from which longer bars are built, or a whole bar already.");
 
@@ -37,7 +36,18 @@ public record Calendar(BarLength bars, Days days, Rows rows) {
     /** Which days count. */
     public enum Days {
         /** Days on which every series that defines the calendar has a close. */
-        COMMON
+        COMMON("common");
+
+        private final String word;
+
+        Days(String word) {
+            this.word = word;
+        }
+
+        /** The word of the strategy file. */
+        public String word() {
+            return word;
+        }
     }
 
     /** What one row of a price file is. */
@@ -53,12 +63,9 @@ public record Calendar(BarLength bars, Days days, Rows rows) {
             this.word = word;
         }
 
-        static Map<String, Rows> words() {
-            Map<String, Rows> words = new LinkedHashMap<>();
-            for (Rows one : values()) {
-                words.put(one.word, one);
-            }
-            return words;
+        /** The word of the strategy file. */
+        public String word() {
+            return word;
         }
     }
 

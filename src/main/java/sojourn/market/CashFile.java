@@ -21,12 +21,12 @@ final class CashFile {
     private final List<Rate> rates = new ArrayList<>();
     private final MissingValues missing = new MissingValues("rate");
 
-    private CashFile(CsvTable table, String file, CashSource.Dated source, Faults faults) {
+    private CashFile(CsvTable table, CashSource.Dated source, Faults faults) {
         this.faults = faults;
         CsvColumns named = new CsvColumns(table, faults);
         int date = named.required("date", source.layout().date());
         this.column = named.required("column", source.column());
-        this.dated = new DatedRows(date, source.layout().dateFormat(), BarLength.DAILY, file, faults);
+        this.dated = new DatedRows(date, source.layout().dateFormat(), BarLength.DAILY, faults);
     }
 
     private record Rate(LocalDate date, int line, double percentPerYear) {}
@@ -41,7 +41,7 @@ final class CashFile {
         if (table.isEmpty()) {
             return Optional.empty();
         }
-        CashFile file = new CashFile(table.get(), text.file(), source, faults);
+        CashFile file = new CashFile(table.get(), source, faults);
         if (!faults.none()) {
             return Optional.empty();
         }

@@ -1,5 +1,6 @@
 package sojourn.market;
 
+import java.util.List;
 import java.util.Optional;
 import sojourn.document.Field;
 import sojourn.document.Fields;
@@ -19,7 +20,7 @@ public record CsvLayout(String csv, String date, DatePattern dateFormat, Optiona
             Field.defaulted("date-format", DatePattern.SHAPE, "yyyy-MM-dd", "How dates are written, e.g. dd.MM.yyyy.");
     static final Field<Optional<Separator>> SEPARATOR = Field.maybe(
             "separator",
-            Shapes.word(Separator.words()),
+            Shapes.word(List.of(Separator.values()), Separator::word),
             "What separates cells; taken from the header line if not given.");
 
     static CsvLayout from(String csv, Fields fields) {

@@ -16,12 +16,12 @@ final class DatedRows {
     private int steps;
     private int backward;
 
-    DatedRows(int column, DatePattern pattern, BarLength rowLength, String file, Faults faults) {
+    DatedRows(int column, DatePattern pattern, BarLength rowLength, Faults faults) {
         this.column = column;
         this.pattern = pattern;
         this.rowLength = rowLength;
         this.faults = faults;
-        this.disorder = new Faults(file);
+        this.disorder = new Faults();
     }
 
     /** The date of the next row; a fault and empty if it has none. */
@@ -46,7 +46,7 @@ final class DatedRows {
     /** Hands over the faults of order (those of a file that runs backwards as one), and that of a file without any value. */
     void finish(CsvTable table, MissingValues missing) {
         if (steps > 1 && backward == steps) {
-            Faults one = new Faults("");
+            Faults one = new Faults();
             one.add(table.headerProblem("dates run from the newest to the oldest", "sort the rows, oldest first"));
             faults.add(one);
         } else {

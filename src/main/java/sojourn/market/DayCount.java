@@ -1,8 +1,5 @@
 package sojourn.market;
 
-import java.util.LinkedHashMap;
-import java.util.Map;
-
 /** How many days a year of interest has; the days between two dates are always counted on the calendar. */
 public enum DayCount {
     /** Money markets of the dollar and the euro. */
@@ -31,13 +28,5 @@ public enum DayCount {
      */
     public double interest(double percentPerYear, double calendarDays) {
         return percentPerYear / 100 * calendarDays / daysPerYear;
-    }
-
-    static Map<String, DayCount> words() {
-        Map<String, DayCount> words = new LinkedHashMap<>();
-        for (DayCount one : values()) {
-            words.put(one.word, one);
-        }
-        return words;
     }
 }

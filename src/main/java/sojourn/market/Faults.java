@@ -11,13 +11,8 @@ import sojourn.document.Problems;
 final class Faults {
     private static final int SHOWN = 20;
 
-    private final String file;
     private final List<Problem> first = new ArrayList<>();
     private int count;
-
-    Faults(String file) {
-        this.file = file;
-    }
 
     void add(Problem problem) {
         count++;
@@ -47,8 +42,13 @@ final class Faults {
     void addTo(Problems problems) {
         first.forEach(problems::add);
         if (count > first.size()) {
+            Problem last = first.get(first.size() - 1);
             problems.add(new Problem(
-                    file, 0, 0, count - first.size() + " more faults are not shown", "mend those above first"));
+                    last.file(),
+                    last.line(),
+                    last.column(),
+                    count - first.size() + " more faults follow",
+                    "mend those above first"));
         }
     }
 }

@@ -25,7 +25,7 @@ final class PriceFile {
     private final RangeCheck range = new RangeCheck();
     private final MissingValues missing = new MissingValues("close");
 
-    private PriceFile(CsvTable table, String file, PriceSource source, BarLength rowLength, Faults faults) {
+    private PriceFile(CsvTable table, PriceSource source, BarLength rowLength, Faults faults) {
         this.faults = faults;
         CsvColumns named = new CsvColumns(table, faults);
         int date = named.required("date", source.layout().date());
@@ -35,7 +35,7 @@ final class PriceFile {
         this.high = new PriceColumn("high", named.optional("high", source.high()), Bound.ABOVE_ZERO);
         this.low = new PriceColumn("low", named.optional("low", source.low()), Bound.ABOVE_ZERO);
         this.volume = new PriceColumn("volume", named.optional("volume", source.volume()), Bound.NOT_BELOW_ZERO);
-        this.dated = new DatedRows(date, source.layout().dateFormat(), rowLength, file, faults);
+        this.dated = new DatedRows(date, source.layout().dateFormat(), rowLength, faults);
     }
 
     /**
@@ -56,7 +56,7 @@ final class PriceFile {
         if (table.isEmpty()) {
             return Optional.empty();
         }
-        PriceFile file = new PriceFile(table.get(), text.file(), source, rowLength, faults);
+        PriceFile file = new PriceFile(table.get(), source, rowLength, faults);
         if (!faults.none()) {
             return Optional.empty();
         }

@@ -1,8 +1,5 @@
 package sojourn.market;
 
-import java.util.LinkedHashMap;
-import java.util.Map;
-
 /** What stands between the cells of a row. */
 public enum Separator {
     /** {@code ,} */
@@ -56,13 +53,5 @@ public enum Separator {
             }
         }
         return count;
-    }
-
-    static Map<String, Separator> words() {
-        Map<String, Separator> words = new LinkedHashMap<>();
-        for (Separator one : values()) {
-            words.put(one.word, one);
-        }
-        return words;
     }
 }
