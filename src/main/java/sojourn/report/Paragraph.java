@@ -11,7 +11,7 @@ final class Paragraph {
     static String wrapped(String text, int indent) {
         StringBuilder all = new StringBuilder();
         StringBuilder line = new StringBuilder();
-        for (String word : text.strip().split("\\s+")) {
+        for (String word : text.strip().split("\\s+", -1)) {
             if (!line.toString().isBlank() && line.length() + 1 + word.length() > WIDTH) {
                 all.append(line.toString().stripTrailing()).append('\n');
                 line = new StringBuilder(" ".repeat(indent));
