@@ -43,24 +43,38 @@ class ArchitectureTest {
         table.put("trade", List.of("numeric", "document", "market", "walk", "allocate"));
         table.put("measure", List.of("numeric", "document", "inference", "market", "trade"));
         table.put(
-                "strategy",
-                List.of("numeric", "document", "market", "regime", "walk", "allocate", "trade", "measure"));
+                "strategy", List.of("numeric", "document", "market", "regime", "walk", "allocate", "trade", "measure"));
         table.put(
                 "archive",
                 List.of("numeric", "document", "market", "regime", "walk", "allocate", "trade", "measure", "strategy"));
         table.put(
                 "compare",
                 List.of(
-                        "numeric", "document", "market", "regime", "walk", "allocate", "trade", "measure", "strategy",
+                        "numeric",
+                        "document",
+                        "market",
+                        "regime",
+                        "walk",
+                        "allocate",
+                        "trade",
+                        "measure",
+                        "strategy",
                         "archive"));
         table.put(
                 "report",
                 List.of(
-                        "numeric", "document", "market", "regime", "walk", "allocate", "trade", "measure", "strategy",
-                        "archive", "compare"));
-        table.put(
-                "cli",
-                List.of("document", "market", "world", "strategy", "archive", "compare", "report"));
+                        "numeric",
+                        "document",
+                        "market",
+                        "regime",
+                        "walk",
+                        "allocate",
+                        "trade",
+                        "measure",
+                        "strategy",
+                        "archive",
+                        "compare"));
+        table.put("cli", List.of("document", "market", "world", "strategy", "archive", "compare", "report"));
         return table;
     }
 
@@ -83,48 +97,52 @@ class ArchitectureTest {
     @TestFactory
     Stream<DynamicTest> packagesImportOnlyWhatTheTableAllows() {
         return MAY_IMPORT.entrySet().stream()
-                .map(entry -> DynamicTest.dynamicTest(entry.getKey(), () -> classes()
-                        .that(resideInAPackage("sojourn." + entry.getKey()))
-                        .should(importOnly(entry.getKey(), entry.getValue()))
-                        .allowEmptyShould(true)
-                        .check(ours)));
+                .map(entry -> DynamicTest.dynamicTest(
+                        entry.getKey(),
+                        () -> classes()
+                                .that(resideInAPackage("sojourn." + entry.getKey()))
+                                .should(importOnly(entry.getKey(), entry.getValue()))
+                                .allowEmptyShould(true)
+                                .check(ours)));
     }
 
     @TestFactory
     Stream<DynamicTest> purePackagesTouchNoFileConsoleClockOrEnvironment() {
         return PURE.stream()
-                .map(name -> DynamicTest.dynamicTest(name, () -> noClasses()
-                        .that(resideInAPackage("sojourn." + name))
-                        .should()
-                        .dependOnClassesThat()
-                        .belongToAnyOf(
-                                java.io.File.class,
-                                java.nio.file.Files.class,
-                                java.nio.file.Path.class,
-                                java.io.Console.class,
-                                java.util.Random.class,
-                                java.util.concurrent.ThreadLocalRandom.class,
-                                java.time.Clock.class)
-                        .orShould()
-                        .accessField(System.class, "out")
-                        .orShould()
-                        .accessField(System.class, "err")
-                        .orShould()
-                        .callMethod(System.class, "currentTimeMillis")
-                        .orShould()
-                        .callMethod(System.class, "nanoTime")
-                        .orShould()
-                        .callMethod(System.class, "getenv")
-                        .orShould()
-                        .callMethod(System.class, "getenv", String.class)
-                        .orShould()
-                        .callMethod(System.class, "getProperty", String.class)
-                        .orShould()
-                        .callMethod(Math.class, "random")
-                        .orShould()
-                        .callMethod(java.time.LocalDate.class, "now")
-                        .allowEmptyShould(true)
-                        .check(ours)));
+                .map(name -> DynamicTest.dynamicTest(
+                        name,
+                        () -> noClasses()
+                                .that(resideInAPackage("sojourn." + name))
+                                .should()
+                                .dependOnClassesThat()
+                                .belongToAnyOf(
+                                        java.io.File.class,
+                                        java.nio.file.Files.class,
+                                        java.nio.file.Path.class,
+                                        java.io.Console.class,
+                                        java.util.Random.class,
+                                        java.util.concurrent.ThreadLocalRandom.class,
+                                        java.time.Clock.class)
+                                .orShould()
+                                .accessField(System.class, "out")
+                                .orShould()
+                                .accessField(System.class, "err")
+                                .orShould()
+                                .callMethod(System.class, "currentTimeMillis")
+                                .orShould()
+                                .callMethod(System.class, "nanoTime")
+                                .orShould()
+                                .callMethod(System.class, "getenv")
+                                .orShould()
+                                .callMethod(System.class, "getenv", String.class)
+                                .orShould()
+                                .callMethod(System.class, "getProperty", String.class)
+                                .orShould()
+                                .callMethod(Math.class, "random")
+                                .orShould()
+                                .callMethod(java.time.LocalDate.class, "now")
+                                .allowEmptyShould(true)
+                                .check(ours)));
     }
 
     @Test
@@ -136,8 +154,8 @@ class ArchitectureTest {
             @Override
             public void check(JavaClass item, ConditionEvents events) {
                 item.getMethodCallsFromSelf().stream()
-                        .filter(call -> call.getTargetOwner().isEquivalentTo(Math.class)
-                                && loose.contains(call.getName()))
+                        .filter(call ->
+                                call.getTargetOwner().isEquivalentTo(Math.class) && loose.contains(call.getName()))
                         .forEach(call -> events.add(SimpleConditionEvent.violated(call, call.getDescription())));
             }
         };
@@ -189,8 +207,8 @@ class ArchitectureTest {
                                 dependency.getTargetClass().getPackageName().startsWith("sojourn."))
                         .filter(dependency -> !room(dependency.getTargetClass()).equals(own)
                                 && !allowed.contains(room(dependency.getTargetClass())))
-                        .forEach(dependency -> events.add(
-                                SimpleConditionEvent.violated(dependency, dependency.getDescription())));
+                        .forEach(dependency ->
+                                events.add(SimpleConditionEvent.violated(dependency, dependency.getDescription())));
             }
         };
     }

@@ -1,7 +1,6 @@
 package sojourn.allocate;
 
-import java.util.LinkedHashMap;
-import java.util.Map;
+import java.util.List;
 import sojourn.document.Shape;
 import sojourn.document.Shapes;
 import sojourn.walk.Reading;
@@ -24,7 +23,7 @@ public enum ProbabilityKind {
     };
 
     /** Reads the word of the strategy file. */
-    public static final Shape<ProbabilityKind> SHAPE = Shapes.word(words());
+    public static final Shape<ProbabilityKind> SHAPE = Shapes.word(List.of(values()), ProbabilityKind::word);
 
     private final String word;
     private final String prefix;
@@ -46,12 +45,4 @@ public enum ProbabilityKind {
 
     /** One probability a regime. */
     abstract double[] of(Reading reading);
-
-    private static Map<String, ProbabilityKind> words() {
-        Map<String, ProbabilityKind> words = new LinkedHashMap<>();
-        for (ProbabilityKind kind : values()) {
-            words.put(kind.word, kind);
-        }
-        return words;
-    }
 }

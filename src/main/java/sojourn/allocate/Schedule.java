@@ -1,8 +1,7 @@
 package sojourn.allocate;
 
 import java.time.LocalDate;
-import java.util.LinkedHashMap;
-import java.util.Map;
+import java.util.List;
 import sojourn.document.Shape;
 import sojourn.document.Shapes;
 import sojourn.market.Known;
@@ -45,7 +44,7 @@ public enum Schedule {
     };
 
     /** Reads the word of the strategy file. */
-    public static final Shape<Schedule> SHAPE = Shapes.word(words());
+    public static final Shape<Schedule> SHAPE = Shapes.word(List.of(values()), Schedule::word);
 
     private final String word;
 
@@ -68,13 +67,5 @@ public enum Schedule {
     private static boolean startsPeriod(Known known, Schedule schedule) {
         int bar = known.bar();
         return bar > 0 && schedule.period(known.date(bar)) != schedule.period(known.date(bar - 1));
-    }
-
-    private static Map<String, Schedule> words() {
-        Map<String, Schedule> words = new LinkedHashMap<>();
-        for (Schedule schedule : values()) {
-            words.put(schedule.word, schedule);
-        }
-        return words;
     }
 }

@@ -1,11 +1,12 @@
 package sojourn.archive;
 
+import com.fasterxml.jackson.databind.JsonNode;
+import com.fasterxml.jackson.databind.ObjectMapper;
 import java.io.IOException;
-import java.io.UncheckedIOException;
 import java.nio.charset.StandardCharsets;
+import java.nio.file.DirectoryNotEmptyException;
 import java.nio.file.FileAlreadyExistsException;
 import java.nio.file.Files;
-import java.nio.file.DirectoryNotEmptyException;
 import java.nio.file.Path;
 import java.nio.file.StandardCopyOption;
 import java.util.Comparator;
@@ -112,15 +113,16 @@ public final class ResultFolder implements AutoCloseable {
         }
     }
 
+    /** A folder that no other run writes to: the first free number behind this process's own. */
     private static Path freshFolder(Path results) throws IOException {
         String prefix = ".writing-" + ProcessHandle.current().pid() + "-";
-        for (int attempt = 1; ; attempt++) {
-            try {
-                return Files.createDirectory(results.resolve(prefix + attempt));
-            } catch (FileAlreadyExistsException e) {
-                // another run of this process, or a leftover of an old one, has that name: take the next
-                continue;
+        int attempt = 1;
+        while (true) {
+            Path folder = results.resolve(prefix + attempt);
+            if (!Files.exists(folder)) {
+                return Files.createDirectory(folder);
             }
+            attempt++;
         }
     }
 
@@ -144,9 +146,11 @@ public final class ResultFolder implements AutoCloseable {
             return false;
         }
         try {
-            return Files.readString(record, StandardCharsets.UTF_8).contains("\"digest\" : \"" + digest + "\"");
+            JsonNode tree = new ObjectMapper().readTree(Files.readString(record, StandardCharsets.UTF_8));
+            return tree.path("digest").asText().equals(digest);
         } catch (IOException e) {
-            throw new UncheckedIOException(e);
+            // a record that cannot be read is some other result: it is left alone, and this one gets another name
+            return false;
         }
     }
 

@@ -86,8 +86,9 @@ public final class Shell {
             name = "sojourn",
             mixinStandardHelpOptions = true,
             versionProvider = Version.class,
-            description = "Walks strategies keyed to regime probabilities through past prices as if nothing beyond each close"
-                    + " existed, trades them with costs, and compares them with doing nothing.",
+            description =
+                    "Walks strategies keyed to regime probabilities through past prices as if nothing beyond each close"
+                            + " existed, trades them with costs, and compares them with doing nothing.",
             footer = {
                 "",
                 "Exit codes: 0 done, 1 a fault of the program, 2 your input, 3 a check found something, 130 interrupted.",

@@ -130,53 +130,73 @@ final class Composer {
     private MapNode map(Place here, int depth) {
         Map<String, MapNode.Entry> entries = new LinkedHashMap<>();
         while (!events.checkEvent(Event.ID.MappingEnd)) {
-            Optional<Key> key = key(here, entries);
-            Node value = node(key.map(Key::place).orElse(here.ofKey("?", 1, 1)), depth + 1);
-            key.ifPresent(k -> entries.putIfAbsent(k.text(), new MapNode.Entry(k.place(), value)));
+            Key key = key(here);
+            Node value = node(key.place(), depth + 1);
+            if (usable(key, entries)) {
+                entries.put(key.text(), new MapNode.Entry(key.place(), value));
+            }
         }
         events.getEvent();
         return new MapNode(here, entries);
     }
 
-    /** A key that can be used. */
-    private record Key(String text, Place place) {}
+    /**
+     * A key as written.
+     *
+     * @param tag its type tag, or ""
+     */
+    private record Key(String text, Style style, String tag, Place place) {}
 
-    /** The next key, if it is a key that can be used. */
-    private Optional<Key> key(Place map, Map<String, MapNode.Entry> entries) {
+    private enum Style {
+        PLAIN,
+        QUOTED,
+        NOT_A_SCALAR
+    }
+
+    private Key key(Place map) {
         if (!(events.peekEvent() instanceof ScalarEvent event)) {
             Node skipped = node(map.ofKey("?", 1, 1), Limits.DEPTH);
-            return refuseKey(skipped.place(), "a key is not a single word", "write every key as a plain word");
+            return new Key("?", Style.NOT_A_SCALAR, "", skipped.place());
         }
         events.getEvent();
-        String key = event.getValue();
-        Place place = at(map.ofKey(key, 1, 1), event);
+        Place place = at(map.ofKey(event.getValue(), 1, 1), event);
         count(1, place);
-        if (event.getTag() != null) {
-            refuseTag(event.getTag(), place);
-            return Optional.empty();
+        if (event.getAnchor() != null) {
+            anchors.put(event.getAnchor(), new ScalarNode(place, ScalarNode.Kind.TEXT, event.getValue()));
         }
-        if (event.isPlain()) {
-            if (key.equals("<<")) {
-                return refuseKey(place, "the merge key << is not used here", "write the keys out where they belong");
-            }
-            if (PlainScalar.refusal(key).isPresent() || PlainScalar.kind(key) != ScalarNode.Kind.TEXT) {
-                String what = "key '" + Wording.shortened(key) + "' is not text";
-                return refuseKey(place, what, "write it in quotes if it is meant as a name");
-            }
+        String tag = Optional.ofNullable(event.getTag()).orElse("");
+        return new Key(event.getValue(), event.isPlain() ? Style.PLAIN : Style.QUOTED, tag, place);
+    }
+
+    /** Whether a key can be used; told if not, and also when it is a second one. */
+    private boolean usable(Key key, Map<String, MapNode.Entry> entries) {
+        String text = key.text();
+        Place place = key.place();
+        if (key.style() == Style.NOT_A_SCALAR) {
+            return refuseKey(place, "a key is not a single word", "write every key as a plain word");
         }
-        if (key.isEmpty()) {
+        if (!key.tag().isEmpty()) {
+            refuseTag(key.tag(), place);
+            return false;
+        }
+        if (key.style() == Style.PLAIN && text.equals("<<")) {
+            return refuseKey(place, "the merge key << is not used here", "write the keys out where they belong");
+        }
+        if (text.isEmpty()) {
             return refuseKey(place, "a key is empty", "write a name before the colon");
         }
-        if (event.getAnchor() != null) {
-            anchors.put(event.getAnchor(), new ScalarNode(place, ScalarNode.Kind.TEXT, key));
+        boolean isText = PlainScalar.refusal(text).isEmpty() && PlainScalar.kind(text) == ScalarNode.Kind.TEXT;
+        if (key.style() == Style.PLAIN && !isText) {
+            String what = "key '" + Wording.shortened(text) + "' is not text";
+            return refuseKey(place, what, "write it in quotes if it is meant as a name");
         }
-        MapNode.Entry first = entries.get(key);
+        MapNode.Entry first = entries.get(text);
         if (first != null) {
-            String what = "key '" + Wording.shortened(key) + "' is written twice, first in line "
-                    + first.keyPlace().line();
-            problems.add(place, what, "keep one of them");
+            int line = first.keyPlace().line();
+            String what = "key '" + Wording.shortened(text) + "' is written twice, first in line " + line;
+            return refuseKey(place, what, "keep one of them");
         }
-        return Optional.of(new Key(key, place));
+        return true;
     }
 
     private Node alias(String anchor, Place here, int depth) {
@@ -205,9 +225,9 @@ final class Composer {
         Limits.checkNodes(nodes, here);
     }
 
-    private Optional<Key> refuseKey(Place place, String what, String remedy) {
+    private boolean refuseKey(Place place, String what, String remedy) {
         problems.add(place, what, remedy);
-        return Optional.empty();
+        return false;
     }
 
     private Node refuseTag(String tag, Place here) {
@@ -215,7 +235,7 @@ final class Composer {
         return broken(
                 here,
                 "type tag '" + Wording.shortened(shown) + "' is not used here",
-                "leave it out; put the value in quotes if it is text");
+                "leave it out, and put the value in quotes if it is text");
     }
 
     private Node broken(Place here, String what, String remedy) {

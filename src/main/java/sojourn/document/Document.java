@@ -11,6 +11,10 @@ import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.NoSuchFileException;
 import java.nio.file.Path;
+import java.util.Arrays;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 
 /**
@@ -74,7 +78,7 @@ public final class Document {
     public Optional<Node> at(String pointer) {
         Optional<Node> here = Optional.of(root);
         for (String step : steps(pointer)) {
-            here = here.flatMap(node -> child(node, step));
+            here = here.flatMap(node -> Tree.child(node, step));
         }
         return here;
     }
@@ -83,7 +87,7 @@ public final class Document {
     public Node nearest(String pointer) {
         Node here = root;
         for (String step : steps(pointer)) {
-            Optional<Node> next = child(here, step);
+            Optional<Node> next = Tree.child(here, step);
             if (next.isEmpty()) {
                 return here;
             }
@@ -92,25 +96,37 @@ public final class Document {
         return here;
     }
 
-    private static String[] steps(String pointer) {
+    /**
+     * The same document with {@code value} at a JSON pointer, in place of what is written there or added as a key; maps that
+     * are not written yet are added around it. The value keeps its own lines and columns, so that a fault in it is placed
+     * where it was written. Empty if a step of the pointer leads into a single value or beyond a list's end, and for the
+     * root itself.
+     */
+    public Optional<Document> with(String pointer, Node value) {
+        List<String> steps = steps(pointer);
+        if (steps.isEmpty()) {
+            return Optional.empty();
+        }
+        return Tree.with(root, steps, value).map(tree -> new Document((MapNode) tree));
+    }
+
+    /** The same document without a key of its root. */
+    public Document without(String key) {
+        Map<String, MapNode.Entry> entries = new LinkedHashMap<>(root.entries());
+        entries.remove(key);
+        return new Document(new MapNode(root.place(), entries));
+    }
+
+    private static List<String> steps(String pointer) {
         if (pointer.isEmpty()) {
-            return new String[0];
+            return List.of();
         }
         if (pointer.charAt(0) != '/') {
             throw new IllegalArgumentException("pointer is '" + pointer + "', must be empty or begin with /");
         }
-        return pointer.substring(1).split("/", -1);
-    }
-
-    private static Optional<Node> child(Node node, String step) {
-        if (node instanceof MapNode map) {
-            return map.get(step.replace("~1", "/").replace("~0", "~"));
-        }
-        if (node instanceof ListNode list && step.matches("0|[1-9][0-9]{0,8}")) {
-            int index = Integer.parseInt(step);
-            return index < list.items().size() ? Optional.of(list.items().get(index)) : Optional.empty();
-        }
-        return Optional.empty();
+        return Arrays.stream(pointer.substring(1).split("/", -1))
+                .map(step -> step.replace("~1", "/").replace("~0", "~"))
+                .toList();
     }
 
     private static String decoded(String shownName, byte[] bytes) {

@@ -49,6 +49,10 @@ record SyntaxFault(Where place, String what, String remedy) {
         if (context.contains("quoted scalar") && problem.contains("end of stream")) {
             return new SyntaxFault(start, "the quote that opens here is never closed", "close it with the same quote");
         }
+        if (problem.contains("could not find expected ':'")) {
+            return new SyntaxFault(
+                    start, "a key has no colon after it", "write 'key: value' with a space after the colon");
+        }
         if (context.contains("flow sequence")) {
             return new SyntaxFault(
                     start,
@@ -61,6 +65,13 @@ record SyntaxFault(Where place, String what, String remedy) {
                     "the map that opens here with { is not closed",
                     "put commas between its entries and close it with }");
         }
+        if (context.contains("directive") || problem.contains("YAML document (version")) {
+            return new SyntaxFault(there, "this line with % is not a directive that YAML knows", "remove it");
+        }
+        if (context.contains("double-quoted scalar")) {
+            String what = "a double-quoted text holds an unknown escape after its backslash";
+            return new SyntaxFault(there, what, "double the backslash, or use single quotes");
+        }
         return new SyntaxFault(there, sentence(problem, context), remedy(problem));
     }
 
@@ -68,17 +79,11 @@ record SyntaxFault(Where place, String what, String remedy) {
         if (problem.contains("mapping values are not allowed")) {
             return "a colon stands where no key can";
         }
-        if (problem.contains("could not find expected ':'")) {
-            return "a key has no colon after it";
-        }
         if (problem.contains("expected <block end>")) {
             return "the indentation does not match the lines above";
         }
         if (problem.contains("cannot start any token")) {
             return "a value cannot begin with this character";
-        }
-        if (context.contains("double-quoted scalar")) {
-            return "a double-quoted text holds an unknown escape after its backslash";
         }
         if (context.contains("alias") || context.contains("anchor")) {
             return "an anchor or alias has no proper name";
@@ -92,9 +97,6 @@ record SyntaxFault(Where place, String what, String remedy) {
     private static String remedy(String problem) {
         if (problem.contains("mapping values are not allowed")) {
             return "put the text in quotes, or check the indentation";
-        }
-        if (problem.contains("could not find expected ':'")) {
-            return "write 'key: value' with a space after the colon";
         }
         if (problem.contains("expected <block end>")) {
             return CHECK_INDENTATION;

@@ -34,8 +34,7 @@ public record JudgeSettings(
         private static final Field<Optional<LocalDate>> TO =
                 Field.maybe("to", Shapes.date(), "last date that is judged");
 
-        static final Shape<Window> SHAPE = Shapes.object(
-                        "window", f -> new Window(f.get(FROM), f.get(TO)), FROM, TO)
+        static final Shape<Window> SHAPE = Shapes.object("window", f -> new Window(f.get(FROM), f.get(TO)), FROM, TO)
                 .refuse(Window::fault);
 
         private Optional<Refusal> fault() {
@@ -57,7 +56,10 @@ public record JudgeSettings(
             Shapes.named(Shapes.text(), Shapes.number().atLeast(0).atMost(1)),
             "what doing nothing means: weights by asset, e.g. {stocks: 1.0}; the rest is cash");
     private static final Field<Measure> RANK_BY = Field.defaulted(
-            "rank-by", Shapes.word(rankable()), "sharpe", "the measure variants are ranked by, declared before the run");
+            "rank-by",
+            Shapes.word(rankable()),
+            "sharpe",
+            "the measure variants are ranked by, declared before the run");
     private static final Field<Optional<Window>> WINDOW = Field.maybe(
             "window", Window.SHAPE, "the evaluation window; if left out, from the latest first fill to the last bar");
 

@@ -7,7 +7,9 @@ import java.util.Map;
 /** What a strategy is measured against. */
 public enum Yardstick {
     /** Buys the stated weights with the strategy's first decision, pays the same costs, and holds. */
-    BUY_AND_HOLD("Buys once with the strategy's first decision, by the same fills and costs, then drifts.", Knowledge.CAUSAL),
+    BUY_AND_HOLD(
+            "Buys once with the strategy's first decision, by the same fills and costs, then drifts.",
+            Knowledge.CAUSAL),
     /** A constant mix at the strategy's average weights over the evaluation window. */
     SAME_EXPOSURE(
             "A constant mix at the strategy's average weights over the whole window, rebalanced at every bar;"
@@ -15,7 +17,8 @@ public enum Yardstick {
             Knowledge.AFTER_THE_FACT),
     /** A mix at the running mean of the strategy's weights. */
     SAME_EXPOSURE_SO_FAR(
-            "A mix at the mean of the strategy's weights from its first fill to the close in question.", Knowledge.CAUSAL);
+            "A mix at the mean of the strategy's weights from its first fill to the close in question.",
+            Knowledge.CAUSAL);
 
     /** Whether a yardstick could have been traded. */
     public enum Knowledge {

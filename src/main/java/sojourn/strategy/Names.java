@@ -15,7 +15,11 @@ final class Names {
         List<Misfit> found = new ArrayList<>();
         List<Observation> observed = strategy.regimes().observe();
         for (int i = 0; i < observed.size(); i++) {
-            check("/regimes/observe/" + i + "/" + observed.get(i).word(), observed.get(i).asset(), assets, found);
+            check(
+                    "/regimes/observe/" + i + "/" + observed.get(i).word(),
+                    observed.get(i).asset(),
+                    assets,
+                    found);
         }
         strategy.regimes().orderBy().ifPresent(asset -> check("/regimes/order-by", asset, assets, found));
         for (String asset : strategy.judge().buyAndHold().keySet()) {

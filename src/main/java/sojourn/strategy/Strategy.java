@@ -10,6 +10,7 @@ import java.util.Optional;
 import java.util.Set;
 import sojourn.allocate.Limits;
 import sojourn.allocate.Rule;
+import sojourn.allocate.Rules;
 import sojourn.document.Field;
 import sojourn.document.Shape;
 import sojourn.document.Shapes;
@@ -21,7 +22,6 @@ import sojourn.trade.TradeSettings;
 import sojourn.walk.Observation;
 import sojourn.walk.RefitSettings;
 import sojourn.walk.RegimeSettings;
-import sojourn.allocate.Rules;
 
 /**
  * One strategy, as its file says.
@@ -52,12 +52,12 @@ public record Strategy(
         JudgeSettings judge) {
     private static final Field<String> NAME = Field.required(
             "strategy",
-            Shapes.textLike("[^\\p{Cntrl}]*[A-Za-z0-9][^\\p{Cntrl}]*", "a name with a letter or digit in it, on one line"),
+            Shapes.textLike(
+                    "[^\\p{Cntrl}]*[A-Za-z0-9][^\\p{Cntrl}]*", "a name with a letter or digit in it, on one line"),
             "the strategy's name");
     private static final Field<Optional<String>> HYPOTHESIS =
             Field.maybe("hypothesis", Shapes.text(), "why it should work, written before it is run");
-    private static final Field<Calendar> CALENDAR =
-            Field.defaulted("calendar", Calendar.SHAPE, "{}", "what a bar is");
+    private static final Field<Calendar> CALENDAR = Field.defaulted("calendar", Calendar.SHAPE, "{}", "what a bar is");
     private static final Field<Map<String, PriceSource>> PRICES =
             Field.required("prices", PriceSource.SECTION, "price files by asset");
     private static final Field<CashSource> CASH =

@@ -43,7 +43,10 @@ public record StrategyFile(String shownName, Path folder, Strategy strategy, Jso
             }
         }
         if (contentByRole.containsKey("cash")) {
-            settings.put("cash", contentByRole.get("cash") + " " + settings.get("cash").path("day-count").asText());
+            settings.put(
+                    "cash",
+                    contentByRole.get("cash") + " "
+                            + settings.get("cash").path("day-count").asText());
         }
         return JsonText.bytes(settings);
     }

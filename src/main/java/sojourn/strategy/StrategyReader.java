@@ -3,6 +3,7 @@ package sojourn.strategy;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Objects;
 import java.util.Optional;
 import sojourn.allocate.Misfit;
 import sojourn.allocate.Pacing;
@@ -55,9 +56,9 @@ public final class StrategyReader {
         if (!problems.isEmpty()) {
             return Optional.empty();
         }
-        Path folder = file.toAbsolutePath().normalize().getParent();
-        return Optional.of(new StrategyFile(
-                shownName, folder, strategy.get(), Strategy.SHAPE.resolved(document.root())));
+        Path folder = Objects.requireNonNull(file.toAbsolutePath().normalize().getParent(), "a file lies in a folder");
+        return Optional.of(
+                new StrategyFile(shownName, folder, strategy.get(), Strategy.SHAPE.resolved(document.root())));
     }
 
     /** Faults between sections; pointers from the root. */

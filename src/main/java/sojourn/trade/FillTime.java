@@ -1,7 +1,6 @@
 package sojourn.trade;
 
-import java.util.LinkedHashMap;
-import java.util.Map;
+import java.util.List;
 import sojourn.document.Shape;
 import sojourn.document.Shapes;
 
@@ -16,7 +15,7 @@ public enum FillTime {
     };
 
     /** Reads the word of the strategy file. */
-    public static final Shape<FillTime> SHAPE = Shapes.word(words());
+    public static final Shape<FillTime> SHAPE = Shapes.word(List.of(values()), FillTime::word);
 
     private final String word;
 
@@ -31,12 +30,4 @@ public enum FillTime {
 
     /** The rule, {@code bars} further bars later. */
     public abstract FillRule delayed(int bars);
-
-    private static Map<String, FillTime> words() {
-        Map<String, FillTime> words = new LinkedHashMap<>();
-        for (FillTime time : values()) {
-            words.put(time.word, time);
-        }
-        return words;
-    }
 }

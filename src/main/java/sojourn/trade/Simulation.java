@@ -29,7 +29,7 @@ public final class Simulation {
     private final List<String> regimes;
     private final Account account;
     private final Deque<Order> pending = new ArrayDeque<>();
-    private final List<Order> replaced = new ArrayList<>();
+    private final List<Order> dropped = new ArrayList<>();
     private Stance stance = Stance.first();
     private Optional<Weights> target = Optional.empty();
     private OptionalInt ruinedOn = OptionalInt.empty();
@@ -132,11 +132,12 @@ public final class Simulation {
         while (ruinedOn.isEmpty() && due(bar)) {
             Order order = pending.removeFirst();
             if (due(bar)) {
-                replaced.add(order);
+                dropped.add(order);
                 continue;
             }
             Account.Outcome outcome = account.fill(order, bar, terms.fill());
             if (outcome == Account.Outcome.RUIN) {
+                dropped.add(order);
                 ruin(bar);
             } else if (outcome == Account.Outcome.BLOCKED) {
                 pending.addFirst(order);
@@ -150,7 +151,7 @@ public final class Simulation {
     }
 
     private List<Order> unfilled() {
-        List<Order> unfilled = new ArrayList<>(replaced);
+        List<Order> unfilled = new ArrayList<>(dropped);
         unfilled.addAll(pending);
         return unfilled;
     }

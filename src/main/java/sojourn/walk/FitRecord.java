@@ -14,8 +14,7 @@ import sojourn.regime.Fit;
  * @param fit the outcome, regimes in role order
  * @param events what was noticed, with the regimes' names
  */
-public record FitRecord(
-        int number, int bar, LocalDate fittedOn, LocalDate windowStart, Fit fit, List<String> events) {
+public record FitRecord(int number, int bar, LocalDate fittedOn, LocalDate windowStart, Fit fit, List<String> events) {
     /** Copies its list. */
     public FitRecord {
         events = List.copyOf(events);

@@ -16,8 +16,7 @@ import sojourn.document.Shapes;
  * @param mean of the observation in each regime, per bar
  * @param sd standard deviation of the observation in each regime, per bar
  */
-public record FixedParameters(
-        List<Double> initial, List<List<Double>> transition, List<Double> mean, List<Double> sd) {
+public record FixedParameters(List<Double> initial, List<List<Double>> transition, List<Double> mean, List<Double> sd) {
     private static final int MOST_STATES = 6;
     private static final double SUM_SLACK = 1e-9;
 

@@ -81,8 +81,7 @@ final class ObservationLog {
 
     /** The rows from {@code start} to now. */
     Observations window(int start) {
-        return Observations.of(
-                1, Arrays.copyOfRange(values, start, rows), Arrays.copyOfRange(missing, start, rows));
+        return Observations.of(1, Arrays.copyOfRange(values, start, rows), Arrays.copyOfRange(missing, start, rows));
     }
 
     /** The last row alone. */

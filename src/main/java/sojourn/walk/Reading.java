@@ -33,6 +33,11 @@ public final class Reading {
         return new Reading(fit, filtered.clone(), transition.clone(), moments);
     }
 
+    /** Shares its arrays, which nobody may modify afterwards. */
+    static Reading sharing(int fit, double[] filtered, double[] transition, WindowMoments moments) {
+        return new Reading(fit, filtered, transition, moments);
+    }
+
     /** The fit in force, counted from 1. */
     public int fit() {
         return fit;

@@ -57,9 +57,7 @@ public sealed interface RefitSchedule {
         @Override
         public boolean due(Known known, int observed, boolean hereToo, int firstAfter) {
             int bar = known.bar();
-            return bar > 0
-                    && observed >= firstAfter
-                    && period(known.date()) != period(known.date(bar - 1));
+            return bar > 0 && observed >= firstAfter && period(known.date()) != period(known.date(bar - 1));
         }
     }
 }

@@ -18,12 +18,7 @@ import sojourn.document.Shapes;
  * @param onFailure what happens when a fit is refused
  */
 public record RefitSettings(
-        int firstFitAfter,
-        RefitSchedule schedule,
-        OptionalInt rolling,
-        int starts,
-        long seed,
-        OnFailure onFailure) {
+        int firstFitAfter, RefitSchedule schedule, OptionalInt rolling, int starts, long seed, OnFailure onFailure) {
 
     /** What a refused fit leads to, once there is an accepted one. */
     public enum OnFailure {
@@ -41,8 +36,8 @@ public record RefitSettings(
                     Shapes.integer().atLeast(1).atMost(1_000_000).as(RefitSchedule.EveryObservations::new),
                     Shapes.word(periods())),
             "observations from one fit to the next, or the first bar of each week, month or quarter");
-    private static final Field<Integer> ROLLING = Field.required(
-            "rolling", Shapes.integer().atLeast(20).atMost(1_000_000), "observations of the window");
+    private static final Field<Integer> ROLLING =
+            Field.required("rolling", Shapes.integer().atLeast(20).atMost(1_000_000), "observations of the window");
     private static final Field<OptionalInt> WINDOW = Field.defaulted(
             "window",
             Shapes.<OptionalInt>either(
@@ -67,12 +62,7 @@ public record RefitSettings(
     public static final Shape<RefitSettings> SHAPE = Shapes.object(
             "refit",
             f -> new RefitSettings(
-                    f.get(FIRST_FIT_AFTER),
-                    f.get(EVERY),
-                    f.get(WINDOW),
-                    f.get(STARTS),
-                    f.get(SEED),
-                    f.get(ON_FAILURE)),
+                    f.get(FIRST_FIT_AFTER), f.get(EVERY), f.get(WINDOW), f.get(STARTS), f.get(SEED), f.get(ON_FAILURE)),
             FIRST_FIT_AFTER,
             EVERY,
             WINDOW,

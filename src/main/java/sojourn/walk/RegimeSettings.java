@@ -34,7 +34,9 @@ public record RegimeSettings(
     private static final Field<ModelKind> MODEL =
             Field.defaulted("model", Shapes.word(models()), "hidden-markov", "the kind of regime model");
     private static final Field<List<Observation>> OBSERVE = Field.required(
-            "observe", Shapes.list(Observation.shape(), 1, 1), "what the model sees at each close, e.g. log-return of an asset");
+            "observe",
+            Shapes.list(Observation.shape(), 1, 1),
+            "what the model sees at each close, e.g. log-return of an asset");
     private static final Field<List<String>> STATES = Field.required(
             "states",
             Shapes.list(
@@ -104,7 +106,9 @@ public record RegimeSettings(
         }
         if (model != ModelKind.HIDDEN_MARKOV) {
             return Optional.of(new Refusal(
-                    "parameters", "declared parameters are those of a hidden Markov model", "set model: hidden-markov"));
+                    "parameters",
+                    "declared parameters are those of a hidden Markov model",
+                    "set model: hidden-markov"));
         }
         if (emission == EmissionFamily.NORMAL_ZERO_MEAN && given.mean().stream().anyMatch(mean -> mean != 0)) {
             return Optional.of(new Refusal(

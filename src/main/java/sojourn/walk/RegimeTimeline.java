@@ -25,6 +25,7 @@ public final class RegimeTimeline implements Signal {
     private final double[] logScores;
     private final double[] expectedCash;
     private final boolean zeroMean;
+    private final double[][] transitions;
 
     private RegimeTimeline(Builder builder) {
         this.regimes = builder.regimes;
@@ -37,6 +38,9 @@ public final class RegimeTimeline implements Signal {
         this.logScores = Arrays.copyOf(builder.logScores, builder.bars);
         this.expectedCash = Arrays.copyOf(builder.expectedCash, builder.bars);
         this.zeroMean = builder.zeroMean;
+        this.transitions = fits.stream()
+                .map(record -> record.fit().outcome().accepted() ? ModelArrays.transition(record) : new double[0])
+                .toArray(double[][]::new);
     }
 
     @Override
@@ -103,8 +107,8 @@ public final class RegimeTimeline implements Signal {
         FitRecord record = fits.get(fitInForce[row] - 1);
         int states = regimes.size();
         double[] now = Arrays.copyOfRange(filtered, row * states, (row + 1) * states);
-        return Optional.of(Reading.of(
-                record.number(), now, ModelArrays.transition(record), moments(record, expectedCash[row])));
+        return Optional.of(Reading.sharing(
+                record.number(), now, transitions[record.number() - 1], moments(record, expectedCash[row])));
     }
 
     private WindowMoments moments(FitRecord record, double cash) {

@@ -77,8 +77,10 @@ public record HiddenState(
         }
         return Math.abs(sum - 1) <= SUM_TOLERANCE
                 ? Optional.empty()
-                : Optional.of(
-                        new Refusal("then", "the probabilities of what follows sum to " + sum, "make them sum to 1"));
+                : Optional.of(new Refusal(
+                        "then",
+                        "the probabilities of what follows sum to " + Decimals.round(sum, 9),
+                        "make them sum to 1"));
     }
 
     /** The move of {@code asset}. */

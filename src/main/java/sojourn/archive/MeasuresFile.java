@@ -1,0 +1,123 @@
+package sojourn.archive;
+
+import com.fasterxml.jackson.databind.node.ArrayNode;
+import com.fasterxml.jackson.databind.node.JsonNodeFactory;
+import com.fasterxml.jackson.databind.node.ObjectNode;
+import java.util.List;
+import java.util.Map;
+import sojourn.document.JsonText;
+import sojourn.measure.CalendarTable;
+import sojourn.measure.Drawdown;
+import sojourn.measure.Measure;
+import sojourn.measure.Measured;
+import sojourn.measure.RegimeTable;
+
+/** {@code measures.json}: every measure of a variant and of its yardsticks, with interval, unit and definition. */
+public final class MeasuresFile {
+    private static final JsonNodeFactory JSON = JsonNodeFactory.instance;
+
+    private MeasuresFile() {}
+
+    /**
+     * The text of the file.
+     *
+     * @param strategy what the variant came to
+     * @param yardsticks what each yardstick came to, by column name
+     * @param byRegime the variant's returns by regime
+     * @param regimes names of the regimes
+     */
+    public static String of(
+            ComparisonRow.Judged strategy,
+            Map<String, ComparisonRow.Judged> yardsticks,
+            RegimeTable byRegime,
+            List<String> regimes) {
+        ObjectNode root = JSON.objectNode();
+        root.put("caution", Caution.TEXT);
+        ObjectNode window = root.putObject("window");
+        window.put("from", strategy.from().toString());
+        window.put("to", strategy.to().toString());
+        window.put("bars", strategy.bars());
+        root.put("outcome", strategy.outcome());
+        root.set("strategy", measures(strategy));
+        root.set("worst_drawdown", drawdown(strategy.scorecard().drawdown()));
+        root.set("by_regime", byRegime(byRegime, regimes));
+        root.set("by_year", periods(strategy.scorecard().calendar().years()));
+        root.set("by_month", periods(strategy.scorecard().calendar().months()));
+        ObjectNode against = root.putObject("yardsticks");
+        yardsticks.forEach((name, judged) -> against.set(name, measures(judged)));
+        root.set("definitions", definitions());
+        return JsonText.indented(root);
+    }
+
+    private static ObjectNode measures(ComparisonRow.Judged judged) {
+        ObjectNode all = JSON.objectNode();
+        for (Measure measure : Measure.values()) {
+            all.set(measure.key(), measured(judged.get(measure)));
+        }
+        return all;
+    }
+
+    /** A number with its interval, or the reason why there is none. */
+    static ObjectNode measured(Measured measured) {
+        ObjectNode node = JSON.objectNode();
+        if (measured instanceof Measured.Undefined none) {
+            node.put("undefined", none.reason().name());
+            node.put("because", none.because());
+        } else if (measured instanceof Measured.Value value) {
+            node.put("value", value.amount());
+            value.interval().ifPresent(interval -> {
+                node.put("low", interval.low());
+                node.put("high", interval.high());
+                node.put("interval", interval.definition());
+            });
+        }
+        return node;
+    }
+
+    private static ObjectNode drawdown(Drawdown drawdown) {
+        ObjectNode node = JSON.objectNode();
+        drawdown.episode().ifPresent(episode -> {
+            node.put("peak", episode.peakDate().toString());
+            node.put("trough", episode.troughDate().toString());
+            node.put("recovered", episode.recoveryDate().map(Object::toString).orElse("not within the window"));
+        });
+        return node;
+    }
+
+    private static ArrayNode byRegime(RegimeTable table, List<String> regimes) {
+        ArrayNode rows = JSON.arrayNode();
+        for (RegimeTable.Row row : table.rows()) {
+            ObjectNode node = rows.addObject();
+            node.put("regime_known_the_close_before", regimes.get(row.regime()));
+            node.put("bars", row.bars());
+            node.set("share", measured(row.share()));
+            node.set("mean_per_bar", measured(row.mean()));
+            node.set("deviation_per_bar", measured(row.deviation()));
+            node.put("compounded", row.compounded());
+        }
+        return rows;
+    }
+
+    private static ArrayNode periods(List<CalendarTable.Period> periods) {
+        ArrayNode rows = JSON.arrayNode();
+        for (CalendarTable.Period period : periods) {
+            ObjectNode node = rows.addObject();
+            node.put("period", period.name());
+            node.put("bars", period.bars());
+            node.put("compounded", period.compounded());
+            node.put("whole", period.coverage() == CalendarTable.Coverage.WHOLE);
+        }
+        return rows;
+    }
+
+    private static ObjectNode definitions() {
+        ObjectNode all = JSON.objectNode();
+        for (Measure measure : Measure.values()) {
+            ObjectNode node = all.putObject(measure.key());
+            node.put("label", measure.label());
+            node.put("unit", measure.unit().word());
+            node.put("definition", measure.definition());
+        }
+        return all;
+    }
+}

@@ -1,0 +1,48 @@
+package sojourn.cli;
+
+import java.nio.file.Path;
+import picocli.CommandLine.Option;
+
+/** Options that commands share. */
+final class CommonOptions {
+    @Option(
+            names = "--results",
+            paramLabel = "DIR",
+            defaultValue = "results",
+            description = "The folder that results are written below (default: ${DEFAULT-VALUE}).")
+    @SuppressWarnings("NullAway.Init") // set by the command line library
+    private Path results;
+
+    @Option(
+            names = "--threads",
+            paramLabel = "N",
+            defaultValue = "0",
+            description = "How many threads to use; 0, the default, is one a processor. Changes no figure.")
+    private int threads;
+
+    @Option(names = "--quiet", description = "No progress and no notes on standard error, only faults.")
+    private boolean quiet;
+
+    @Option(names = "--json", description = "Machine-readable output on standard output.")
+    private boolean json;
+
+    Path results() {
+        return results;
+    }
+
+    int threads() {
+        return threads > 0 ? threads : Runtime.getRuntime().availableProcessors();
+    }
+
+    boolean quiet() {
+        return quiet;
+    }
+
+    boolean json() {
+        return json;
+    }
+
+    boolean sensible() {
+        return threads >= 0 && threads <= 1024;
+    }
+}

@@ -1,0 +1,108 @@
+package sojourn.compare;
+
+import java.util.ArrayList;
+import java.util.Comparator;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import sojourn.archive.ComparisonFile;
+import sojourn.archive.ComparisonRow;
+import sojourn.archive.Digest;
+import sojourn.measure.Measure;
+import sojourn.measure.Yardstick;
+import sojourn.walk.RegimeTimeline;
+
+/**
+ * A finished comparison.
+ *
+ * @param prepared every strategy, in the order given
+ * @param timelines by address
+ * @param ranked the variants that ran, best first by {@code rankBy}
+ * @param failed the variants that did not, by name
+ * @param rankBy the declared measure
+ * @param rows the table: ranked variants, failed ones, yardsticks
+ * @param digest of the variants' digests in order and of the table
+ */
+public record Compared(
+        List<Prepared> prepared,
+        Map<String, RegimeTimeline> timelines,
+        List<Judgement> ranked,
+        List<Run.Failed> failed,
+        Measure rankBy,
+        List<ComparisonRow> rows,
+        String digest) {
+
+    static Compared of(
+            List<Prepared> prepared,
+            Map<String, RegimeTimeline> timelines,
+            List<Judgement> ranked,
+            List<Run.Failed> failed,
+            Measure rankBy) {
+        List<Run.Failed> byName = new ArrayList<>(failed);
+        byName.sort(Comparator.comparing(one -> one.file().slug()));
+        List<ComparisonRow> rows = rows(ranked, byName);
+        Digest digest = Digest.begin();
+        for (Judgement one : ranked) {
+            digest.text(one.run().file().slug()).text(one.run().digest());
+        }
+        digest.text(ComparisonFile.of(rows).csv());
+        return new Compared(List.copyOf(prepared), timelines, List.copyOf(ranked), byName, rankBy, rows, digest.hex());
+    }
+
+    private static List<ComparisonRow> rows(List<Judgement> ranked, List<Run.Failed> failed) {
+        List<ComparisonRow> rows = new ArrayList<>();
+        for (Judgement one : ranked) {
+            rows.add(new ComparisonRow(
+                    one.run().file().slug(),
+                    ComparisonRow.Kind.STRATEGY,
+                    one.run().timelineKey(),
+                    "",
+                    Optional.of(one.strategy())));
+        }
+        for (Run.Failed one : failed) {
+            rows.add(new ComparisonRow(
+                    one.file().slug(), ComparisonRow.Kind.STRATEGY, one.timelineKey(), one.reason(), Optional.empty()));
+        }
+        rows.addAll(buyAndHold(ranked));
+        for (Judgement one : ranked) {
+            one.yardsticks().forEach((name, judged) -> {
+                if (!name.equals(Yardstick.BUY_AND_HOLD.column())) {
+                    rows.add(yardstick(name + " of " + one.run().file().slug(), name, one, judged));
+                }
+            });
+        }
+        return List.copyOf(rows);
+    }
+
+    /** Buy-and-hold once for all variants whose own comes to the same. */
+    private static List<ComparisonRow> buyAndHold(List<Judgement> ranked) {
+        String name = Yardstick.BUY_AND_HOLD.column();
+        Map<String, ComparisonRow> distinct = new LinkedHashMap<>();
+        for (Judgement one : ranked) {
+            ComparisonRow.Judged judged = one.buyAndHold();
+            String content = judged.from() + " " + judged.to() + " " + judged.bars() + " "
+                    + judged.scorecard().measures();
+            distinct.putIfAbsent(
+                    content, yardstick(name + " of " + one.run().file().slug(), name, one, judged));
+        }
+        if (distinct.size() == 1) {
+            ComparisonRow only = distinct.values().iterator().next();
+            return List.of(new ComparisonRow(name, only.kind(), "", "", only.judged()));
+        }
+        return List.copyOf(distinct.values());
+    }
+
+    private static ComparisonRow yardstick(String shown, String name, Judgement owner, ComparisonRow.Judged judged) {
+        boolean causal = false;
+        for (Yardstick yardstick : Yardstick.values()) {
+            causal |= yardstick.column().equals(name) && yardstick.knowledge() == Yardstick.Knowledge.CAUSAL;
+        }
+        return new ComparisonRow(
+                shown,
+                causal ? ComparisonRow.Kind.YARDSTICK : ComparisonRow.Kind.AFTER_THE_FACT,
+                owner.run().timelineKey(),
+                "",
+                Optional.of(judged));
+    }
+}

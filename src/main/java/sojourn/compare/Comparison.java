@@ -1,0 +1,147 @@
+package sojourn.compare;
+
+import java.util.ArrayList;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Objects;
+import java.util.function.IntConsumer;
+import sojourn.document.InputException;
+import sojourn.document.Problem;
+import sojourn.measure.Measure;
+import sojourn.regime.StartRunner;
+import sojourn.strategy.StrategyFile;
+import sojourn.walk.RegimeTimeline;
+import sojourn.walk.Walk;
+
+/** The main job: prepare every strategy, walk each timeline once, trade every variant, judge them over common windows. */
+public final class Comparison {
+    private static final int PROGRESS_EVERY_BARS = 64;
+
+    private final Workers workers;
+    private final Progress progress;
+
+    /** With workers that run its jobs and somebody who is told how far it is. */
+    public Comparison(Workers workers, Progress progress) {
+        this.workers = workers;
+        this.progress = progress;
+    }
+
+    /**
+     * Compares strategies. A strategy that cannot run is a row with its reason.
+     *
+     * @param files at least one; names must differ, the ranking measure must be the same
+     */
+    public Compared run(List<StrategyFile> files) {
+        refuseAmbiguity(files);
+        List<Prepared> prepared = workers.run(files, Prepared::of);
+        Map<String, RegimeTimeline> timelines = walkAll(prepared);
+        List<Run> runs = trade(prepared, timelines);
+        List<Run.Traded> traded = new ArrayList<>();
+        List<Run.Failed> failed = new ArrayList<>();
+        for (Run run : runs) {
+            if (run instanceof Run.Traded one) {
+                traded.add(one);
+            } else if (run instanceof Run.Failed one) {
+                failed.add(one);
+            }
+        }
+        Map<Run.Traded, Window> windows = Window.of(traded);
+        for (Run.Traded one : traded) {
+            if (!windows.containsKey(one)) {
+                failed.add(new Run.Failed(
+                        one.file(),
+                        one.timelineKey(),
+                        "the evaluation window holds no bar that this variant traded; change judge.window, or compare"
+                                + " strategies over the same dates"));
+            }
+        }
+        List<Judgement> judged =
+                workers.run(List.copyOf(windows.entrySet()), entry -> Judgement.of(entry.getKey(), entry.getValue()));
+        Measure rankBy = files.get(0).strategy().judge().rankBy();
+        return Compared.of(prepared, timelines, Ranking.by(rankBy).sorted(judged), failed, rankBy);
+    }
+
+    private Map<String, RegimeTimeline> walkAll(List<Prepared> prepared) {
+        Map<String, Prepared.Ready> byKey = new LinkedHashMap<>();
+        long bars = 0;
+        for (Prepared one : prepared) {
+            if (one instanceof Prepared.Ready ready && byKey.putIfAbsent(ready.timelineKey(), ready) == null) {
+                bars += ready.market().table().size();
+            }
+        }
+        List<Prepared.Ready> jobs = List.copyOf(byKey.values());
+        progress.begin("walking " + jobs.size() + (jobs.size() == 1 ? " timeline" : " timelines"), bars);
+        List<RegimeTimeline> walked = walkEach(jobs);
+        progress.end();
+        Map<String, RegimeTimeline> timelines = new LinkedHashMap<>();
+        for (int i = 0; i < jobs.size(); i++) {
+            timelines.put(jobs.get(i).timelineKey(), walked.get(i));
+        }
+        return timelines;
+    }
+
+    /** Several timelines side by side; a single one shares out the starts of each fit instead. */
+    private List<RegimeTimeline> walkEach(List<Prepared.Ready> jobs) {
+        if (jobs.size() != 1) {
+            return workers.run(jobs, ready -> walk(ready, StartRunner.sequential()));
+        }
+        try (ThreadedStarts starts = new ThreadedStarts(workers.threads())) {
+            return List.of(walk(jobs.get(0), starts));
+        }
+    }
+
+    private RegimeTimeline walk(Prepared.Ready ready, StartRunner starts) {
+        IntConsumer tell = bar -> {
+            if ((bar + 1) % PROGRESS_EVERY_BARS == 0) {
+                progress.advance(PROGRESS_EVERY_BARS);
+            }
+        };
+        return Walk.forward(
+                ready.market().table(),
+                ready.file().strategy().regimes(),
+                ready.file().strategy().refit(),
+                starts,
+                tell);
+    }
+
+    private List<Run> trade(List<Prepared> prepared, Map<String, RegimeTimeline> timelines) {
+        return workers.run(prepared, one -> {
+            if (one instanceof Prepared.Ready ready) {
+                return VariantRunner.run(ready, Objects.requireNonNull(timelines.get(ready.timelineKey())));
+            }
+            return new Run.Failed(one.file(), "", ((Prepared.Unreadable) one).reason());
+        });
+    }
+
+    private static void refuseAmbiguity(List<StrategyFile> files) {
+        List<Problem> problems = new ArrayList<>();
+        Map<String, StrategyFile> bySlug = new LinkedHashMap<>();
+        StrategyFile first = files.get(0);
+        for (StrategyFile file : files) {
+            StrategyFile other = bySlug.putIfAbsent(file.slug(), file);
+            if (other != null) {
+                problems.add(new Problem(
+                        file.shownName(),
+                        0,
+                        0,
+                        "the strategy is called '" + file.strategy().name() + "', and so is the one in "
+                                + other.shownName(),
+                        "give each strategy a name of its own"));
+            }
+            Measure rankBy = file.strategy().judge().rankBy();
+            if (rankBy != first.strategy().judge().rankBy()) {
+                problems.add(new Problem(
+                        file.shownName(),
+                        0,
+                        0,
+                        "it ranks by " + rankBy.key() + ", while " + first.shownName() + " ranks by "
+                                + first.strategy().judge().rankBy().key(),
+                        "declare the same judge.rank-by in all files of one comparison"));
+            }
+        }
+        if (!problems.isEmpty()) {
+            throw new InputException(problems);
+        }
+    }
+}

@@ -1,0 +1,90 @@
+package sojourn.compare;
+
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.stream.Collectors;
+import sojourn.allocate.RulePolicy;
+import sojourn.document.InputException;
+import sojourn.document.Problem;
+import sojourn.market.InputFile;
+import sojourn.market.Market;
+import sojourn.market.PriceReader;
+import sojourn.strategy.Strategy;
+import sojourn.strategy.StrategyFile;
+import sojourn.walk.TimelineAddress;
+
+/** A strategy with its market read, ready to be walked; or the reason why it cannot be. */
+public sealed interface Prepared {
+    /** The strategy. */
+    StrategyFile file();
+
+    /**
+     * Ready.
+     *
+     * @param market prices on the strategy's calendar
+     * @param timelineKey address of the timeline it rests on
+     */
+    record Ready(StrategyFile file, Market market, String timelineKey) implements Prepared {
+        /** What the strategy decides by. */
+        RulePolicy policy() {
+            Strategy strategy = file.strategy();
+            return RulePolicy.of(
+                    strategy.rule(),
+                    strategy.limits(),
+                    strategy.trade().decide(),
+                    strategy.trade().stayAtLeast(),
+                    strategy.trade().noTradeBand(),
+                    strategy.regimes().states(),
+                    market.table().assets());
+        }
+
+        /** Digest of what was read, by asset and {@code cash}. */
+        Map<String, String> contents() {
+            Map<String, String> contents = new LinkedHashMap<>();
+            for (InputFile input : market.files()) {
+                contents.put(input.role(), input.contentDigest());
+            }
+            return contents;
+        }
+
+        /** What doing nothing means, by content: variants with the same are judged over one window. */
+        String priceSet() {
+            Map<String, String> contents = contents();
+            return file.strategy().judge().buyAndHold().entrySet().stream()
+                    .map(entry -> contents.get(entry.getKey()) + " " + entry.getValue())
+                    .sorted()
+                    .collect(Collectors.joining("\n"));
+        }
+    }
+
+    /**
+     * Unusable inputs.
+     *
+     * @param problems every fault of its files
+     */
+    record Unreadable(StrategyFile file, List<Problem> problems) implements Prepared {
+        /** Copies the list. */
+        public Unreadable {
+            problems = List.copyOf(problems);
+        }
+
+        /** One line. */
+        String reason() {
+            String first = problems.get(0).toString();
+            return problems.size() == 1 ? first : first + " (and " + (problems.size() - 1) + " more)";
+        }
+    }
+
+    /** Reads the market of a strategy. */
+    static Prepared of(StrategyFile file) {
+        Strategy strategy = file.strategy();
+        try {
+            Market market = PriceReader.read(
+                    file.folder(), strategy.prices(), strategy.calendar(), strategy.cash(), strategy.usedAssets());
+            return new Ready(file, market, TimelineAddress.of(file.walkSettings(), market.table()));
+        } catch (InputException e) {
+            return new Unreadable(file, e.problems());
+        }
+    }
+}

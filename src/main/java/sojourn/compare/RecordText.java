@@ -1,0 +1,148 @@
+package sojourn.compare;
+
+import com.fasterxml.jackson.databind.node.ArrayNode;
+import com.fasterxml.jackson.databind.node.JsonNodeFactory;
+import com.fasterxml.jackson.databind.node.ObjectNode;
+import java.util.EnumMap;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.OptionalInt;
+import sojourn.archive.Caution;
+import sojourn.archive.Digest;
+import sojourn.archive.ProgramVersion;
+import sojourn.archive.RunFacts;
+import sojourn.document.JsonText;
+import sojourn.market.InputFile;
+import sojourn.regime.Outcome;
+import sojourn.strategy.StrategyFile;
+import sojourn.walk.FitRecord;
+import sojourn.walk.RegimeTimeline;
+
+/** The text of {@code record.json}: what went in, what was run, what came out, and, apart from that, how this run went. */
+final class RecordText {
+    private static final JsonNodeFactory JSON = JsonNodeFactory.instance;
+
+    private RecordText() {}
+
+    static String of(String name, Compared compared, RunFacts facts) {
+        ObjectNode root = JSON.objectNode();
+        root.put("caution", Caution.TEXT);
+        root.put("comparison", name);
+        root.put("digest", compared.digest());
+        root.put("ranked_by", compared.rankBy().key());
+        root.set("counts", counts(compared));
+        root.set("variants", variants(compared));
+        root.set("inputs", inputs(compared.prepared()));
+        root.set("timelines", timelines(compared));
+        ArrayNode warnings = root.putArray("warnings");
+        Warnings.of(compared).forEach(warnings::add);
+        ObjectNode run = root.putObject("outside_the_digest");
+        run.put("version", ProgramVersion.current());
+        ArrayNode command = run.putArray("command");
+        facts.command().forEach(command::add);
+        run.put("host", facts.host());
+        run.put("threads", facts.threads());
+        run.put("started_at", facts.startedAt());
+        run.put("seconds", facts.seconds());
+        return JsonText.indented(root);
+    }
+
+    private static ObjectNode counts(Compared compared) {
+        ObjectNode counts = JSON.objectNode();
+        counts.put("variants", compared.ranked().size() + compared.failed().size());
+        counts.put("ran", compared.ranked().size());
+        counts.put("failed", compared.failed().size());
+        counts.put("timelines", compared.timelines().size());
+        int fits = 0;
+        for (RegimeTimeline timeline : compared.timelines().values()) {
+            fits += timeline.fits().size();
+        }
+        counts.put("fits", fits);
+        return counts;
+    }
+
+    private static ArrayNode variants(Compared compared) {
+        ArrayNode variants = JSON.arrayNode();
+        int rank = 1;
+        for (Judgement one : compared.ranked()) {
+            ObjectNode node = variant(variants.addObject(), one.run().file());
+            node.put("outcome", one.strategy().outcome());
+            node.put("rank", rank++);
+            node.put("timeline", one.run().timelineKey());
+            node.put("digest", one.run().digest());
+            node.put("orders_unfilled_at_the_end", one.run().track().unfilled().size());
+            OptionalInt ruined = one.run().track().ruinedOn();
+            if (ruined.isPresent()) {
+                node.put(
+                        "ruined_on",
+                        one.run()
+                                .ready()
+                                .market()
+                                .table()
+                                .fillPrices()
+                                .axis()
+                                .date(ruined.getAsInt())
+                                .toString());
+            }
+        }
+        for (Run.Failed one : compared.failed()) {
+            ObjectNode node = variant(variants.addObject(), one.file());
+            node.put("outcome", "failed");
+            node.put("reason", one.reason());
+        }
+        return variants;
+    }
+
+    private static ObjectNode variant(ObjectNode node, StrategyFile file) {
+        node.put("variant", file.slug());
+        node.put("strategy", file.strategy().name());
+        file.strategy().hypothesis().ifPresent(text -> node.put("hypothesis", text.strip()));
+        node.put("file", file.shownName());
+        node.put("seed", file.strategy().refit().seed());
+        node.put("settings_sha256", Digest.of(JsonText.bytes(file.resolved())));
+        if (file.strategy().regimes().fixed().isPresent()) {
+            node.put("parameters", "external prior: declared in the strategy file, not fitted");
+        }
+        return node;
+    }
+
+    private static ArrayNode inputs(List<Prepared> prepared) {
+        Map<String, InputFile> distinct = new LinkedHashMap<>();
+        for (Prepared one : prepared) {
+            if (one instanceof Prepared.Ready ready) {
+                ready.market()
+                        .files()
+                        .forEach(file -> distinct.putIfAbsent(
+                                file.sha256() + " " + file.role() + " " + file.contentDigest(), file));
+            }
+        }
+        ArrayNode inputs = JSON.arrayNode();
+        for (InputFile file : distinct.values()) {
+            ObjectNode node = inputs.addObject();
+            node.put("role", file.role());
+            node.put("file", file.file());
+            node.put("sha256", file.sha256());
+            node.put("content_sha256", file.contentDigest());
+            node.put("rows", file.rows());
+            node.put("first", file.first().toString());
+            node.put("last", file.last().toString());
+        }
+        return inputs;
+    }
+
+    private static ArrayNode timelines(Compared compared) {
+        ArrayNode timelines = JSON.arrayNode();
+        compared.timelines().forEach((key, timeline) -> {
+            ObjectNode node = timelines.addObject();
+            node.put("timeline", key);
+            Map<Outcome, Integer> outcomes = new EnumMap<>(Outcome.class);
+            for (FitRecord record : timeline.fits()) {
+                outcomes.merge(record.fit().outcome(), 1, Integer::sum);
+            }
+            ObjectNode fits = node.putObject("fits");
+            outcomes.forEach((outcome, count) -> fits.put(outcome.word(), count));
+        });
+        return timelines;
+    }
+}

@@ -1,0 +1,82 @@
+package sojourn.compare;
+
+import java.nio.file.Path;
+import java.util.LinkedHashSet;
+import java.util.List;
+import java.util.Objects;
+import java.util.Set;
+import sojourn.archive.ComparisonFile;
+import sojourn.archive.MeasuresFile;
+import sojourn.archive.ResultFolder;
+import sojourn.archive.RunFacts;
+import sojourn.archive.TimelineFiles;
+import sojourn.archive.TradeFiles;
+import sojourn.document.YamlText;
+import sojourn.market.TimeAxis;
+import sojourn.walk.RegimeTimeline;
+
+/** Writes a finished comparison: the table, every timeline, and the folders of the variants. */
+public final class ResultWriter {
+    private static final int ALL_UP_TO = 20;
+    private static final int BEST = 10;
+
+    private ResultWriter() {}
+
+    /**
+     * Writes below {@code results} under {@code name}. With more than 20 variants that ran, folders of the best 10 are written;
+     * the table, digests and timelines are always whole.
+     */
+    public static ResultFolder.Published write(Path results, String name, Compared compared, RunFacts facts) {
+        try (ResultFolder folder = ResultFolder.begin(results)) {
+            folder.write("comparison.csv", ComparisonFile.of(compared.rows()).csv());
+            writeTimelines(folder, compared);
+            List<Judgement> ranked = compared.ranked();
+            for (Judgement one : ranked.size() > ALL_UP_TO ? ranked.subList(0, BEST) : ranked) {
+                writeVariant(folder, results.resolve(name), one);
+            }
+            return folder.publish(name, compared.digest(), RecordText.of(name, compared, facts));
+        }
+    }
+
+    private static void writeTimelines(ResultFolder folder, Compared compared) {
+        Set<String> written = new LinkedHashSet<>();
+        for (Prepared one : compared.prepared()) {
+            if (one instanceof Prepared.Ready ready && written.add(ready.timelineKey())) {
+                RegimeTimeline timeline =
+                        Objects.requireNonNull(compared.timelines().get(ready.timelineKey()), "every key was walked");
+                String observation =
+                        one.file().strategy().regimes().observe().get(0).column();
+                String base = "timelines/" + ready.timelineKey();
+                folder.write(base + ".csv", TimelineFiles.bars(timeline).csv());
+                folder.write(
+                        base + ".fits.csv",
+                        TimelineFiles.fits(timeline, observation).csv());
+            }
+        }
+    }
+
+    private static void writeVariant(ResultFolder folder, Path target, Judgement one) {
+        Run.Traded run = one.run();
+        TimeAxis axis = run.ready().market().table().fillPrices().axis();
+        String base = run.file().slug() + "/";
+        folder.write(
+                base + "strategy.yaml",
+                YamlText.of(run.file().resolvedFor(target.resolve(run.file().slug()))));
+        folder.write(base + "path.csv", run.path().table().csv());
+        folder.write(base + "trades.csv", TradeFiles.trades(axis, run.track()).csv());
+        folder.write(base + "ledger.csv", TradeFiles.ledger(axis, run.track()).csv());
+        if (!one.afterTheFact().isEmpty()) {
+            folder.write(
+                    base + "yardsticks.csv",
+                    TradeFiles.afterTheFact(axis, run.track(), one.afterTheFact())
+                            .csv());
+        }
+        folder.write(
+                base + "measures.json",
+                MeasuresFile.of(
+                        one.strategy(),
+                        one.yardsticks(),
+                        one.byRegime(),
+                        run.timeline().regimes()));
+    }
+}

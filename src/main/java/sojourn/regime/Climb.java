@@ -1,0 +1,103 @@
+package sojourn.regime;
+
+/**
+ * Climbs to a maximum of the likelihood from one start: EM, after ten plain steps sped up by SQUAREM, scheme S3 (Varadhan and
+ * Roland 2008, Scand. J. Statistics 35, 335-353). An extrapolated point is kept only if it is at least as likely as the plain
+ * step before it; otherwise the stride is halved, in the end to the plain second step.
+ *
+ * <p>Stops when the way still to go, the last EM step times the stride, is below 1e-7 in the largest parameter of the
+ * standardised series, or when that times the gain of the last step is below 1e-9 nats; after 2000 evaluations without that.
+ * Every EM step must not lower the log-likelihood l by more than 1e-9 (1 + |l|).
+ */
+final class Climb {
+    /** The most evaluations of the likelihood. */
+    static final int MOST_EVALUATIONS = 2000;
+
+    private static final int PLAIN_STEPS = 10;
+    private static final int MOST_HALVINGS = 3;
+    private static final double PARAMETER_TOLERANCE = 1e-7;
+    private static final double GAIN_TOLERANCE = 1e-9;
+    private static final double FALL_TOLERANCE = 1e-9;
+
+    private final Expectation fast;
+    private final Expectation plain;
+    private final Maximisation maximisation;
+    private final ExpectedSums sums;
+    private int evaluations;
+    private double landed;
+
+    private Climb(Expectation fast, Expectation plain, Maximisation maximisation, int states) {
+        this.fast = fast;
+        this.plain = plain;
+        this.maximisation = maximisation;
+        this.sums = new ExpectedSums(states);
+    }
+
+    /** Where one start ended. {@code least} is the smallest expected count of a state. */
+    record Summit(Parameters parameters, double logLikelihood, double leastCount, int evaluations, boolean converged) {}
+
+    /** Climbs from {@code start}, which is not modified. */
+    static Summit from(Parameters start, Window window, EmissionFamily family) {
+        Climb climb = new Climb(
+                Expectation.of(start.kind(), start.states(), window),
+                new PlainExpectation(window, family),
+                new Maximisation(family),
+                start.states());
+        return climb.run(start);
+    }
+
+    private Summit run(Parameters start) {
+        Parameters at = start;
+        double reached = evaluate(at);
+        boolean converged = false;
+        while (!converged && evaluations < MOST_EVALUATIONS) {
+            Parameters one = maximisation.next(at, sums);
+            double first = notBelow(reached, evaluate(one));
+            Parameters two = maximisation.next(one, sums);
+            double stride = Extrapolation.stride(at, one, two);
+            converged = stride * Extrapolation.largestChange(one, two) < PARAMETER_TOLERANCE
+                    || stride * StrictMath.max(0, first - reached) < GAIN_TOLERANCE;
+            boolean leap = !converged && stride > 1 && evaluations > PLAIN_STEPS;
+            at = leap ? leap(at, one, two, stride, first) : two;
+            double before = leap ? landed : first;
+            reached = notBelow(before, evaluate(at));
+        }
+        double least = Double.POSITIVE_INFINITY;
+        for (double count : sums.count) {
+            least = StrictMath.min(least, count);
+        }
+        return new Summit(at, reached, least, evaluations, converged);
+    }
+
+    /** One EM step from the farthest extrapolated point that is at least as likely as the first plain step, or the second. */
+    private Parameters leap(Parameters at, Parameters one, Parameters two, double longest, double first) {
+        double stride = longest;
+        for (int attempt = 0; attempt < MOST_HALVINGS && stride > 1; attempt++) {
+            Parameters candidate = Extrapolation.point(at, one, two, stride);
+            landed = evaluate(candidate);
+            if (landed >= first) {
+                return maximisation.next(candidate, sums);
+            }
+            stride = (stride + 1) / 2;
+        }
+        landed = first;
+        return two;
+    }
+
+    /** Fills the sums at those parameters and returns their log-likelihood. */
+    private double evaluate(Parameters parameters) {
+        evaluations++;
+        if (!fast.fill(parameters, sums) && !plain.fill(parameters, sums)) {
+            return Double.NEGATIVE_INFINITY;
+        }
+        return sums.logLikelihood;
+    }
+
+    private static double notBelow(double before, double after) {
+        if (!(after >= before - FALL_TOLERANCE * (1 + StrictMath.abs(before)))) {
+            throw new IllegalStateException(
+                    "an EM step lowered the log-likelihood from " + before + " to " + after + "; this is a bug");
+        }
+        return after;
+    }
+}

@@ -1,0 +1,18 @@
+package sojourn.regime;
+
+/** The expectation step of EM over one window. Has working arrays of its own: one object belongs to one start. */
+interface Expectation {
+    /**
+     * Fills {@code sums} for those parameters, log-likelihood included (of the standardised observations). Returns false, with
+     * {@code sums} of no use, when double precision does not reach: then {@link PlainExpectation} does it.
+     */
+    boolean fill(Parameters parameters, ExpectedSums sums);
+
+    /** The fastest one for that kind of model. */
+    static Expectation of(ModelKind kind, int states, Window window) {
+        if (kind != ModelKind.HIDDEN_MARKOV) {
+            return new IndependentExpectation(states, window);
+        }
+        return states == 2 ? new TwoStateExpectation(window) : new ManyStateExpectation(states, window);
+    }
+}

@@ -1,0 +1,34 @@
+package sojourn.regime;
+
+import java.util.Arrays;
+
+/**
+ * What one pass over a window expects under given parameters, all that the maximisation step needs: how often each state comes
+ * first, how often each step is made, and each state's count, sum and sum of squares of the standardised observations.
+ */
+final class ExpectedSums {
+    final double[] initial;
+    final double[] transitions;
+    final double[] count;
+    final double[] sum;
+    final double[] squares;
+    double logLikelihood;
+
+    ExpectedSums(int states) {
+        initial = new double[states];
+        transitions = new double[states * states];
+        count = new double[states];
+        sum = new double[states];
+        squares = new double[states];
+    }
+
+    /** Sets everything to 0. */
+    void clear() {
+        Arrays.fill(transitions, 0);
+        Arrays.fill(count, 0);
+        Arrays.fill(sum, 0);
+        Arrays.fill(squares, 0);
+        Arrays.fill(initial, 0);
+        logLikelihood = 0;
+    }
+}

@@ -1,0 +1,33 @@
+package sojourn.regime;
+
+import sojourn.numeric.Check;
+
+/**
+ * What to fit.
+ *
+ * @param kind how regimes follow one another
+ * @param states number of regimes, 1 to 6; 1 for a single regime
+ * @param emission the family of the observations
+ * @param starts how often the search starts, at least 1: one deterministic start, the others random
+ */
+public record FitSettings(ModelKind kind, int states, EmissionFamily emission, int starts) {
+    /** The most states that a model may have. */
+    public static final int MOST_STATES = 6;
+
+    public FitSettings {
+        Check.within(states, 1, MOST_STATES, "states");
+        Check.within(starts, 1, Integer.MAX_VALUE, "starts");
+        Check.that(kind != ModelKind.ONE_REGIME || states == 1, "a one-regime model with " + states + " states");
+    }
+
+    /** Number of free parameters of such a model. */
+    public int parameterCount() {
+        int emissionParameters = emission.estimatesMeans() ? 2 * states : states;
+        int chain = switch (kind) {
+            case HIDDEN_MARKOV -> states * (states - 1) + (states - 1);
+            case MIXTURE -> states - 1;
+            case ONE_REGIME -> 0;
+        };
+        return chain + emissionParameters;
+    }
+}

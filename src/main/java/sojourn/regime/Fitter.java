@@ -1,0 +1,181 @@
+package sojourn.regime;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+import java.util.function.Supplier;
+import sojourn.numeric.Check;
+
+/**
+ * Fits a regime model to a window by maximum likelihood: EM from several starts, each to convergence, the best kept. What it
+ * returns depends on the request alone, not on threads or time.
+ */
+public final class Fitter {
+    /** Fewest observations that a state must account for. */
+    static final int LEAST_COUNT = 5;
+    /** Starts whose log-likelihoods differ by less than this times (1 + |l|) are tied; the earliest wins. */
+    private static final double TIE = 1e-9;
+    /** Starts agree when they end within so many nats. */
+    private static final double AGREEMENT = 1e-4;
+
+    private Fitter() {}
+
+    /** Fits one start after the other. */
+    public static Fit fit(FitSettings settings, FitRequest request) {
+        return fit(settings, request, StartRunner.sequential());
+    }
+
+    /**
+     * Fits, the starts being run by {@code runner}. Among starts without a degenerate state the most likely wins; only if every
+     * start is degenerate is the fit. Data that cannot be fitted give a failed fit with its reason, never an exception; an EM step
+     * that lowers the likelihood is a bug and throws {@code IllegalStateException}.
+     */
+    public static Fit fit(FitSettings settings, FitRequest request, StartRunner runner) {
+        Observations x = request.observations();
+        Window window = Window.of(x, settings.emission());
+        Optional<String> refusal = refusal(settings, x, window);
+        if (refusal.isPresent()) {
+            return Fit.failed(refusal.get(), Fit.Search.NONE, x.present());
+        }
+        if (settings.states() == 1) {
+            return closedForm(settings, request, window);
+        }
+        List<Supplier<Climb.Summit>> climbs = new ArrayList<>();
+        for (Parameters start : new Starts(settings, window).all(request)) {
+            climbs.add(() -> Climb.from(start, window, settings.emission()));
+        }
+        return choose(settings, request, window, runner.run(climbs));
+    }
+
+    /**
+     * The fit of given parameters: nothing is estimated, the states keep their order. Their volatilities not ascending is an
+     * event. The model must be of dimension 1.
+     */
+    public static Fit given(RegimeModel model, FitRequest request) {
+        Observations x = request.observations();
+        Check.within(model.emission().dimension(), 1, 1, "dimension of the model");
+        if (x.present() == 0) {
+            return Fit.failed("the window holds no observation", Fit.Search.NONE, 0);
+        }
+        Described described = Described.of(model, request);
+        if (described.logLikelihood() == Double.NEGATIVE_INFINITY) {
+            return Fit.failed(
+                    "the given parameters make an observation of the window impossible", Fit.Search.NONE, x.present());
+        }
+        List<String> events = StateEvents.of(described, request.previous().flatMap(Fit::model));
+        return Fit.of(
+                Outcome.GIVEN,
+                "the parameters were given, not estimated",
+                Fit.Search.NONE,
+                x.present(),
+                described,
+                events);
+    }
+
+    private static Optional<String> refusal(FitSettings settings, Observations x, Window window) {
+        int least = StrictMath.max(LEAST_COUNT * settings.states(), settings.parameterCount() + 1);
+        if (x.present() == 0) {
+            return Optional.of("the window holds no observation");
+        }
+        if (x.present() < least) {
+            return Optional.of("the window holds " + x.present() + " observations; " + settings.states()
+                    + " states with " + settings.parameterCount() + " parameters need at least " + least);
+        }
+        if (constant(x) || !(window.scale() > 0)) {
+            return Optional.of("all observations of the window are equal");
+        }
+        if (Double.isInfinite(window.scale())) {
+            return Optional.of("the observations of the window are too large to square");
+        }
+        return Optional.empty();
+    }
+
+    private static boolean constant(Observations x) {
+        double lowest = Double.POSITIVE_INFINITY;
+        double highest = Double.NEGATIVE_INFINITY;
+        for (int t = 0; t < x.size(); t++) {
+            if (!x.missing(t)) {
+                lowest = StrictMath.min(lowest, x.at(t, 0));
+                highest = StrictMath.max(highest, x.at(t, 0));
+            }
+        }
+        return lowest == highest;
+    }
+
+    /** One state: the mean and the standard deviation with divisor n. */
+    private static Fit closedForm(FitSettings settings, FitRequest request, Window window) {
+        double[] mean = {window.center()};
+        double[] deviation = {window.scale()};
+        double[] one = {1};
+        Normal emission =
+                settings.emission().estimatesMeans() ? Normal.of(mean, deviation) : Normal.zeroMean(deviation);
+        RegimeModel model = switch (settings.kind()) {
+            case HIDDEN_MARKOV -> HiddenMarkov.of(one, one, emission);
+            case MIXTURE -> Mixture.of(one, emission);
+            case ONE_REGIME -> OneRegime.of(emission);
+        };
+        Described described = Described.of(model, request);
+        List<String> events = StateEvents.of(described, request.previous().flatMap(Fit::model));
+        return Fit.of(Outcome.CONVERGED, "", new Fit.Search(0, 1, 1), window.count(), described, events);
+    }
+
+    private static Fit choose(FitSettings settings, FitRequest request, Window window, List<Climb.Summit> summits) {
+        List<Climb.Summit> sound = summits.stream().filter(s -> !degenerate(s)).toList();
+        Climb.Summit best = best(sound.isEmpty() ? summits : sound);
+        int agreeing = (int) summits.stream()
+                .filter(s -> degenerate(s) == degenerate(best)
+                        && StrictMath.abs(s.logLikelihood() - best.logLikelihood()) <= AGREEMENT)
+                .count();
+        Fit.Search search = new Fit.Search(best.evaluations(), summits.size(), agreeing);
+        Optional<RegimeModel> previous = request.previous().flatMap(Fit::model);
+        RegimeModel unordered = best.parameters().toModel(window, settings.emission());
+        int[] order = Roles.order(Described.of(unordered, request), previous);
+        Described described = Described.of(unordered.ordered(order), request);
+        List<String> events = StateEvents.of(described, previous);
+        int refused = summits.size() - sound.size();
+        if (refused > 0) {
+            events.add("degenerate-starts " + refused + " of " + summits.size());
+        }
+        Outcome outcome = outcome(best);
+        return Fit.of(outcome, explanation(outcome, best), search, window.count(), described, events);
+    }
+
+    private static Climb.Summit best(List<Climb.Summit> summits) {
+        double highest = Double.NEGATIVE_INFINITY;
+        for (Climb.Summit each : summits) {
+            highest = StrictMath.max(highest, each.logLikelihood());
+        }
+        double tied = highest - TIE * (1 + StrictMath.abs(highest));
+        return summits.stream()
+                .filter(s -> s.logLikelihood() >= tied)
+                .findFirst()
+                .orElseThrow(() -> new IllegalStateException("no start has a likelihood; this is a bug"));
+    }
+
+    private static Outcome outcome(Climb.Summit summit) {
+        if (degenerate(summit)) {
+            return Outcome.DEGENERATE;
+        }
+        return summit.converged() ? Outcome.CONVERGED : Outcome.ITERATION_LIMIT;
+    }
+
+    private static String explanation(Outcome outcome, Climb.Summit summit) {
+        return switch (outcome) {
+            case DEGENERATE ->
+                "in every start a state closed in on a few observations: it accounts for fewer than " + LEAST_COUNT
+                        + " of them, or its variance fell to a ten-thousandth of the window's";
+            case ITERATION_LIMIT ->
+                "the likelihood was still rising after " + summit.evaluations() + " evaluations; the model is usable";
+            default -> "";
+        };
+    }
+
+    private static boolean degenerate(Climb.Summit summit) {
+        boolean floored = false;
+        Parameters p = summit.parameters();
+        for (int k = 0; k < p.states(); k++) {
+            floored |= p.at(p.variance(k)) <= Maximisation.FLOOR;
+        }
+        return floored || summit.leastCount() < LEAST_COUNT;
+    }
+}

@@ -1,0 +1,163 @@
+package sojourn.regime;
+
+import java.util.ArrayList;
+import java.util.Comparator;
+import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
+import sojourn.numeric.RandomStream;
+
+/**
+ * Where the searches of one fit start. Start 0 is deterministic: rows sorted by the mean size of the last 21 observations, cut in
+ * as many equal groups as there are states. The others are random, odd ones from stretches of the window, even ones from single
+ * observations. The previous accepted fit, if any, comes last.
+ */
+final class Starts {
+    private static final int SMOOTHING = 21;
+    private static final double STAY = 0.95;
+    private static final double LEAST_VARIANCE = 0.01;
+    /** Lets a search that starts at the previous fit leave probabilities of 0 again. */
+    private static final double SOFTENING = 0.001;
+
+    private final FitSettings settings;
+    private final Window window;
+
+    Starts(FitSettings settings, Window window) {
+        this.settings = settings;
+        this.window = window;
+    }
+
+    /** All starts of that request, in the order in which ties are decided. */
+    List<Parameters> all(FitRequest request) {
+        List<Parameters> starts = new ArrayList<>();
+        starts.add(bySize());
+        for (int index = 1; index < settings.starts(); index++) {
+            RandomStream random = RandomStream.of(
+                    request.masterSeed(), "start", request.date(), String.format(Locale.ROOT, "%d", index));
+            starts.add(index % 2 == 1 ? fromStretches(random) : fromValues(random));
+        }
+        request.previous().flatMap(Fit::model).flatMap(this::fromModel).ifPresent(starts::add);
+        return starts;
+    }
+
+    private Parameters bySize() {
+        List<Integer> rows = presentRows();
+        double[] size = new double[rows.size()];
+        double sum = 0;
+        for (int i = 0; i < size.length; i++) {
+            sum += StrictMath.abs(value(rows.get(i)));
+            if (i >= SMOOTHING) {
+                sum -= StrictMath.abs(value(rows.get(i - SMOOTHING)));
+            }
+            size[i] = sum / StrictMath.min(i + 1, SMOOTHING);
+        }
+        List<Integer> sorted = new ArrayList<>();
+        for (int i = 0; i < size.length; i++) {
+            sorted.add(i);
+        }
+        sorted.sort(Comparator.comparingDouble((Integer i) -> size[i]));
+        Parameters start = chain(STAY);
+        int states = settings.states();
+        for (int k = 0; k < states; k++) {
+            List<Integer> group = new ArrayList<>();
+            for (int i : sorted.subList(k * size.length / states, (k + 1) * size.length / states)) {
+                group.add(rows.get(i));
+            }
+            emission(start, k, group);
+        }
+        return start;
+    }
+
+    /** Each state takes the moments of one randomly placed stretch of the window. */
+    private Parameters fromStretches(RandomStream random) {
+        List<Integer> rows = presentRows();
+        int length = StrictMath.max(5, StrictMath.min(SMOOTHING * 3, rows.size() / (2 * settings.states())));
+        Parameters start = chain(0.8 + 0.19 * random.nextDouble());
+        for (int k = 0; k < settings.states(); k++) {
+            int from = random.nextInt(StrictMath.max(1, rows.size() - length + 1));
+            emission(start, k, rows.subList(from, StrictMath.min(rows.size(), from + length)));
+        }
+        return start;
+    }
+
+    /** Each state takes one observation as its mean, and a variance between a tenth and four times the window's. */
+    private Parameters fromValues(RandomStream random) {
+        List<Integer> rows = presentRows();
+        Parameters start = chain(0.5 + 0.49 * random.nextDouble());
+        for (int k = 0; k < settings.states(); k++) {
+            double mean = value(rows.get(random.nextInt(rows.size())));
+            double size = StrictMath.exp(StrictMath.log(0.1) + random.nextDouble() * StrictMath.log(40));
+            start.set(start.mean(k), settings.emission().estimatesMeans() ? mean : 0);
+            start.set(start.variance(k), size);
+        }
+        return start;
+    }
+
+    /** The previous model in this window's unit, if it has the same shape. */
+    private Optional<Parameters> fromModel(RegimeModel model) {
+        int states = settings.states();
+        boolean sameKind = model instanceof HiddenMarkov == (settings.kind() == ModelKind.HIDDEN_MARKOV);
+        if (!sameKind || model.states() != states) {
+            return Optional.empty();
+        }
+        Parameters start = chain(STAY);
+        for (int k = 0; k < states; k++) {
+            double deviation = model.emission().standardDeviation(k, 0) / window.scale();
+            double mean = (model.emission().mean(k, 0) - window.center()) / window.scale();
+            start.set(start.mean(k), settings.emission().estimatesMeans() ? mean : 0);
+            start.set(start.variance(k), StrictMath.max(Maximisation.FLOOR, deviation * deviation));
+            if (settings.kind() == ModelKind.MIXTURE) {
+                start.set(start.initial(k), soft(model.initial(k)));
+            }
+            for (int j = 0; settings.kind() == ModelKind.HIDDEN_MARKOV && j < states; j++) {
+                start.set(start.transition(k, j), soft(model.transition(k, j)));
+            }
+        }
+        return Optional.of(start);
+    }
+
+    private double soft(double probability) {
+        return (1 - SOFTENING) * probability + SOFTENING / settings.states();
+    }
+
+    /** Even initial distribution; {@code stay} on the diagonal, the rest even. */
+    private Parameters chain(double stay) {
+        int states = settings.states();
+        Parameters start = Parameters.blank(settings.kind(), states);
+        for (int i = 0; i < states; i++) {
+            start.set(start.initial(i), 1.0 / states);
+            for (int j = 0; settings.kind() == ModelKind.HIDDEN_MARKOV && j < states; j++) {
+                start.set(start.transition(i, j), i == j ? stay : (1 - stay) / (states - 1));
+            }
+        }
+        return start;
+    }
+
+    private void emission(Parameters start, int k, List<Integer> rows) {
+        double mean = 0;
+        for (int row : rows) {
+            mean += value(row) / rows.size();
+        }
+        double center = settings.emission().estimatesMeans() ? mean : 0;
+        double square = 0;
+        for (int row : rows) {
+            square += (value(row) - center) * (value(row) - center) / rows.size();
+        }
+        start.set(start.mean(k), center);
+        start.set(start.variance(k), StrictMath.max(LEAST_VARIANCE, square));
+    }
+
+    private List<Integer> presentRows() {
+        List<Integer> rows = new ArrayList<>();
+        for (int t = 0; t < window.size(); t++) {
+            if (window.present()[t] > 0) {
+                rows.add(t);
+            }
+        }
+        return rows;
+    }
+
+    private double value(int row) {
+        return window.values()[row];
+    }
+}

@@ -1,0 +1,65 @@
+package sojourn.regime;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
+
+/** Finds what is worth telling about the states of a fit. Nothing here changes their order. */
+final class StateEvents {
+    private static final double NEAR_TIE = 1.1;
+    private static final double COLLAPSED = 0.01;
+    /** Squared Hellinger distance of two zero-mean normals whose standard deviations differ by a tenth. */
+    private static final double DUPLICATED = 0.00227;
+
+    private static final double ABSORBING = 1e-6;
+
+    private StateEvents() {}
+
+    /** All events of a model in role order, previous fit compared where it has as many states. */
+    static List<String> of(Described described, Optional<RegimeModel> previous) {
+        List<String> events = new ArrayList<>(described.events());
+        RegimeModel model = described.model();
+        StateWeights weights = described.orderBy();
+        double[] occupancy = weights.occupancy();
+        int states = model.states();
+        previous.filter(p -> p.states() == states).ifPresent(p -> swaps(p, model, events));
+        for (int k = 0; k + 1 < states; k++) {
+            double now = weights.deviation(k);
+            double next = weights.deviation(k + 1);
+            if (next < now) {
+                events.add(pair("not-ascending", k, k + 1));
+            }
+            if (StrictMath.max(now, next) <= NEAR_TIE * StrictMath.min(now, next)) {
+                events.add(pair("near-tie", k, k + 1));
+            }
+        }
+        for (int k = 0; states > 1 && k < states; k++) {
+            if (occupancy[k] < COLLAPSED) {
+                events.add(String.format(Locale.ROOT, "collapsed {%d} occupancy %.4f", k, occupancy[k]));
+            }
+            for (int j = k + 1; j < states; j++) {
+                if (Matching.squaredHellinger(model.emission(), k, model.emission(), j) < DUPLICATED) {
+                    events.add(pair("duplicated", k, j));
+                }
+            }
+            if (model instanceof HiddenMarkov && model.transition(k, k) >= 1 - ABSORBING) {
+                events.add("absorbing {" + k + "}");
+            }
+        }
+        return events;
+    }
+
+    private static void swaps(RegimeModel previous, RegimeModel model, List<String> events) {
+        int[] newForOld = Matching.of(previous.emission(), model.emission()).newForOld();
+        for (int old = 0; old < newForOld.length; old++) {
+            if (newForOld[old] != old) {
+                events.add("swap {" + old + "}->{" + newForOld[old] + "}");
+            }
+        }
+    }
+
+    private static String pair(String word, int a, int b) {
+        return word + " {" + a + "}/{" + b + "}";
+    }
+}

@@ -1,0 +1,92 @@
+package sojourn.regime;
+
+import sojourn.numeric.CompensatedSum;
+
+/**
+ * A univariate window brought to mean 0 and variance 1 (zero-mean family: mean square 1), so that the search does not depend on
+ * the unit of the observations. Missing rows hold 0 and the flag 0.
+ */
+final class Window {
+    /** No rows, no change of unit. */
+    static final Window UNIT = new Window(new double[0], new double[0], 0, 0, 1);
+
+    private final double[] values;
+    private final double[] present;
+    private final int count;
+    private final double center;
+    private final double scale;
+
+    private Window(double[] values, double[] present, int count, double center, double scale) {
+        this.values = values;
+        this.present = present;
+        this.count = count;
+        this.center = center;
+        this.scale = scale;
+    }
+
+    /** The window of those observations; its scale is 0 for a constant series and infinite for one that overflows. */
+    static Window of(Observations x, EmissionFamily family) {
+        int rows = x.size();
+        double center = family.estimatesMeans() ? mean(x) : 0;
+        double scale = Math.sqrt(meanSquareFrom(x, center));
+        double[] values = new double[rows];
+        double[] present = new double[rows];
+        for (int t = 0; t < rows; t++) {
+            present[t] = x.missing(t) ? 0 : 1;
+            values[t] = x.missing(t) ? 0 : (x.at(t, 0) - center) / scale;
+        }
+        return new Window(values, present, x.present(), center, scale);
+    }
+
+    /** Mean of the observations that are present; 0 for none. */
+    static double mean(Observations x) {
+        CompensatedSum sum = new CompensatedSum();
+        for (int t = 0; t < x.size(); t++) {
+            if (!x.missing(t)) {
+                sum.add(x.at(t, 0));
+            }
+        }
+        return x.present() == 0 ? 0 : sum.value() / x.present();
+    }
+
+    private static double meanSquareFrom(Observations x, double center) {
+        CompensatedSum sum = new CompensatedSum();
+        for (int t = 0; t < x.size(); t++) {
+            if (!x.missing(t)) {
+                double d = x.at(t, 0) - center;
+                sum.add(d * d);
+            }
+        }
+        return x.present() == 0 ? 0 : sum.value() / x.present();
+    }
+
+    /** Number of rows, missing ones included. */
+    int size() {
+        return values.length;
+    }
+
+    /** Number of rows that are not missing. */
+    int count() {
+        return count;
+    }
+
+    /** The standardised observations, not to be modified. */
+    double[] values() {
+        return values;
+    }
+
+    /** 1 where the observation is present, 0 where it is missing; not to be modified. */
+    double[] present() {
+        return present;
+    }
+
+    /** What was subtracted. */
+    double center() {
+        return center;
+    }
+
+    /** What the rest was divided by: the standard deviation with divisor n. */
+    double scale() {
+        return scale;
+    }
+}

@@ -1,0 +1,53 @@
+package sojourn.report;
+
+import java.util.Locale;
+import java.util.OptionalDouble;
+import sojourn.measure.Measured;
+
+/** Numbers as people read them; what is undefined reads n/a. */
+final class Figures {
+    static final String NONE = "n/a";
+
+    private Figures() {}
+
+    /** A fraction as percent with one decimal: {@code -23.4 %}. */
+    static String percent(Measured measured) {
+        return percent(measured.number(), "%.1f %%");
+    }
+
+    /** A fraction as percent with two decimals, for small amounts. */
+    static String finePercent(Measured measured) {
+        return percent(measured.number(), "%.2f %%");
+    }
+
+    /** A plain number with two decimals. */
+    static String ratio(Measured measured) {
+        return number(measured.number(), "%.2f");
+    }
+
+    /** A plain number with one decimal. */
+    static String times(Measured measured) {
+        return number(measured.number(), "%.1f");
+    }
+
+    /** A whole number. */
+    static String count(Measured measured) {
+        return number(measured.number(), "%.0f");
+    }
+
+    /** {@code -0.05 to 0.78}. */
+    static String interval(Measured low, Measured high) {
+        if (low.number().isEmpty() || high.number().isEmpty()) {
+            return NONE;
+        }
+        return ratio(low) + " to " + ratio(high);
+    }
+
+    private static String percent(OptionalDouble number, String format) {
+        return number.isPresent() ? String.format(Locale.ROOT, format, 100 * number.getAsDouble()) : NONE;
+    }
+
+    private static String number(OptionalDouble number, String format) {
+        return number.isPresent() ? String.format(Locale.ROOT, format, number.getAsDouble()) : NONE;
+    }
+}

@@ -1,0 +1,68 @@
+package sojourn.report;
+
+import java.util.List;
+import java.util.Locale;
+import tech.tablesaw.api.Row;
+import tech.tablesaw.api.StringColumn;
+import tech.tablesaw.api.Table;
+
+/**
+ * A table of texts laid out for a terminal: columns as wide as they need, two spaces between them, the first column flush left and the
+ * others flush right.
+ */
+final class Grid {
+    private static final String GAP = "  ";
+
+    private final Table table;
+
+    /** With headings and no row. */
+    Grid(List<String> headings) {
+        this.table = Table.create();
+        for (String heading : headings) {
+            table.addColumns(StringColumn.create(heading));
+        }
+    }
+
+    /** Adds a row; one cell a heading. */
+    void add(List<String> cells) {
+        Row row = table.appendRow();
+        for (int i = 0; i < cells.size(); i++) {
+            row.setString(i, cells.get(i));
+        }
+    }
+
+    /** The whole, each line ended. */
+    String text() {
+        int columns = table.columnCount();
+        int[] widths = new int[columns];
+        for (int i = 0; i < columns; i++) {
+            widths[i] = table.column(i).name().length();
+            for (String cell : table.stringColumn(i)) {
+                widths[i] = Math.max(widths[i], cell.length());
+            }
+        }
+        StringBuilder text = new StringBuilder();
+        line(text, table.columnNames(), widths);
+        for (int i = 0; i < columns; i++) {
+            text.append(i == 0 ? "" : GAP).append("-".repeat(widths[i]));
+        }
+        text.append('\n');
+        for (Row row : table) {
+            String[] cells = new String[columns];
+            for (int i = 0; i < columns; i++) {
+                cells[i] = row.getString(i);
+            }
+            line(text, List.of(cells), widths);
+        }
+        return text.toString();
+    }
+
+    private static void line(StringBuilder text, List<String> cells, int[] widths) {
+        StringBuilder line = new StringBuilder();
+        for (int i = 0; i < widths.length; i++) {
+            String format = i == 0 ? "%-" + widths[i] + "s" : "%" + widths[i] + "s";
+            line.append(i == 0 ? "" : GAP).append(String.format(Locale.ROOT, format, cells.get(i)));
+        }
+        text.append(line.toString().stripTrailing()).append('\n');
+    }
+}

@@ -1,0 +1,150 @@
+package sojourn.walk;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+import java.util.function.IntConsumer;
+import sojourn.market.Known;
+import sojourn.market.PriceTable;
+import sojourn.regime.Companions;
+import sojourn.regime.EmissionFamily;
+import sojourn.regime.FilterState;
+import sojourn.regime.Fit;
+import sojourn.regime.FitRequest;
+import sojourn.regime.FitSettings;
+import sojourn.regime.Fitter;
+import sojourn.regime.HiddenMarkov;
+import sojourn.regime.Normal;
+import sojourn.regime.Observations;
+import sojourn.regime.RegimeModel;
+import sojourn.regime.StartRunner;
+
+/**
+ * Walks a regime model forward through a history, close by close. At each close: the new observation is taken in; the model in
+ * force scores it and filters on with frozen parameters; where a fit is due, the model is fitted to the window that ends here and,
+ * if accepted, filters that window afresh and is in force from this close on.
+ */
+public final class Walk {
+    private final RegimeSettings regimes;
+    private final RefitSettings refit;
+    private final StartRunner runner;
+    private final int orderAsset;
+    private final ObservationLog log;
+    private final RegimeTimeline.Builder timeline;
+    private Optional<InForce> inForce = Optional.empty();
+    private boolean aside;
+
+    /** The fit whose parameters the filter goes by. */
+    private record InForce(FitRecord record, RegimeModel model, FilterState filter) {}
+
+    private Walk(PriceTable table, RegimeSettings regimes, RefitSettings refit, StartRunner runner) {
+        this.regimes = regimes;
+        this.refit = refit;
+        this.runner = runner;
+        this.orderAsset = table.asset(regimes.orderedBy());
+        this.log = new ObservationLog(regimes.observe().get(0), table.assets().size());
+        this.timeline = new RegimeTimeline.Builder(
+                regimes.states(),
+                table.assets(),
+                regimes.emission() == EmissionFamily.NORMAL_ZERO_MEAN
+                        ? RegimeTimeline.Builder.MeanOf.CASH
+                        : RegimeTimeline.Builder.MeanOf.WINDOW);
+    }
+
+    /**
+     * The timeline of a history. Depends on prices and settings alone, not on {@code runner} or its threads.
+     *
+     * @param runner runs the starts of each fit
+     * @param walked told each bar that is done, for progress
+     */
+    public static RegimeTimeline forward(
+            PriceTable table, RegimeSettings regimes, RefitSettings refit, StartRunner runner, IntConsumer walked) {
+        Walk walk = new Walk(table, regimes, refit, runner);
+        for (int bar = 0; bar < table.size(); bar++) {
+            walk.close(table.knownAt(bar));
+            walked.accept(bar);
+        }
+        return walk.timeline.build();
+    }
+
+    private void close(Known known) {
+        log.append(known);
+        double score = filterOn();
+        if (refit.schedule().due(known, log.present(), log.lastPresent(), refit.firstFitAfter())) {
+            fit(known);
+        }
+        if (inForce.isPresent()) {
+            InForce now = inForce.get();
+            timeline.bar(known, aside ? 0 : now.record().number(), now.filter().probabilities(), score);
+        }
+    }
+
+    /** One step with frozen parameters; the log density it gave to the new observation, NaN if there was none to score. */
+    private double filterOn() {
+        if (inForce.isEmpty()) {
+            return Double.NaN;
+        }
+        InForce before = inForce.get();
+        FilterState after = before.filter().step(before.model(), log.last(), 0);
+        inForce = Optional.of(new InForce(before.record(), before.model(), after));
+        boolean scored = log.lastPresent() && Double.isFinite(after.lastLogDensity());
+        return scored ? after.lastLogDensity() : Double.NaN;
+    }
+
+    private void fit(Known known) {
+        int start = log.windowStart(refit.rolling());
+        Observations window = log.window(start);
+        Companions companions = Companions.of(known.assets().size(), log.assetReturns(start));
+        FitRequest cold = FitRequest.of(
+                window,
+                log.returnsOf(orderAsset, start),
+                companions,
+                refit.seed(),
+                known.date().toString());
+        FitRequest request =
+                inForce.map(previous -> cold.after(previous.record().fit())).orElse(cold);
+        Fit fit = regimes.fixed()
+                .map(declared -> Fitter.given(model(declared), request))
+                .orElseGet(() -> Fitter.fit(settings(), request, runner));
+        FitRecord record = new FitRecord(
+                timeline.nextFitNumber(),
+                known.bar(),
+                known.date(),
+                known.date(log.bar(start)),
+                fit,
+                EventWords.named(fit.events(), regimes.states()));
+        timeline.fit(record);
+        if (fit.outcome().accepted()) {
+            RegimeModel model = fit.model().orElseThrow();
+            inForce = Optional.of(new InForce(record, model, filtered(model, window)));
+            aside = false;
+        } else if (refit.onFailure() == RefitSettings.OnFailure.STAND_ASIDE) {
+            aside = true;
+        }
+    }
+
+    private static FilterState filtered(RegimeModel model, Observations window) {
+        FilterState state = FilterState.before(model);
+        for (int row = 0; row < window.size(); row++) {
+            state = state.step(model, window, row);
+        }
+        return state;
+    }
+
+    private FitSettings settings() {
+        return new FitSettings(regimes.model(), regimes.states().size(), regimes.emission(), refit.starts());
+    }
+
+    private RegimeModel model(FixedParameters declared) {
+        List<Double> transition = new ArrayList<>();
+        declared.transition().forEach(transition::addAll);
+        Normal emission = regimes.emission() == EmissionFamily.NORMAL_ZERO_MEAN
+                ? Normal.zeroMean(array(declared.sd()))
+                : Normal.of(array(declared.mean()), array(declared.sd()));
+        return HiddenMarkov.of(array(declared.initial()), array(transition), emission);
+    }
+
+    private static double[] array(List<Double> values) {
+        return values.stream().mapToDouble(Double::doubleValue).toArray();
+    }
+}

@@ -1,0 +1,24 @@
+package sojourn.allocate;
+
+import static org.assertj.core.api.Assertions.assertThat;
+
+import org.junit.jupiter.api.Test;
+
+class FigureTest {
+    @Test
+    void twoDecimalsSufficeWhereTheyTellTheTruth() {
+        assertThat(Figure.of(0.8149)).isEqualTo("0.81");
+        assertThat(Figure.beside(0.8149, 0.7)).isEqualTo("0.81");
+        assertThat(Figure.level(0.7)).isEqualTo("0.70");
+        assertThat(Figure.level(0.125)).isEqualTo("0.125");
+        assertThat(Figure.level(1)).isEqualTo("1.00");
+    }
+
+    @Test
+    void aValueNearALevelGetsAsManyDecimalsAsItTakes() {
+        assertThat(Figure.beside(0.6999, 0.7)).isEqualTo("0.6999");
+        assertThat(Figure.beside(0.70001, 0.7)).isEqualTo("0.70001");
+        assertThat(Figure.beside(0.7, 0.7)).isEqualTo("0.70");
+        assertThat(Figure.beside(Math.nextUp(0.7), 0.7)).isGreaterThan("0.70000000000000");
+    }
+}
