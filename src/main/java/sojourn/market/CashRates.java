@@ -142,7 +142,7 @@ public final class CashRates {
                 0,
                 "at the close of bar " + axis.date(bar) + " the last rate, of " + dates.get(row) + ", is "
                         + age(axis, bar, row) + " calendar days old, more than " + OLDEST_DAYS
-                        + (bars == 1 ? "" : " (so are the rates of " + (bars - 1) + " later bars)"),
+                        + (bars == 1 ? "" : " (and too old on " + (bars - 1) + " of the bars after it)"),
                 "add rates after " + dates.get(row) + ", at least one in " + OLDEST_DAYS
                         + " days, or write cash: {percent-per-year: …} instead");
     }

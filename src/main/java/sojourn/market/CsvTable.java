@@ -61,11 +61,16 @@ final class CsvTable {
         int[] lineStarts = lineStarts(text);
         try {
             Iterator<CSVRecord> records = CSVParser.parse(text, format).iterator();
-            CsvTable table = new CsvTable(file, text, lineStarts, separator, records, records.next());
+            CSVRecord header = records.next();
+            while (isBlank(header)) {
+                header = records.next();
+            }
+            CsvTable table = new CsvTable(file, text, lineStarts, separator, records, header);
             table.refuseRepeatedNames(faults);
             return Optional.of(table);
-        } catch (IOException | UncheckedIOException e) {
-            faults.add(new Problem(file, 1, 0, "the header cannot be read: " + e.getMessage(), "mend its quotes"));
+        } catch (IOException | UncheckedIOException quotes) {
+            faults.add(new Problem(
+                    file, 1, 0, "the header cannot be read: a quote opens or closes amiss", "mend its quotes"));
             return Optional.empty();
         }
     }
@@ -86,23 +91,27 @@ final class CsvTable {
         return header.problem(0, what, remedy);
     }
 
-    /** Hands each row to {@code reader}, once; rows of another width than the header's are faults instead. */
+    /** Hands each row to {@code reader}, once; blank lines are skipped, rows of another width than the header's are faults. */
     void forEachRow(Faults faults, Consumer<Row> reader) {
         int line = header.line();
         try {
             while (records.hasNext()) {
-                Row row = new Row(records.next());
+                CSVRecord read = records.next();
+                if (isBlank(read)) {
+                    continue;
+                }
+                Row row = new Row(read);
                 line = row.line();
                 if (row.cells.size() == names().size()) {
                     reader.accept(row);
-                } else if (row.cells.size() > 1 || !row.cells.get(0).isEmpty()) {
+                } else {
                     faults.add(row.problem(
                             0,
-                            "the row has " + cells(row.cells.size()) + ", the header " + cells(names().size()),
+                            "the row has " + cells(row.cells.size()) + ", the header " + names().size(),
                             "give every row as many cells as the header; quote a cell that holds the separator"));
                 }
             }
-        } catch (UncheckedIOException e) {
+        } catch (UncheckedIOException quotes) {
             faults.add(new Problem(
                     file,
                     line,
@@ -110,6 +119,10 @@ final class CsvTable {
                     "the rows after this line cannot be read: a quote opens or closes amiss",
                     "mend the quotes of the next row"));
         }
+    }
+
+    private static boolean isBlank(CSVRecord record) {
+        return record.size() == 1 && record.get(0).isBlank();
     }
 
     private static String cells(int count) {

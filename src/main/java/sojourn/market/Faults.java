@@ -47,7 +47,7 @@ final class Faults {
                     last.file(),
                     last.line(),
                     last.column(),
-                    count - first.size() + " more faults follow",
+                    count - first.size() + (count == first.size() + 1 ? " more fault follows" : " more faults follow"),
                     "mend those above first"));
         }
     }

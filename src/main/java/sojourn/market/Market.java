@@ -7,7 +7,7 @@ import java.util.List;
  * What the market did, and what there is to say about the files that told it.
  *
  * @param table prices and cash returns on the common calendar
- * @param findings what is worth a look, in the order of the files
+ * @param findings what is worth a look but can be worked with
  * @param files the files that were read; none for prices that come from elsewhere
  */
 public record Market(PriceTable table, List<Finding> findings, List<InputFile> files) {

@@ -74,11 +74,13 @@ final class SeriesFindings {
             }
         }
         if (count > 0) {
+            String which = count == 1
+                    ? " from " + span(first)
+                    : ", the first from " + span(first) + ", the longest from " + span(longest);
             add(
                     series.line(first),
-                    counted(count, "gap") + " of more than " + limit + " calendar days in " + series.asset()
-                            + ", the first from " + span(first) + ", the longest from " + span(longest) + " ("
-                            + gap(longest) + " days)",
+                    counted(count, "gap") + " of more than " + limit + " calendar days in " + series.asset() + which
+                            + " (" + gap(longest) + " days)",
                     "look whether rows are missing");
         }
     }
@@ -109,10 +111,14 @@ final class SeriesFindings {
             start = row;
         }
         if (count > 0) {
+            String from = series.dates().get(first).toString();
+            String which = count == 1
+                    ? ", from " + from + ", of " + longest + " rows"
+                    : ", the first from " + from + ", the longest of " + longest + " rows";
             add(
                     series.line(first),
                     counted(count, "run") + " of at least " + FROZEN_ROWS + " identical closes of " + series.asset()
-                            + ", the first from " + series.dates().get(first) + ", the longest of " + longest + " rows",
+                            + which,
                     "look whether old prices were carried forward; leave the cell empty where there was no price");
         }
     }
@@ -129,11 +135,12 @@ final class SeriesFindings {
             }
         }
         if (count > 0) {
+            String which = count == 1
+                    ? " on " + moved(first)
+                    : ", the first on " + moved(first) + ", the greatest on " + moved(greatest);
             add(
                     series.line(first),
-                    counted(count, "move") + " of " + series.asset()
-                            + " beyond ±40 % from one row to the next, the first on " + moved(first)
-                            + ", the greatest on " + moved(greatest),
+                    counted(count, "move") + " of " + series.asset() + " beyond ±40 % from one row to the next" + which,
                     "look for a split that was not adjusted for, or a price that is off by a factor of 100");
         }
     }

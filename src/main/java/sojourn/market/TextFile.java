@@ -70,7 +70,7 @@ record TextFile(String file, String text, String sha256) {
                     file,
                     0,
                     0,
-                    "the file has " + (Files.size(path) >> 20) + " MiB, more than 512",
+                    "the file has " + Files.size(path) + " bytes, more than 512 MiB",
                     "keep only the columns and dates that are needed"));
         }
         return Optional.empty();

@@ -12,6 +12,7 @@ import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
+import org.junit.jupiter.params.provider.ValueSource;
 
 class PriceFileTest {
     private static final String GOOD = "date,close\n2020-01-02,10\n2020-01-03,11\n";
@@ -59,10 +60,16 @@ class PriceFileTest {
         PriceSource source = source(new CsvLayout("prices.csv", "date", DatePattern.ISO, Optional.of(Separator.TAB)));
         assertThat(faults(() -> market(folder, GOOD, source, Calendar.DAILY)))
                 .containsExactly(
-                        "prices.csv:1:1: there is no column 'date'; the header has date,close; name the right one in the"
-                                + " strategy file, perhaps date: date,close",
-                        "prices.csv:1:1: there is no column 'close'; the header has date,close; name the right one in the"
-                                + " strategy file, perhaps close: date,close");
+                        "prices.csv:1:1: there is no column 'date'; the header has 'date,close'; give it a header line of"
+                                + " several cells, or say what separates them: separator: …",
+                        "prices.csv:1:1: there is no column 'close'; the header has 'date,close'; give it a header line of"
+                                + " several cells, or say what separates them: separator: …");
+    }
+
+    @Test
+    void blankLinesAreSkipped() {
+        String text = " \n\ndate,close\n  \n2020-01-02,10\n\n2020-01-03,11\n \n";
+        assertThat(market(folder, text).table().knownAt(1).closes(0, 0)).containsExactly(10, 11);
     }
 
     @Test
@@ -167,10 +174,10 @@ class PriceFileTest {
     void theNearestColumnIsNamed() {
         assertThat(faults(folder, "Date,Adj Close,Close\n2020-01-02,10,10\n"))
                 .containsExactly(
-                        "prices.csv:1:1: there is no column 'date'; the header has Date, Adj Close, Close; name the right"
-                                + " one in the strategy file, perhaps date: Date",
-                        "prices.csv:1:1: there is no column 'close'; the header has Date, Adj Close, Close; name the right"
-                                + " one in the strategy file, perhaps close: Close");
+                        "prices.csv:1:1: there is no column 'date'; the header has 'Date', 'Adj Close', 'Close'; say which"
+                                + " column holds it: date: Date",
+                        "prices.csv:1:1: there is no column 'close'; the header has 'Date', 'Adj Close', 'Close'; say which"
+                                + " column holds it: close: Close");
     }
 
     @Test
@@ -183,9 +190,8 @@ class PriceFileTest {
                 Optional.empty(),
                 Optional.of("volum"));
         assertThat(faults(() -> market(folder, "date,close,volume\n2020-01-02,10,1\n", source, Calendar.DAILY)))
-                .containsExactly(
-                        "prices.csv:1:1: there is no column 'volum'; the header has date, close, volume; name the"
-                                + " right one in the strategy file, perhaps volume: volume");
+                .containsExactly("prices.csv:1:1: there is no column 'volum'; the header has 'date', 'close', 'volume';"
+                        + " say which column holds it: volume: volume");
     }
 
     @Test
@@ -196,7 +202,7 @@ class PriceFileTest {
     }
 
     @ParameterizedTest
-    @CsvSource({"''", "'\n\n  \n'", "'\ufeff'"})
+    @ValueSource(strings = {"", "\n\n  \n", "\ufeff"})
     void anEmptyFileIsRefused(String text) {
         assertThat(faults(folder, text))
                 .containsExactly("prices.csv: the file is empty; give a header line and a row for each date");
@@ -229,7 +235,7 @@ class PriceFileTest {
         List<String> faults = faults(folder, text.toString());
         assertThat(faults).hasSize(21);
         assertThat(faults.get(19)).startsWith("prices.csv:21:12: close 'x'");
-        assertThat(faults.get(20)).isEqualTo("prices.csv: 11 more faults are not shown; mend those above first");
+        assertThat(faults.get(20)).isEqualTo("prices.csv:21:12: 11 more faults follow; mend those above first");
     }
 
     @Test
@@ -237,6 +243,13 @@ class PriceFileTest {
         assertThat(faults(folder, GOOD + "2020-01-06,\"12\n2020-01-07,13\n"))
                 .containsExactly("prices.csv:3: the rows after this line cannot be read: a quote opens or closes amiss;"
                         + " mend the quotes of the next row");
+    }
+
+    @Test
+    void aHeaderWhoseQuoteNeverClosesIsRefused() {
+        assertThat(faults(folder, "date,\"close\n2020-01-02,10\n"))
+                .containsExactly(
+                        "prices.csv:1: the header cannot be read: a quote opens or closes amiss; mend its quotes");
     }
 
     @Test

@@ -45,7 +45,7 @@ class TextFileTest {
         }
         assertThat(faultsOf("huge.csv"))
                 .containsExactly(
-                        "huge.csv: the file has 512 MiB, more than 512; keep only the columns and dates that are needed");
+                        "huge.csv: the file has 536870913 bytes, more than 512 MiB; keep only the columns and dates that are needed");
     }
 
     @Test
