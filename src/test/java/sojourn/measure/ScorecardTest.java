@@ -100,6 +100,13 @@ class ScorecardTest {
     }
 
     @Test
+    void costsAreHeldAgainstMeanWealth() {
+        EvaluatedPath path = bare(FOUR_YEARS, new double[] {50, 100, 150, 100, 100}) // mean 100
+                .withTrading(new double[4], new double[] {1, 0, 2, 1});
+        close(Scorecard.of(path, path), Measure.COST_PER_YEAR, 0.01); // 4 / 100 / 4 years
+    }
+
+    @Test
     void sortinoIsHeldAgainstWhatCashEarnedOnAverage() {
         // Mean return 0.25, mean cash 0.05; shortfalls below 0.05: 0, 0.3, 0, 0.
         double[] returns = {0.5, -0.25, 0.5, 0.25};
