@@ -151,14 +151,14 @@ public enum Measure {
     SKEW(
             "Skewness",
             Unit.NUMBER,
-            Direction.HIGHER,
+            Direction.NEITHER,
             "G1 = g1 sqrt(n (n - 1)) / (n - 2) of the returns, g1 = m3 / m2^1.5 from central moments with divisor n.",
             facts -> Measured.from(facts.moments().sampleSkewness())),
     /** Excess kurtosis. */
     EXCESS_KURTOSIS(
             "Excess kurtosis",
             Unit.NUMBER,
-            Direction.LOWER,
+            Direction.NEITHER,
             "G2 = (n - 1)((n + 1) g2 + 6) / ((n - 2)(n - 3)) of the returns, g2 = m4 / m2^2 - 3, 0 for a normal distribution.",
             facts -> Measured.from(facts.moments().sampleExcessKurtosis())),
     /** Share of bars with a gain. */
