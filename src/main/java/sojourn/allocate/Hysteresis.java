@@ -6,12 +6,14 @@ final class Hysteresis implements Mechanism {
     private static final int OUT = 1;
 
     private final Switch rule;
+    private final String who;
     private final int regime;
     private final Weights in;
     private final Weights out;
 
     Hysteresis(Switch rule, int regime, Weights in, Weights out) {
         this.rule = rule;
+        this.who = rule.probability().prefix() + rule.regime();
         this.regime = regime;
         this.in = in;
         this.out = out;
@@ -38,7 +40,7 @@ final class Hysteresis implements Mechanism {
         boolean was = before.lived() == OUT;
         boolean is = lived.lived() == OUT;
         return new Crossing(
-                rule.probability().prefix() + rule.regime(),
+                who,
                 probabilities[regime],
                 was ? rule.reEnterBelow() : rule.leaveAbove(),
                 was ? Side.OUT : Side.IN,

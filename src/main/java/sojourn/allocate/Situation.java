@@ -20,9 +20,11 @@ public record Situation(Known known, Optional<Reading> reading, List<String> reg
     /** Refuses a bar ahead of less than 1 and weights that do not belong to the assets. */
     public Situation {
         Check.within(barsAhead, 1, Integer.MAX_VALUE, "barsAhead");
-        Check.that(
-                weights.size() == known.assets().size(),
-                weights.size() + " weights for " + known.assets().size() + " assets");
+        if (weights.size()
+                != known.assets().size()) { // no message is put together on the millions of closes that are in order
+            throw new IllegalArgumentException(
+                    weights.size() + " weights for " + known.assets().size() + " assets");
+        }
     }
 
     /** Names of the assets, in the order of the weights. */

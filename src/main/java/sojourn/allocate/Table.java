@@ -87,7 +87,8 @@ public record Table(
         public Because because(double[] probabilities, Stance before, Stance lived) {
             int label = lived.candidate();
             return new Label(
-                    rule.probability.prefix() + regimes.get(label),
+                    rule.probability,
+                    regimes.get(label),
                     probabilities[label],
                     lived.run(),
                     rule.confirm,
@@ -107,11 +108,12 @@ public record Table(
         CANDIDATE
     }
 
-    private record Label(String who, double p, int run, int confirm, String held, Standing standing)
+    private record Label(
+            ProbabilityKind kind, String who, double p, int run, int confirm, String held, Standing standing)
             implements Because {
         @Override
         public String sentence() {
-            String start = who + " " + Figure.of(p) + " is the most likely regime";
+            String start = kind.prefix() + who + " " + Figure.of(p) + " is the most likely regime";
             return standing == Standing.HELD
                     ? start
                     : start + " for " + run + " of " + confirm + " closes, stays with " + held;

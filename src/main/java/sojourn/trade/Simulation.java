@@ -32,6 +32,7 @@ public final class Simulation {
     private final List<Order> dropped = new ArrayList<>();
     private Stance stance = Stance.first();
     private Optional<Weights> target = Optional.empty();
+    private double wealth;
     private OptionalInt ruinedOn = OptionalInt.empty();
 
     private Simulation(PriceTable table, Signal signal, Policy policy, Terms terms) {
@@ -72,6 +73,7 @@ public final class Simulation {
         Track.Rows rows = new Track.Rows(table.size() - start, table.assets().size());
         take(start, first);
         fillDue(start);
+        mark(start);
         write(rows, 0, start, first.change());
         for (int bar = start + 1; bar < table.size(); bar++) {
             write(rows, bar - start, bar, ruinedOn.isPresent() ? rest() : step(bar));
@@ -91,15 +93,17 @@ public final class Simulation {
     private Decision.Change step(int bar) {
         account.accrue(bar);
         fillDue(bar);
-        double wealth = mark(bar);
+        mark(bar);
         if (ruinedOn.isPresent()) {
             return Decision.Change.SAME;
         }
         Order last = pending.peekLast();
         Decision decision = ask(bar, last == null ? account.weights(bar, wealth) : last.target());
         take(bar, decision);
-        fillDue(bar); // honest fill rules have nothing due here
-        mark(bar);
+        if (due(bar)) { // never after an honest fill rule
+            fillDue(bar);
+            mark(bar);
+        }
         return decision.change();
     }
 
@@ -156,33 +160,33 @@ public final class Simulation {
         return unfilled;
     }
 
-    private double mark(int bar) {
-        double wealth = account.wealth(bar);
-        if (!(wealth > 0) && ruinedOn.isEmpty()) {
-            ruin(bar);
+    private void mark(int bar) {
+        if (ruinedOn.isEmpty()) {
+            wealth = account.wealth(bar);
+            if (!(wealth > 0)) {
+                ruin(bar);
+            }
         }
-        return wealth;
     }
 
     private void ruin(int bar) {
         account.ruin(bar);
+        wealth = 0;
         ruinedOn = OptionalInt.of(bar);
     }
 
     private void write(Track.Rows rows, int row, int bar, Decision.Change change) {
-        int assets = table.assets().size();
-        double wealth = ruinedOn.isPresent() ? 0 : account.wealth(bar);
         rows.wealth[row] = wealth;
         rows.cash[row] = account.cash();
         rows.interest[row] = account.interest();
         rows.cost[row] = account.cost();
         rows.turnover[row] = account.turnover();
         rows.switched[row] = change == Decision.Change.SWITCHED;
-        Weights held = wealth > 0 ? account.weights(bar, wealth) : Weights.none(assets);
         Weights decided = target.orElseThrow();
+        int assets = decided.size();
         for (int i = 0; i < assets; i++) {
             rows.units[row * assets + i] = account.units(i);
-            rows.weights[row * assets + i] = held.at(i);
+            rows.weights[row * assets + i] = wealth > 0 ? account.weight(i, bar, wealth) : 0;
             rows.targets[row * assets + i] = decided.at(i);
         }
     }

@@ -171,7 +171,10 @@ public final class Track {
         return unfilled;
     }
 
-    /** The bar at whose close wealth was gone; from there on nothing is held, decided or earned. */
+    /**
+     * The bar at whose close wealth was gone. Positions are closed at that close without cost or turnover; from there on nothing is
+     * held, decided or earned.
+     */
     public OptionalInt ruinedOn() {
         return ruinedOn;
     }

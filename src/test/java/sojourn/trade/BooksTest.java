@@ -19,8 +19,8 @@ class BooksTest {
     private static final double CAPITAL = 1_000_000;
     private static final int BARS = 300;
 
-    /** Sums of a few numbers of the size of wealth, each rounded at 1e-16 of it. */
-    private static final double ROUNDING = 1e-13 * CAPITAL * 10;
+    /** Sums over a whole path of numbers of the size of wealth, each rounded at about 1e-16 of it. */
+    private static final double ROUNDING = 1e-12 * CAPITAL;
 
     private record Case(long seed, int assets, String policy, Costs costs, int delay) {
         GivenPrices prices() {

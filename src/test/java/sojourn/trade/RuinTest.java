@@ -63,6 +63,23 @@ class RuinTest {
         assertThat(cash).isCloseTo(0, within(1e-9));
     }
 
+    @Test
+    void theRuinBarKeepsTheBooksToo() {
+        double[] closes = {100, 100, 90, 60, 200};
+        Track track = run(closes, Map.of(0, Weights.of(3)), new Costs(10, 10));
+        for (int bar = 1; bar < closes.length; bar++) {
+            int now = bar;
+            double moved = track.ledger().stream()
+                    .filter(entry -> entry.bar() == now && entry.kind() != LedgerKind.TRADE)
+                    .mapToDouble(LedgerEntry::amount)
+                    .sum();
+            double gains = track.units(bar - 1, 0) * (closes[bar] - closes[bar - 1]);
+            assertThat(track.wealth(bar) - track.wealth(bar - 1))
+                    .as("bar %d", bar)
+                    .isCloseTo(gains + moved, within(1e-9));
+        }
+    }
+
     private static Track run(double[] closes, Map<Integer, Weights> orders, Costs costs) {
         GivenPrices prices = GivenPrices.closes(closes);
         return Simulation.run(
