@@ -1,11 +1,12 @@
 package sojourn.regime;
 
 /**
- * Climbs to a maximum of the likelihood from one start: EM, after ten plain steps sped up by SQUAREM, scheme S3 (Varadhan and
+ * Climbs to a maximum of the likelihood from one start: EM, after twenty plain steps sped up by SQUAREM, scheme S3 (Varadhan and
  * Roland 2008, Scand. J. Statistics 35, 335-353). An extrapolated point is kept only if it is at least as likely as the plain
- * step before it; otherwise the stride is halved, in the end to the plain second step.
+ * step before it; otherwise the stride is halved, in the end to the plain second step. The longest stride allowed starts at 4 and grows by
+ * 4 whenever it was taken in full, which keeps early leaps in the valley that EM is in.
  *
- * <p>Stops when the way still to go, the last EM step times the stride, is below 1e-7 in the largest parameter of the
+ * <p>Stops when the way still to go, the last EM step times the stride, is below 1e-9 in the largest parameter of the
  * standardised series, or when that times the gain of the last step is below 1e-9 nats; after 2000 evaluations without that.
  * Every EM step must not lower the log-likelihood l by more than 1e-9 (1 + |l|).
  */
@@ -13,9 +14,10 @@ final class Climb {
     /** The most evaluations of the likelihood. */
     static final int MOST_EVALUATIONS = 2000;
 
-    private static final int PLAIN_STEPS = 10;
+    private static final int PLAIN_STEPS = 20;
+    private static final double FIRST_LONGEST = 4;
     private static final int MOST_HALVINGS = 3;
-    private static final double PARAMETER_TOLERANCE = 1e-7;
+    private static final double PARAMETER_TOLERANCE = 1e-9;
     private static final double GAIN_TOLERANCE = 1e-9;
     private static final double FALL_TOLERANCE = 1e-9;
 
@@ -25,6 +27,7 @@ final class Climb {
     private final ExpectedSums sums;
     private int evaluations;
     private double landed;
+    private double longest = FIRST_LONGEST;
 
     private Climb(Expectation fast, Expectation plain, Maximisation maximisation, int states) {
         this.fast = fast;
@@ -70,12 +73,13 @@ final class Climb {
     }
 
     /** One EM step from the farthest extrapolated point that is at least as likely as the first plain step, or the second. */
-    private Parameters leap(Parameters at, Parameters one, Parameters two, double longest, double first) {
-        double stride = longest;
+    private Parameters leap(Parameters at, Parameters one, Parameters two, double wanted, double first) {
+        double stride = StrictMath.min(wanted, longest);
         for (int attempt = 0; attempt < MOST_HALVINGS && stride > 1; attempt++) {
             Parameters candidate = Extrapolation.point(at, one, two, stride);
             landed = evaluate(candidate);
             if (landed >= first) {
+                longest = stride >= longest ? longest * FIRST_LONGEST : longest;
                 return maximisation.next(candidate, sums);
             }
             stride = (stride + 1) / 2;

@@ -112,8 +112,8 @@ public final class Fit {
         return events;
     }
 
-    /** Moments of all assets in each state; empty when there is no model, or no row of the window with all returns. */
+    /** Moments of all assets in each state; present exactly when the model is. */
     public Optional<WindowMoments> moments() {
-        return described.flatMap(Described::moments);
+        return described.map(Described::moments);
     }
 }

@@ -33,7 +33,7 @@ public final class Fitter {
     public static Fit fit(FitSettings settings, FitRequest request, StartRunner runner) {
         Observations x = request.observations();
         Window window = Window.of(x, settings.emission());
-        Optional<String> refusal = refusal(settings, x, window);
+        Optional<String> refusal = nothingToDescribe(request).or(() -> refusal(settings, x, window));
         if (refusal.isPresent()) {
             return Fit.failed(refusal.get(), Fit.Search.NONE, x.present());
         }
@@ -54,8 +54,9 @@ public final class Fitter {
     public static Fit given(RegimeModel model, FitRequest request) {
         Observations x = request.observations();
         Check.within(model.emission().dimension(), 1, 1, "dimension of the model");
-        if (x.present() == 0) {
-            return Fit.failed("the window holds no observation", Fit.Search.NONE, 0);
+        Optional<String> refusal = nothingToDescribe(request);
+        if (refusal.isPresent()) {
+            return Fit.failed(refusal.get(), Fit.Search.NONE, x.present());
         }
         Described described = Described.of(model, request);
         if (described.logLikelihood() == Double.NEGATIVE_INFINITY) {
@@ -72,11 +73,17 @@ public final class Fitter {
                 events);
     }
 
-    private static Optional<String> refusal(FitSettings settings, Observations x, Window window) {
-        int least = StrictMath.max(LEAST_COUNT * settings.states(), settings.parameterCount() + 1);
-        if (x.present() == 0) {
+    private static Optional<String> nothingToDescribe(FitRequest request) {
+        if (request.observations().present() == 0) {
             return Optional.of("the window holds no observation");
         }
+        return PosteriorMoments.possible(request)
+                ? Optional.empty()
+                : Optional.of("no row of the window holds an observation and the returns of all assets");
+    }
+
+    private static Optional<String> refusal(FitSettings settings, Observations x, Window window) {
+        int least = StrictMath.max(LEAST_COUNT * settings.states(), settings.parameterCount() + 1);
         if (x.present() < least) {
             return Optional.of("the window holds " + x.present() + " observations; " + settings.states()
                     + " states with " + settings.parameterCount() + " parameters need at least " + least);

@@ -1,7 +1,6 @@
 package sojourn.regime;
 
 import java.util.List;
-import java.util.Optional;
 import sojourn.numeric.CompensatedSum;
 
 /** Takes the moments of all assets in each state, weighted by smoothed probabilities. */
@@ -14,9 +13,9 @@ final class PosteriorMoments {
     /**
      * mean_k = sum_t g_t(k) r_t / sum_t g_t(k), covariance with the same weights and divisor, over the rows whose observation
      * and returns are present. A state with practically no weight gets the moments of the whole window, which adds an event.
-     * Empty when there is no such row.
+     * There must be such a row.
      */
-    static Optional<WindowMoments> of(Smoothed smoothed, FitRequest request, List<String> events) {
+    static WindowMoments of(Smoothed smoothed, FitRequest request, List<String> events) {
         Companions returns = request.companions();
         int states = smoothed.states();
         int assets = returns.assets();
@@ -27,9 +26,6 @@ final class PosteriorMoments {
             double total = weights(smoothed, request, k, weights);
             if (total < LEAST_WEIGHT) {
                 total = evenWeights(request, weights);
-                if (!(total > 0)) {
-                    return Optional.empty();
-                }
                 events.add("moments-of-window {" + k + "}");
             }
             for (int a = 0; a < assets; a++) {
@@ -44,7 +40,7 @@ final class PosteriorMoments {
                 }
             }
         }
-        return Optional.of(WindowMoments.of(states, assets, means, covariances));
+        return WindowMoments.of(states, assets, means, covariances);
     }
 
     /** Posterior weight of a state over the rows whose observation is present. */
@@ -74,6 +70,16 @@ final class PosteriorMoments {
             total += weights[t];
         }
         return total;
+    }
+
+    /** Whether the window holds a row with an observation and the returns of all assets. */
+    static boolean possible(FitRequest request) {
+        for (int t = 0; t < request.companions().size(); t++) {
+            if (usable(request, t)) {
+                return true;
+            }
+        }
+        return false;
     }
 
     private static boolean usable(FitRequest request, int row) {

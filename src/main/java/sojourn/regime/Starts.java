@@ -80,13 +80,13 @@ final class Starts {
         return start;
     }
 
-    /** Each state takes one observation as its mean, and a variance between a tenth and four times the window's. */
+    /** Each state takes one observation as its mean, and a variance between a hundredth and four times the window's. */
     private Parameters fromValues(RandomStream random) {
         List<Integer> rows = presentRows();
         Parameters start = chain(0.5 + 0.49 * random.nextDouble());
         for (int k = 0; k < settings.states(); k++) {
             double mean = value(rows.get(random.nextInt(rows.size())));
-            double size = StrictMath.exp(StrictMath.log(0.1) + random.nextDouble() * StrictMath.log(40));
+            double size = StrictMath.exp(StrictMath.log(0.01) + random.nextDouble() * StrictMath.log(400));
             start.set(start.mean(k), settings.emission().estimatesMeans() ? mean : 0);
             start.set(start.variance(k), size);
         }
