@@ -52,7 +52,7 @@ final class Composer {
         } catch (InputException e) {
             e.problems().forEach(problems::add);
         } catch (YAMLException e) {
-            problems.add(SyntaxFault.of(e).problem(file, text));
+            problems.add(SyntaxFault.of(e, file, text));
         }
         return Optional.empty();
     }

@@ -17,7 +17,7 @@ public record Place(String file, int line, int column, String path, String name)
     /** The place of the value of {@code key} in a map that stands here, if it is written at the given line and column. */
     Place ofKey(String key, int atLine, int atColumn) {
         String step = key.replace("~", "~0").replace("/", "~1");
-        return new Place(file, atLine, atColumn, path + "/" + step, "'" + key + "'");
+        return new Place(file, atLine, atColumn, path + "/" + step, "'" + Wording.shortened(key) + "'");
     }
 
     /** The place of an item of a list that stands here; {@code index} counts from 0. */

@@ -1,114 +1,102 @@
 package sojourn.document;
 
+import java.util.List;
+import java.util.Locale;
 import java.util.Optional;
+import org.jspecify.annotations.Nullable;
 import org.yaml.snakeyaml.error.Mark;
 import org.yaml.snakeyaml.error.MarkedYAMLException;
 import org.yaml.snakeyaml.error.YAMLException;
 import org.yaml.snakeyaml.reader.ReaderException;
 
-/**
- * A syntax error of the text, in our own words and at one place.
- *
- * @param place says where, once the text is at hand
- * @param what what is wrong
- * @param remedy what to do
- */
-record SyntaxFault(Where place, String what, String remedy) {
-    private static final String CHECK_INDENTATION =
-            "line keys of one map up in one column, under the key they belong to";
+/** Turns the parser's syntax errors into one message each, in our own words and at the place that needs mending. */
+final class SyntaxFault {
+    private static final String QUOTE_IT = "put the text in quotes if it is meant as text";
+    private static final List<Known> KNOWN = List.of(
+            new Known("", "\\t", At.ERROR, "a tab stands where only spaces can", "indent with spaces"),
+            new Known(
+                    "quoted scalar",
+                    "end of stream",
+                    At.START,
+                    "the quote that opens here is never closed",
+                    "close it with the same quote"),
+            new Known(
+                    "simple key",
+                    "could not find expected ':'",
+                    At.START,
+                    "a key has no colon after it",
+                    "write 'key: value' with a space after the colon"),
+            new Known(
+                    "flow sequence",
+                    "",
+                    At.START,
+                    "the list that opens here with [ is not closed",
+                    "put commas between its items and close it with ]"),
+            new Known(
+                    "flow mapping",
+                    "",
+                    At.START,
+                    "the map that opens here with { is not closed",
+                    "put commas between its entries and close it with }"),
+            new Known(
+                    "double-quoted scalar",
+                    "",
+                    At.ERROR,
+                    "a double-quoted text holds an unknown escape after its backslash",
+                    "double the backslash, or use single quotes"),
+            new Known(
+                    "",
+                    "mapping values are not allowed",
+                    At.ERROR,
+                    "a colon stands where no key can",
+                    "put the text in quotes, or check the indentation"),
+            new Known(
+                    "",
+                    "expected <block end>",
+                    At.ERROR,
+                    "the indentation does not match the lines above",
+                    "line keys of one map up in one column, under the key they belong to"),
+            new Known("", "cannot start any token", At.ERROR, "a value cannot begin with this character", QUOTE_IT),
+            new Known("directive", "", At.ERROR, "this line with % is not a directive that YAML knows", "remove it"),
+            new Known("", "(version", At.ERROR, "this version of YAML is not known", "remove the line with %YAML"),
+            new Known("alias", "", At.ERROR, "an alias has no proper name", QUOTE_IT),
+            new Known("anchor", "", At.ERROR, "an anchor has no proper name", QUOTE_IT),
+            new Known("block scalar", "", At.ERROR, "a text block (| or >) is not written properly", QUOTE_IT));
+    private static final Known OTHER = new Known("", "", At.ERROR, "this is not YAML", "check what stands before it");
 
-    /** A line and column, both 1-based, or the index of a code point. */
-    private record Where(int line, int column, Optional<Integer> codePoint) {
-        static Where of(Mark mark) {
-            return new Where(mark.getLine() + 1, mark.getColumn() + 1, Optional.empty());
+    private SyntaxFault() {}
+
+    /** Which of the parser's two marks shows what needs mending: where the construct began, or where it failed. */
+    private enum At {
+        START,
+        ERROR
+    }
+
+    /** An error recognised by what the parser says it was doing and what it found; "" matches anything. */
+    private record Known(String context, String problem, At at, String what, String remedy) {
+        boolean fits(MarkedYAMLException error) {
+            return contains(error.getContext(), context) && contains(error.getProblem(), problem);
+        }
+
+        private static boolean contains(@Nullable String said, String part) {
+            return part.isEmpty() || (said != null && said.contains(part));
         }
     }
 
-    static SyntaxFault of(YAMLException error) {
+    static Problem of(YAMLException error, String file, String text) {
         if (error instanceof ReaderException reader) {
-            return new SyntaxFault(
-                    new Where(0, 0, Optional.of(reader.getPosition())),
-                    String.format(
-                            java.util.Locale.ROOT, "the control character U+%04X stands here", reader.getCodePoint()),
-                    "remove it");
+            Place place = TextPlace.ofCodePoint(file, text, reader.getPosition());
+            String what = String.format(Locale.ROOT, "the control character U+%04X stands here", reader.getCodePoint());
+            return new Problem(file, place.line(), place.column(), what, "remove it");
         }
         if (error instanceof MarkedYAMLException marked) {
-            return of(marked);
+            Known known = KNOWN.stream().filter(k -> k.fits(marked)).findFirst().orElse(OTHER);
+            Mark there = marked.getProblemMark();
+            Mark mark = known.at() == At.START
+                    ? Optional.ofNullable(marked.getContextMark()).orElse(there)
+                    : there;
+            return new Problem(file, mark.getLine() + 1, mark.getColumn() + 1, known.what(), known.remedy());
         }
-        return new SyntaxFault(new Where(0, 0, Optional.empty()), "this is not YAML", "check the file's syntax");
-    }
-
-    private static SyntaxFault of(MarkedYAMLException error) {
-        String context = Optional.ofNullable(error.getContext()).orElse("");
-        String problem = Optional.ofNullable(error.getProblem()).orElse("");
-        Where there = Where.of(error.getProblemMark());
-        Where start = Optional.ofNullable(error.getContextMark()).map(Where::of).orElse(there);
-        if (problem.contains("\\t")) {
-            return new SyntaxFault(there, "a tab stands where only spaces can", "indent with spaces");
-        }
-        if (context.contains("quoted scalar") && problem.contains("end of stream")) {
-            return new SyntaxFault(start, "the quote that opens here is never closed", "close it with the same quote");
-        }
-        if (problem.contains("could not find expected ':'")) {
-            return new SyntaxFault(
-                    start, "a key has no colon after it", "write 'key: value' with a space after the colon");
-        }
-        if (context.contains("flow sequence")) {
-            return new SyntaxFault(
-                    start,
-                    "the list that opens here with [ is not closed",
-                    "put commas between its items and close it with ]");
-        }
-        if (context.contains("flow mapping")) {
-            return new SyntaxFault(
-                    start,
-                    "the map that opens here with { is not closed",
-                    "put commas between its entries and close it with }");
-        }
-        if (context.contains("directive") || problem.contains("YAML document (version")) {
-            return new SyntaxFault(there, "this line with % is not a directive that YAML knows", "remove it");
-        }
-        if (context.contains("double-quoted scalar")) {
-            String what = "a double-quoted text holds an unknown escape after its backslash";
-            return new SyntaxFault(there, what, "double the backslash, or use single quotes");
-        }
-        return new SyntaxFault(there, sentence(problem, context), remedy(problem));
-    }
-
-    private static String sentence(String problem, String context) {
-        if (problem.contains("mapping values are not allowed")) {
-            return "a colon stands where no key can";
-        }
-        if (problem.contains("expected <block end>")) {
-            return "the indentation does not match the lines above";
-        }
-        if (problem.contains("cannot start any token")) {
-            return "a value cannot begin with this character";
-        }
-        if (context.contains("alias") || context.contains("anchor")) {
-            return "an anchor or alias has no proper name";
-        }
-        if (context.contains("block scalar")) {
-            return "a text block (| or >) is not written properly";
-        }
-        return "this is not YAML";
-    }
-
-    private static String remedy(String problem) {
-        if (problem.contains("mapping values are not allowed")) {
-            return "put the text in quotes, or check the indentation";
-        }
-        if (problem.contains("expected <block end>")) {
-            return CHECK_INDENTATION;
-        }
-        return "put the text in quotes if it is meant as text";
-    }
-
-    Problem problem(String file, String text) {
-        if (place.codePoint().isPresent()) {
-            Place found = TextPlace.ofCodePoint(file, text, place.codePoint().get());
-            return new Problem(file, found.line(), found.column(), what, remedy);
-        }
-        return new Problem(file, place.line(), place.column(), what, remedy);
+        return new Problem(file, 0, 0, OTHER.what(), "check the file's syntax");
     }
 }

@@ -11,7 +11,7 @@ import org.junit.jupiter.params.provider.ValueSource;
 
 /** What is written reads back, and reader and schema agree, on many seeded random trees. */
 class AgreementTest {
-    private static final int TREES = 400;
+    private static final int TREES = 200;
 
     private static Document parse(String yaml, String description) {
         Problems problems = new Problems();

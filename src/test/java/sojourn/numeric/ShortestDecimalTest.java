@@ -13,7 +13,7 @@ import org.junit.jupiter.params.provider.CsvSource;
 import org.junit.jupiter.params.provider.ValueSource;
 
 class ShortestDecimalTest {
-    private static final int VALUES = 20_000;
+    private static final int VALUES = 3_000;
 
     // The specification of Double.toString since JDK 19: 2.0E23 is its own example of what earlier releases got wrong.
     @ParameterizedTest
