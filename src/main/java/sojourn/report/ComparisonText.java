@@ -96,8 +96,8 @@ public final class ComparisonText {
                 "same exp.",
                 "so far",
                 "Sharpe",
-                "same exp." + " ",
-                "so far "));
+                "same exp.",
+                "so far"));
         for (Judgement one : compared.ranked()) {
             Judged own = one.strategy();
             List<String> cells = new ArrayList<>(List.of(

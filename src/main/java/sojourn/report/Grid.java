@@ -13,13 +13,15 @@ import tech.tablesaw.api.Table;
 final class Grid {
     private static final String GAP = "  ";
 
+    private final List<String> headings;
     private final Table table;
 
-    /** With headings and no row. */
+    /** With headings and no row; two headings may be alike. */
     Grid(List<String> headings) {
+        this.headings = List.copyOf(headings);
         this.table = Table.create();
-        for (String heading : headings) {
-            table.addColumns(StringColumn.create(heading));
+        for (int i = 0; i < headings.size(); i++) {
+            table.addColumns(StringColumn.create(i + " " + headings.get(i)));
         }
     }
 
@@ -36,13 +38,13 @@ final class Grid {
         int columns = table.columnCount();
         int[] widths = new int[columns];
         for (int i = 0; i < columns; i++) {
-            widths[i] = table.column(i).name().length();
+            widths[i] = headings.get(i).length();
             for (String cell : table.stringColumn(i)) {
                 widths[i] = Math.max(widths[i], cell.length());
             }
         }
         StringBuilder text = new StringBuilder();
-        line(text, table.columnNames(), widths);
+        line(text, headings, widths);
         for (int i = 0; i < columns; i++) {
             text.append(i == 0 ? "" : GAP).append("-".repeat(widths[i]));
         }
