@@ -10,6 +10,7 @@ import sojourn.walk.Reading;
  * reading.
  */
 public final class RulePolicy implements Policy {
+    private static final Because STANDS_ASIDE = Because.of("stands aside: the last fit was refused");
     private static final Because NO_READING = Because.of("there is no accepted fit at this close");
 
     private final Rule rule;
@@ -48,7 +49,7 @@ public final class RulePolicy implements Policy {
     @Override
     public Decision at(Situation situation, Stance stance) {
         if (situation.reading().isEmpty()) {
-            return Decision.none(stance, NO_READING);
+            return withoutReading(situation, stance);
         }
         Reading reading = situation.reading().get();
         double[] probabilities = rule.probability().of(reading);
@@ -60,6 +61,18 @@ public final class RulePolicy implements Policy {
         int state = pacing.allowedState(lived, situation.bar());
         Weights wanted = mechanism.weights(probabilities, state, lived);
         return pacing.decide(situation, lived, state, wanted, explained(because, lived, state, stance));
+    }
+
+    /** Before the first decision nothing is decided; afterwards a missing reading means standing aside, in cash. */
+    private Decision withoutReading(Situation situation, Stance stance) {
+        if (stance.undecided() || !pacing.decides(situation)) {
+            return Decision.none(stance, NO_READING);
+        }
+        Weights cash = Weights.none(situation.assets().size());
+        Stance next = stance.deciding(stance.decided(), cash, situation.bar());
+        return cash.strictlyOutside(0, situation.weights())
+                ? Decision.order(cash, next, STANDS_ASIDE, Decision.Change.SAME)
+                : Decision.keep(cash, next, STANDS_ASIDE, Decision.Change.SAME);
     }
 
     /** Adds what the rule's own sentence cannot know: a state kept by stay-at-least, a change that comes after the fact. */

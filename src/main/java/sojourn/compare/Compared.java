@@ -2,7 +2,6 @@ package sojourn.compare;
 
 import java.util.ArrayList;
 import java.util.Comparator;
-import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -64,42 +63,19 @@ public record Compared(
             rows.add(new ComparisonRow(
                     one.file().slug(), ComparisonRow.Kind.STRATEGY, one.timelineKey(), one.reason(), Optional.empty()));
         }
-        rows.addAll(buyAndHold(ranked));
         for (Judgement one : ranked) {
-            one.yardsticks().forEach((name, judged) -> {
-                if (!name.equals(Yardstick.BUY_AND_HOLD.column())) {
-                    rows.add(yardstick(name + " of " + one.run().file().slug(), name, one, judged));
-                }
-            });
+            one.yardsticks().forEach((name, judged) -> rows.add(yardstick(name, one, judged)));
         }
         return List.copyOf(rows);
     }
 
-    /** Buy-and-hold once for all variants whose own comes to the same. */
-    private static List<ComparisonRow> buyAndHold(List<Judgement> ranked) {
-        String name = Yardstick.BUY_AND_HOLD.column();
-        Map<String, ComparisonRow> distinct = new LinkedHashMap<>();
-        for (Judgement one : ranked) {
-            ComparisonRow.Judged judged = one.buyAndHold();
-            String content = judged.from() + " " + judged.to() + " " + judged.bars() + " "
-                    + judged.scorecard().measures();
-            distinct.putIfAbsent(
-                    content, yardstick(name + " of " + one.run().file().slug(), name, one, judged));
-        }
-        if (distinct.size() == 1) {
-            ComparisonRow only = distinct.values().iterator().next();
-            return List.of(new ComparisonRow(name, only.kind(), "", "", only.judged()));
-        }
-        return List.copyOf(distinct.values());
-    }
-
-    private static ComparisonRow yardstick(String shown, String name, Judgement owner, ComparisonRow.Judged judged) {
+    private static ComparisonRow yardstick(String name, Judgement owner, ComparisonRow.Judged judged) {
         boolean causal = false;
         for (Yardstick yardstick : Yardstick.values()) {
             causal |= yardstick.column().equals(name) && yardstick.knowledge() == Yardstick.Knowledge.CAUSAL;
         }
         return new ComparisonRow(
-                shown,
+                name + " of " + owner.run().file().slug(),
                 causal ? ComparisonRow.Kind.YARDSTICK : ComparisonRow.Kind.AFTER_THE_FACT,
                 owner.run().timelineKey(),
                 "",

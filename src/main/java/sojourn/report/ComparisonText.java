@@ -1,11 +1,13 @@
 package sojourn.report;
 
 import java.util.ArrayList;
+import java.util.LinkedHashMap;
+import java.util.LinkedHashSet;
 import java.util.List;
-import java.util.Locale;
 import java.util.Map;
+import java.util.Set;
+import java.util.TreeSet;
 import sojourn.archive.Caution;
-import sojourn.archive.ComparisonRow;
 import sojourn.archive.ComparisonRow.Judged;
 import sojourn.compare.Compared;
 import sojourn.compare.Judgement;
@@ -15,7 +17,7 @@ import sojourn.measure.Yardstick;
 
 /** A comparison as a terminal shows it, at most 100 columns wide: caution, risk and return, what it took, failures. */
 public final class ComparisonText {
-    private static final int LONGEST_NAME = 25;
+    private static final int LONGEST_NAME = 28;
 
     private ComparisonText() {}
 
@@ -27,6 +29,7 @@ public final class ComparisonText {
             text.append(headline(compared)).append('\n');
             text.append(riskAndReturn(compared)).append('\n');
             text.append(whatItTook(compared)).append('\n');
+            text.append(againstSameExposure(compared)).append('\n');
         }
         for (Run.Failed one : compared.failed()) {
             text.append(Paragraph.wrapped("FAILED " + one.file().slug() + ": " + one.reason(), 2));
@@ -35,41 +38,59 @@ public final class ComparisonText {
     }
 
     private static String headline(Compared compared) {
-        Judged first = compared.ranked().get(0).strategy();
-        boolean same = compared.ranked().stream()
-                .allMatch(one -> one.strategy().from().equals(first.from())
-                        && one.strategy().to().equals(first.to()));
-        String window = same
-                ? first.from() + " to " + first.to() + ", " + first.bars() + " bars"
-                : "windows differ, see the dates in comparison.csv";
+        int variants = compared.ranked().size();
         return Paragraph.wrapped(
-                compared.ranked().size() + (compared.ranked().size() == 1 ? " variant" : " variants") + " over "
-                        + window
-                        + ", ranked by " + compared.rankBy().label().toLowerCase(Locale.ROOT)
+                variants + (variants == 1 ? " variant" : " variants") + " over " + window(compared) + ", ranked by "
+                        + compared.rankBy().key().replace('_', ' ')
                         + " as declared; risk first. The interval is 95 %, robust to serial correlation; it does not know how"
                         + " many variants were tried.",
                 0);
     }
 
+    private static String window(Compared compared) {
+        Set<String> dates = new LinkedHashSet<>();
+        TreeSet<Integer> bars = new TreeSet<>();
+        for (Judgement one : compared.ranked()) {
+            dates.add(one.strategy().from() + " to " + one.strategy().to());
+            bars.add(one.strategy().bars());
+        }
+        String count = bars.size() == 1 ? bars.first() + " bars" : bars.first() + " to " + bars.last() + " bars";
+        return (dates.size() == 1 ? dates.iterator().next() : dates.size() + " different windows (see comparison.csv)")
+                + ", " + count;
+    }
+
     private static String riskAndReturn(Compared compared) {
-        Grid grid = new Grid(List.of(
-                "", "worst fall", "bars under", "bad bar", "volatility", "growth", "vs hold", "Sharpe", "interval"));
+        Grid grid =
+                new Grid(List.of("", "deepest", "under", "bad bar", "vol.", "growth", "vs hold", "Sharpe", "interval"));
         int rank = 1;
         for (Judgement one : compared.ranked()) {
             grid.add(risk(rank++ + " " + shortened(one.run().file().slug()), one.strategy()));
         }
-        for (ComparisonRow row : compared.rows()) {
-            if (row.kind() == ComparisonRow.Kind.YARDSTICK
-                    && row.variant().startsWith(Yardstick.BUY_AND_HOLD.column())) {
-                grid.add(risk(
-                        shortened(row.variant().replace('_', '-')), row.judged().orElseThrow()));
-            }
-        }
+        buyAndHold(compared).forEach(grid::add);
         return grid.text()
                 + Paragraph.wrapped(
-                        "worst fall: deepest drawdown at closes; bars under: longest time below an earlier peak; bad bar: mean loss"
-                                + " of the worst 5 % of bars; growth after costs; vs hold: growth less buy-and-hold's.",
+                        "deepest: worst drawdown at closes; under: most bars in a row below an earlier peak; bad bar: mean loss of the"
+                                + " worst 5 % of bars; vol., growth, Sharpe: per year, after costs; vs hold: growth less"
+                                + " buy-and-hold's.",
                         0);
+    }
+
+    /** One line for all variants whose buy-and-hold reads alike. */
+    private static List<List<String>> buyAndHold(Compared compared) {
+        Map<List<String>, List<String>> owners = new LinkedHashMap<>();
+        for (Judgement one : compared.ranked()) {
+            List<String> figures = risk("", one.buyAndHold());
+            owners.computeIfAbsent(figures.subList(1, figures.size()), unused -> new ArrayList<>())
+                    .add(one.run().file().slug());
+        }
+        List<List<String>> lines = new ArrayList<>();
+        owners.forEach((figures, names) -> {
+            List<String> line = new ArrayList<>();
+            line.add(owners.size() == 1 ? "  buy-and-hold" : shortened("  held by " + names.get(0)));
+            line.addAll(figures);
+            lines.add(line);
+        });
+        return lines;
     }
 
     private static List<String> risk(String name, Judged judged) {
@@ -86,33 +107,39 @@ public final class ComparisonText {
     }
 
     private static String whatItTook(Compared compared) {
-        Grid grid = new Grid(List.of(
-                "per year, except exposure",
-                "exposure",
-                "switches",
-                "turnover",
-                "cost",
-                "growth",
-                "same exp.",
-                "so far",
-                "Sharpe",
-                "same exp.",
-                "so far"));
+        Grid grid = new Grid(
+                List.of("What it took, a year", "exposure", "switches", "turnover", "before costs", "cost", "growth"));
         for (Judgement one : compared.ranked()) {
             Judged own = one.strategy();
-            List<String> cells = new ArrayList<>(List.of(
-                    shortened(one.run().file().slug()),
+            grid.add(List.of(
+                    shortened("  " + one.run().file().slug()),
                     Figures.percent(own.get(Measure.AVERAGE_EXPOSURE)),
                     Figures.times(own.get(Measure.SWITCHES_PER_YEAR)),
                     Figures.times(own.get(Measure.TURNOVER_PER_YEAR)),
+                    Figures.percent(own.get(Measure.GROWTH_BEFORE_COSTS_PER_YEAR)),
                     Figures.finePercent(own.get(Measure.COST_PER_YEAR)),
                     Figures.percent(own.get(Measure.GROWTH_PER_YEAR))));
-            cells.add(of(one, Yardstick.SAME_EXPOSURE, Measure.GROWTH_PER_YEAR));
-            cells.add(of(one, Yardstick.SAME_EXPOSURE_SO_FAR, Measure.GROWTH_PER_YEAR));
-            cells.add(Figures.ratio(own.get(Measure.SHARPE)));
-            cells.add(of(one, Yardstick.SAME_EXPOSURE, Measure.SHARPE));
-            cells.add(of(one, Yardstick.SAME_EXPOSURE_SO_FAR, Measure.SHARPE));
-            grid.add(cells);
+        }
+        return grid.text()
+                + Paragraph.wrapped(
+                        "exposure: average net weight of all assets but cash; turnover: half of all bought and sold, in units of"
+                                + " wealth; before costs: growth of the same holdings, every trade free.",
+                        0);
+    }
+
+    private static String againstSameExposure(Compared compared) {
+        Grid grid = new Grid(
+                List.of("Growth and Sharpe beside", "growth", "same exp.", "so far", "Sharpe", "same exp.", "so far"));
+        for (Judgement one : compared.ranked()) {
+            Judged own = one.strategy();
+            grid.add(List.of(
+                    shortened("  " + one.run().file().slug()),
+                    Figures.percent(own.get(Measure.GROWTH_PER_YEAR)),
+                    of(one, Yardstick.SAME_EXPOSURE, Measure.GROWTH_PER_YEAR),
+                    of(one, Yardstick.SAME_EXPOSURE_SO_FAR, Measure.GROWTH_PER_YEAR),
+                    Figures.ratio(own.get(Measure.SHARPE)),
+                    of(one, Yardstick.SAME_EXPOSURE, Measure.SHARPE),
+                    of(one, Yardstick.SAME_EXPOSURE_SO_FAR, Measure.SHARPE)));
         }
         return grid.text()
                 + Paragraph.wrapped(

@@ -9,18 +9,23 @@ final class Paragraph {
 
     /** Wrapped at spaces; every line but the first begins with {@code indent} spaces. Ends with a line end. */
     static String wrapped(String text, int indent) {
+        return after("", text, indent);
+    }
+
+    /** The same behind a head that stands on the first line. */
+    static String after(String head, String text, int indent) {
         StringBuilder all = new StringBuilder();
-        StringBuilder line = new StringBuilder();
+        StringBuilder line = new StringBuilder(head);
+        boolean fresh = true;
         for (String word : text.strip().split("\\s+", -1)) {
-            if (!line.toString().isBlank() && line.length() + 1 + word.length() > WIDTH) {
+            if (!fresh && line.length() + 1 + word.length() > WIDTH) {
                 all.append(line.toString().stripTrailing()).append('\n');
                 line = new StringBuilder(" ".repeat(indent));
-                line.append(word);
-            } else {
-                line.append(line.isEmpty() || line.toString().isBlank() ? "" : " ")
-                        .append(word);
+                fresh = true;
             }
+            line.append(fresh ? "" : " ").append(word);
+            fresh = false;
         }
-        return all.append(line).append('\n').toString();
+        return all.append(line.toString().stripTrailing()).append('\n').toString();
     }
 }

@@ -1,0 +1,173 @@
+package sojourn.report;
+
+import java.time.LocalDate;
+import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
+import java.util.stream.Collectors;
+import sojourn.archive.Caution;
+import sojourn.compare.Prepared;
+import sojourn.document.Problem;
+import sojourn.market.CashSource;
+import sojourn.market.Finding;
+import sojourn.market.InputFile;
+import sojourn.market.Known;
+import sojourn.market.PriceTable;
+import sojourn.measure.Yardstick;
+import sojourn.regime.ModelKind;
+import sojourn.strategy.Strategy;
+import sojourn.trade.TradeSettings;
+import sojourn.walk.FitPlan;
+import sojourn.walk.RefitSchedule;
+import sojourn.walk.RefitSettings;
+import sojourn.walk.RegimeSettings;
+
+/** What would be run, in plain English, with everything odd about the files and everything that is left out. */
+public final class PlanText {
+    private static final int INDENT = 13;
+    private static final String NOT_MODELLED =
+            "taxes; dividends and splits other than those already in the price columns; market impact, minimum fees, partial fills;"
+                    + " costs that change with volatility; fees for borrowing and lending; currencies; delisting. Trades happen at"
+                    + " closing prices, in fractional units, whatever their size.";
+
+    private final StringBuilder text = new StringBuilder();
+
+    private PlanText() {}
+
+    /** The caution, then the plan of each strategy. */
+    public static String of(List<Prepared> prepared) {
+        PlanText plan = new PlanText();
+        plan.text.append(Paragraph.wrapped(Caution.TEXT, 0));
+        for (Prepared one : prepared) {
+            plan.text.append('\n');
+            if (one instanceof Prepared.Ready ready) {
+                plan.ready(ready);
+            } else if (one instanceof Prepared.Unreadable unreadable) {
+                plan.unreadable(unreadable);
+            }
+        }
+        return plan.text.toString();
+    }
+
+    private void unreadable(Prepared.Unreadable one) {
+        title(one.file().strategy().name(), one.file().shownName());
+        for (Problem problem : one.problems()) {
+            line("Fault", problem.toString());
+        }
+    }
+
+    private void ready(Prepared.Ready ready) {
+        Strategy strategy = ready.file().strategy();
+        PriceTable table = ready.market().table();
+        title(strategy.name(), ready.file().shownName());
+        line(
+                "Why",
+                strategy.hypothesis()
+                        .map(String::strip)
+                        .orElse("no hypothesis is written down; write one before you look"));
+        for (InputFile file : ready.market().files()) {
+            line(file.role(), file.file() + ", " + file.rows() + " rows, " + file.first() + " to " + file.last());
+        }
+        line("Cash", cash(strategy.cash()));
+        Known last = table.knownAt(table.size() - 1);
+        line(
+                "Bars",
+                table.size() + " common " + table.barLength().word() + " bars of "
+                        + String.join(", ", table.assets()) + ", " + last.date(0) + " to " + last.date() + "; "
+                        + (int) table.barLength().periodsPerYear() + " count as a year");
+        line("Watches", watches(strategy.regimes()));
+        FitPlan plan = FitPlan.of(table, strategy.regimes(), strategy.refit());
+        line("Fits", fits(strategy.refit(), strategy.regimes(), plan));
+        line("Rule", RuleText.of(strategy.rule()));
+        line("Trades", trades(strategy, plan));
+        line("Judged", judged(strategy));
+        line("Left out", NOT_MODELLED);
+        for (Finding finding : ready.market().findings()) {
+            line("Finding", finding.toString());
+        }
+        if (ready.market().findings().isEmpty()) {
+            line("Findings", "none");
+        }
+    }
+
+    private static String cash(CashSource cash) {
+        if (cash instanceof CashSource.Constant constant) {
+            return constant.percentPerYear() == 0
+                    ? "earns nothing; ratios are taken over zero"
+                    : "earns " + constant.percentPerYear() + " % a year, simple, "
+                            + constant.dayCount().word();
+        }
+        return "earns the last rate dated at or before the close before, for the calendar days between two bars";
+    }
+
+    private static String watches(RegimeSettings regimes) {
+        String observed = regimes.observe().stream()
+                .map(one -> one.word() + " of " + one.asset())
+                .collect(Collectors.joining(", "));
+        String model = regimes.model().word() + ", " + regimes.emission().word() + " emissions";
+        String order = regimes.model() == ModelKind.ONE_REGIME
+                ? ""
+                : ", ordered by the volatility of " + regimes.orderedBy() + " at every fit";
+        return observed + "; " + model + "; regimes " + String.join(", ", regimes.states()) + order;
+    }
+
+    private static String fits(RefitSettings refit, RegimeSettings regimes, FitPlan plan) {
+        if (plan.fitDates().isEmpty()) {
+            return "none: first-fit-after is " + refit.firstFitAfter() + " and there are " + plan.observations()
+                    + " observations; this strategy will fail";
+        }
+        List<LocalDate> dates = plan.fitDates();
+        String what = regimes.fixed().isPresent()
+                ? "declared parameters (an external prior), taken up "
+                : "maximum likelihood from " + refit.starts() + " starts and the fit before (seed " + refit.seed()
+                        + "), ";
+        String window = refit.rolling().isPresent()
+                ? "on the last " + refit.rolling().getAsInt() + " observations"
+                : "on all observations so far";
+        return what + dates.size() + " times from " + dates.get(0) + " to " + dates.get(dates.size() - 1) + ", "
+                + every(refit.schedule()) + ", " + window + "; parameters are frozen in between";
+    }
+
+    private static String every(RefitSchedule schedule) {
+        if (schedule instanceof RefitSchedule.EveryObservations count) {
+            return count.observations() == 1
+                    ? "at every observation"
+                    : "every " + count.observations() + " observations";
+        }
+        return "on the first bar of each " + schedule.toString().toLowerCase(Locale.ROOT);
+    }
+
+    private static String trades(Strategy strategy, FitPlan plan) {
+        TradeSettings trade = strategy.trade();
+        Optional<LocalDate> first = plan.fitDates().stream().findFirst();
+        String start = first.map(date -> "decides " + trade.decide().word() + ", at the earliest on " + date
+                        + " (if that fit is accepted); ")
+                .orElse("never decides; ");
+        String fill = trade.delay() == 0
+                ? "fills at the next close"
+                : "fills at the close " + (1 + trade.delay()) + " bars after the decision";
+        String band = trade.noTradeBand() > 0
+                ? "; leaves weights within " + trade.noTradeBand() + " of their targets alone"
+                : "";
+        String stay = trade.stayAtLeast() > 1 ? "; keeps a state for at least " + trade.stayAtLeast() + " bars" : "";
+        return start + fill + band + stay + "; pays " + trade.costs().commissionBps() + " bps commission and "
+                + trade.costs().halfSpreadBps() + " bps half-spread on what is traded; begins with "
+                + (long) trade.capital();
+    }
+
+    private static String judged(Strategy strategy) {
+        return "against "
+                + strategy.judge().against().stream().map(Yardstick::word).collect(Collectors.joining(", "))
+                + "; doing nothing is " + RuleText.weights(strategy.judge().buyAndHold()) + "; ranked by "
+                + strategy.judge().rankBy().key().replace('_', ' ');
+    }
+
+    private void title(String name, String file) {
+        text.append(name).append("  [").append(file).append("]\n");
+    }
+
+    private void line(String label, String content) {
+        String head = String.format(Locale.ROOT, "  %-" + (INDENT - 3) + "s ", label);
+        text.append(Paragraph.after(head, content, INDENT));
+    }
+}
