@@ -15,6 +15,9 @@ final class Climb {
     static final int MOST_EVALUATIONS = 2000;
 
     private static final int PLAIN_STEPS = 20;
+    /** Leaps begin when a plain step gains less than so many nats. */
+    private static final double NEAR = 0.1;
+
     private static final double FIRST_LONGEST = 4;
     private static final int MOST_HALVINGS = 3;
     private static final double PARAMETER_TOLERANCE = 1e-9;
@@ -60,7 +63,7 @@ final class Climb {
             double stride = Extrapolation.stride(at, one, two);
             converged = stride * Extrapolation.largestChange(one, two) < PARAMETER_TOLERANCE
                     || stride * StrictMath.max(0, first - reached) < GAIN_TOLERANCE;
-            boolean leap = !converged && stride > 1 && evaluations > PLAIN_STEPS;
+            boolean leap = !converged && stride > 1 && evaluations > PLAIN_STEPS && first - reached < NEAR;
             at = leap ? leap(at, one, two, stride, first) : two;
             double before = leap ? landed : first;
             reached = notBelow(before, evaluate(at));
