@@ -3,8 +3,7 @@ package sojourn.regime;
 /**
  * Extrapolates two EM steps: with r the first step and v the second minus the first, the stride is |r| / |v| and the point
  * theta0 + 2 stride r + stride^2 v (Varadhan and Roland 2008, Scand. J. Statistics 35, 335-353, scheme S3 with stride = -alpha).
- * Coordinates are the means and probabilities as they are and the logs of the variances. The initial distribution of a chain is
- * left where EM took it: its maxima are corners, and a leap could land at the wrong one.
+ * Coordinates are the means and probabilities as they are and the logs of the variances.
  */
 final class Extrapolation {
     /** A probability that the extrapolation would make negative is cut to this part of where EM had taken it. */
@@ -16,7 +15,7 @@ final class Extrapolation {
     static double stride(Parameters zero, Parameters one, Parameters two) {
         double r2 = 0;
         double v2 = 0;
-        for (int e = first(zero); e < zero.size(); e++) {
+        for (int e = 0; e < zero.size(); e++) {
             double r = coordinate(one, e) - coordinate(zero, e);
             double v = (coordinate(two, e) - coordinate(one, e)) - r;
             r2 += r * r;
@@ -37,7 +36,7 @@ final class Extrapolation {
     /** The extrapolated point, brought back to probabilities and to variances not below the floor. */
     static Parameters point(Parameters zero, Parameters one, Parameters two, double stride) {
         Parameters point = two.copy();
-        for (int e = first(zero); e < zero.size(); e++) {
+        for (int e = 0; e < zero.size(); e++) {
             double start = coordinate(zero, e);
             double r = coordinate(one, e) - start;
             double v = (coordinate(two, e) - coordinate(one, e)) - r;
@@ -51,7 +50,7 @@ final class Extrapolation {
             }
         }
         int states = zero.states();
-        for (int row = first(point); row < point.firstMean(); row += states) {
+        for (int row = 0; row < point.firstMean(); row += states) {
             normalise(point, row, states);
         }
         return point;
@@ -65,10 +64,6 @@ final class Extrapolation {
         for (int e = start; e < start + length; e++) {
             point.set(e, point.at(e) / total);
         }
-    }
-
-    private static int first(Parameters p) {
-        return p.kind() == ModelKind.HIDDEN_MARKOV ? p.states() : 0;
     }
 
     private static boolean isVariance(Parameters p, int entry) {
