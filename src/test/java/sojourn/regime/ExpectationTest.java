@@ -124,6 +124,33 @@ class ExpectationTest {
         agree(window, p, new IndependentExpectation(states, window));
     }
 
+    @ParameterizedTest
+    @ValueSource(ints = {2, 3, 5})
+    void likelihoodFromEachStateAgreesWithTheFilterStartedThere(int states) {
+        RandomStream random = RandomStream.of(14, "corners", "states " + states);
+        HiddenMarkov model = Fixtures.randomModel(states, random);
+        double[] values = Fixtures.simulate(model, 40, random);
+        Window window = window(values, new boolean[40]);
+        ExpectedSums sums = new ExpectedSums(states);
+        Parameters p = Fixtures.standardised(model, window);
+        assertThat(Expectation.of(ModelKind.HIDDEN_MARKOV, states, window).fill(p, sums))
+                .isTrue();
+        double[] logs = new double[states];
+        double[] transition = new double[states * states];
+        for (int i = 0; i < states * states; i++) {
+            transition[i] = model.transition(i / states, i % states);
+        }
+        for (int k = 0; k < states; k++) {
+            double[] corner = new double[states];
+            corner[k] = 1;
+            HiddenMarkov cornered = HiddenMarkov.of(corner, transition, model.emission());
+            logs[k] =
+                    FilterState.after(cornered, Observations.univariate(values)).logLikelihood();
+            double ratio = sums.likelihoodFrom[k] / sums.likelihoodFrom[0];
+            assertThat(StrictMath.log(ratio)).isCloseTo(logs[k] - logs[0], within(1e-10));
+        }
+    }
+
     @Test
     void farOutliersAgreeWithThePlainStep() {
         RandomStream random = RandomStream.of(13, "outlier");
