@@ -8,6 +8,9 @@ import java.util.Arrays;
  */
 final class ExpectedSums {
     final double[] initial;
+    /** Likelihood of the whole window given that it starts in each state, up to a common factor; all 0 where not known. */
+    final double[] likelihoodFrom;
+
     final double[] transitions;
     final double[] count;
     final double[] sum;
@@ -16,6 +19,7 @@ final class ExpectedSums {
 
     ExpectedSums(int states) {
         initial = new double[states];
+        likelihoodFrom = new double[states];
         transitions = new double[states * states];
         count = new double[states];
         sum = new double[states];
@@ -29,6 +33,7 @@ final class ExpectedSums {
         Arrays.fill(sum, 0);
         Arrays.fill(squares, 0);
         Arrays.fill(initial, 0);
+        Arrays.fill(likelihoodFrom, 0);
         logLikelihood = 0;
     }
 }

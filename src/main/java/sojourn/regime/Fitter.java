@@ -18,6 +18,9 @@ public final class Fitter {
     /** Starts agree when they end within so many nats. */
     private static final double AGREEMENT = 1e-4;
 
+    /** Nats by which several states must beat a single one. */
+    private static final double NOTHING_GAINED = 1e-6;
+
     private Fitter() {}
 
     /** Fits one start after the other. */
@@ -88,11 +91,11 @@ public final class Fitter {
             return Optional.of("the window holds " + x.present() + " observations; " + settings.states()
                     + " states with " + settings.parameterCount() + " parameters need at least " + least);
         }
-        if (constant(x) || !(window.scale() > 0)) {
+        if (constant(x)) {
             return Optional.of("all observations of the window are equal");
         }
-        if (Double.isInfinite(window.scale())) {
-            return Optional.of("the observations of the window are too large to square");
+        if (!(window.scale() > 0 && Double.isFinite(window.scale()))) {
+            return Optional.of("the observations of the window are too large, or too close together, to square");
         }
         return Optional.empty();
     }
@@ -127,10 +130,11 @@ public final class Fitter {
     }
 
     private static Fit choose(FitSettings settings, FitRequest request, Window window, List<Climb.Summit> summits) {
-        List<Climb.Summit> sound = summits.stream().filter(s -> !degenerate(s)).toList();
+        List<Climb.Summit> sound =
+                summits.stream().filter(s -> !degenerate(s, window)).toList();
         Climb.Summit best = best(sound.isEmpty() ? summits : sound);
         int agreeing = (int) summits.stream()
-                .filter(s -> degenerate(s) == degenerate(best)
+                .filter(s -> degenerate(s, window) == degenerate(best, window)
                         && StrictMath.abs(s.logLikelihood() - best.logLikelihood()) <= AGREEMENT)
                 .count();
         Fit.Search search = new Fit.Search(best.evaluations(), summits.size(), agreeing);
@@ -143,7 +147,7 @@ public final class Fitter {
         if (refused > 0) {
             events.add("degenerate-starts " + refused + " of " + summits.size());
         }
-        Outcome outcome = outcome(best);
+        Outcome outcome = outcome(best, window);
         return Fit.of(outcome, explanation(outcome, best), search, window.count(), described, events);
     }
 
@@ -159,8 +163,8 @@ public final class Fitter {
                 .orElseThrow(() -> new IllegalStateException("no start has a likelihood; this is a bug"));
     }
 
-    private static Outcome outcome(Climb.Summit summit) {
-        if (degenerate(summit)) {
+    private static Outcome outcome(Climb.Summit summit, Window window) {
+        if (degenerate(summit, window)) {
             return Outcome.DEGENERATE;
         }
         return summit.converged() ? Outcome.CONVERGED : Outcome.ITERATION_LIMIT;
@@ -169,20 +173,23 @@ public final class Fitter {
     private static String explanation(Outcome outcome, Climb.Summit summit) {
         return switch (outcome) {
             case DEGENERATE ->
-                "in every start a state closed in on a few observations: it accounts for fewer than " + LEAST_COUNT
-                        + " of them, or its variance fell to a ten-thousandth of the window's";
+                "in every start a state closed in on a few observations (it accounts for fewer than " + LEAST_COUNT
+                        + " of them, or its variance fell to a ten-thousandth of the window's), or the states did not part";
             case ITERATION_LIMIT ->
                 "the likelihood was still rising after " + summit.evaluations() + " evaluations; the model is usable";
             default -> "";
         };
     }
 
-    private static boolean degenerate(Climb.Summit summit) {
+    /** A state on too few observations or on a single value; or states that add nothing to one regime, which is no maximum. */
+    private static boolean degenerate(Climb.Summit summit, Window window) {
         boolean floored = false;
         Parameters p = summit.parameters();
         for (int k = 0; k < p.states(); k++) {
             floored |= p.at(p.variance(k)) <= Maximisation.FLOOR;
         }
-        return floored || summit.leastCount() < LEAST_COUNT;
+        return floored
+                || summit.leastCount() < LEAST_COUNT
+                || summit.logLikelihood() < window.oneRegimeLogLikelihood() + NOTHING_GAINED;
     }
 }

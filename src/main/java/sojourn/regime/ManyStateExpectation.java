@@ -103,6 +103,7 @@ final class ManyStateExpectation implements Expectation {
             if (first == 0) {
                 for (int k = 0; k < states; k++) {
                     sums.initial[k] = a[k] * y[k] / norm;
+                    sums.likelihoodFrom[k] = b[k] * y[k];
                 }
                 return true;
             }

@@ -134,6 +134,8 @@ final class TwoStateExpectation implements Expectation {
             if (first == 0) {
                 sums.initial[0] = a0[0] * y0 * inverse;
                 sums.initial[1] = a1[0] * y1 * inverse;
+                sums.likelihoodFrom[0] = b0[0] * y0;
+                sums.likelihoodFrom[1] = b1[0] * y1;
                 return true;
             }
             double w0 = b0[first] * y0;

@@ -10,6 +10,8 @@ final class Window {
     /** No rows, no change of unit. */
     static final Window UNIT = new Window(new double[0], new double[0], 0, 0, 1);
 
+    private static final double LN_TWO_PI = 1.8378770664093453;
+
     private final double[] values;
     private final double[] present;
     private final int count;
@@ -24,7 +26,7 @@ final class Window {
         this.scale = scale;
     }
 
-    /** The window of those observations; its scale is 0 for a constant series and infinite for one that overflows. */
+    /** The window of those observations; its scale is 0 for a constant series, and not finite where squares overflow. */
     static Window of(Observations x, EmissionFamily family) {
         int rows = x.size();
         double center = family.estimatesMeans() ? mean(x) : 0;
@@ -88,5 +90,10 @@ final class Window {
     /** What the rest was divided by: the standard deviation with divisor n. */
     double scale() {
         return scale;
+    }
+
+    /** The log-likelihood of the standardised observations under a single regime: -n/2 (ln 2 pi + 1). */
+    double oneRegimeLogLikelihood() {
+        return -0.5 * count * (LN_TWO_PI + 1);
     }
 }

@@ -106,4 +106,20 @@ final class Fixtures {
         }
         return p;
     }
+
+    /** The parameters of a model in a window's unit. */
+    static Parameters standardised(RegimeModel model, Window window) {
+        boolean chain = model instanceof HiddenMarkov;
+        Parameters p = Parameters.blank(chain ? ModelKind.HIDDEN_MARKOV : ModelKind.MIXTURE, model.states());
+        for (int k = 0; k < model.states(); k++) {
+            double deviation = model.emission().standardDeviation(k, 0) / window.scale();
+            p.set(p.initial(k), model.initial(k));
+            p.set(p.mean(k), (model.emission().mean(k, 0) - window.center()) / window.scale());
+            p.set(p.variance(k), deviation * deviation);
+            for (int j = 0; chain && j < model.states(); j++) {
+                p.set(p.transition(k, j), model.transition(k, j));
+            }
+        }
+        return p;
+    }
 }
