@@ -17,7 +17,7 @@ public final class ComparisonFile {
         for (Measure measure : Measure.values()) {
             header.add(measure.key());
         }
-        header.addAll(List.of("drawdown_peak", "drawdown_trough", "drawdown_recovered"));
+        header.addAll(List.of("drawdown_peak", "drawdown_trough", "drawdown_recovered", "parameters"));
         Table table = new Table(header);
         for (ComparisonRow line : rows) {
             Table.Row row = table.row()
@@ -29,11 +29,11 @@ public final class ComparisonFile {
             if (line.judged().isPresent()) {
                 addJudged(row, line.judged().get());
             } else {
-                for (int blank = 5; blank < header.size(); blank++) {
+                for (int blank = 5; blank < header.size() - 1; blank++) {
                     row.blank();
                 }
             }
-            row.end();
+            row.add(line.parameters().word()).end();
         }
         return table;
     }

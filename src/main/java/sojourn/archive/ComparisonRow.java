@@ -12,10 +12,31 @@ import sojourn.measure.Scorecard;
  * @param variant the variant's name, or the yardstick's with the variants it belongs to
  * @param kind what the line stands for
  * @param timeline address of the timeline it rests on; empty for a variant that has none
+ * @param parameters whether the regime model was fitted or declared
  * @param reason why a variant failed; empty otherwise
  * @param judged the window and the measures; empty for a variant that failed
  */
-public record ComparisonRow(String variant, Kind kind, String timeline, String reason, Optional<Judged> judged) {
+public record ComparisonRow(
+        String variant, Kind kind, String timeline, Parameters parameters, String reason, Optional<Judged> judged) {
+    /** Where the parameters of the regime model come from. */
+    public enum Parameters {
+        /** Fitted inside each window. */
+        FITTED("fitted"),
+        /** Declared in the strategy file. */
+        EXTERNAL_PRIOR("external-prior");
+
+        private final String word;
+
+        Parameters(String word) {
+            this.word = word;
+        }
+
+        /** The word in files. */
+        public String word() {
+            return word;
+        }
+    }
+
     /** What a line stands for. */
     public enum Kind {
         /** A strategy. */
@@ -51,6 +72,11 @@ public record ComparisonRow(String variant, Kind kind, String timeline, String r
         public Measured get(Measure measure) {
             return scorecard.get(measure);
         }
+    }
+
+    /** The same line without the words of its failure. */
+    public ComparisonRow withoutReason() {
+        return new ComparisonRow(variant, kind, timeline, parameters, "", judged);
     }
 
     /** {@code ran}, {@code ruined} or {@code failed}. */

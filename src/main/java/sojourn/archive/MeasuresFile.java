@@ -25,12 +25,14 @@ public final class MeasuresFile {
      * @param yardsticks what each yardstick came to, by column name
      * @param byRegime the variant's returns by regime
      * @param regimes names of the regimes
+     * @param parameters whether the regime model was fitted or declared
      */
     public static String of(
             ComparisonRow.Judged strategy,
             Map<String, ComparisonRow.Judged> yardsticks,
             RegimeTable byRegime,
-            List<String> regimes) {
+            List<String> regimes,
+            ComparisonRow.Parameters parameters) {
         ObjectNode root = JSON.objectNode();
         root.put("caution", Caution.TEXT);
         ObjectNode window = root.putObject("window");
@@ -38,6 +40,7 @@ public final class MeasuresFile {
         window.put("to", strategy.to().toString());
         window.put("bars", strategy.bars());
         root.put("outcome", strategy.outcome());
+        root.put("parameters", parameters.word());
         root.set("strategy", measures(strategy));
         root.set("worst_drawdown", drawdown(strategy.scorecard().drawdown()));
         root.set("by_regime", byRegime(byRegime, regimes));

@@ -45,7 +45,10 @@ public record Compared(
         for (Judgement one : ranked) {
             digest.text(one.run().file().slug()).text(one.run().digest());
         }
-        digest.text(ComparisonFile.of(rows).csv());
+        // the words of a reason may name a folder of this machine; that a variant failed is in the table without them
+        digest.text(ComparisonFile.of(
+                        rows.stream().map(ComparisonRow::withoutReason).toList())
+                .csv());
         return new Compared(List.copyOf(prepared), timelines, List.copyOf(ranked), byName, rankBy, rows, digest.hex());
     }
 
@@ -56,12 +59,18 @@ public record Compared(
                     one.run().file().slug(),
                     ComparisonRow.Kind.STRATEGY,
                     one.run().timelineKey(),
+                    parameters(one.run()),
                     "",
                     Optional.of(one.strategy())));
         }
         for (Run.Failed one : failed) {
             rows.add(new ComparisonRow(
-                    one.file().slug(), ComparisonRow.Kind.STRATEGY, one.timelineKey(), one.reason(), Optional.empty()));
+                    one.file().slug(),
+                    ComparisonRow.Kind.STRATEGY,
+                    one.timelineKey(),
+                    parameters(one),
+                    one.reason(),
+                    Optional.empty()));
         }
         for (Judgement one : ranked) {
             one.yardsticks().forEach((name, judged) -> rows.add(yardstick(name, one, judged)));
@@ -78,7 +87,15 @@ public record Compared(
                 name + " of " + owner.run().file().slug(),
                 causal ? ComparisonRow.Kind.YARDSTICK : ComparisonRow.Kind.AFTER_THE_FACT,
                 owner.run().timelineKey(),
+                parameters(owner.run()),
                 "",
                 Optional.of(judged));
+    }
+
+    /** Whether the regime model of a variant was fitted or declared. */
+    static ComparisonRow.Parameters parameters(Run run) {
+        return run.file().strategy().regimes().fixed().isPresent()
+                ? ComparisonRow.Parameters.EXTERNAL_PRIOR
+                : ComparisonRow.Parameters.FITTED;
     }
 }

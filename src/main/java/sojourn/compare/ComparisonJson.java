@@ -27,6 +27,7 @@ public final class ComparisonJson {
             node.put("variant", row.variant());
             node.put("kind", row.kind().word());
             node.put("timeline", row.timeline());
+            node.put("parameters", row.parameters().word());
             node.put("outcome", row.outcome());
             node.put("reason", row.reason());
             row.judged().ifPresent(judged -> add(node, judged));

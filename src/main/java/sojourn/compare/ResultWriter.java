@@ -77,6 +77,7 @@ public final class ResultWriter {
                         one.strategy(),
                         one.yardsticks(),
                         one.byRegime(),
-                        run.timeline().regimes()));
+                        run.timeline().regimes(),
+                        Compared.parameters(run)));
     }
 }

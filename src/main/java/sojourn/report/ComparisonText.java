@@ -30,6 +30,13 @@ public final class ComparisonText {
             text.append(riskAndReturn(compared)).append('\n');
             text.append(whatItTook(compared)).append('\n');
             text.append(againstSameExposure(compared)).append('\n');
+            if (compared.ranked().stream().anyMatch(one -> named(one).endsWith("*"))) {
+                text.append(Paragraph.wrapped(
+                                "* its parameters are an external prior: declared in the strategy file, not fitted. If they were"
+                                        + " estimated on this period, the result has seen its own future.",
+                                0))
+                        .append('\n');
+            }
         }
         for (Run.Failed one : compared.failed()) {
             text.append(Paragraph.wrapped("FAILED " + one.file().slug() + ": " + one.reason(), 2));
@@ -64,7 +71,7 @@ public final class ComparisonText {
                 new Grid(List.of("", "deepest", "under", "bad bar", "vol.", "growth", "vs hold", "Sharpe", "interval"));
         int rank = 1;
         for (Judgement one : compared.ranked()) {
-            grid.add(risk(rank++ + " " + shortened(one.run().file().slug()), one.strategy()));
+            grid.add(risk(shortened(rank++ + " " + named(one)), one.strategy()));
         }
         buyAndHold(compared).forEach(grid::add);
         return grid.text()
@@ -75,18 +82,20 @@ public final class ComparisonText {
                         0);
     }
 
-    /** One line for all variants whose buy-and-hold reads alike. */
+    /** One line for all variants whose buy-and-hold reads alike; their ranks behind it if there are several lines. */
     private static List<List<String>> buyAndHold(Compared compared) {
         Map<List<String>, List<String>> owners = new LinkedHashMap<>();
+        int rank = 1;
         for (Judgement one : compared.ranked()) {
             List<String> figures = risk("", one.buyAndHold());
             owners.computeIfAbsent(figures.subList(1, figures.size()), unused -> new ArrayList<>())
-                    .add(one.run().file().slug());
+                    .add(Integer.toString(rank++));
         }
         List<List<String>> lines = new ArrayList<>();
-        owners.forEach((figures, names) -> {
+        owners.forEach((figures, ranks) -> {
             List<String> line = new ArrayList<>();
-            line.add(owners.size() == 1 ? "  buy-and-hold" : shortened("  held by " + names.get(0)));
+            String of = owners.size() == 1 ? "" : " of " + String.join(" ", ranks);
+            line.add(shortened("  buy-and-hold" + of));
             line.addAll(figures);
             lines.add(line);
         });
@@ -112,7 +121,7 @@ public final class ComparisonText {
         for (Judgement one : compared.ranked()) {
             Judged own = one.strategy();
             grid.add(List.of(
-                    shortened("  " + one.run().file().slug()),
+                    shortened("  " + named(one)),
                     Figures.percent(own.get(Measure.AVERAGE_EXPOSURE)),
                     Figures.times(own.get(Measure.SWITCHES_PER_YEAR)),
                     Figures.times(own.get(Measure.TURNOVER_PER_YEAR)),
@@ -133,7 +142,7 @@ public final class ComparisonText {
         for (Judgement one : compared.ranked()) {
             Judged own = one.strategy();
             grid.add(List.of(
-                    shortened("  " + one.run().file().slug()),
+                    shortened("  " + named(one)),
                     Figures.percent(own.get(Measure.GROWTH_PER_YEAR)),
                     of(one, Yardstick.SAME_EXPOSURE, Measure.GROWTH_PER_YEAR),
                     of(one, Yardstick.SAME_EXPOSURE_SO_FAR, Measure.GROWTH_PER_YEAR),
@@ -155,6 +164,12 @@ public final class ComparisonText {
             return Figures.NONE;
         }
         return measure == Measure.SHARPE ? Figures.ratio(judged.get(measure)) : Figures.percent(judged.get(measure));
+    }
+
+    /** A star marks parameters that are an external prior. */
+    private static String named(Judgement one) {
+        return one.run().file().slug()
+                + (one.run().file().strategy().regimes().fixed().isPresent() ? "*" : "");
     }
 
     private static String shortened(String name) {
