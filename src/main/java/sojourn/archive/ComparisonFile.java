@@ -3,8 +3,10 @@ package sojourn.archive;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.OptionalDouble;
 import sojourn.measure.Drawdown;
 import sojourn.measure.Measure;
+import sojourn.measure.Unit;
 
 /** {@code comparison.csv}: a row a variant and a yardstick, failures included. */
 public final class ComparisonFile {
@@ -41,7 +43,12 @@ public final class ComparisonFile {
     private static void addJudged(Table.Row row, ComparisonRow.Judged judged) {
         row.add(judged.from()).add(judged.to()).add(Integer.toString(judged.bars()));
         for (Measure measure : Measure.values()) {
-            row.add(judged.get(measure).number());
+            OptionalDouble number = judged.get(measure).number();
+            if (measure.unit() == Unit.BARS && number.isPresent()) {
+                row.add(Long.toString((long) number.getAsDouble()));
+            } else {
+                row.add(number);
+            }
         }
         Optional<Drawdown.Episode> episode = judged.scorecard().drawdown().episode();
         row.add(episode.map(e -> e.peakDate().toString()).orElse(""));

@@ -9,6 +9,7 @@ import sojourn.archive.Caution;
 import sojourn.archive.ComparisonRow;
 import sojourn.document.JsonText;
 import sojourn.measure.Measure;
+import sojourn.measure.Unit;
 
 /** A comparison for machines: the rows of {@code comparison.csv} with undefined values as null, the digest and the folder. */
 public final class ComparisonJson {
@@ -41,7 +42,9 @@ public final class ComparisonJson {
         node.put("bars", judged.bars());
         for (Measure measure : Measure.values()) {
             OptionalDouble number = judged.get(measure).number();
-            if (number.isPresent()) {
+            if (number.isPresent() && measure.unit() == Unit.BARS) {
+                node.put(measure.key(), (long) number.getAsDouble());
+            } else if (number.isPresent()) {
                 node.put(measure.key(), number.getAsDouble());
             } else {
                 node.putNull(measure.key());

@@ -101,6 +101,7 @@ final class RecordText {
         node.put("file", file.shownName());
         node.put("seed", file.strategy().refit().seed());
         node.put("settings_sha256", Digest.of(JsonText.bytes(file.resolved())));
+        node.set("settings", file.resolved());
         if (file.strategy().regimes().fixed().isPresent()) {
             node.put("parameters", "external prior: declared in the strategy file, not fitted");
         }
