@@ -38,6 +38,9 @@ public final class ComparisonText {
                         .append('\n');
             }
         }
+        if (compared.ranked().size() == 1) {
+            text.append(VariantText.of(compared.ranked().get(0))).append('\n');
+        }
         for (Run.Failed one : compared.failed()) {
             text.append(Paragraph.wrapped("FAILED " + one.file().slug() + ": " + one.reason(), 2));
         }

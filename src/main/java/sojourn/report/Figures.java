@@ -20,6 +20,16 @@ final class Figures {
         return percent(measured.number(), "%.2f %%");
     }
 
+    /** A fraction as percent with three decimals, for means of single bars. */
+    static String thousandths(Measured measured) {
+        return percent(measured.number(), "%.3f %%");
+    }
+
+    /** A fraction as percent with one decimal. */
+    static String percent(double fraction) {
+        return percent(OptionalDouble.of(fraction), "%.1f %%");
+    }
+
     /** A plain number with two decimals. */
     static String ratio(Measured measured) {
         return number(measured.number(), "%.2f");
