@@ -14,6 +14,11 @@ final class Figure {
         return new BigDecimal(value).setScale(DECIMALS, RoundingMode.HALF_EVEN).toPlainString();
     }
 
+    /** A number as people write it in a file: 1 and 0.7, not 1.0. */
+    static String written(double value) {
+        return BigDecimal.valueOf(value).stripTrailingZeros().toPlainString();
+    }
+
     /** A level as written in the file, with at least two decimals. */
     static String level(double level) {
         BigDecimal written = BigDecimal.valueOf(level);

@@ -1,10 +1,12 @@
 package sojourn.allocate;
 
+import java.math.BigDecimal;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import sojourn.document.Field;
+import sojourn.document.Quoted;
 import sojourn.document.Refusal;
 import sojourn.document.Shape;
 import sojourn.document.Shapes;
@@ -90,26 +92,31 @@ public record Limits(double gross, double low, double high) {
     /** The same for one set of weights at {@code pointer}. */
     public List<Misfit> misfits(String pointer, Map<String, Double> weights) {
         List<Misfit> misfits = new ArrayList<>();
-        double sum = 0;
+        BigDecimal sum = BigDecimal.ZERO; // of the decimals as written, so that 0.7 and 0.4 make 1.1
         for (Map.Entry<String, Double> one : weights.entrySet()) {
             double weight = one.getValue();
-            sum += Math.abs(weight);
+            sum = sum.add(BigDecimal.valueOf(Math.abs(weight)));
             if (weight < low || weight > high) {
                 misfits.add(new Misfit(
                         RuleKeys.child(pointer, one.getKey()),
-                        "the weight " + weight + " of " + one.getKey() + " lies outside limits, per-asset [" + low
-                                + ", " + high + "]",
+                        "the weight " + Figure.written(weight) + " of " + Quoted.of(one.getKey())
+                                + " lies outside limits, per-asset " + range(low, high),
                         "change the weight, or the limits if " + (weight < 0 ? "shorts" : "weights like this")
                                 + " are meant"));
             }
         }
-        if (sum > gross + Weights.SLACK) {
+        if (sum.doubleValue() > gross + Weights.SLACK) {
             misfits.add(new Misfit(
                     pointer,
-                    "absolute weights add up to " + sum + ", more than limits, gross " + gross,
+                    "absolute weights add up to " + Figure.written(sum.doubleValue()) + ", more than limits, gross "
+                            + Figure.written(gross),
                     "lower the weights, or raise gross if leverage is meant"));
         }
         return misfits;
+    }
+
+    private static String range(double low, double high) {
+        return "[" + Figure.written(low) + ", " + Figure.written(high) + "]";
     }
 
     private static Range range(double gross, List<Double> perAsset) {
@@ -122,7 +129,7 @@ public record Limits(double gross, double low, double high) {
             return low > 0 || high < 0
                     ? Optional.of(new Refusal(
                             "per-asset",
-                            "per-asset [" + low + ", " + high + "] does not hold 0",
+                            "per-asset " + range(low, high) + " does not hold 0",
                             "write the lowest weight first, at most 0, then the highest, at least 0"))
                     : Optional.empty();
         }

@@ -6,6 +6,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import sojourn.document.Field;
+import sojourn.document.Nearest;
 import sojourn.document.Shape;
 import sojourn.document.Shapes;
 
@@ -52,39 +53,28 @@ final class RuleKeys {
     /** Names in {@code stated} that are no assets. */
     static List<Misfit> unknownAssets(Map<String, Map<String, Double>> stated, List<String> assets) {
         List<Misfit> misfits = new ArrayList<>();
-        stated.forEach((pointer, weights) -> weights.keySet().forEach(name -> {
-            if (!assets.contains(name)) {
-                misfits.add(new Misfit(
-                        child(pointer, name),
-                        "no price series is called '" + name + "'",
-                        "name one of " + String.join(", ", assets) + ", or add it under prices"));
-            }
-        }));
+        stated.forEach((pointer, weights) -> misfits.addAll(Misfit.inWeights(pointer, weights.keySet(), assets)));
         return misfits;
     }
 
-    /** Regimes in {@code weights} that are unknown, and regimes that it leaves out. */
+    /** Regimes in {@code weights} that are unknown, and regimes that it leaves out, unless an unknown one was meant for them. */
     static List<Misfit> regimesOf(String pointer, Map<String, Map<String, Double>> weights, List<String> regimes) {
         List<Misfit> misfits = new ArrayList<>();
+        List<String> missing = new ArrayList<>(regimes);
+        missing.removeAll(weights.keySet());
         for (String name : weights.keySet()) {
             if (!regimes.contains(name)) {
-                misfits.add(new Misfit(child(pointer, name), "no regime is called '" + name + "'", known(regimes)));
+                misfits.add(Misfit.noRegime(child(pointer, name), Misfit.At.KEY, name, regimes));
+                Nearest.to(name, missing).ifPresent(missing::remove);
             }
         }
-        for (String regime : regimes) {
-            if (!weights.containsKey(regime)) {
-                misfits.add(new Misfit(
-                        pointer,
-                        "regime '" + regime + "' has no weights",
-                        "give it some; a weight of 0 for one asset means nothing but cash"));
-            }
+        for (String regime : missing) {
+            misfits.add(new Misfit(
+                    pointer,
+                    "regime '" + regime + "' has no weights",
+                    "give it some; a weight of 0 for one asset means nothing but cash"));
         }
         return misfits;
-    }
-
-    /** What to do about an unknown regime. */
-    static String known(List<String> regimes) {
-        return "name one of " + String.join(", ", regimes) + ", as under regimes, states";
     }
 
     /** The pointers of {@link #WEIGHTS_BY_REGIME} under {@code pointer}. */

@@ -14,9 +14,12 @@ public final class Rules {
 
     private static Map<String, Shape<? extends Rule>> byWord() {
         Map<String, Shape<? extends Rule>> shapes = new LinkedHashMap<>();
-        shapes.put(Switch.WORD, Switch.SHAPE);
-        shapes.put(Table.WORD, Table.SHAPE);
-        shapes.put(Blend.WORD, Blend.SHAPE);
+        shapes.put(
+                Switch.WORD,
+                Switch.SHAPE.described(
+                        "two sets of weights; one regime's probability decides between them, with hysteresis"));
+        shapes.put(Table.WORD, Table.SHAPE.described("the weights of the most likely regime"));
+        shapes.put(Blend.WORD, Blend.SHAPE.described("the weights of all regimes, averaged by their probabilities"));
         return shapes;
     }
 }

@@ -86,8 +86,9 @@ public record Switch(
         return rule.reEnterBelow > rule.leaveAbove
                 ? Optional.of(new Refusal(
                         "re-enter-below",
-                        "re-enter-below " + rule.reEnterBelow + " lies above leave-above " + rule.leaveAbove,
-                        "give a value at or below " + rule.leaveAbove))
+                        "re-enter-below " + Figure.written(rule.reEnterBelow) + " lies above leave-above "
+                                + Figure.written(rule.leaveAbove),
+                        "give a value at or below " + Figure.written(rule.leaveAbove)))
                 : Optional.empty();
     }
 
@@ -113,7 +114,7 @@ public record Switch(
     public List<Misfit> misfits(List<String> regimes, List<String> assets) {
         List<Misfit> misfits = new ArrayList<>();
         if (!regimes.contains(regime)) {
-            misfits.add(new Misfit("/switch/regime", "no regime is called '" + regime + "'", RuleKeys.known(regimes)));
+            misfits.add(Misfit.noRegime("/switch/regime", Misfit.At.VALUE, regime, regimes));
         }
         misfits.addAll(RuleKeys.unknownAssets(statedWeights(), assets));
         return misfits;

@@ -52,4 +52,9 @@ record DateShape() implements Shape<LocalDate> {
     public boolean mayBe(Node node) {
         return TextShape.isText(node);
     }
+
+    @Override
+    public String hint(Node node) {
+        return mayBe(node) && DATE.matcher(((ScalarNode) node).text()).matches() ? "there is no such day: " : "";
+    }
 }

@@ -96,6 +96,21 @@ public final class Document {
         return here;
     }
 
+    /** Where the key of an entry at a JSON pointer stands; like {@link #nearest} where there is no such key. */
+    public Place keyPlace(String pointer) {
+        List<String> steps = steps(pointer);
+        if (steps.isEmpty()) {
+            return root.place();
+        }
+        Optional<Node> around = Optional.of(root);
+        for (String step : steps.subList(0, steps.size() - 1)) {
+            around = around.flatMap(node -> Tree.child(node, step));
+        }
+        return around.flatMap(node ->
+                        node instanceof MapNode map ? map.keyPlace(steps.get(steps.size() - 1)) : Optional.empty())
+                .orElseGet(() -> nearest(pointer).place());
+    }
+
     /**
      * The same document with {@code value} at a JSON pointer, in place of what is written there or added as a key; maps that
      * are not written yet are added around it. The value keeps its own lines and columns, so that a fault in it is placed

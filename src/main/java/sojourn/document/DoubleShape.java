@@ -2,6 +2,7 @@ package sojourn.document;
 
 import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.node.ObjectNode;
+import java.math.BigDecimal;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
@@ -9,6 +10,9 @@ import sojourn.numeric.Check;
 
 /** A finite number; each bound may be absent. */
 record DoubleShape(Optional<Bound> low, Optional<Bound> high) implements NumberShape {
+    /** A number this large where a fraction belongs was probably meant in per cent; one just above 1 may be anything. */
+    private static final BigDecimal LEAST_PERCENT = BigDecimal.valueOf(2);
+
     static final DoubleShape ANY = new DoubleShape(Optional.empty(), Optional.empty());
 
     /** A bound, which itself belongs to the range or does not. */
@@ -95,7 +99,29 @@ record DoubleShape(Optional<Bound> low, Optional<Bound> high) implements NumberS
 
     @Override
     public String hint(Node node) {
-        return WholeNumbers.unquoteHint(node);
+        String text = node instanceof ScalarNode scalar ? scalar.text() : "";
+        String number =
+                text.endsWith("%") ? text.substring(0, text.length() - 1).strip() : text;
+        if (!PlainScalar.isNumber(number)) {
+            return "";
+        }
+        BigDecimal value = new BigDecimal(number);
+        boolean percent = !number.equals(text);
+        if (percent && !isFraction()) {
+            return "leave out the % (a key that counts in per cent says so, any other in fractions): ";
+        }
+        boolean meantAsPercent = percent || (mayBe(node) && isFraction() && value.compareTo(LEAST_PERCENT) >= 0);
+        BigDecimal fraction = value.movePointLeft(2);
+        return meantAsPercent && allows(fraction.doubleValue())
+                ? "did you mean " + fraction.stripTrailingZeros().toPlainString() + "? "
+                : WholeNumbers.unquoteHint(node);
+    }
+
+    private boolean isFraction() {
+        return low.isPresent()
+                && high.isPresent()
+                && low.get().value() == 0
+                && high.get().value() == 1;
     }
 
     private static Optional<Bound> bound(double value, Edge edge) {

@@ -70,4 +70,9 @@ record ListShape<T>(Shape<T> item, int atLeast, int atMost) implements Shape<Lis
     public boolean mayBe(Node node) {
         return node instanceof ListNode;
     }
+
+    @Override
+    public String hint(Node node) {
+        return !mayBe(node) && item.mayBe(node) ? "put it in [ ], even if it is the only one: " : "";
+    }
 }

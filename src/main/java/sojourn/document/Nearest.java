@@ -1,24 +1,52 @@
 package sojourn.document;
 
+import java.util.ArrayList;
+import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
 
 /** The known word that a misspelt one was probably meant to be. */
 public final class Nearest {
     private static final int LONGEST = 100;
+    private static final int SHORTEST_PART = 3;
 
     private Nearest() {}
 
     /**
      * The known word at the least edit distance (insertion, deletion, substitution, swap of neighbours; capitals do not
-     * count), the first of equals; empty if none is within 2 edits or a third of the word's length.
+     * count), the first of equals, if one is within 2 edits or a third of the word's length; otherwise the only known word
+     * that has it as a part between hyphens: {@code commission} for {@code commission-bps}. Empty if there is neither.
      */
     public static Optional<String> to(String word, Iterable<String> known) {
+        if (word.length() > LONGEST) {
+            return Optional.empty();
+        }
+        Optional<String> spelt = byDistance(word, known);
+        return spelt.isPresent() ? spelt : whole(word, known);
+    }
+
+    /** "did you mean 'calm'? " or nothing. */
+    public static String hint(String word, Iterable<String> known) {
+        return to(word, known).map(near -> "did you mean '" + near + "'? ").orElse("");
+    }
+
+    private static Optional<String> whole(String part, Iterable<String> known) {
+        if (part.length() < SHORTEST_PART) {
+            return Optional.empty();
+        }
+        String sought = "-" + part.toLowerCase(Locale.ROOT).replace('_', '-') + "-";
+        List<String> having = new ArrayList<>();
+        for (String candidate : known) {
+            if (("-" + candidate.toLowerCase(Locale.ROOT) + "-").contains(sought)) {
+                having.add(candidate);
+            }
+        }
+        return having.size() == 1 ? Optional.of(having.get(0)) : Optional.empty();
+    }
+
+    private static Optional<String> byDistance(String word, Iterable<String> known) {
         Optional<String> nearest = Optional.empty();
         int least = Integer.MAX_VALUE;
-        if (word.length() > LONGEST) {
-            return nearest;
-        }
         for (String candidate : known) {
             int distance = distance(word.toLowerCase(Locale.ROOT), candidate.toLowerCase(Locale.ROOT));
             int allowed = Math.max(2, word.length() / 3);

@@ -2,22 +2,21 @@ package sojourn.document;
 
 import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.node.ObjectNode;
+import java.util.List;
 import java.util.Optional;
 import java.util.function.Function;
 
 /** A shape with a rule on its value that its schema does not show. */
-record RefusingShape<T>(Shape<T> source, Function<? super T, Optional<Refusal>> rule) implements Shape<T> {
+record RefusingShape<T>(Shape<T> source, Function<? super T, List<Refusal>> rule) implements Shape<T> {
     @Override
     public Optional<T> read(Node node, Problems problems) {
         Optional<T> value = source.read(node, problems);
-        Optional<Refusal> refusal = value.flatMap(rule);
-        if (refusal.isEmpty()) {
-            return value;
+        List<Refusal> refusals = value.<List<Refusal>>map(rule).orElse(List.of());
+        for (Refusal refusal : refusals) {
+            Node at = node instanceof MapNode map ? map.get(refusal.key()).orElse(node) : node;
+            problems.add(at, refusal.what(), refusal.remedy());
         }
-        Refusal told = refusal.get();
-        Node at = node instanceof MapNode map ? map.get(told.key()).orElse(node) : node;
-        problems.add(at, told.what(), told.remedy());
-        return Optional.empty();
+        return refusals.isEmpty() ? value : Optional.empty();
     }
 
     @Override

@@ -2,6 +2,7 @@ package sojourn.document;
 
 import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.node.ObjectNode;
+import java.util.List;
 import java.util.Optional;
 import java.util.function.Function;
 
@@ -32,6 +33,11 @@ public interface Shape<T> {
         return "";
     }
 
+    /** The same shape with a sentence in its schema: for the variants of a choice, which are no {@link Field}s. */
+    default Shape<T> described(String help) {
+        return new DescribedShape<>(this, help);
+    }
+
     /** The same shape with its value converted; {@code conversion} must not fail. */
     default <U> Shape<U> as(Function<? super T, ? extends U> conversion) {
         return new ConvertedShape<>(this, conversion);
@@ -42,6 +48,11 @@ public interface Shape<T> {
      * name a key of the node, at whose value the fault is then placed.
      */
     default Shape<T> refuse(Function<? super T, Optional<Refusal>> rule) {
+        return refuseEach(value -> rule.apply(value).map(List::of).orElse(List.of()));
+    }
+
+    /** The same for a rule that may have several refusals of one value. */
+    default Shape<T> refuseEach(Function<? super T, List<Refusal>> rule) {
         return new RefusingShape<>(this, rule);
     }
 }

@@ -13,7 +13,7 @@ final class UnknownKey {
         problems.add(
                 keyPlace,
                 "unknown key '" + Wording.shortened(key) + "'",
-                Wording.didYouMean(key, missing) + "known keys: " + String.join(", ", known));
+                Nearest.hint(key, missing) + "known keys: " + String.join(", ", known));
         return Nearest.to(key, missing);
     }
 }

@@ -42,6 +42,6 @@ record WordShape<T>(Map<String, T> meanings) implements Shape<T> {
 
     @Override
     public String hint(Node node) {
-        return mayBe(node) ? Wording.didYouMean(((ScalarNode) node).text(), meanings.keySet()) : "";
+        return mayBe(node) ? Nearest.hint(((ScalarNode) node).text(), meanings.keySet()) : "";
     }
 }

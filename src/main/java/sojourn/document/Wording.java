@@ -35,13 +35,6 @@ final class Wording {
         return shape.hint(node) + "give " + shape.expected();
     }
 
-    /** "did you mean 'calm'? " or nothing. */
-    static String didYouMean(String word, Iterable<String> known) {
-        return Nearest.to(word, known)
-                .map(near -> "did you mean '" + near + "'? ")
-                .orElse("");
-    }
-
     /** On one line and not too long. */
     static String shortened(String text) {
         String line = text.replace("\\", "\\\\")

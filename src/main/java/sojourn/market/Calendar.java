@@ -17,17 +17,17 @@ public record Calendar(BarLength bars, Days days, Rows rows) {
     public static final Calendar DAILY = new Calendar(BarLength.DAILY, Days.COMMON, Rows.DAYS);
 
     private static final Field<BarLength> BARS = Field.defaulted(
-            "bars", Shapes.word(List.of(BarLength.values()), BarLength::word), "daily", "Length of the bars.");
+            "bars", Shapes.word(List.of(BarLength.values()), BarLength::word), "daily", "length of the bars");
     private static final Field<Days> DAYS = Field.defaulted(
             "days",
             Shapes.word(List.of(Days.values()), Days::word),
             "common",
-            "Days that count: those that every series has.");
+            "days that count: those that every series has");
     private static final Field<Rows> ROWS = Field.defaulted(
             "rows",
             Shapes.word(List.of(Rows.values()), Rows::word),
             "days",
-            "What one row of a price file is: a day, from which longer bars are built, or a whole bar already.");
+            "what one row of a price file is: a day, from which longer bars are built, or a whole bar already");
 
     /** The section. */
     public static final Shape<Calendar> SHAPE =

@@ -15,13 +15,13 @@ import sojourn.document.Shapes;
  * @param separator what separates cells; empty: taken from the header line
  */
 public record CsvLayout(String csv, String date, DatePattern dateFormat, Optional<Separator> separator) {
-    static final Field<String> DATE = Field.defaulted("date", Shapes.text(), "date", "Name of the column of dates.");
+    static final Field<String> DATE = Field.defaulted("date", Shapes.text(), "date", "name of the column of dates");
     static final Field<DatePattern> DATE_FORMAT =
-            Field.defaulted("date-format", DatePattern.SHAPE, "yyyy-MM-dd", "How dates are written, e.g. dd.MM.yyyy.");
+            Field.defaulted("date-format", DatePattern.SHAPE, "yyyy-MM-dd", "how dates are written, e.g. dd.MM.yyyy");
     static final Field<Optional<Separator>> SEPARATOR = Field.maybe(
             "separator",
             Shapes.word(List.of(Separator.values()), Separator::word),
-            "What separates cells; taken from the header line if not given.");
+            "what separates cells; taken from the header line if not given");
 
     static CsvLayout from(String csv, Fields fields) {
         return new CsvLayout(csv, fields.get(DATE), fields.get(DATE_FORMAT), fields.get(SEPARATOR));

@@ -25,9 +25,9 @@ public record PriceSource(
         Optional<String> low,
         Optional<String> volume) {
     private static final Field<String> CSV =
-            Field.required("csv", Shapes.text(), "Path of the price file, from the folder of the strategy file.");
+            Field.required("csv", Shapes.text(), "path of the price file, from the folder of the strategy file");
     private static final Field<String> CLOSE =
-            Field.defaulted("close", Shapes.text(), "close", "Name of the column of closes.");
+            Field.defaulted("close", Shapes.text(), "close", "name of the column of closes");
     private static final Field<Optional<String>> OPEN = column("open", "opens");
     private static final Field<Optional<String>> HIGH = column("high", "highs");
     private static final Field<Optional<String>> LOW = column("low", "lows");
@@ -53,9 +53,7 @@ public record PriceSource(
 
     private static Field<Optional<String>> column(String key, String what) {
         return Field.maybe(
-                key,
-                Shapes.text(),
-                "Name of the column of " + what + "; if not given, " + key + " if the file has it.");
+                key, Shapes.text(), "name of the column of " + what + "; if not given, " + key + " if the file has it");
     }
 
     /** Default columns of the file at {@code csv}. */

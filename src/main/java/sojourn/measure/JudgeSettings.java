@@ -1,11 +1,14 @@
 package sojourn.measure;
 
+import java.math.BigDecimal;
 import java.time.LocalDate;
 import java.util.Collections;
+import java.util.EnumSet;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.Set;
 import sojourn.document.Field;
 import sojourn.document.Refusal;
 import sojourn.document.Shape;
@@ -46,14 +49,17 @@ public record JudgeSettings(
         }
     }
 
+    private static final double SUM_SLACK = 1e-12;
+
     private static final Field<List<Yardstick>> AGAINST = Field.defaulted(
             "against",
-            Shapes.list(Shapes.word(Yardstick.words()), 1, Yardstick.values().length),
+            Shapes.list(Shapes.word(Yardstick.words()), 1, Yardstick.values().length)
+                    .refuse(JudgeSettings::namedTwice),
             "[buy-and-hold, same-exposure, same-exposure-so-far]",
             "what the strategy is measured against");
     private static final Field<Map<String, Double>> BUY_AND_HOLD = Field.required(
             "buy-and-hold",
-            Shapes.named(Shapes.text(), Shapes.number().atLeast(0).atMost(1)),
+            Shapes.named(Shapes.text(), Shapes.number().atLeast(0).atMost(1)).refuse(JudgeSettings::moreThanAll),
             "what doing nothing means: weights by asset, e.g. {stocks: 1.0}; the rest is cash");
     private static final Field<Measure> RANK_BY = Field.defaulted(
             "rank-by",
@@ -65,13 +71,12 @@ public record JudgeSettings(
 
     /** The section's shape. */
     public static final Shape<JudgeSettings> SHAPE = Shapes.object(
-                    "judge",
-                    f -> new JudgeSettings(f.get(AGAINST), f.get(BUY_AND_HOLD), f.get(RANK_BY), f.get(WINDOW)),
-                    AGAINST,
-                    BUY_AND_HOLD,
-                    RANK_BY,
-                    WINDOW)
-            .refuse(JudgeSettings::fault);
+            "judge",
+            f -> new JudgeSettings(f.get(AGAINST), f.get(BUY_AND_HOLD), f.get(RANK_BY), f.get(WINDOW)),
+            AGAINST,
+            BUY_AND_HOLD,
+            RANK_BY,
+            WINDOW);
 
     /** Copies its collections, in order. */
     public JudgeSettings {
@@ -79,16 +84,23 @@ public record JudgeSettings(
         buyAndHold = Collections.unmodifiableMap(new LinkedHashMap<>(buyAndHold));
     }
 
-    private Optional<Refusal> fault() {
-        double sum = 0;
-        for (double weight : buyAndHold.values()) {
-            sum += weight;
+    private static Optional<Refusal> namedTwice(List<Yardstick> against) {
+        Set<Yardstick> seen = EnumSet.noneOf(Yardstick.class);
+        return against.stream()
+                .filter(one -> !seen.add(one))
+                .findFirst()
+                .map(one -> new Refusal("", one.word() + " is named twice", "name each yardstick once"));
+    }
+
+    private static Optional<Refusal> moreThanAll(Map<String, Double> weights) {
+        BigDecimal sum = BigDecimal.ZERO; // of the decimals as written, so that 0.7 and 0.4 make 1.1
+        for (double weight : weights.values()) {
+            sum = sum.add(BigDecimal.valueOf(weight));
         }
-        if (sum > 1 + 1e-12) {
-            return Optional.of(new Refusal(
-                    "buy-and-hold", "the weights of buy-and-hold add up to " + sum, "make them add up to at most 1"));
-        }
-        return Optional.empty();
+        return sum.doubleValue() > 1 + SUM_SLACK
+                ? Optional.of(new Refusal(
+                        "", "the weights of buy-and-hold add up to " + sum, "make them add up to at most 1"))
+                : Optional.empty();
     }
 
     private static Map<String, Measure> rankable() {

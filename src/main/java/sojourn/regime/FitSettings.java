@@ -20,6 +20,11 @@ public record FitSettings(ModelKind kind, int states, EmissionFamily emission, i
         Check.that(kind != ModelKind.ONE_REGIME || states == 1, "a one-regime model with " + states + " states");
     }
 
+    /** The fewest observations that such a fit needs: some for each state, and more than there are parameters. */
+    public int leastObservations() {
+        return StrictMath.max(Fitter.LEAST_COUNT * states, parameterCount() + 1);
+    }
+
     /** Number of free parameters of such a model. */
     public int parameterCount() {
         int emissionParameters = emission.estimatesMeans() ? 2 * states : states;

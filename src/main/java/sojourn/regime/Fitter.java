@@ -86,7 +86,7 @@ public final class Fitter {
     }
 
     private static Optional<String> refusal(FitSettings settings, Observations x, Window window) {
-        int least = StrictMath.max(LEAST_COUNT * settings.states(), settings.parameterCount() + 1);
+        int least = settings.leastObservations();
         if (x.present() < least) {
             return Optional.of("the window holds " + x.present() + " observations; " + settings.states()
                     + " states with " + settings.parameterCount() + " parameters need at least " + least);

@@ -53,8 +53,8 @@ public record Strategy(
     private static final Field<String> NAME = Field.required(
             "strategy",
             Shapes.textLike(
-                    "[^\\x00-\\x1f\\x7f]*[A-Za-z0-9][^\\x00-\\x1f\\x7f]*",
-                    "a name with a letter or digit in it, on one line"),
+                    "[^\\x00-\\x1f\\x7f-\\x9f]*[A-Za-z0-9][^\\x00-\\x1f\\x7f-\\x9f]*",
+                    "a name on one line, with a letter or digit in it and no tabs or other control characters"),
             "the strategy's name");
     private static final Field<Optional<String>> HYPOTHESIS =
             Field.maybe("hypothesis", Shapes.text(), "why it should work, written before it is run");

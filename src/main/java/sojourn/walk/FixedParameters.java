@@ -1,7 +1,9 @@
 package sojourn.walk;
 
+import java.math.BigDecimal;
+import java.util.ArrayList;
 import java.util.List;
-import java.util.Optional;
+import java.util.stream.Collectors;
 import sojourn.document.Field;
 import sojourn.document.Refusal;
 import sojourn.document.Shape;
@@ -42,7 +44,7 @@ public record FixedParameters(List<Double> initial, List<List<Double>> transitio
                     TRANSITION,
                     MEAN,
                     SD)
-            .refuse(FixedParameters::fault);
+            .refuseEach(FixedParameters::faults);
 
     /** Copies its lists. */
     public FixedParameters {
@@ -52,42 +54,49 @@ public record FixedParameters(List<Double> initial, List<List<Double>> transitio
         sd = List.copyOf(sd);
     }
 
-    private Optional<Refusal> fault() {
+    private List<Refusal> faults() {
         int states = initial.size();
         String each = "give one for each of the " + states + " regimes of 'initial'";
-        if (mean.size() != states) {
-            return Optional.of(new Refusal("mean", "'mean' has " + mean.size() + " numbers", each));
-        }
-        if (sd.size() != states) {
-            return Optional.of(new Refusal("sd", "'sd' has " + sd.size() + " numbers", each));
+        List<Refusal> faults = new ArrayList<>();
+        if (!sumsToOne(initial)) {
+            faults.add(new Refusal("initial", "'initial' sums to " + sum(initial), "make it sum to 1"));
         }
         if (transition.size() != states || transition.stream().anyMatch(row -> row.size() != states)) {
-            return Optional.of(new Refusal(
-                    "transition", "'transition' is not " + states + " rows of " + states + " numbers", each));
+            faults.add(new Refusal(
+                    "transition",
+                    "'transition' has " + transition.size() + " rows of " + lengths() + " numbers",
+                    "give " + states + " rows of " + states + ", as 'initial' has " + states + " regimes"));
         }
-        if (!sumsToOne(initial)) {
-            return Optional.of(new Refusal("initial", "'initial' sums to " + sum(initial), "make it sum to 1"));
-        }
-        for (int i = 0; i < states; i++) {
+        for (int i = 0; i < transition.size(); i++) {
             if (!sumsToOne(transition.get(i))) {
-                return Optional.of(new Refusal(
+                faults.add(new Refusal(
                         "transition",
                         "row " + (i + 1) + " of 'transition' sums to " + sum(transition.get(i)),
                         "make each row sum to 1"));
             }
         }
-        return Optional.empty();
+        if (mean.size() != states) {
+            faults.add(new Refusal("mean", "'mean' has " + mean.size() + " numbers", each));
+        }
+        if (sd.size() != states) {
+            faults.add(new Refusal("sd", "'sd' has " + sd.size() + " numbers", each));
+        }
+        return faults;
+    }
+
+    private String lengths() {
+        return transition.stream()
+                .map(row -> Integer.toString(row.size()))
+                .distinct()
+                .collect(Collectors.joining(" or "));
     }
 
     private static boolean sumsToOne(List<Double> probabilities) {
-        return Math.abs(sum(probabilities) - 1) <= SUM_SLACK;
+        return Math.abs(sum(probabilities).doubleValue() - 1) <= SUM_SLACK;
     }
 
-    private static double sum(List<Double> terms) {
-        double sum = 0;
-        for (double term : terms) {
-            sum += term;
-        }
-        return sum;
+    /** The exact sum of the decimals as written: 0.7 and 0.4 make 1.1. */
+    private static BigDecimal sum(List<Double> terms) {
+        return terms.stream().map(BigDecimal::valueOf).reduce(BigDecimal.ZERO, BigDecimal::add);
     }
 }

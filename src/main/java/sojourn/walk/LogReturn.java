@@ -13,7 +13,9 @@ import sojourn.market.Known;
 public record LogReturn(String asset) implements Observation {
     static final String WORD = "log-return";
 
-    static final Shape<LogReturn> SHAPE = Shapes.text().as(LogReturn::new);
+    static final Shape<LogReturn> SHAPE = Shapes.text()
+            .<LogReturn>as(LogReturn::new)
+            .described("the asset whose log return is observed: ln(close / previous close), per bar");
 
     @Override
     public OptionalDouble at(Known known) {

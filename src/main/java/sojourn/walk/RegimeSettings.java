@@ -1,15 +1,19 @@
 package sojourn.walk;
 
+import java.math.BigDecimal;
+import java.util.ArrayList;
+import java.util.HashSet;
 import java.util.LinkedHashMap;
-import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.Set;
 import sojourn.document.Field;
 import sojourn.document.Refusal;
 import sojourn.document.Shape;
 import sojourn.document.Shapes;
 import sojourn.regime.EmissionFamily;
+import sojourn.regime.FitSettings;
 import sojourn.regime.ModelKind;
 
 /**
@@ -31,19 +35,22 @@ public record RegimeSettings(
         Optional<FixedParameters> fixed) {
     private static final int MOST_STATES = 6;
 
-    private static final Field<ModelKind> MODEL =
-            Field.defaulted("model", Shapes.word(models()), "hidden-markov", "the kind of regime model");
-    private static final Field<List<Observation>> OBSERVE = Field.required(
-            "observe",
-            Shapes.list(Observation.shape(), 1, 1),
-            "what the model sees at each close, e.g. log-return of an asset");
-    private static final Field<List<String>> STATES = Field.required(
-            "states",
-            Shapes.list(
+    /** Reads the list {@code observe}. */
+    public static final Shape<List<Observation>> OBSERVATIONS = Shapes.list(Observation.shape(), 1, 1);
+
+    /** Reads the list {@code states}. */
+    public static final Shape<List<String>> STATE_NAMES = Shapes.list(
                     Shapes.textLike("[a-z][a-z0-9_]*", "a name of lower-case letters, digits and underscores"),
                     1,
-                    MOST_STATES),
-            "names of the regimes, from lowest to highest volatility");
+                    MOST_STATES)
+            .refuse(RegimeSettings::namedTwice);
+
+    private static final Field<ModelKind> MODEL =
+            Field.defaulted("model", Shapes.word(models()), "hidden-markov", "the kind of regime model");
+    private static final Field<List<Observation>> OBSERVE =
+            Field.required("observe", OBSERVATIONS, "what the model sees at each close, e.g. log-return of an asset");
+    private static final Field<List<String>> STATES =
+            Field.required("states", STATE_NAMES, "names of the regimes, from lowest to highest volatility");
     private static final Field<EmissionFamily> EMISSION = Field.defaulted(
             "emission", Shapes.word(emissions()), "normal", "how an observation is distributed within a regime");
     private static final Field<Optional<String>> ORDER_BY = Field.maybe(
@@ -71,7 +78,7 @@ public record RegimeSettings(
                     EMISSION,
                     ORDER_BY,
                     PARAMETERS)
-            .refuse(RegimeSettings::fault);
+            .refuseEach(RegimeSettings::faults);
 
     /** Copies its lists. */
     public RegimeSettings {
@@ -79,42 +86,64 @@ public record RegimeSettings(
         states = List.copyOf(states);
     }
 
+    /** What is fitted, by so many starts. */
+    public FitSettings fitSettings(int starts) {
+        return new FitSettings(model, states.size(), emission, starts);
+    }
+
     /** The asset whose returns order the regimes. */
     public String orderedBy() {
         return orderBy.orElseGet(() -> observe.get(0).asset());
     }
 
-    private Optional<Refusal> fault() {
-        if (new LinkedHashSet<>(states).size() < states.size()) {
-            return Optional.of(new Refusal("states", "two regimes have the same name", "give each its own name"));
-        }
+    private static Optional<Refusal> namedTwice(List<String> states) {
+        Set<String> seen = new HashSet<>();
+        return states.stream()
+                .filter(name -> !seen.add(name))
+                .findFirst()
+                .map(name ->
+                        new Refusal("", "two regimes have the name '" + name + "'", "give each a name of its own"));
+    }
+
+    private List<Refusal> faults() {
+        List<Refusal> faults = new ArrayList<>();
         if (model == ModelKind.ONE_REGIME && states.size() != 1) {
-            return Optional.of(new Refusal(
+            faults.add(new Refusal(
                     "states",
                     "the model one-regime has one regime, not " + states.size(),
                     "name one, or choose another model"));
         }
-        if (fixed.isEmpty()) {
-            return Optional.empty();
-        }
-        FixedParameters given = fixed.get();
+        fixed.ifPresent(given -> faults.addAll(faultsOf(given)));
+        return faults;
+    }
+
+    private List<Refusal> faultsOf(FixedParameters given) {
+        List<Refusal> faults = new ArrayList<>();
         if (given.initial().size() != states.size()) {
-            return Optional.of(new Refusal(
+            faults.add(new Refusal(
                     "parameters",
                     "'parameters' describe " + given.initial().size() + " regimes, 'states' names " + states.size(),
                     "make the two agree"));
         }
         if (model != ModelKind.HIDDEN_MARKOV) {
-            return Optional.of(new Refusal(
+            faults.add(new Refusal(
                     "parameters",
-                    "declared parameters are those of a hidden Markov model",
-                    "set model: hidden-markov"));
+                    "declared parameters are those of the model hidden-markov, not of " + model.word(),
+                    "set model: hidden-markov, or leave the parameters out"));
         }
-        if (emission == EmissionFamily.NORMAL_ZERO_MEAN && given.mean().stream().anyMatch(mean -> mean != 0)) {
-            return Optional.of(new Refusal(
-                    "parameters", "a zero-mean emission has means other than 0", "write mean: 0 for each regime"));
+        if (emission == EmissionFamily.NORMAL_ZERO_MEAN) {
+            given.mean().stream()
+                    .filter(mean -> mean != 0)
+                    .findFirst()
+                    .ifPresent(mean -> faults.add(new Refusal(
+                            "parameters",
+                            "a mean is "
+                                    + BigDecimal.valueOf(mean)
+                                            .stripTrailingZeros()
+                                            .toPlainString() + ", those of the emission normal-zero-mean are 0",
+                            "write 0 for each, or set emission: normal")));
         }
-        return Optional.empty();
+        return faults;
     }
 
     private static Map<String, ModelKind> models() {

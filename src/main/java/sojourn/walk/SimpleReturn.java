@@ -13,7 +13,9 @@ import sojourn.market.Known;
 public record SimpleReturn(String asset) implements Observation {
     static final String WORD = "simple-return";
 
-    static final Shape<SimpleReturn> SHAPE = Shapes.text().as(SimpleReturn::new);
+    static final Shape<SimpleReturn> SHAPE = Shapes.text()
+            .<SimpleReturn>as(SimpleReturn::new)
+            .described("the asset whose simple return is observed: close / previous close - 1, per bar");
 
     @Override
     public OptionalDouble at(Known known) {

@@ -132,7 +132,7 @@ public final class Walk {
     }
 
     private FitSettings settings() {
-        return new FitSettings(regimes.model(), regimes.states().size(), regimes.emission(), refit.starts());
+        return regimes.fitSettings(refit.starts());
     }
 
     private RegimeModel model(FixedParameters declared) {

@@ -47,8 +47,8 @@ class LimitsTest {
                 new Switch("stormy", 0.7, 0.3, Map.of("a", 1.5), Map.of("a", -0.5), ProbabilityKind.FILTERED, 1, 1);
         List<Misfit> misfits = Limits.longOnly().misfits(leveraged);
         assertThat(misfits).extracting(Misfit::pointer).containsExactly("/switch/in/a", "/switch/in", "/switch/out/a");
-        assertThat(misfits.get(0).what()).contains("1.5").contains("[0.0, 1.0]");
-        assertThat(misfits.get(1).what()).contains("1.5").contains("gross 1.0");
+        assertThat(misfits.get(0).what()).contains("1.5").contains("[0, 1]");
+        assertThat(misfits.get(1).what()).contains("1.5").contains("gross 1");
         assertThat(misfits.get(2).remedy()).contains("shorts");
         assertThat(new Limits(1.5, -0.5, 1.5).misfits(leveraged)).isEmpty();
     }

@@ -101,7 +101,7 @@ class ReadingRulesTest {
     void aRangeOfWeightsMustHoldZero() {
         Problem problem = onlyProblem(Limits.SHAPE, "gross: 1\nper-asset: [0.2, 1]\n");
         assertThat(problem.line()).isEqualTo(2);
-        assertThat(problem.what()).contains("[0.2, 1.0]");
+        assertThat(problem.what()).contains("[0.2, 1]");
     }
 
     private static <T> T read(Shape<T> shape, String yaml) {

@@ -153,10 +153,11 @@ class SwitchTest {
                         new Misfit(
                                 "/switch/regime",
                                 "no regime is called 'strmy'",
-                                "name one of calm, stormy, as under regimes, states"),
+                                "did you mean 'stormy'? name one of calm, stormy, as under regimes, states"),
                         new Misfit(
                                 "/switch/in/stoks",
-                                "no price series is called 'stoks'",
+                                Misfit.At.KEY,
+                                "no asset is called 'stoks'",
                                 "name one of a, or add it under prices"));
         assertThat(rule(ProbabilityKind.FILTERED, 1, 1).misfits(REGIMES, ASSETS))
                 .isEmpty();

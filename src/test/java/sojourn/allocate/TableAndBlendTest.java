@@ -81,8 +81,7 @@ class TableAndBlendTest {
                     .extracting(Misfit::pointer, Misfit::what)
                     .containsExactly(
                             tuple(base + "/st~1ormy", "no regime is called 'st/ormy'"),
-                            tuple(base, "regime 'stormy' has no weights"),
-                            tuple(base + "/st~1ormy/b", "no price series is called 'b'"));
+                            tuple(base + "/st~1ormy/b", "no asset is called 'b'"));
             assertThatThrownBy(() -> rule.mechanism(REGIMES, List.of("a", "b")))
                     .isInstanceOf(IllegalArgumentException.class)
                     .hasMessageContaining("stormy");

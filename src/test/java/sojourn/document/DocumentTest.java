@@ -64,6 +64,16 @@ class DocumentTest {
     }
 
     @Test
+    void keysAreFoundByPointerAndWhereThereIsNoneTheNearestNode() {
+        Document document = parse(TEXT);
+        assertThat(document.keyPlace("/prices/stocks").column()).isEqualTo(3);
+        assertThat(document.keyPlace("/prices/b~1c~0d").line()).isEqualTo(3);
+        assertThat(document.keyPlace("/prices/gold").path()).isEqualTo("/prices");
+        assertThat(document.keyPlace("/states/1").path()).isEqualTo("/states/1");
+        assertThat(document.keyPlace("").path()).isEmpty();
+    }
+
+    @Test
     void nearestStopsAtTheInnermostWrittenNode() {
         Document document = parse(TEXT);
         assertThat(document.nearest("/prices/stocks/close").path()).isEqualTo("/prices/stocks");

@@ -31,6 +31,23 @@ class NearestTest {
     }
 
     @Test
+    void theOnlyWordWithItAsAPartIsMeant() {
+        List<String> costs = List.of("commission-bps", "half-spread-bps");
+        assertThat(Nearest.to("commission", costs)).contains("commission-bps");
+        assertThat(Nearest.to("half_spread", costs)).contains("half-spread-bps");
+        assertThat(Nearest.to("Spread", costs)).contains("half-spread-bps");
+        assertThat(Nearest.to("bps", costs)).as("of two").isEmpty();
+        assertThat(Nearest.to("missi", costs)).as("no whole word").isEmpty();
+        assertThat(Nearest.to("re", KNOWN)).as("too short to tell").isEmpty();
+    }
+
+    @Test
+    void theHintNamesTheNearestOrIsEmpty() {
+        assertThat(Nearest.hint("regmie", KNOWN)).isEqualTo("did you mean 'regime'? ");
+        assertThat(Nearest.hint("colour", KNOWN)).isEmpty();
+    }
+
+    @Test
     void theFirstOfEqualsIsTaken() {
         assertThat(Nearest.to("bat", List.of("cat", "bar"))).contains("cat");
     }

@@ -30,6 +30,16 @@ class ProblemsTest {
                         "a.csv:5: b; mend it");
     }
 
+    /** Written by code: an escape sequence could repaint a terminal, an override of direction could turn a message round. */
+    @Test
+    void charactersThatWouldActOnATerminalAreWrittenAsTheirCode() {
+        Problem problem = new Problem("a", 1, 1, "x\u001B[31m\u0085\u202Ey", "z\n\\u");
+        assertThat(problem.what()).isEqualTo("x\\u001B[31m\\u0085\\u202Ey");
+        assertThat(problem.remedy()).isEqualTo("z\\u000A\\u");
+        String plain = "größer als 5 €, «so» – 中";
+        assertThat(new Problem("a", 1, 1, plain, plain).what()).isEqualTo(plain);
+    }
+
     @Test
     void allAreThrownAtOnce() {
         Problems problems = new Problems();

@@ -11,10 +11,11 @@ import com.fasterxml.jackson.databind.node.TextNode;
 import java.math.BigInteger;
 
 /** A located tree as the JSON that a schema validator sees: nothing filled in, nothing converted. */
-final class RawJson {
+public final class RawJson {
     private RawJson() {}
 
-    static JsonNode of(Node node) {
+    /** The tree at {@code node}, which must hold nothing that was refused while it was read. */
+    public static JsonNode of(Node node) {
         if (node instanceof MapNode map) {
             ObjectNode object = JsonNodeFactory.instance.objectNode();
             map.entries().forEach((key, entry) -> object.set(key, of(entry.value())));

@@ -8,15 +8,17 @@ import com.networknt.schema.SpecificationVersion;
 import java.util.List;
 
 /** An independent validator's verdict by the schema that a shape emits; formats (dates) are asserted. */
-final class SchemaJudge {
+public final class SchemaJudge {
     private final Schema schema;
 
-    SchemaJudge(Shape<?> shape) {
+    /** By the schema of {@code shape}. */
+    public SchemaJudge(Shape<?> shape) {
         SchemaRegistry registry = SchemaRegistry.withDefaultDialect(SpecificationVersion.DRAFT_2020_12);
         this.schema = registry.getSchema(SchemaText.tree("test", shape));
     }
 
-    List<String> faults(JsonNode json) {
+    /** What the schema finds. */
+    public List<String> faults(JsonNode json) {
         return schema
                 .validate(json, context -> context.executionConfig(config -> config.formatAssertionsEnabled(true)))
                 .stream()
@@ -24,7 +26,8 @@ final class SchemaJudge {
                 .toList();
     }
 
-    boolean accepts(JsonNode json) {
+    /** Whether the schema finds no fault. */
+    public boolean accepts(JsonNode json) {
         return faults(json).isEmpty();
     }
 }

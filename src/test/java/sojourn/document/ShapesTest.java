@@ -233,4 +233,60 @@ class ShapesTest {
                     .hasSize(1);
         }
     }
+
+    @Test
+    void aPercentageWhereAFractionBelongsIsToldAsOne() {
+        NumberShape fraction = Shapes.number().atLeast(0).atMost(1);
+        assertThat(remedy("30%", fraction)).startsWith("did you mean 0.3? give");
+        assertThat(remedy("'2.50 %'", fraction)).startsWith("did you mean 0.025? give");
+        assertThat(remedy("70", fraction)).startsWith("did you mean 0.7? give");
+        assertThat(remedy("1.5", fraction)).as("may be a slip of another kind").startsWith("give");
+        assertThat(remedy("101", fraction)).as("no fraction even then").startsWith("give");
+        assertThat(remedy("-5", fraction)).startsWith("give");
+        assertThat(remedy("5%", Shapes.number())).startsWith("leave out the %");
+        assertThat(remedy("many%", Shapes.number())).startsWith("give");
+    }
+
+    @Test
+    void aSingleItemAndAnImpossibleDayAreToldAsSuch() {
+        assertThat(remedy("calm", Shapes.list(Shapes.text(), 1, 3))).startsWith("put it in [ ]");
+        assertThat(remedy("5", Shapes.list(Shapes.text(), 1, 3))).startsWith("give");
+        assertThat(remedy("2021-02-29", Shapes.date())).startsWith("there is no such day");
+        assertThat(remedy("29.02.2021", Shapes.date())).startsWith("give");
+    }
+
+    @Test
+    void oneValueMayBeRefusedForSeveralReasons() {
+        Shape<String> shape = Shapes.text()
+                .refuseEach(text -> List.of(
+                        new Refusal("", text + " is long", "shorten it"),
+                        new Refusal("", text + " is odd", "even it")));
+        Reading<String> reading = Reading.ofValue("abc", shape);
+        assertThat(reading.value()).isEmpty();
+        assertThat(reading.problems())
+                .containsExactly("t.yaml:1:4: abc is long; shorten it", "t.yaml:1:4: abc is odd; even it");
+        assertThat(Reading.ofValue("abc", Shapes.text().refuseEach(text -> List.of()))
+                        .value())
+                .contains("abc");
+    }
+
+    @Test
+    void aDescriptionStandsInTheSchemaAndChangesNothingElse() {
+        Shape<String> shape = Shapes.text().described("a word of one's own");
+        assertThat(shape.schema().path("description").asText()).isEqualTo("a word of one's own");
+        assertThat(Reading.ofValue("abc", shape).value()).contains("abc");
+        assertThat(remedy("5", shape)).isEqualTo(remedy("5", Shapes.text()));
+    }
+
+    @Test
+    void quotedTextStandsOnOneLineAndIsCutShort() {
+        assertThat(Quoted.of("a\nb")).isEqualTo("'a\\nb'");
+        assertThat(Quoted.of("x".repeat(1000))).hasSizeLessThan(100).endsWith("…'");
+    }
+
+    private static String remedy(String yaml, Shape<?> shape) {
+        List<String> problems = Reading.ofValue(yaml, shape).problems();
+        assertThat(problems).hasSize(1);
+        return problems.get(0).substring(problems.get(0).indexOf("; ") + 2);
+    }
 }
