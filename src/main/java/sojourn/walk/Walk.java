@@ -79,7 +79,10 @@ public final class Walk {
         }
     }
 
-    /** One step with frozen parameters; the log density it gave to the new observation, NaN if there was none to score. */
+    /**
+     * One step with frozen parameters; the log density it gave to the new observation, NaN if there was none to score or no fit
+     * in force. The filter goes on while standing aside, for the next fit that is accepted starts it afresh.
+     */
     private double filterOn() {
         if (inForce.isEmpty()) {
             return Double.NaN;
@@ -87,7 +90,7 @@ public final class Walk {
         InForce before = inForce.get();
         FilterState after = before.filter().step(before.model(), log.last(), 0);
         inForce = Optional.of(new InForce(before.record(), before.model(), after));
-        boolean scored = log.lastPresent() && Double.isFinite(after.lastLogDensity());
+        boolean scored = !aside && log.lastPresent() && Double.isFinite(after.lastLogDensity());
         return scored ? after.lastLogDensity() : Double.NaN;
     }
 

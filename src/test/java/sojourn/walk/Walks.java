@@ -1,0 +1,112 @@
+package sojourn.walk;
+
+import java.util.List;
+import java.util.Optional;
+import java.util.OptionalDouble;
+import java.util.OptionalInt;
+import java.util.function.IntPredicate;
+import sojourn.GivenPrices;
+import sojourn.market.Known;
+import sojourn.numeric.RandomStream;
+import sojourn.regime.EmissionFamily;
+import sojourn.regime.ModelKind;
+import sojourn.regime.StartRunner;
+
+/** Prices with a calm and a stormy weather in them, and walks over them that are quick to fit. */
+final class Walks {
+    static final long SEED = 20260101;
+
+    private Walks() {}
+
+    /** The first asset's weather changes about every 40 bars; the others move against it: quiet in its storms, wild in its calm. */
+    static GivenPrices weathers(long seed, int bars, int assets) {
+        RandomStream random = RandomStream.of(seed, "weathers");
+        double[][] closes = new double[assets][bars];
+        boolean stormy = false;
+        for (int bar = 0; bar < bars; bar++) {
+            stormy = random.nextDouble() < 0.025 != stormy;
+            for (int asset = 0; asset < assets; asset++) {
+                double deviation = stormy == (asset == 0) ? 0.025 : 0.006;
+                double before = bar == 0 ? 100 : closes[asset][bar - 1];
+                closes[asset][bar] = before * StrictMath.exp(0.0003 + deviation * random.nextNormal());
+            }
+        }
+        return GivenPrices.closes(closes);
+    }
+
+    /** Two regimes of the log return of asset a. */
+    static RegimeSettings twoRegimes() {
+        return observing(new LogReturn("a"), "calm", "stormy");
+    }
+
+    static RegimeSettings observing(Observation observation, String... states) {
+        return new RegimeSettings(
+                ModelKind.HIDDEN_MARKOV,
+                List.of(observation),
+                List.of(states),
+                EmissionFamily.NORMAL,
+                Optional.empty(),
+                Optional.empty());
+    }
+
+    /** One regime, which is fitted by a closed form: for tests that ask when fits are made, not what they find. */
+    static RegimeSettings oneRegime(Observation observation) {
+        return new RegimeSettings(
+                ModelKind.ONE_REGIME,
+                List.of(observation),
+                List.of("any"),
+                EmissionFamily.NORMAL,
+                Optional.empty(),
+                Optional.empty());
+    }
+
+    static RefitSettings expanding(int firstFitAfter, RefitSchedule schedule) {
+        return new RefitSettings(
+                firstFitAfter, schedule, OptionalInt.empty(), 2, SEED, RefitSettings.OnFailure.KEEP_PREVIOUS);
+    }
+
+    static RefitSettings rolling(int observations, int firstFitAfter, RefitSchedule schedule) {
+        return rolling(observations, firstFitAfter, schedule, RefitSettings.OnFailure.KEEP_PREVIOUS);
+    }
+
+    static RefitSettings rolling(
+            int observations, int firstFitAfter, RefitSchedule schedule, RefitSettings.OnFailure onFailure) {
+        return new RefitSettings(firstFitAfter, schedule, OptionalInt.of(observations), 2, SEED, onFailure);
+    }
+
+    static RefitSchedule every(int observations) {
+        return new RefitSchedule.EveryObservations(observations);
+    }
+
+    static RegimeTimeline forward(GivenPrices prices, RegimeSettings regimes, RefitSettings refit) {
+        return Walk.forward(prices.table(), regimes, refit, StartRunner.sequential(), bar -> {});
+    }
+
+    /** The bars at which fits were made, accepted or not. */
+    static List<Integer> fitBars(RegimeTimeline timeline) {
+        return timeline.fits().stream().map(FitRecord::bar).toList();
+    }
+
+    /** The log return of asset a, which nobody observes on some bars. */
+    record Gappy(IntPredicate gap) implements Observation {
+        @Override
+        public OptionalDouble at(Known known) {
+            return gap.test(known.bar()) ? OptionalDouble.empty() : new LogReturn("a").at(known);
+        }
+
+        @Override
+        public String asset() {
+            return "a";
+        }
+
+        @Override
+        public String word() {
+            return "gappy";
+        }
+
+        @Override
+        public String column() {
+            return "gappy_a";
+        }
+    }
+}

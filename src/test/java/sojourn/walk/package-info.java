@@ -1,0 +1,5 @@
+/** Tests of what was known, and when. */
+@NullMarked
+package sojourn.walk;
+
+import org.jspecify.annotations.NullMarked;
