@@ -12,7 +12,10 @@ import sojourn.market.Known;
  * observation is one record and one line in {@link #shape()}.
  */
 public interface Observation {
-    /** The number at the close that {@code known} ends with; empty where there is none (a missing observation). */
+    /**
+     * The number at the close that {@code known} ends with; empty where there is none (a missing observation). A walk does not ask
+     * at the file's first bar, on which no asset has a return.
+     */
     OptionalDouble at(Known known);
 
     /** The asset it is computed from, which orders the regimes unless the strategy names another. */

@@ -26,8 +26,11 @@ final class ObservationLog {
         this.returns = new double[64 * assets];
     }
 
-    /** Takes in the bar that {@code known} ends with. */
+    /** Takes in the bar that {@code known} ends with; the file's first bar, which has no returns, is passed over. */
     void append(Known known) {
+        if (known.bar() == 0) {
+            return;
+        }
         OptionalDouble value = observation.at(known);
         if (rows == 0 && value.isEmpty()) {
             return;
