@@ -1,0 +1,81 @@
+package sojourn;
+
+import java.io.IOException;
+import java.io.UncheckedIOException;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.time.LocalDate;
+import java.util.ArrayList;
+import java.util.List;
+
+/** Open price files, cut short: written into a folder as they would have stood there in the past. */
+final class PriceHistory {
+    private static final Path OPEN_DATA = Path.of("src", "test", "resources", "open-data");
+
+    private final List<String> lines;
+
+    private PriceHistory(List<String> lines) {
+        this.lines = lines;
+    }
+
+    /** The NYSE composite, daily, 1990 to 2005. */
+    static PriceHistory stocks() {
+        return of("nyse/nyse_1990_2005.csv");
+    }
+
+    /** A file below the folder of open data, its dates in the first column. */
+    static PriceHistory of(String name) {
+        try {
+            return new PriceHistory(Files.readAllLines(OPEN_DATA.resolve(name)));
+        } catch (IOException e) {
+            throw new UncheckedIOException(e);
+        }
+    }
+
+    /** Number of price rows. */
+    int rows() {
+        return lines.size() - 1;
+    }
+
+    /** The date of a price row, counted from 0. */
+    LocalDate date(int row) {
+        String line = lines.get(row + 1);
+        return LocalDate.parse(line.substring(0, line.indexOf(',')));
+    }
+
+    /** The close of a price row, for files whose second column it is. */
+    double close(int row) {
+        return Double.parseDouble(lines.get(row + 1).split(",", -1)[1]);
+    }
+
+    /** The same with another close in one row. */
+    PriceHistory with(int row, double close) {
+        List<String> changed = new ArrayList<>(lines);
+        String[] cells = changed.get(row + 1).split(",", -1);
+        cells[1] = Double.toString(close);
+        changed.set(row + 1, String.join(",", cells));
+        return new PriceHistory(changed);
+    }
+
+    /** Writes the first {@code rows} price rows. */
+    void write(Path file, int rows) {
+        write(file, lines.subList(0, rows + 1));
+    }
+
+    /** Writes the price rows dated up to {@code last}. */
+    void write(Path file, LocalDate last) {
+        int rows = 0;
+        while (rows < rows() && !date(rows).isAfter(last)) {
+            rows++;
+        }
+        write(file, rows);
+    }
+
+    private static void write(Path file, List<String> text) {
+        try {
+            Files.write(file, text);
+        } catch (IOException e) {
+            throw new UncheckedIOException(e);
+        }
+    }
+}
