@@ -30,7 +30,7 @@ public final class TimelineFiles {
             OptionalInt fit = timeline.fitInForce(bar);
             row.add(fit.isPresent() ? Integer.toString(fit.getAsInt()) : "");
             for (int k = 0; k < timeline.regimes().size(); k++) {
-                row.add(timeline.probability(bar, k));
+                row.add(fit.isPresent() ? OptionalDouble.of(timeline.probability(bar, k)) : OptionalDouble.empty());
             }
             addForecasts(row, timeline.reading(bar), timeline.assets().size());
             row.add(timeline.logScore(bar)).end();
