@@ -2,22 +2,16 @@ package sojourn.compare;
 
 import sojourn.allocate.Because;
 import sojourn.allocate.Decision;
-import sojourn.allocate.Limits;
-import sojourn.allocate.Pacing;
 import sojourn.allocate.Policy;
-import sojourn.allocate.Schedule;
 import sojourn.allocate.Situation;
 import sojourn.allocate.Stance;
 import sojourn.allocate.Weights;
 
-/** Brings its weights back at every close. */
+/**
+ * Orders its weights at every close, even where they are held to the last bit: the order fills a bar later, when they have moved.
+ */
 final class ConstantMix implements Policy {
     private static final Because REBALANCES = Because.of("brought back to the constant mix");
-    private static final int ONLY_STATE = 0;
-    private static final double WIDE = 1e6;
-
-    /** No limit, no band: whatever was held on average may be held. */
-    static final Pacing EVERY_CLOSE = new Pacing(Schedule.AT_EVERY_CLOSE, 1, 1, new Limits(WIDE, -WIDE, WIDE), 0);
 
     private final Weights weights;
 
@@ -27,6 +21,6 @@ final class ConstantMix implements Policy {
 
     @Override
     public Decision at(Situation situation, Stance stance) {
-        return EVERY_CLOSE.decide(situation, stance, ONLY_STATE, weights, REBALANCES);
+        return Decision.order(weights, stance, REBALANCES, Decision.Change.SAME);
     }
 }

@@ -9,12 +9,11 @@ import sojourn.allocate.Weights;
 import sojourn.trade.Track;
 
 /**
- * Holds at each close the mean of a strategy's weights from its first fill to that close; nothing before. The means are taken in
+ * Orders at each close the mean of a strategy's weights from its first fill to that close; nothing before. The means are taken in
  * the order of the bars, so that the one at t rests on nothing later.
  */
 final class ExposureSoFar implements Policy {
     private static final Because FOLLOWS = Because.of("brought to the strategy's mean weights so far");
-    private static final int ONLY_STATE = 0;
 
     private final int firstBar;
     private final Weights[] means;
@@ -39,6 +38,6 @@ final class ExposureSoFar implements Policy {
     @Override
     public Decision at(Situation situation, Stance stance) {
         Weights mean = means[situation.bar() - firstBar];
-        return ConstantMix.EVERY_CLOSE.decide(situation, stance, ONLY_STATE, mean, FOLLOWS);
+        return Decision.order(mean, stance, FOLLOWS, Decision.Change.SAME);
     }
 }
