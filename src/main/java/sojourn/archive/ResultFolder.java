@@ -118,11 +118,11 @@ public final class ResultFolder implements AutoCloseable {
         String prefix = ".writing-" + ProcessHandle.current().pid() + "-";
         int attempt = 1;
         while (true) {
-            Path folder = results.resolve(prefix + attempt);
-            if (!Files.exists(folder)) {
-                return Files.createDirectory(folder);
+            try {
+                return Files.createDirectory(results.resolve(prefix + attempt));
+            } catch (FileAlreadyExistsException e) {
+                attempt++; // another run of this process writes there
             }
-            attempt++;
         }
     }
 

@@ -11,11 +11,15 @@ import sojourn.numeric.ShortestDecimal;
 
 /**
  * Rows under named columns, as a result file holds them: comma, dot, {@code \n}, shortest decimals that read back to the same
- * double, an empty cell for what is undefined.
+ * double (0.0 for a negative zero), an empty cell for what is undefined. Quoted as RFC 4180 says. A text that a spreadsheet would
+ * take for a formula, because it begins with {@code =}, {@code +}, {@code -}, {@code @}, a tab or a carriage return, gets an
+ * apostrophe in front; numbers are left as they are.
  */
 public final class Table {
     private static final CSVFormat FORMAT =
             CSVFormat.DEFAULT.builder().setRecordSeparator('\n').get();
+
+    private static final String FORMULA_STARTS = "=+-@\t\r";
 
     private final List<String> columns;
     private final List<List<String>> rows = new ArrayList<>();
@@ -62,7 +66,9 @@ public final class Table {
 
         /** A text, a date, a count. */
         public Row add(Object value) {
-            cells.add(value.toString());
+            String text = value.toString();
+            boolean formula = !text.isEmpty() && FORMULA_STARTS.indexOf(text.charAt(0)) >= 0;
+            cells.add(formula ? "'" + text : text);
             return this;
         }
 
@@ -71,7 +77,7 @@ public final class Table {
             if (!Double.isFinite(value)) {
                 throw new IllegalArgumentException("column '" + columns.get(cells.size()) + "' was given " + value);
             }
-            cells.add(ShortestDecimal.of(value));
+            cells.add(ShortestDecimal.of(value + 0.0)); // -0.0 + 0.0 is 0.0
             return this;
         }
 
