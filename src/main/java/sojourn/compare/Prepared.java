@@ -1,8 +1,11 @@
 package sojourn.compare;
 
+import java.nio.file.InvalidPathException;
+import java.nio.file.Path;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.stream.Collectors;
 import sojourn.allocate.RulePolicy;
 import sojourn.document.InputException;
@@ -69,10 +72,23 @@ public sealed interface Prepared {
             problems = List.copyOf(problems);
         }
 
-        /** One line. */
+        /** One line. It names files as the strategy does: where they lie on this machine is no part of a result. */
         String reason() {
-            String first = problems.get(0).toString();
-            return problems.size() == 1 ? first : first + " (and " + (problems.size() - 1) + " more)";
+            Problem first = problems.get(0);
+            String text = first.toString();
+            Optional<Path> read = readFrom(first.file());
+            if (read.isPresent()) {
+                text = text.replace(read.get().toString(), first.file());
+            }
+            return problems.size() == 1 ? text : text + " (and " + (problems.size() - 1) + " more)";
+        }
+
+        private Optional<Path> readFrom(String name) {
+            try {
+                return Optional.of(file.folder().resolve(name).normalize());
+            } catch (InvalidPathException e) {
+                return Optional.empty(); // the problem is that this is no path, so its text holds none
+            }
         }
     }
 
