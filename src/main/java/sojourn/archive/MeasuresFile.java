@@ -23,6 +23,7 @@ public final class MeasuresFile {
      *
      * @param strategy what the variant came to
      * @param yardsticks what each yardstick came to, by column name
+     * @param ruinedBefore yardsticks that had nothing left when the window began, by column name
      * @param byRegime the variant's returns by regime
      * @param regimes names of the regimes
      * @param parameters whether the regime model was fitted or declared
@@ -30,6 +31,7 @@ public final class MeasuresFile {
     public static String of(
             ComparisonRow.Judged strategy,
             Map<String, ComparisonRow.Judged> yardsticks,
+            List<String> ruinedBefore,
             RegimeTable byRegime,
             List<String> regimes,
             ComparisonRow.Parameters parameters) {
@@ -48,6 +50,10 @@ public final class MeasuresFile {
         root.set("by_month", periods(strategy.scorecard().calendar().months()));
         ObjectNode against = root.putObject("yardsticks");
         yardsticks.forEach((name, judged) -> against.set(name, measures(judged)));
+        for (String name : ruinedBefore) {
+            against.set(
+                    name, measured(Measured.undefined(Measured.Reason.RUIN, "it was ruined before the window begins")));
+        }
         root.set("definitions", definitions());
         return JsonText.indented(root);
     }

@@ -5,9 +5,12 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Objects;
+import java.util.Optional;
+import java.util.OptionalInt;
 import java.util.function.IntConsumer;
 import sojourn.document.InputException;
 import sojourn.document.Problem;
+import sojourn.market.TimeAxis;
 import sojourn.measure.Measure;
 import sojourn.regime.StartRunner;
 import sojourn.strategy.StrategyFile;
@@ -48,18 +51,31 @@ public final class Comparison {
         }
         Map<Run.Traded, Window> windows = Window.of(traded);
         for (Run.Traded one : traded) {
-            if (!windows.containsKey(one)) {
-                failed.add(new Run.Failed(
-                        one.file(),
-                        one.timelineKey(),
-                        "the evaluation window holds no bar that this variant traded; change judge.window, or compare"
-                                + " strategies over the same dates"));
+            Optional<String> reason = unjudgeable(one, Optional.ofNullable(windows.get(one)));
+            if (reason.isPresent()) {
+                failed.add(new Run.Failed(one.file(), one.timelineKey(), reason.get()));
+                windows.remove(one);
             }
         }
         List<Judgement> judged =
                 workers.run(List.copyOf(windows.entrySet()), entry -> Judgement.of(entry.getKey(), entry.getValue()));
         Measure rankBy = files.get(0).strategy().judge().rankBy();
         return Compared.of(prepared, timelines, Ranking.by(rankBy).sorted(judged), failed, rankBy);
+    }
+
+    private static Optional<String> unjudgeable(Run.Traded run, Optional<Window> window) {
+        if (window.isEmpty()) {
+            return Optional.of("the evaluation window holds no bar that this variant traded; change judge.window, or"
+                    + " compare strategies over the same dates");
+        }
+        OptionalInt ruined = run.track().ruinedOn();
+        if (ruined.isEmpty() || window.get().beginsAlive(run.track())) {
+            return Optional.empty();
+        }
+        TimeAxis axis = run.ready().market().table().fillPrices().axis();
+        return Optional.of(
+                "it was ruined on " + axis.date(ruined.getAsInt()) + ", before the evaluation window begins at "
+                        + axis.date(window.get().base()) + "; compare it without variants that begin later");
     }
 
     private Map<String, RegimeTimeline> walkAll(List<Prepared> prepared) {

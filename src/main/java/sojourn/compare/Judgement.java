@@ -22,6 +22,7 @@ import sojourn.walk.Reading;
  * @param run the variant
  * @param strategy its measures
  * @param yardsticks the yardsticks' measures, by column name, in the order they are shown
+ * @param ruinedBefore column names of yardsticks that had nothing left when the window began, and are not judged
  * @param afterTheFact tracks of yardsticks that need the whole window, by column name
  * @param byRegime the variant's returns by the regime that was most likely at the close before
  */
@@ -29,6 +30,7 @@ public record Judgement(
         Run.Traded run,
         ComparisonRow.Judged strategy,
         Map<String, ComparisonRow.Judged> yardsticks,
+        List<String> ruinedBefore,
         Map<String, Track> afterTheFact,
         RegimeTable byRegime) {
 
@@ -40,14 +42,26 @@ public record Judgement(
     static Judgement of(Run.Traded run, Window window) {
         EvaluatedPath own = path(run, run.track(), window);
         EvaluatedPath held = path(run, run.buyAndHold(), window);
-        Map<String, ComparisonRow.Judged> yardsticks = new LinkedHashMap<>();
-        run.causal()
-                .forEach((yardstick, track) ->
-                        yardsticks.put(yardstick.column(), judged(path(run, track, window), held, track)));
         Map<String, Track> afterTheFact = afterTheFact(run, window);
-        afterTheFact.forEach((name, track) -> yardsticks.put(name, judged(path(run, track, window), held, track)));
+        Map<String, Track> tracks = new LinkedHashMap<>();
+        run.causal().forEach((yardstick, track) -> tracks.put(yardstick.column(), track));
+        tracks.putAll(afterTheFact);
+        Map<String, ComparisonRow.Judged> yardsticks = new LinkedHashMap<>();
+        List<String> ruinedBefore = new ArrayList<>();
+        tracks.forEach((name, track) -> {
+            if (window.beginsAlive(track)) {
+                yardsticks.put(name, judged(path(run, track, window), held, track));
+            } else {
+                ruinedBefore.add(name);
+            }
+        });
         return new Judgement(
-                run, judged(own, held, run.track()), yardsticks, afterTheFact, byRegime(run, window, own.returns()));
+                run,
+                judged(own, held, run.track()),
+                yardsticks,
+                List.copyOf(ruinedBefore),
+                afterTheFact,
+                byRegime(run, window, own.returns()));
     }
 
     private static Map<String, Track> afterTheFact(Run.Traded run, Window window) {

@@ -17,6 +17,9 @@ import sojourn.walk.RegimeTimeline;
 
 /** Writes a finished comparison: the table, every timeline, and the folders of the variants. */
 public final class ResultWriter {
+    /** The folder of a result that holds the timelines. */
+    static final String TIMELINES = "timelines";
+
     private static final int ALL_UP_TO = 20;
     private static final int BEST = 10;
 
@@ -46,7 +49,7 @@ public final class ResultWriter {
                         Objects.requireNonNull(compared.timelines().get(ready.timelineKey()), "every key was walked");
                 String observation =
                         one.file().strategy().regimes().observe().get(0).column();
-                String base = "timelines/" + ready.timelineKey();
+                String base = TIMELINES + "/" + ready.timelineKey();
                 folder.write(base + ".csv", TimelineFiles.bars(timeline).csv());
                 folder.write(
                         base + ".fits.csv",
@@ -76,6 +79,7 @@ public final class ResultWriter {
                 MeasuresFile.of(
                         one.strategy(),
                         one.yardsticks(),
+                        one.ruinedBefore(),
                         one.byRegime(),
                         run.timeline().regimes(),
                         Compared.parameters(run)));

@@ -45,6 +45,11 @@ record Window(int base, int last) {
         return windows;
     }
 
+    /** Whether a track still has wealth to begin the window with; growth from nothing is undefined. */
+    boolean beginsAlive(Track track) {
+        return track.wealth(base) > 0;
+    }
+
     private static Optional<Window> between(Run.Traded run, LocalDate from, LocalDate to) {
         TimeAxis axis = axis(run);
         Track track = run.track();
