@@ -141,9 +141,18 @@ public final class Comparison {
                         file.shownName(),
                         0,
                         0,
-                        "the strategy is called '" + file.strategy().name() + "', and so is the one in "
-                                + other.shownName(),
+                        "the name '" + file.strategy().name() + "' gives the folder " + file.slug()
+                                + ", and so does that of " + other.shownName(),
                         "give each strategy a name of its own"));
+            }
+            if (file.slug().equals(ResultWriter.TIMELINES)) {
+                problems.add(new Problem(
+                        file.shownName(),
+                        0,
+                        0,
+                        "the name '" + file.strategy().name() + "' gives the folder '" + file.slug()
+                                + "', where the regimes are written",
+                        "give the strategy another name"));
             }
             Measure rankBy = file.strategy().judge().rankBy();
             if (rankBy != first.strategy().judge().rankBy()) {
