@@ -6,7 +6,6 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import java.util.stream.Collectors;
 import sojourn.allocate.RulePolicy;
 import sojourn.document.InputException;
 import sojourn.document.Problem;
@@ -51,13 +50,12 @@ public sealed interface Prepared {
             return contents;
         }
 
-        /** What doing nothing means, by content: variants with the same are judged over one window. */
-        String priceSet() {
+        /** Digests of the price series in the table, whatever they are called and wherever they lie. */
+        List<String> usedContents() {
             Map<String, String> contents = contents();
-            return file.strategy().judge().buyAndHold().entrySet().stream()
-                    .map(entry -> contents.get(entry.getKey()) + " " + entry.getValue())
-                    .sorted()
-                    .collect(Collectors.joining("\n"));
+            return market.table().assets().stream()
+                    .map(asset -> contents.getOrDefault(asset, ""))
+                    .toList();
         }
     }
 

@@ -42,6 +42,12 @@ public final class Warnings {
         for (Run.Failed one : compared.failed()) {
             warnings.add(one.file().slug() + " failed: " + one.reason());
         }
+        for (Judgement one : compared.ranked()) {
+            for (String yardstick : one.ruinedBefore()) {
+                warnings.add(one.run().file().slug() + ": " + yardstick
+                        + " had nothing left when the window began and has no row");
+            }
+        }
         addWindows(compared, warnings);
         return warnings;
     }

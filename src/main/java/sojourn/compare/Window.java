@@ -19,21 +19,22 @@ import sojourn.trade.Track;
  */
 record Window(int base, int last) {
     /**
-     * The windows of all variants that traded. Variants with the same price set share one: from the latest first fill among them
+     * The windows of all variants that traded. Variants of one price set share one: from the latest first fill among them
      * to the earliest last bar. A window stated by a variant replaces that, within what the variant traded. A variant whose
      * window holds no return is left out.
      */
     static Map<Run.Traded, Window> of(List<Run.Traded> runs) {
-        Map<String, LocalDate> from = new LinkedHashMap<>();
-        Map<String, LocalDate> to = new LinkedHashMap<>();
+        PriceSets sets = PriceSets.of(runs);
+        Map<Integer, LocalDate> from = new LinkedHashMap<>();
+        Map<Integer, LocalDate> to = new LinkedHashMap<>();
         for (Run.Traded run : runs) {
-            String set = run.ready().priceSet();
+            int set = sets.of(run);
             from.merge(set, firstFill(run), (a, b) -> a.isAfter(b) ? a : b);
             to.merge(set, axis(run).date(run.track().lastBar()), (a, b) -> a.isBefore(b) ? a : b);
         }
         Map<Run.Traded, Window> windows = new LinkedHashMap<>();
         for (Run.Traded run : runs) {
-            String set = run.ready().priceSet();
+            int set = sets.of(run);
             Optional<JudgeSettings.Window> stated =
                     run.file().strategy().judge().window();
             LocalDate first =

@@ -123,6 +123,13 @@ class EvaluationWindowTest {
     }
 
     @Test
+    void anotherMeaningOfDoingNothingOnTheSamePricesSharesTheWindow() {
+        job.with("half.yaml", mixture("Half", 100).with("judge", "{buy-and-hold: {stocks: 0.5}}"));
+        job.compare("meanings", "half.yaml", "late.yaml");
+        assertThat(from("meanings", "half")).isEqualTo(from("meanings", "late"));
+    }
+
+    @Test
     void aLongerCalendarOfTheSamePricesIsJudgedOverTheCommonDates() {
         String bonds = DrawnPrices.csv(43, 400, START);
         job.with("bonds.csv", bonds)
