@@ -60,7 +60,10 @@ public final class RulePolicy implements Policy {
         }
         int state = pacing.allowedState(lived, situation.bar());
         Weights wanted = mechanism.weights(probabilities, state, lived);
-        return pacing.decide(situation, lived, state, wanted, explained(because, lived, state, stance));
+        Decision decision = pacing.decide(situation, lived, state, wanted, explained(because, lived, state, stance));
+        boolean driftAlone = decision.kind() == Decision.Kind.ORDER
+                && stance.wanted().filter(wanted::equals).isPresent();
+        return driftAlone ? decision.explainedBy(decision.because().and("held weights had drifted from it")) : decision;
     }
 
     /** Before the first decision nothing is decided; afterwards a missing reading means standing aside, in cash. */
@@ -80,6 +83,9 @@ public final class RulePolicy implements Policy {
         if (state != lived.lived()) {
             String kept = mechanism.name(state);
             return because.and("stay-at-least " + pacing.stayAtLeast() + " bars keeps it at " + kept);
+        }
+        if (stance.undecided()) {
+            return because.and("first decision");
         }
         boolean late = !lived.undecided() && state != lived.decided() && lived.lived() == stance.lived();
         return late ? because.and("first decision since the change to " + mechanism.name(state)) : because;

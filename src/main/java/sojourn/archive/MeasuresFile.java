@@ -16,6 +16,10 @@ import sojourn.measure.RegimeTable;
 public final class MeasuresFile {
     private static final JsonNodeFactory JSON = JsonNodeFactory.instance;
 
+    private static final String SYMBOLS =
+            "W_0..W_n wealth at closes, r_1..r_n its simple returns, c_1..c_n those of cash, e = r - c, n bars, P = bars_per_year,"
+                    + " years = calendar days / 365.25";
+
     private MeasuresFile() {}
 
     /**
@@ -27,6 +31,7 @@ public final class MeasuresFile {
      * @param byRegime the variant's returns by regime
      * @param regimes names of the regimes
      * @param parameters whether the regime model was fitted or declared
+     * @param barsPerYear as declared by the length of the bars
      */
     public static String of(
             ComparisonRow.Judged strategy,
@@ -34,7 +39,8 @@ public final class MeasuresFile {
             List<String> ruinedBefore,
             RegimeTable byRegime,
             List<String> regimes,
-            ComparisonRow.Parameters parameters) {
+            ComparisonRow.Parameters parameters,
+            double barsPerYear) {
         ObjectNode root = JSON.objectNode();
         root.put("caution", Caution.TEXT);
         ObjectNode window = root.putObject("window");
@@ -54,6 +60,8 @@ public final class MeasuresFile {
             against.set(
                     name, measured(Measured.undefined(Measured.Reason.RUIN, "it was ruined before the window begins")));
         }
+        root.put("bars_per_year", barsPerYear);
+        root.put("symbols", SYMBOLS);
         root.set("definitions", definitions());
         return JsonText.indented(root);
     }

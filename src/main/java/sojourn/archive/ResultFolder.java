@@ -50,6 +50,14 @@ public final class ResultFolder implements AutoCloseable {
         this.staging = staging;
     }
 
+    /** Refuses a place for results that is a file, before any work is done. */
+    public static void refuseUnless(Path results) {
+        if (Files.exists(results) && !Files.isDirectory(results)) {
+            throw new InputException(new Problem(
+                    results.toString(), 0, 0, "is a file, results need a folder", "give --results another name"));
+        }
+    }
+
     /** Begins a folder below {@code results}, which is made if it is missing. */
     public static ResultFolder begin(Path results) {
         try {

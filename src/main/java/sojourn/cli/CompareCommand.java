@@ -23,6 +23,7 @@ import sojourn.compare.Progress;
 import sojourn.compare.ResultWriter;
 import sojourn.compare.Warnings;
 import sojourn.report.ComparisonText;
+import sojourn.report.Lines;
 import sojourn.strategy.StrategyFile;
 
 /** {@code sojourn compare}. */
@@ -65,6 +66,7 @@ final class CompareCommand implements Callable<Integer> {
     @Override
     public Integer call() {
         refuseNonsense();
+        ResultFolder.refuseUnless(options.results());
         Instant started = Instant.now();
         List<StrategyFile> files = StrategyFiles.read(given);
         Progress progress = options.quiet() ? Progress.silent() : TerminalProgress.on(console);
@@ -91,7 +93,7 @@ final class CompareCommand implements Callable<Integer> {
         }
         List<String> warnings = Warnings.of(compared);
         for (String warning : warnings.subList(0, Math.min(SHOWN_WARNINGS, warnings.size()))) {
-            console.err().println("note: " + warning);
+            console.err().print(Lines.wrapped("note: " + warning, 2));
         }
         if (warnings.size() > SHOWN_WARNINGS) {
             console.err().println("note: " + (warnings.size() - SHOWN_WARNINGS) + " more, see record.json");
@@ -105,8 +107,8 @@ final class CompareCommand implements Callable<Integer> {
     }
 
     private RunFacts facts(Instant started) {
-        List<String> command = new ArrayList<>(List.of("compare"));
-        command.addAll(spec.commandLine().getParseResult().originalArgs());
+        List<String> command =
+                List.copyOf(spec.root().commandLine().getParseResult().originalArgs());
         String host = System.getProperty("os.name") + " " + System.getProperty("os.arch") + ", Java "
                 + System.getProperty("java.version");
         double seconds = ChronoUnit.MILLIS.between(started, Instant.now()) / 1000.0;

@@ -13,7 +13,7 @@ import sojourn.document.Nearest;
 import sojourn.document.Problem;
 
 /**
- * Runs one command line. Exit codes: 0 done, 1 our bug, 2 the user's input, 3 a check of the result found something, 130
+ * Runs one command line. Exit codes: 0 done, 1 our bug, 2 the user's input, 3 an audit of the result found something, 130
  * interrupted.
  */
 public final class Shell {
@@ -91,7 +91,7 @@ public final class Shell {
                             + " existed, trades them with costs, and compares them with doing nothing.",
             footer = {
                 "",
-                "Exit codes: 0 done, 1 a fault of the program, 2 your input, 3 a check found something, 130 interrupted.",
+                "Exit codes: 0 done, 1 a fault of the program, 2 your input, 3 an audit found something, 130 interrupted.",
                 "All performance shown is hypothetical. It is not advice."
             })
     static final class Root implements Runnable {

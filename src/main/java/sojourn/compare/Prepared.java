@@ -50,6 +50,11 @@ public sealed interface Prepared {
             return contents;
         }
 
+        /** What cash earns, by content. */
+        String cashContent() {
+            return contents().getOrDefault("cash", file.strategy().cash().toString());
+        }
+
         /** Digests of the price series in the table, whatever they are called and wherever they lie. */
         List<String> usedContents() {
             Map<String, String> contents = contents();

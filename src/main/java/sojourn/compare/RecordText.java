@@ -3,7 +3,6 @@ package sojourn.compare;
 import com.fasterxml.jackson.databind.node.ArrayNode;
 import com.fasterxml.jackson.databind.node.JsonNodeFactory;
 import com.fasterxml.jackson.databind.node.ObjectNode;
-import java.util.EnumMap;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
@@ -14,9 +13,7 @@ import sojourn.archive.ProgramVersion;
 import sojourn.archive.RunFacts;
 import sojourn.document.JsonText;
 import sojourn.market.InputFile;
-import sojourn.regime.Outcome;
 import sojourn.strategy.StrategyFile;
-import sojourn.walk.FitRecord;
 import sojourn.walk.RegimeTimeline;
 
 /** The text of {@code record.json}: what went in, what was run, what came out, and, apart from that, how this run went. */
@@ -137,12 +134,11 @@ final class RecordText {
         compared.timelines().forEach((key, timeline) -> {
             ObjectNode node = timelines.addObject();
             node.put("timeline", key);
-            Map<Outcome, Integer> outcomes = new EnumMap<>(Outcome.class);
-            for (FitRecord record : timeline.fits()) {
-                outcomes.merge(record.fit().outcome(), 1, Integer::sum);
-            }
+            FitTally tally = FitTally.of(timeline);
             ObjectNode fits = node.putObject("fits");
-            outcomes.forEach((outcome, count) -> fits.put(outcome.word(), count));
+            tally.outcomes().forEach(fits::put);
+            ObjectNode events = node.putObject("fits_with_event");
+            tally.events().forEach(events::put);
         });
         return timelines;
     }

@@ -82,6 +82,7 @@ public final class ResultWriter {
                         one.ruinedBefore(),
                         one.byRegime(),
                         run.timeline().regimes(),
-                        Compared.parameters(run)));
+                        Compared.parameters(run),
+                        axis.bars().periodsPerYear()));
     }
 }

@@ -1,5 +1,6 @@
 package sojourn.compare;
 
+import java.time.LocalDate;
 import java.util.Map;
 import java.util.Objects;
 import sojourn.archive.PathFile;
@@ -42,6 +43,12 @@ public sealed interface Run {
         @Override
         public String timelineKey() {
             return ready.timelineKey();
+        }
+
+        /** When it first held something; its first decision if it never did. */
+        public LocalDate firstFill() {
+            int bar = track.firstFill().orElse(track.firstBar());
+            return ready.market().table().fillPrices().axis().date(bar);
         }
 
         /** The track of doing nothing, which runs beside every variant. */

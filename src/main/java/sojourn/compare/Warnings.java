@@ -2,8 +2,11 @@ package sojourn.compare;
 
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
+import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
+import java.util.Set;
+import sojourn.market.BarLength;
 import sojourn.market.Finding;
 import sojourn.regime.Outcome;
 import sojourn.walk.FitRecord;
@@ -57,19 +60,33 @@ public final class Warnings {
     }
 
     private static void addFits(String key, RegimeTimeline timeline, List<String> warnings) {
-        int atTheLimit = 0;
+
         for (FitRecord record : timeline.fits()) {
             if (!record.fit().outcome().accepted()) {
                 warnings.add("timeline " + key + ": fit " + record.number() + " on " + record.fittedOn() + " was "
                         + record.fit().outcome().word() + " and is not used: "
                         + record.fit().explanation());
             }
-            atTheLimit += record.fit().outcome() == Outcome.ITERATION_LIMIT ? 1 : 0;
         }
-        if (atTheLimit > 0) {
-            warnings.add("timeline " + key + ": " + atTheLimit + " of "
-                    + timeline.fits().size()
-                    + " fits stopped at the iteration limit while the likelihood was still rising");
+        FitTally tally = FitTally.of(timeline);
+        List<String> doubts = new ArrayList<>();
+        doubt(
+                doubts,
+                tally.outcomes().getOrDefault(Outcome.ITERATION_LIMIT.word(), 0),
+                "stopped at the iteration limit");
+        doubt(doubts, tally.withEvent("absorbing"), "have a regime that is never left");
+        doubt(doubts, tally.withEvent("collapsed"), "have a regime of hardly any bars");
+        doubt(doubts, tally.withEvent("duplicated"), "have two regimes that are nearly the same");
+        doubt(doubts, tally.withEvent("degenerate-starts"), "had starts that ran into a spike");
+        if (!doubts.isEmpty()) {
+            warnings.add("timeline " + key + ": of " + tally.fits() + " fits " + String.join(", ", doubts)
+                    + "; see timelines/" + key + ".fits.csv before trusting its regimes");
+        }
+    }
+
+    private static void doubt(List<String> doubts, int count, String what) {
+        if (count > 0) {
+            doubts.add(count + " " + what);
         }
     }
 
@@ -81,6 +98,24 @@ public final class Warnings {
         if (windows > 1) {
             warnings.add("the variants are judged over " + windows
                     + " different windows; compare only rows with the same dates");
+        }
+        Set<BarLength> lengths = new LinkedHashSet<>();
+        Set<String> cash = new LinkedHashSet<>();
+        for (Judgement one : compared.ranked()) {
+            lengths.add(one.run().ready().market().table().barLength());
+            cash.add(one.run().ready().cashContent());
+            if (one.run().file().strategy().limits().gross() > 1) {
+                warnings.add(one.run().file().slug()
+                        + " may borrow, and borrowing costs it no more than what cash earns: no spread is modelled");
+            }
+        }
+        if (lengths.size() > 1) {
+            warnings.add(
+                    "the variants have bars of different lengths: figures that count or measure single bars (deepest, under,"
+                            + " bad bar) do not compare across them");
+        }
+        if (cash.size() > 1) {
+            warnings.add("the variants earn differently on cash, so their Sharpe ratios are over different rates");
         }
     }
 }

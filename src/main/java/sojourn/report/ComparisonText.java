@@ -1,5 +1,6 @@
 package sojourn.report;
 
+import java.time.LocalDate;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.LinkedHashSet;
@@ -24,14 +25,16 @@ public final class ComparisonText {
     /** The whole text. */
     public static String of(Compared compared) {
         StringBuilder text = new StringBuilder();
-        text.append(Paragraph.wrapped(Caution.TEXT, 0)).append('\n');
+        text.append(Lines.wrapped(Caution.TEXT, 0)).append('\n');
         if (!compared.ranked().isEmpty()) {
             text.append(headline(compared)).append('\n');
             text.append(riskAndReturn(compared)).append('\n');
             text.append(whatItTook(compared)).append('\n');
-            text.append(againstSameExposure(compared)).append('\n');
+            if (compared.ranked().stream().anyMatch(one -> one.yardsticks().size() > 1)) {
+                text.append(againstSameExposure(compared)).append('\n');
+            }
             if (compared.ranked().stream().anyMatch(one -> named(one).endsWith("*"))) {
-                text.append(Paragraph.wrapped(
+                text.append(Lines.wrapped(
                                 "* its parameters are an external prior: declared in the strategy file, not fitted. If they were"
                                         + " estimated on this period, the result has seen its own future.",
                                 0))
@@ -42,19 +45,37 @@ public final class ComparisonText {
             text.append(VariantText.of(compared.ranked().get(0))).append('\n');
         }
         for (Run.Failed one : compared.failed()) {
-            text.append(Paragraph.wrapped("FAILED " + one.file().slug() + ": " + one.reason(), 2));
+            text.append(Lines.wrapped("FAILED " + one.file().slug() + ": " + one.reason(), 2));
         }
         return text.toString();
     }
 
     private static String headline(Compared compared) {
         int variants = compared.ranked().size();
-        return Paragraph.wrapped(
+        return Lines.wrapped(
                 variants + (variants == 1 ? " variant" : " variants") + " over " + window(compared) + ", ranked by "
                         + compared.rankBy().key().replace('_', ' ')
                         + " as declared; risk first. The interval is 95 %, robust to serial correlation; it does not know how"
-                        + " many variants were tried.",
+                        + " many variants were tried." + latest(compared),
                 0);
+    }
+
+    /** Why the window begins where it does, if others could have begun earlier. */
+    private static String latest(Compared compared) {
+        List<String> holding = new ArrayList<>();
+        TreeSet<LocalDate> firsts = new TreeSet<>();
+        for (Judgement one : compared.ranked()) {
+            LocalDate first = one.run().firstFill();
+            firsts.add(first);
+            if (!first.isBefore(one.strategy().from())) {
+                holding.add(one.run().file().slug());
+            }
+        }
+        if (holding.isEmpty() || holding.size() == compared.ranked().size()) {
+            return "";
+        }
+        return " The window begins when the last variant first trades (" + String.join(", ", holding)
+                + "); the first did on " + firsts.first() + ". Set judge: window to choose it.";
     }
 
     private static String window(Compared compared) {
@@ -78,10 +99,10 @@ public final class ComparisonText {
         }
         buyAndHold(compared).forEach(grid::add);
         return grid.text()
-                + Paragraph.wrapped(
+                + Lines.wrapped(
                         "deepest: worst drawdown at closes; under: most bars in a row below an earlier peak; bad bar: mean loss of the"
                                 + " worst 5 % of bars; vol., growth, Sharpe: per year, after costs; vs hold: growth less"
-                                + " buy-and-hold's.",
+                                + " buy-and-hold's." + (compared.ranked().size() > 1 ? " Numbers are ranks." : ""),
                         0);
     }
 
@@ -133,7 +154,7 @@ public final class ComparisonText {
                     Figures.percent(own.get(Measure.GROWTH_PER_YEAR))));
         }
         return grid.text()
-                + Paragraph.wrapped(
+                + Lines.wrapped(
                         "exposure: average net weight of all assets but cash; turnover: half of all bought and sold, in units of"
                                 + " wealth; before costs: growth of the same holdings, every trade free.",
                         0);
@@ -154,7 +175,7 @@ public final class ComparisonText {
                     of(one, Yardstick.SAME_EXPOSURE_SO_FAR, Measure.SHARPE)));
         }
         return grid.text()
-                + Paragraph.wrapped(
+                + Lines.wrapped(
                         "same exp.: a constant mix at the strategy's average weights, same costs, known only after the fact; so far:"
                                 + " at its mean weights up to each close. A claim of timing must beat these, not only buy-and-hold.",
                         0);

@@ -54,10 +54,15 @@ final class Figures {
     }
 
     private static String percent(OptionalDouble number, String format) {
-        return number.isPresent() ? String.format(Locale.ROOT, format, 100 * number.getAsDouble()) : NONE;
+        return number.isPresent() ? unsigned(String.format(Locale.ROOT, format, 100 * number.getAsDouble())) : NONE;
     }
 
     private static String number(OptionalDouble number, String format) {
-        return number.isPresent() ? String.format(Locale.ROOT, format, number.getAsDouble()) : NONE;
+        return number.isPresent() ? unsigned(String.format(Locale.ROOT, format, number.getAsDouble())) : NONE;
+    }
+
+    /** A zero that rounding left a minus sign loses it. */
+    private static String unsigned(String text) {
+        return text.matches("-0(\\.0+)?( %)?") ? text.substring(1) : text;
     }
 }

@@ -1,6 +1,7 @@
 package sojourn.report;
 
 import java.time.LocalDate;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
@@ -18,6 +19,7 @@ import sojourn.regime.ModelKind;
 import sojourn.strategy.Strategy;
 import sojourn.trade.TradeSettings;
 import sojourn.walk.FitPlan;
+import sojourn.walk.FixedParameters;
 import sojourn.walk.RefitSchedule;
 import sojourn.walk.RefitSettings;
 import sojourn.walk.RegimeSettings;
@@ -37,7 +39,7 @@ public final class PlanText {
     /** The caution, then the plan of each strategy. */
     public static String of(List<Prepared> prepared) {
         PlanText plan = new PlanText();
-        plan.text.append(Paragraph.wrapped(Caution.TEXT, 0));
+        plan.text.append(Lines.wrapped(Caution.TEXT, 0));
         for (Prepared one : prepared) {
             plan.text.append('\n');
             if (one instanceof Prepared.Ready ready) {
@@ -76,6 +78,7 @@ public final class PlanText {
                         + String.join(", ", table.assets()) + ", " + last.date(0) + " to " + last.date() + "; "
                         + (int) table.barLength().periodsPerYear() + " count as a year");
         line("Watches", watches(strategy.regimes()));
+        strategy.regimes().fixed().ifPresent(fixed -> line("Declared", declared(strategy.regimes(), fixed, table)));
         FitPlan plan = FitPlan.of(table, strategy.regimes(), strategy.refit());
         line("Fits", fits(strategy.refit(), strategy.regimes(), plan));
         line("Rule", RuleText.of(strategy.rule()));
@@ -85,7 +88,9 @@ public final class PlanText {
         for (Finding finding : ready.market().findings()) {
             line("Finding", finding.toString());
         }
-        if (ready.market().findings().isEmpty()) {
+        if (plan.fitDates().isEmpty()) {
+            line("Fault", "no fit will ever be due, so the strategy cannot run; see Fits above");
+        } else if (ready.market().findings().isEmpty()) {
             line("Findings", "none");
         }
     }
@@ -111,16 +116,34 @@ public final class PlanText {
         return observed + "; " + model + "; regimes " + String.join(", ", regimes.states()) + order;
     }
 
+    private static String declared(RegimeSettings regimes, FixedParameters fixed, PriceTable table) {
+        List<String> each = new ArrayList<>();
+        double year = Math.sqrt(table.barLength().periodsPerYear());
+        for (int k = 0; k < regimes.states().size(); k++) {
+            each.add(String.format(
+                    Locale.ROOT,
+                    "%s has mean %s and deviation %s a bar (%.1f %% a year), stays with probability %s",
+                    regimes.states().get(k),
+                    fixed.mean().get(k),
+                    fixed.sd().get(k),
+                    100 * year * fixed.sd().get(k),
+                    fixed.transition().get(k).get(k)));
+        }
+        return String.join("; ", each);
+    }
+
     private static String fits(RefitSettings refit, RegimeSettings regimes, FitPlan plan) {
         if (plan.fitDates().isEmpty()) {
             return "none: first-fit-after is " + refit.firstFitAfter() + " and there are " + plan.observations()
                     + " observations; this strategy will fail";
         }
         List<LocalDate> dates = plan.fitDates();
-        String what = regimes.fixed().isPresent()
-                ? "declared parameters (an external prior), taken up "
-                : "maximum likelihood from " + refit.starts() + " starts and the fit before (seed " + refit.seed()
-                        + "), ";
+        if (regimes.fixed().isPresent()) {
+            return "none: its parameters are declared (an external prior), in use from " + dates.get(0)
+                    + " on; the filter begins" + " afresh " + every(refit.schedule());
+        }
+        String what = "maximum likelihood from " + refit.starts() + " starts and the fit before (seed " + refit.seed()
+                + "), ";
         String window = refit.rolling().isPresent()
                 ? "on the last " + refit.rolling().getAsInt() + " observations"
                 : "on all observations so far";
@@ -168,6 +191,6 @@ public final class PlanText {
 
     private void line(String label, String content) {
         String head = String.format(Locale.ROOT, "  %-" + (INDENT - 3) + "s ", label);
-        text.append(Paragraph.after(head, content, INDENT));
+        text.append(Lines.after(head, content, INDENT));
     }
 }

@@ -28,7 +28,7 @@ final class VariantText {
                 .recoveryDate()
                 .map(date -> "recovered on " + date)
                 .orElse("not recovered by the end of the window");
-        return Paragraph.wrapped(
+        return Lines.wrapped(
                 "The worst fall ran from " + episode.get().peakDate() + " to "
                         + episode.get().troughDate() + ", " + episode.get().barsDown() + " bars; " + recovered + ".",
                 0);
@@ -46,7 +46,7 @@ final class VariantText {
                     Figures.percent(row.compounded())));
         }
         return grid.text()
-                + Paragraph.wrapped(
+                + Lines.wrapped(
                         "The strategy's returns on the bars whose regime, the most likely at the close before, was this one.",
                         0);
     }

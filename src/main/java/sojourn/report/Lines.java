@@ -1,14 +1,14 @@
 package sojourn.report;
 
 /** Text wrapped to the width of a terminal. */
-final class Paragraph {
+public final class Lines {
     /** Columns of a line at most. */
     static final int WIDTH = 100;
 
-    private Paragraph() {}
+    private Lines() {}
 
     /** Wrapped at spaces; every line but the first begins with {@code indent} spaces. Ends with a line end. */
-    static String wrapped(String text, int indent) {
+    public static String wrapped(String text, int indent) {
         return after("", text, indent);
     }
 
