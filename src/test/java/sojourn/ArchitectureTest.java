@@ -122,7 +122,8 @@ class ArchitectureTest {
                                         java.io.Console.class,
                                         java.util.Random.class,
                                         java.util.concurrent.ThreadLocalRandom.class,
-                                        java.time.Clock.class)
+                                        java.time.Clock.class,
+                                        java.time.Instant.class)
                                 .orShould()
                                 .accessField(System.class, "out")
                                 .orShould()
@@ -185,6 +186,33 @@ class ArchitectureTest {
                 .orShould()
                 .dependOnClassesThat()
                 .haveFullyQualifiedName("sojourn.regime.Viterbi")
+                .check(ours);
+    }
+
+    @Test
+    void theSeamsHaveOnlyHonestImplementations() {
+        classes()
+                .that()
+                .implement("sojourn.walk.Signal")
+                .should()
+                .haveFullyQualifiedName("sojourn.walk.RegimeTimeline")
+                .check(ours);
+        classes()
+                .that()
+                .implement("sojourn.trade.FillRule")
+                .should()
+                .haveFullyQualifiedName("sojourn.trade.NextClose")
+                .check(ours);
+    }
+
+    @Test
+    void onlyTheDoorsTouchFiles() {
+        noClasses()
+                .that()
+                .resideOutsideOfPackages("sojourn.document", "sojourn.market", "sojourn.archive", "sojourn.cli")
+                .should()
+                .dependOnClassesThat()
+                .belongToAnyOf(java.io.File.class, java.nio.file.Files.class)
                 .check(ours);
     }
 

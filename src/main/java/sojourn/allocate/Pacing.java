@@ -50,8 +50,7 @@ public record Pacing(Schedule schedule, int stayAtLeast, double stepToward, Limi
     }
 
     /**
-     * The decision for {@code wanted}: step, limits, band, order. The band does not hold back the first decision, which starts
-     * from nothing held.
+     * The decision for {@code wanted}: step, limits, band, order.
      *
      * @param state the state that wants these weights; any one number for policies without states
      */
@@ -61,8 +60,7 @@ public record Pacing(Schedule schedule, int stayAtLeast, double stepToward, Limi
         Stance next = lived.deciding(state, wanted, situation.bar());
         Decision.Change change =
                 !lived.undecided() && state != lived.decided() ? Decision.Change.SWITCHED : Decision.Change.SAME;
-        double band = lived.undecided() ? 0 : noTradeBand;
-        return target.strictlyOutside(band, held)
+        return target.strictlyOutside(noTradeBand, held)
                 ? Decision.order(target, next, because, change)
                 : Decision.keep(target, next, because, change);
     }

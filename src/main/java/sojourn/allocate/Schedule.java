@@ -1,9 +1,9 @@
 package sojourn.allocate;
 
-import java.time.LocalDate;
 import java.util.List;
 import sojourn.document.Shape;
 import sojourn.document.Shapes;
+import sojourn.market.BarLength;
 import sojourn.market.Known;
 
 /**
@@ -22,24 +22,14 @@ public enum Schedule {
     FIRST_OF_WEEK("first-of-week") {
         @Override
         public boolean decides(Known known) {
-            return startsPeriod(known, this);
-        }
-
-        @Override
-        long period(LocalDate date) {
-            return Math.floorDiv(date.toEpochDay() + 3, 7L); // day 0 of the epoch was a Thursday
+            return startsPeriod(known, BarLength.WEEKLY);
         }
     },
     /** The first bar of each calendar month. */
     FIRST_OF_MONTH("first-of-month") {
         @Override
         public boolean decides(Known known) {
-            return startsPeriod(known, this);
-        }
-
-        @Override
-        long period(LocalDate date) {
-            return 12L * date.getYear() + date.getMonthValue();
+            return startsPeriod(known, BarLength.MONTHLY);
         }
     };
 
@@ -60,12 +50,8 @@ public enum Schedule {
     /** Whether the close that {@code known} ends with is one to decide at. */
     public abstract boolean decides(Known known);
 
-    long period(LocalDate date) {
-        return date.toEpochDay();
-    }
-
-    private static boolean startsPeriod(Known known, Schedule schedule) {
+    private static boolean startsPeriod(Known known, BarLength period) {
         int bar = known.bar();
-        return bar > 0 && schedule.period(known.date(bar)) != schedule.period(known.date(bar - 1));
+        return bar > 0 && !period.periodStart(known.date(bar)).equals(period.periodStart(known.date(bar - 1)));
     }
 }

@@ -74,11 +74,6 @@ public record ComparisonRow(
         }
     }
 
-    /** The same line without the words of its failure. */
-    public ComparisonRow withoutReason() {
-        return new ComparisonRow(variant, kind, timeline, parameters, "", judged);
-    }
-
     /** {@code ran}, {@code ruined} or {@code failed}. */
     public String outcome() {
         return judged.map(Judged::outcome).orElse("failed");

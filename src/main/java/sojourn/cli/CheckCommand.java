@@ -5,7 +5,7 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.concurrent.Callable;
 import picocli.CommandLine.Command;
-import picocli.CommandLine.Option;
+import picocli.CommandLine.Mixin;
 import picocli.CommandLine.Parameters;
 import sojourn.compare.Prepared;
 import sojourn.report.PlanJson;
@@ -30,8 +30,8 @@ final class CheckCommand implements Callable<Integer> {
     @Parameters(arity = "1..*", paramLabel = "FILES-OR-FOLDERS", description = "Strategy files, and folders of them.")
     private final List<Path> given = new ArrayList<>();
 
-    @Option(names = "--json", description = "Machine-readable output on standard output.")
-    private boolean json;
+    @Mixin
+    private final CommonOptions options = new CommonOptions();
 
     CheckCommand(Console console) {
         this.console = console;
@@ -43,7 +43,7 @@ final class CheckCommand implements Callable<Integer> {
         for (StrategyFile file : StrategyFiles.read(given)) {
             prepared.add(Prepared.of(file));
         }
-        console.out().print(json ? PlanJson.of(prepared) : PlanText.of(prepared));
+        console.out().print(options.json() ? PlanJson.of(prepared) : PlanText.of(prepared));
         boolean readable = prepared.stream().allMatch(one -> one instanceof Prepared.Ready);
         return readable ? 0 : USERS_INPUT;
     }

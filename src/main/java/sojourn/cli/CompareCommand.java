@@ -22,6 +22,7 @@ import sojourn.compare.LocalWorkers;
 import sojourn.compare.Progress;
 import sojourn.compare.ResultWriter;
 import sojourn.compare.Warnings;
+import sojourn.compare.WhichPaths;
 import sojourn.report.ComparisonText;
 import sojourn.report.Lines;
 import sojourn.strategy.StrategyFile;
@@ -37,6 +38,7 @@ import sojourn.strategy.StrategyFile;
             "Example: sojourn compare strategies"
         })
 final class CompareCommand implements Callable<Integer> {
+    private static final int OUR_BUG = 1;
     private static final int USERS_INPUT = 2;
     private static final int SHOWN_WARNINGS = 12;
 
@@ -55,6 +57,14 @@ final class CompareCommand implements Callable<Integer> {
             defaultValue = "",
             description = "The result's name; by default that of the one file or folder, else 'comparison'.")
     private String name = "";
+
+    @Option(
+            names = "--paths",
+            paramLabel = "all|best:N|none",
+            defaultValue = "",
+            converter = PathChoice.class,
+            description = "Which variants get a folder of their own: by default all, or the best 10 of more than 20.")
+    private WhichPaths paths = WhichPaths.byDefault();
 
     @Mixin
     private final CommonOptions options = new CommonOptions();
@@ -76,7 +86,7 @@ final class CompareCommand implements Callable<Integer> {
         }
         String result = name.isEmpty() ? StrategyFiles.resultName(given) : name;
         RunFacts facts = facts(started);
-        ResultFolder.Published published = ResultWriter.write(options.results(), result, compared, facts);
+        ResultFolder.Published published = ResultWriter.write(options.results(), result, compared, facts, paths);
         if (options.json()) {
             console.out().print(ComparisonJson.of(compared, published.folder()));
         } else {
@@ -84,6 +94,11 @@ final class CompareCommand implements Callable<Integer> {
             console.out().println("digest " + compared.digest());
         }
         tell(compared, published);
+        if (!compared.faults().isEmpty()) {
+            console.err().println("Faults of the program cost the rows named above. Please report the lines below.");
+            compared.faults().forEach(fault -> fault.printStackTrace(console.err()));
+            return OUR_BUG;
+        }
         return compared.ranked().isEmpty() ? USERS_INPUT : 0;
     }
 

@@ -44,6 +44,10 @@ final class StrategyFiles {
     private static List<Path> expanded(List<Path> given, Problems problems) {
         List<Path> files = new ArrayList<>();
         for (Path path : given) {
+            if (path.toString().isEmpty()) {
+                problems.add(new Problem("''", 0, 0, "an empty name", "name a strategy file or a folder of them"));
+                continue;
+            }
             if (!Files.isDirectory(path)) {
                 files.add(path);
                 continue;

@@ -19,6 +19,7 @@ import sojourn.walk.RegimeTimeline;
  * @param timelines by address
  * @param ranked the variants that ran, best first by {@code rankBy}
  * @param failed the variants that did not, by name
+ * @param faults of the program, each of which cost a variant its row
  * @param rankBy the declared measure
  * @param rows the table: ranked variants, failed ones, yardsticks
  * @param digest of the variants' digests in order and of the table
@@ -28,6 +29,7 @@ public record Compared(
         Map<String, RegimeTimeline> timelines,
         List<Judgement> ranked,
         List<Run.Failed> failed,
+        List<RuntimeException> faults,
         Measure rankBy,
         List<ComparisonRow> rows,
         String digest) {
@@ -37,6 +39,7 @@ public record Compared(
             Map<String, RegimeTimeline> timelines,
             List<Judgement> ranked,
             List<Run.Failed> failed,
+            List<RuntimeException> faults,
             Measure rankBy) {
         List<Run.Failed> byName = new ArrayList<>(failed);
         byName.sort(Comparator.comparing(one -> one.file().slug()));
@@ -45,11 +48,19 @@ public record Compared(
         for (Judgement one : ranked) {
             digest.text(one.run().file().slug()).text(one.run().digest());
         }
-        // the words of a reason may name a folder of this machine; that a variant failed is in the table without them
-        digest.text(ComparisonFile.of(
-                        rows.stream().map(ComparisonRow::withoutReason).toList())
-                .csv());
-        return new Compared(List.copyOf(prepared), timelines, List.copyOf(ranked), byName, rankBy, rows, digest.hex());
+        for (Run.Failed one : byName) {
+            digest.text(one.file().slug()).bytes(one.file().settingsByContent(Map.of()));
+        }
+        digest.text(ComparisonFile.of(rows).csv());
+        return new Compared(
+                List.copyOf(prepared),
+                timelines,
+                List.copyOf(ranked),
+                byName,
+                List.copyOf(faults),
+                rankBy,
+                rows,
+                digest.hex());
     }
 
     private static List<ComparisonRow> rows(List<Judgement> ranked, List<Run.Failed> failed) {

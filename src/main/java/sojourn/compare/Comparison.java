@@ -38,8 +38,14 @@ public final class Comparison {
     public Compared run(List<StrategyFile> files) {
         refuseAmbiguity(files);
         List<Prepared> prepared = workers.run(files, Prepared::of);
-        Map<String, RegimeTimeline> timelines = walkAll(prepared);
-        List<Run> runs = trade(prepared, timelines);
+        Map<String, Attempt<RegimeTimeline>> walked = walkAll(prepared);
+        Map<String, RegimeTimeline> timelines = new LinkedHashMap<>();
+        List<RuntimeException> faults = new ArrayList<>();
+        walked.forEach((key, attempt) -> {
+            attempt.result().ifPresent(timeline -> timelines.put(key, timeline));
+            attempt.fault().ifPresent(faults::add);
+        });
+        List<Run> runs = trade(prepared, walked, faults);
         List<Run.Traded> traded = new ArrayList<>();
         List<Run.Failed> failed = new ArrayList<>();
         for (Run run : runs) {
@@ -57,10 +63,27 @@ public final class Comparison {
                 windows.remove(one);
             }
         }
-        List<Judgement> judged =
-                workers.run(List.copyOf(windows.entrySet()), entry -> Judgement.of(entry.getKey(), entry.getValue()));
+        List<Judgement> judged = judge(windows, failed, faults);
         Measure rankBy = files.get(0).strategy().judge().rankBy();
-        return Compared.of(prepared, timelines, Ranking.by(rankBy).sorted(judged), failed, rankBy);
+        return Compared.of(prepared, timelines, Ranking.by(rankBy).sorted(judged), failed, faults, rankBy);
+    }
+
+    private List<Judgement> judge(
+            Map<Run.Traded, Window> windows, List<Run.Failed> failed, List<RuntimeException> faults) {
+        List<Map.Entry<Run.Traded, Window>> jobs = List.copyOf(windows.entrySet());
+        List<Attempt<Judgement>> attempts =
+                workers.run(jobs, job -> Attempt.at(() -> Judgement.of(job.getKey(), job.getValue())));
+        List<Judgement> judged = new ArrayList<>();
+        for (int i = 0; i < jobs.size(); i++) {
+            Run.Traded run = jobs.get(i).getKey();
+            Attempt<Judgement> attempt = attempts.get(i);
+            attempt.result()
+                    .ifPresentOrElse(
+                            judged::add,
+                            () -> failed.add(new Run.Failed(run.file(), run.timelineKey(), attempt.reason())));
+            attempt.fault().ifPresent(faults::add);
+        }
+        return judged;
     }
 
     private static Optional<String> unjudgeable(Run.Traded run, Optional<Window> window) {
@@ -78,7 +101,7 @@ public final class Comparison {
                         + axis.date(window.get().base()) + "; compare it without variants that begin later");
     }
 
-    private Map<String, RegimeTimeline> walkAll(List<Prepared> prepared) {
+    private Map<String, Attempt<RegimeTimeline>> walkAll(List<Prepared> prepared) {
         Map<String, Prepared.Ready> byKey = new LinkedHashMap<>();
         long bars = 0;
         for (Prepared one : prepared) {
@@ -88,9 +111,9 @@ public final class Comparison {
         }
         List<Prepared.Ready> jobs = List.copyOf(byKey.values());
         progress.begin("walking " + jobs.size() + (jobs.size() == 1 ? " timeline" : " timelines"), bars);
-        List<RegimeTimeline> walked = walkEach(jobs);
+        List<Attempt<RegimeTimeline>> walked = walkEach(jobs);
         progress.end();
-        Map<String, RegimeTimeline> timelines = new LinkedHashMap<>();
+        Map<String, Attempt<RegimeTimeline>> timelines = new LinkedHashMap<>();
         for (int i = 0; i < jobs.size(); i++) {
             timelines.put(jobs.get(i).timelineKey(), walked.get(i));
         }
@@ -98,12 +121,12 @@ public final class Comparison {
     }
 
     /** Several timelines side by side; a single one shares out the starts of each fit instead. */
-    private List<RegimeTimeline> walkEach(List<Prepared.Ready> jobs) {
+    private List<Attempt<RegimeTimeline>> walkEach(List<Prepared.Ready> jobs) {
         if (jobs.size() != 1) {
-            return workers.run(jobs, ready -> walk(ready, StartRunner.sequential()));
+            return workers.run(jobs, ready -> Attempt.at(() -> walk(ready, StartRunner.sequential())));
         }
         try (ThreadedStarts starts = new ThreadedStarts(workers.threads())) {
-            return List.of(walk(jobs.get(0), starts));
+            return List.of(Attempt.at(() -> walk(jobs.get(0), starts)));
         }
     }
 
@@ -121,13 +144,29 @@ public final class Comparison {
                 tell);
     }
 
-    private List<Run> trade(List<Prepared> prepared, Map<String, RegimeTimeline> timelines) {
-        return workers.run(prepared, one -> {
-            if (one instanceof Prepared.Ready ready) {
-                return VariantRunner.run(ready, Objects.requireNonNull(timelines.get(ready.timelineKey())));
-            }
-            return new Run.Failed(one.file(), "", ((Prepared.Unreadable) one).reason());
-        });
+    private List<Run> trade(
+            List<Prepared> prepared, Map<String, Attempt<RegimeTimeline>> walked, List<RuntimeException> faults) {
+        List<Attempt<Run>> attempts = workers.run(prepared, one -> Attempt.at(() -> trade(one, walked)));
+        List<Run> runs = new ArrayList<>();
+        for (int i = 0; i < attempts.size(); i++) {
+            Attempt<Run> attempt = attempts.get(i);
+            StrategyFile file = prepared.get(i).file();
+            runs.add(attempt.result().orElseGet(() -> new Run.Failed(file, "", attempt.reason())));
+            attempt.fault().ifPresent(faults::add);
+        }
+        return runs;
+    }
+
+    private static Run trade(Prepared one, Map<String, Attempt<RegimeTimeline>> walked) {
+        if (one instanceof Prepared.Unreadable unreadable) {
+            return new Run.Failed(one.file(), "", unreadable.reason());
+        }
+        Prepared.Ready ready = (Prepared.Ready) one;
+        Attempt<RegimeTimeline> attempt =
+                Objects.requireNonNull(walked.get(ready.timelineKey()), "every timeline was walked");
+        return attempt.result()
+                .map(timeline -> VariantRunner.run(ready, timeline))
+                .orElseGet(() -> new Run.Failed(one.file(), ready.timelineKey(), attempt.reason()));
     }
 
     private static void refuseAmbiguity(List<StrategyFile> files) {

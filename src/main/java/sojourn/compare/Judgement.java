@@ -6,7 +6,6 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Objects;
-import java.util.Optional;
 import sojourn.archive.ComparisonRow;
 import sojourn.market.FillPrices;
 import sojourn.measure.EvaluatedPath;
@@ -120,19 +119,11 @@ public record Judgement(
     private static RegimeTable byRegime(Run.Traded run, Window window, double[] returns) {
         int[] labels = new int[returns.length];
         for (int i = 0; i < labels.length; i++) {
-            labels[i] = mostLikely(run.timeline().reading(window.base() + i));
+            labels[i] = run.timeline()
+                    .reading(window.base() + i)
+                    .map(Reading::mostLikely)
+                    .orElse(RegimeTable.UNKNOWN);
         }
         return RegimeTable.of(labels, returns, run.timeline().regimes().size());
-    }
-
-    private static int mostLikely(Optional<Reading> reading) {
-        if (reading.isEmpty()) {
-            return RegimeTable.UNKNOWN;
-        }
-        int best = 0;
-        for (int k = 1; k < reading.get().states(); k++) {
-            best = reading.get().filtered(k) > reading.get().filtered(best) ? k : best;
-        }
-        return best;
     }
 }

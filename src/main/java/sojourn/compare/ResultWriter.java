@@ -2,7 +2,6 @@ package sojourn.compare;
 
 import java.nio.file.Path;
 import java.util.LinkedHashSet;
-import java.util.List;
 import java.util.Objects;
 import java.util.Set;
 import sojourn.archive.ComparisonFile;
@@ -20,21 +19,18 @@ public final class ResultWriter {
     /** The folder of a result that holds the timelines. */
     static final String TIMELINES = "timelines";
 
-    private static final int ALL_UP_TO = 20;
-    private static final int BEST = 10;
-
     private ResultWriter() {}
 
     /**
-     * Writes below {@code results} under {@code name}. With more than 20 variants that ran, folders of the best 10 are written;
-     * the table, digests and timelines are always whole.
+     * Writes below {@code results} under {@code name}. The folders that {@code paths} names are written; the table, digests and timelines are always whole.
      */
-    public static ResultFolder.Published write(Path results, String name, Compared compared, RunFacts facts) {
+    public static ResultFolder.Published write(
+            Path results, String name, Compared compared, RunFacts facts, WhichPaths paths) {
         try (ResultFolder folder = ResultFolder.begin(results)) {
             folder.write("comparison.csv", ComparisonFile.of(compared.rows()).csv());
             writeTimelines(folder, compared);
-            List<Judgement> ranked = compared.ranked();
-            for (Judgement one : ranked.size() > ALL_UP_TO ? ranked.subList(0, BEST) : ranked) {
+
+            for (Judgement one : paths.of(compared.ranked())) {
                 writeVariant(folder, results.resolve(name), one);
             }
             return folder.publish(name, compared.digest(), RecordText.of(name, compared, facts));

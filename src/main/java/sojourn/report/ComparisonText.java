@@ -18,7 +18,6 @@ import sojourn.measure.Yardstick;
 
 /** A comparison as a terminal shows it, at most 100 columns wide: caution, risk and return, what it took, failures. */
 public final class ComparisonText {
-    private static final int LONGEST_NAME = 28;
 
     private ComparisonText() {}
 
@@ -95,7 +94,7 @@ public final class ComparisonText {
                 new Grid(List.of("", "deepest", "under", "bad bar", "vol.", "growth", "vs hold", "Sharpe", "interval"));
         int rank = 1;
         for (Judgement one : compared.ranked()) {
-            grid.add(risk(shortened(rank++ + " " + named(one)), one.strategy()));
+            grid.add(risk(rank++ + " " + named(one), one.strategy()));
         }
         buyAndHold(compared).forEach(grid::add);
         return grid.text()
@@ -119,7 +118,7 @@ public final class ComparisonText {
         owners.forEach((figures, ranks) -> {
             List<String> line = new ArrayList<>();
             String of = owners.size() == 1 ? "" : " of " + String.join(" ", ranks);
-            line.add(shortened("  buy-and-hold" + of));
+            line.add("  buy-and-hold" + of);
             line.addAll(figures);
             lines.add(line);
         });
@@ -145,7 +144,7 @@ public final class ComparisonText {
         for (Judgement one : compared.ranked()) {
             Judged own = one.strategy();
             grid.add(List.of(
-                    shortened("  " + named(one)),
+                    "  " + named(one),
                     Figures.percent(own.get(Measure.AVERAGE_EXPOSURE)),
                     Figures.times(own.get(Measure.SWITCHES_PER_YEAR)),
                     Figures.times(own.get(Measure.TURNOVER_PER_YEAR)),
@@ -166,7 +165,7 @@ public final class ComparisonText {
         for (Judgement one : compared.ranked()) {
             Judged own = one.strategy();
             grid.add(List.of(
-                    shortened("  " + named(one)),
+                    "  " + named(one),
                     Figures.percent(own.get(Measure.GROWTH_PER_YEAR)),
                     of(one, Yardstick.SAME_EXPOSURE, Measure.GROWTH_PER_YEAR),
                     of(one, Yardstick.SAME_EXPOSURE_SO_FAR, Measure.GROWTH_PER_YEAR),
@@ -194,9 +193,5 @@ public final class ComparisonText {
     private static String named(Judgement one) {
         return one.run().file().slug()
                 + (one.run().file().strategy().regimes().fixed().isPresent() ? "*" : "");
-    }
-
-    private static String shortened(String name) {
-        return name.length() <= LONGEST_NAME ? name : name.substring(0, LONGEST_NAME - 1) + "…";
     }
 }

@@ -12,6 +12,7 @@ import tech.tablesaw.api.Table;
  */
 final class Grid {
     private static final String GAP = "  ";
+    private static final int LEAST_NAME = 8;
 
     private final List<String> headings;
     private final Table table;
@@ -43,6 +44,7 @@ final class Grid {
                 widths[i] = Math.max(widths[i], cell.length());
             }
         }
+        narrow(widths);
         StringBuilder text = new StringBuilder();
         line(text, headings, widths);
         for (int i = 0; i < columns; i++) {
@@ -59,11 +61,25 @@ final class Grid {
         return text.toString();
     }
 
+    /** Takes from the first column, which holds names, what is too much for a line. */
+    private static void narrow(int[] widths) {
+        int line = GAP.length() * (widths.length - 1);
+        for (int width : widths) {
+            line += width;
+        }
+        int tooMuch = Math.max(0, line - Lines.WIDTH);
+        widths[0] = Math.max(Math.min(LEAST_NAME, widths[0]), widths[0] - tooMuch);
+    }
+
+    private static String fitted(String cell, int width) {
+        return cell.length() <= width ? cell : cell.substring(0, width - 1) + "…";
+    }
+
     private static void line(StringBuilder text, List<String> cells, int[] widths) {
         StringBuilder line = new StringBuilder();
         for (int i = 0; i < widths.length; i++) {
             String format = i == 0 ? "%-" + widths[i] + "s" : "%" + widths[i] + "s";
-            line.append(i == 0 ? "" : GAP).append(String.format(Locale.ROOT, format, cells.get(i)));
+            line.append(i == 0 ? "" : GAP).append(String.format(Locale.ROOT, format, fitted(cells.get(i), widths[i])));
         }
         text.append(line.toString().stripTrailing()).append('\n');
     }

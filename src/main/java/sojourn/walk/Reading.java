@@ -58,6 +58,15 @@ public final class Reading {
         return filtered.clone();
     }
 
+    /** The regime of the highest filtered probability; ties go to the one of lower volatility. */
+    public int mostLikely() {
+        int best = 0;
+        for (int k = 1; k < filtered.length; k++) {
+            best = filtered[k] > filtered[best] ? k : best;
+        }
+        return best;
+    }
+
     /** Probability of each regime {@code bars} bars ahead: p A^bars, by repeated steps. */
     public double[] predicted(int bars) {
         Check.within(bars, 0, Integer.MAX_VALUE, "bars");

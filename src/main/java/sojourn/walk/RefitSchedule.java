@@ -1,7 +1,7 @@
 package sojourn.walk;
 
 import java.time.LocalDate;
-import java.time.temporal.IsoFields;
+import sojourn.market.BarLength;
 import sojourn.market.Known;
 
 /** On which bars a model is fitted again, judged from what was known at the bar's close. */
@@ -33,31 +33,32 @@ public sealed interface RefitSchedule {
         /** ISO week, Monday to Sunday. */
         WEEK {
             @Override
-            int period(LocalDate date) {
-                return date.get(IsoFields.WEEK_BASED_YEAR) * 53 + date.get(IsoFields.WEEK_OF_WEEK_BASED_YEAR);
+            LocalDate start(LocalDate date) {
+                return BarLength.WEEKLY.periodStart(date);
             }
         },
         /** Calendar month. */
         MONTH {
             @Override
-            int period(LocalDate date) {
-                return date.getYear() * 12 + date.getMonthValue();
+            LocalDate start(LocalDate date) {
+                return BarLength.MONTHLY.periodStart(date);
             }
         },
         /** Calendar quarter. */
         QUARTER {
             @Override
-            int period(LocalDate date) {
-                return date.getYear() * 4 + date.get(IsoFields.QUARTER_OF_YEAR);
+            LocalDate start(LocalDate date) {
+                return LocalDate.of(date.getYear(), date.getMonth().firstMonthOfQuarter(), 1);
             }
         };
 
-        abstract int period(LocalDate date);
+        /** The first calendar day of the period that a date lies in. */
+        abstract LocalDate start(LocalDate date);
 
         @Override
         public boolean due(Known known, int observed, boolean hereToo, int firstAfter) {
             int bar = known.bar();
-            return bar > 0 && observed >= firstAfter && period(known.date()) != period(known.date(bar - 1));
+            return bar > 0 && observed >= firstAfter && !start(known.date()).equals(start(known.date(bar - 1)));
         }
     }
 }

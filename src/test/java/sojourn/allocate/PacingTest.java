@@ -41,9 +41,11 @@ class PacingTest {
     }
 
     @Test
-    void theBandDoesNotHoldBackTheFirstDecision() {
-        Decision first = decide(0.5, Stance.first(), Weights.none(1), Weights.of(0.1));
-        assertThat(first.kind()).isEqualTo(Decision.Kind.ORDER);
+    void theBandHoldsForTheFirstDecisionToo() {
+        Decision within = decide(0.5, Stance.first(), Weights.none(1), Weights.of(0.1));
+        assertThat(within.kind()).isEqualTo(Decision.Kind.KEEP);
+        Decision beyond = decide(0.5, Stance.first(), Weights.none(1), Weights.of(0.6));
+        assertThat(beyond.kind()).isEqualTo(Decision.Kind.ORDER);
         Decision nothing = decide(0.5, Stance.first(), Weights.none(1), Weights.of(0.0));
         assertThat(nothing.kind()).as("a target of nothing needs no order").isEqualTo(Decision.Kind.KEEP);
         assertThat(nothing.next().undecided()).isFalse();

@@ -76,7 +76,7 @@ class SwitchTest {
     void theReasonTellsTheProbabilityAndTheLevel() {
         Played played =
                 played(rule(ProbabilityKind.FILTERED, 1, 1), Schedule.AT_EVERY_CLOSE, 1, 0.1, 0.81, 0.5, 0.3, 0.699999);
-        assertThat(played.because(0)).isEqualTo("stormy 0.10 lies below 0.70, stays in");
+        assertThat(played.because(0)).isEqualTo("stormy 0.10 lies below 0.70, stays in; first decision");
         assertThat(played.because(1)).isEqualTo("stormy 0.81 rose to or above 0.70");
         assertThat(played.because(2)).isEqualTo("stormy 0.50 lies above 0.30, stays out");
         assertThat(played.because(3)).isEqualTo("stormy 0.30 fell to or below 0.30");
@@ -88,7 +88,7 @@ class SwitchTest {
         // 0.9 stays, 0.1 leaves: 0.8 x 0.9 + 0.2 x 0.1 = 0.74; 0.75 x 0.9 + 0.25 x 0.1 = 0.70; 0.74 -> 0.692
         Played played = played(rule(ProbabilityKind.PREDICTED, 1, 1), Schedule.AT_EVERY_CLOSE, 1, 0.74, 0.8);
         assertThat(played.weight(0)).containsExactly(1, 0);
-        assertThat(played.because(0)).isEqualTo("predicted stormy 0.69 lies below 0.70, stays in");
+        assertThat(played.because(0)).isEqualTo("predicted stormy 0.69 lies below 0.70, stays in; first decision");
         assertThat(played.because(1)).isEqualTo("predicted stormy 0.74 rose to or above 0.70");
     }
 

@@ -65,7 +65,7 @@ class TableAndBlendTest {
     void blendByPredictedProbabilitiesSaysSo() {
         Played played = played(new Blend(ALL_OR_NOTHING, ProbabilityKind.PREDICTED, 1, 1), 0.0);
         assertThat(played.weight(0)).containsExactly(0.9);
-        assertThat(played.because(0)).isEqualTo("weights averaged by predicted calm 0.90, stormy 0.10");
+        assertThat(played.because(0)).isEqualTo("weights averaged by predicted calm 0.90, stormy 0.10; first decision");
     }
 
     @Test

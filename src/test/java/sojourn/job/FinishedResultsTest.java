@@ -86,7 +86,7 @@ class FinishedResultsTest {
         JobFolder.Ran ran = job.compare("mine", "one.yaml");
         assertThat(ran.code()).isEqualTo(2);
         assertThat(ran.err())
-                .contains(job.path("results").toString() + ": cannot be written")
+                .contains(job.path("results").toString() + ": is a file, results need a folder")
                 .doesNotContain("\tat ");
         assertThat(job.text("results")).isEqualTo("a file where a folder is expected");
     }

@@ -1,0 +1,4 @@
+@NullMarked
+package sojourn.report;
+
+import org.jspecify.annotations.NullMarked;
