@@ -13,7 +13,7 @@ final class CashFile {
     private static final double MOST = 100;
 
     /** Percent a year; if all rates lie below it they may be fractions. */
-    private static final double PERHAPS_A_FRACTION = 0.2;
+    static final double PERHAPS_A_FRACTION = 0.2;
 
     private final Faults faults;
     private final int column;

@@ -1,5 +1,6 @@
 package sojourn.market;
 
+import java.math.BigDecimal;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
@@ -71,6 +72,7 @@ public final class PriceReader {
 
     private Optional<CashRates> rates(CashSource cash) {
         if (cash instanceof CashSource.Constant constant) {
+            perhapsFraction(constant.percentPerYear());
             return Optional.of(CashRates.constant(constant.percentPerYear(), constant.dayCount()));
         }
         CashSource.Dated dated = (CashSource.Dated) cash;
@@ -88,6 +90,18 @@ public final class PriceReader {
                 content.last(),
                 content.rates().digest())));
         return read.map(CashFile.Content::rates);
+    }
+
+    private void perhapsFraction(double percentPerYear) {
+        if (percentPerYear > 0 && percentPerYear < CashFile.PERHAPS_A_FRACTION) {
+            BigDecimal percent = BigDecimal.valueOf(percentPerYear);
+            String hundredfold = percent.movePointRight(2).stripTrailingZeros().toPlainString();
+            findings.add(new Finding(
+                    "",
+                    0,
+                    "cash earns " + percent.stripTrailingZeros().toPlainString() + " % a year",
+                    "did you mean " + hundredfold + "? percent-per-year is in percent"));
+        }
     }
 
     private void notUsed(String asset) {
