@@ -54,7 +54,7 @@ public final class PriceReader {
 
     private Optional<PriceSeries> prices(String asset, PriceSource source) {
         String name = source.layout().csv();
-        Faults faults = new Faults();
+        Faults faults = new Faults("prices of '" + asset + "'");
         Optional<TextFile> text = TextFile.read(folder, name, faults);
         Optional<PriceSeries> read =
                 text.flatMap(found -> PriceFile.read(asset, found, source, calendar.rowLength(), faults, findings));
@@ -77,7 +77,7 @@ public final class PriceReader {
         }
         CashSource.Dated dated = (CashSource.Dated) cash;
         String name = dated.layout().csv();
-        Faults faults = new Faults();
+        Faults faults = new Faults("rates of " + AssetName.CASH);
         Optional<TextFile> text = TextFile.read(folder, name, faults);
         Optional<CashFile.Content> read = text.flatMap(found -> CashFile.read(found, dated, faults, findings));
         faults.addTo(problems);

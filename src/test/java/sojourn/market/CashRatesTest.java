@@ -122,6 +122,15 @@ class CashRatesTest {
     }
 
     @Test
+    void aRateFileWithoutItsColumnIsNamedAsThat() {
+        Fixture.write(folder, "prices.csv", "date,close\n2020-01-03,2\n2020-01-06,2.5\n");
+        Fixture.write(folder, "bills.csv", "day,Rates\n2020-01-02,2\n");
+        assertThat(Fixture.faults(this::read))
+                .containsExactly("bills.csv:1:1: rates of cash name the column 'rate', the header has 'day', 'Rates';"
+                        + " did you mean 'Rates'?");
+    }
+
+    @Test
     void faultsOfARateFileAreToldAtTheirPlace() {
         Fixture.write(folder, "prices.csv", "date,close\n2020-01-03,2\n2020-01-06,2.5\n");
         Fixture.write(folder, "bills.csv", "day,rate\n2020-01-02,2.5%\n2020-01-05,1e3\n2020-01-04,1\n");
