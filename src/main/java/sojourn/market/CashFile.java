@@ -6,6 +6,7 @@ import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import sojourn.market.CsvTable.Row;
+import sojourn.market.Faults.Kind;
 
 /** Reads rates of interest, percent a year, from the text of a file. An empty rate means that the one before goes on. */
 final class CashFile {
@@ -13,7 +14,7 @@ final class CashFile {
     private static final double MOST = 100;
 
     /** Percent a year; if all rates lie below it they may be fractions. */
-    private static final double PERHAPS_A_FRACTION = 0.2;
+    static final double PERHAPS_A_FRACTION = 0.2;
 
     private final Faults faults;
     private final int column;
@@ -24,8 +25,8 @@ final class CashFile {
     private CashFile(CsvTable table, CashSource.Dated source, Faults faults) {
         this.faults = faults;
         CsvColumns named = new CsvColumns(table, faults);
-        int date = named.required("date", source.layout().date());
-        this.column = named.required("column", source.column());
+        int date = named.required("date", source.layout().date(), "date");
+        this.column = named.required("column", source.column(), "");
         this.dated = new DatedRows(date, source.layout().dateFormat(), BarLength.DAILY, faults);
     }
 
@@ -75,12 +76,17 @@ final class CashFile {
         }
         OptionalDouble rate = Decimal.parse(text);
         if (rate.isEmpty()) {
-            faults.add(row.problem(column, "rate '" + text + "' is not a number", Decimal.remedy(text)));
+            Decimal.Meant meant = Decimal.meant(text);
+            faults.add(
+                    row.problem(column, "rate '" + text + "' is not a number", Decimal.remedy(text)),
+                    new Kind(meant.name(), column),
+                    meant.remedy());
         } else if (Math.abs(rate.getAsDouble()) > MOST) {
-            faults.add(row.problem(
-                    column,
-                    "rate " + text + " lies beyond 100 percent a year",
-                    "write rates in percent a year, e.g. 2.5"));
+            String remedy = "write rates in percent a year, e.g. 2.5";
+            faults.add(
+                    row.problem(column, "rate " + text + " lies beyond 100 percent a year", remedy),
+                    new Kind("size", column),
+                    remedy);
         } else {
             rates.add(new Rate(date.get(), row.line(), rate.getAsDouble()));
         }

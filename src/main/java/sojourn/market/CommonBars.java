@@ -31,7 +31,7 @@ record CommonBars(TimeAxis axis, List<Bars> bars, List<Finding> findings) {
         if (days.size() < 2) {
             throw new InputException(tooFewInCommon(series, days.size()));
         }
-        List<Finding> findings = new ArrayList<>(fallenAway(series, days));
+        List<Finding> findings = new ArrayList<>(FallenRows.of(series, days));
         List<Bars> daily = new ArrayList<>();
         for (PriceSeries one : series) {
             int[] rows = one.rowsOf(days);
@@ -58,35 +58,6 @@ record CommonBars(TimeAxis axis, List<Bars> bars, List<Finding> findings) {
             common.retainAll(new HashSet<>(one.dates()));
         }
         return List.copyOf(common);
-    }
-
-    private static List<Finding> fallenAway(List<PriceSeries> series, List<LocalDate> days) {
-        Set<LocalDate> kept = new HashSet<>(days);
-        List<Finding> findings = new ArrayList<>();
-        for (PriceSeries one : series) {
-            List<LocalDate> gone =
-                    one.dates().stream().filter(date -> !kept.contains(date)).toList();
-            if (!gone.isEmpty()) {
-                LocalDate last = gone.get(gone.size() - 1);
-                String lackedBy = series.stream()
-                        .filter(other -> other != one)
-                        .map(other -> other.asset() + " lacks " + countIn(gone, other))
-                        .collect(Collectors.joining(", "));
-                findings.add(new Finding(
-                        one.file(),
-                        0,
-                        gone.size() + " of " + one.size() + " rows of " + one.asset()
-                                + " fall away because another series lacks the date, the first " + gone.get(0)
-                                + ", the last " + last + " (" + lackedBy + ")",
-                        "use series of the same trading days if these rows matter"));
-            }
-        }
-        return findings;
-    }
-
-    private static long countIn(List<LocalDate> gone, PriceSeries other) {
-        Set<LocalDate> has = new HashSet<>(other.dates());
-        return gone.stream().filter(date -> !has.contains(date)).count();
     }
 
     private static Problem tooFewInCommon(List<PriceSeries> series, int common) {
@@ -141,7 +112,7 @@ record CommonBars(TimeAxis axis, List<Bars> bars, List<Finding> findings) {
         return new Finding(
                 "",
                 0,
-                range + " make no bar: no later " + length.period() + " has begun",
+                range + (days.size() == 1 ? " makes" : " make") + " no bar: no later " + length.period() + " has begun",
                 "nothing to do; the bar appears with the first day of the next " + length.period());
     }
 }

@@ -94,6 +94,7 @@ final class CsvTable {
     /** Hands each row to {@code reader}, once; blank lines are skipped, rows of another width than the header's are faults. */
     void forEachRow(Faults faults, Consumer<Row> reader) {
         int line = header.line();
+        int rows = 0;
         try {
             while (records.hasNext()) {
                 CSVRecord read = records.next();
@@ -102,13 +103,13 @@ final class CsvTable {
                 }
                 Row row = new Row(read);
                 line = row.line();
+                rows++;
                 if (row.cells.size() == names().size()) {
                     reader.accept(row);
                 } else {
-                    faults.add(row.problem(
-                            0,
-                            "the row has " + cells(row.cells.size()) + ", the header " + names().size(),
-                            "give every row as many cells as the header; quote a cell that holds the separator"));
+                    String what = "the row has " + cells(row.cells.size()) + ", the header " + names().size();
+                    String remedy = "give every row as many cells as the header; quote a cell that holds the separator";
+                    faults.add(row.problem(0, what, remedy), new Faults.Kind(what, -1), remedy);
                 }
             }
         } catch (UncheckedIOException quotes) {
@@ -119,6 +120,7 @@ final class CsvTable {
                     "the rows after this line cannot be read: a quote opens or closes amiss",
                     "mend the quotes of the next row"));
         }
+        faults.lookedAt(rows);
     }
 
     private static boolean isBlank(CSVRecord record) {

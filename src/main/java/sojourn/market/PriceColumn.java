@@ -2,7 +2,9 @@ package sojourn.market;
 
 import java.util.OptionalDouble;
 import java.util.OptionalInt;
+import sojourn.document.Problem;
 import sojourn.market.CsvTable.Row;
+import sojourn.market.Faults.Kind;
 
 /**
  * One column of a price file, by the key that the strategy file knows it by.
@@ -54,18 +56,26 @@ record PriceColumn(String key, OptionalInt index, Bound bound) {
         }
         OptionalDouble number = Decimal.parse(text);
         if (number.isEmpty()) {
-            fault(row, faults, "'" + text + "' is not a number", Decimal.remedy(text));
+            Decimal.Meant meant = Decimal.meant(text);
+            String what = key + " '" + text + "' is not a number";
+            faults.add(at(row, what, Decimal.remedy(text)), kind(meant.name()), meant.remedy());
         } else if (Double.isInfinite(number.getAsDouble())) {
-            fault(row, faults, text + " is too large", "mend the number");
+            String remedy = "mend the number";
+            faults.add(at(row, key + " " + text + " is too large", remedy), kind("size"), remedy);
         } else if (!bound.allows(number.getAsDouble())) {
-            fault(row, faults, text + " " + bound.fault, "mend it, or leave the cell empty if there is none");
+            String remedy = "mend it, or leave the cell empty if there is none";
+            faults.add(at(row, key + " " + text + " " + bound.fault, remedy), kind("bound"), remedy);
         } else {
             return number;
         }
         return OptionalDouble.empty();
     }
 
-    private void fault(Row row, Faults faults, String what, String remedy) {
-        faults.add(row.problem(index.orElse(0), key + " " + what, remedy));
+    private Problem at(Row row, String what, String remedy) {
+        return row.problem(index.orElse(0), what, remedy);
+    }
+
+    private Kind kind(String name) {
+        return new Kind(name, index.orElse(0));
     }
 }

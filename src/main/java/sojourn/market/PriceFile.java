@@ -28,9 +28,9 @@ final class PriceFile {
     private PriceFile(CsvTable table, PriceSource source, BarLength rowLength, Faults faults) {
         this.faults = faults;
         CsvColumns named = new CsvColumns(table, faults);
-        int date = named.required("date", source.layout().date());
-        this.close =
-                new PriceColumn("close", OptionalInt.of(named.required("close", source.close())), Bound.ABOVE_ZERO);
+        int date = named.required("date", source.layout().date(), "date");
+        this.close = new PriceColumn(
+                "close", OptionalInt.of(named.required("close", source.close(), "close")), Bound.ABOVE_ZERO);
         this.open = new PriceColumn("open", named.optional("open", source.open()), Bound.ABOVE_ZERO);
         this.high = new PriceColumn("high", named.optional("high", source.high()), Bound.ABOVE_ZERO);
         this.low = new PriceColumn("low", named.optional("low", source.low()), Bound.ABOVE_ZERO);
@@ -104,10 +104,10 @@ final class PriceFile {
 
     private void keep(Row row, PriceRow prices) {
         if (prices.high() < prices.low()) {
-            faults.add(row.problem(
-                    high.index().orElseThrow(),
-                    "high " + high.text(row) + " lies below low " + low.text(row),
-                    "mend one of the two"));
+            String what = "high " + high.text(row) + " lies below low " + low.text(row);
+            String remedy = "mend one of the two";
+            int column = high.index().orElseThrow();
+            faults.add(row.problem(column, what, remedy), new Faults.Kind("below low", column), remedy);
         } else {
             range.look(prices);
             rows.add(prices);

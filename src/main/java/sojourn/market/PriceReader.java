@@ -1,5 +1,6 @@
 package sojourn.market;
 
+import java.math.BigDecimal;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
@@ -53,7 +54,7 @@ public final class PriceReader {
 
     private Optional<PriceSeries> prices(String asset, PriceSource source) {
         String name = source.layout().csv();
-        Faults faults = new Faults();
+        Faults faults = new Faults("prices of '" + asset + "'");
         Optional<TextFile> text = TextFile.read(folder, name, faults);
         Optional<PriceSeries> read =
                 text.flatMap(found -> PriceFile.read(asset, found, source, calendar.rowLength(), faults, findings));
@@ -71,11 +72,12 @@ public final class PriceReader {
 
     private Optional<CashRates> rates(CashSource cash) {
         if (cash instanceof CashSource.Constant constant) {
+            perhapsFraction(constant.percentPerYear());
             return Optional.of(CashRates.constant(constant.percentPerYear(), constant.dayCount()));
         }
         CashSource.Dated dated = (CashSource.Dated) cash;
         String name = dated.layout().csv();
-        Faults faults = new Faults();
+        Faults faults = new Faults("rates of " + AssetName.CASH);
         Optional<TextFile> text = TextFile.read(folder, name, faults);
         Optional<CashFile.Content> read = text.flatMap(found -> CashFile.read(found, dated, faults, findings));
         faults.addTo(problems);
@@ -88,6 +90,18 @@ public final class PriceReader {
                 content.last(),
                 content.rates().digest())));
         return read.map(CashFile.Content::rates);
+    }
+
+    private void perhapsFraction(double percentPerYear) {
+        if (percentPerYear > 0 && percentPerYear < CashFile.PERHAPS_A_FRACTION) {
+            BigDecimal percent = BigDecimal.valueOf(percentPerYear);
+            String hundredfold = percent.movePointRight(2).stripTrailingZeros().toPlainString();
+            findings.add(new Finding(
+                    "",
+                    0,
+                    "cash earns " + percent.stripTrailingZeros().toPlainString() + " % a year",
+                    "did you mean " + hundredfold + "? percent-per-year is in percent"));
+        }
     }
 
     private void notUsed(String asset) {

@@ -4,6 +4,7 @@ import java.time.temporal.ChronoUnit;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
+import java.util.Optional;
 import sojourn.market.Calendar.Rows;
 
 /** What looks odd in one series: long gaps, frozen prices, leaps, rows that are no days. Each kind gives one finding. */
@@ -25,17 +26,16 @@ final class SeriesFindings {
 
     static List<Finding> of(PriceSeries series, Calendar calendar) {
         SeriesFindings findings = new SeriesFindings(series, calendar);
-        findings.spacing();
-        findings.gaps();
+        findings.gaps(findings.spacing().orElse(calendar.rowLength()));
         findings.frozen();
         findings.leaps();
         return List.copyOf(findings.found);
     }
 
-    /** Rows said to be days of which no period holds two are bars already. */
-    private void spacing() {
+    /** Rows said to be days of which no period holds two are bars already; the length that they have then. */
+    private Optional<BarLength> spacing() {
         if ((calendar.rows() == Rows.BARS && calendar.bars() != BarLength.DAILY) || series.size() < 3) {
-            return;
+            return Optional.empty();
         }
         for (BarLength length : List.of(BarLength.MONTHLY, BarLength.WEEKLY)) {
             if (onePerPeriod(length)) {
@@ -45,9 +45,10 @@ final class SeriesFindings {
                                 + ", though each row is taken for a day",
                         "write calendar: {bars: " + length.word() + ", rows: bars} if each row is a whole "
                                 + length.period());
-                return;
+                return Optional.of(length);
             }
         }
+        return Optional.empty();
     }
 
     private boolean onePerPeriod(BarLength length) {
@@ -60,8 +61,7 @@ final class SeriesFindings {
         return true;
     }
 
-    private void gaps() {
-        BarLength rowLength = calendar.rowLength();
+    private void gaps(BarLength rowLength) {
         int limit = LONG_GAP_DAYS + (rowLength == BarLength.DAILY ? 0 : rowLength.longestDays());
         int first = -1;
         int longest = -1;

@@ -52,8 +52,8 @@ record TextFile(String file, String text, String sha256) {
                     file,
                     0,
                     0,
-                    "there is no file " + path.normalize(),
-                    "a path is taken from the folder of the strategy file"));
+                    "there is no such file",
+                    "it was sought as " + path.normalize() + ": a path is taken from the folder of the strategy file"));
         }
         if (Files.isDirectory(path)) {
             return Optional.of(new Problem(file, 0, 0, "this is a folder, not a file", "name a file in it"));

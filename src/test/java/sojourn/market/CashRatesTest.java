@@ -112,6 +112,25 @@ class CashRatesTest {
     }
 
     @Test
+    void aConstantRateThatLooksLikeAFractionIsReported() {
+        Fixture.write(folder, "prices.csv", "date,close\n2020-01-03,2\n2020-01-06,2.5\n");
+        assertThat(findings(0.03))
+                .containsExactly("cash earns 0.03 % a year; did you mean 3? percent-per-year is in percent");
+        assertThat(findings(0)).isEmpty();
+        assertThat(findings(0.2)).isEmpty();
+        assertThat(findings(-0.03)).isEmpty();
+    }
+
+    @Test
+    void aRateFileWithoutItsColumnIsNamedAsThat() {
+        Fixture.write(folder, "prices.csv", "date,close\n2020-01-03,2\n2020-01-06,2.5\n");
+        Fixture.write(folder, "bills.csv", "day,Rates\n2020-01-02,2\n");
+        assertThat(Fixture.faults(this::read))
+                .containsExactly("bills.csv:1:1: rates of cash name the column 'rate', the header has 'day', 'Rates';"
+                        + " did you mean 'Rates'?");
+    }
+
+    @Test
     void faultsOfARateFileAreToldAtTheirPlace() {
         Fixture.write(folder, "prices.csv", "date,close\n2020-01-03,2\n2020-01-06,2.5\n");
         Fixture.write(folder, "bills.csv", "day,rate\n2020-01-02,2.5%\n2020-01-05,1e3\n2020-01-04,1\n");
@@ -130,6 +149,14 @@ class CashRatesTest {
                 CashRates.inFile("a.csv", dates("2020-01-02"), new double[] {2}, new int[] {5}, DayCount.ACTUAL_360);
         CashRates other = CashRates.dated(dates("2020-01-02"), new double[] {2.5}, DayCount.ACTUAL_365);
         assertThat(inMemory.digest()).isEqualTo(inFile.digest()).isNotEqualTo(other.digest());
+    }
+
+    private List<String> findings(double percentPerYear) {
+        CashSource cash = new CashSource.Constant(percentPerYear, DayCount.ACTUAL_365);
+        Map<String, PriceSource> prices = Map.of("stocks", PriceSource.of("prices.csv"));
+        return PriceReader.read(folder, prices, Calendar.DAILY, cash, List.of("stocks")).findings().stream()
+                .map(Finding::toString)
+                .toList();
     }
 
     private Market read() {

@@ -34,12 +34,14 @@ class MarketTest {
         assertThat(market.table().knownAt(1).date()).isEqualTo("2020-01-07");
         assertThat(market.findings().stream().map(Finding::toString))
                 .containsExactly(
-                        "a: 2 of 4 rows of a fall away because another series lacks the date, the first 2020-01-02, the last"
-                                + " 2020-01-06 (b lacks 1, c lacks 1); use series of the same trading days if these rows matter",
-                        "b: 2 of 4 rows of b fall away because another series lacks the date, the first 2020-01-06, the last"
-                                + " 2020-01-08 (a lacks 1, c lacks 1); use series of the same trading days if these rows matter",
-                        "c: 2 of 4 rows of c fall away because another series lacks the date, the first 2020-01-02, the last"
-                                + " 2020-01-08 (a lacks 1, b lacks 1); use series of the same trading days if these rows matter");
+                        "a: 2 of 4 rows of a fall away: 1 before 2020-01-03, where another series has none, and 1 inside the"
+                                + " range of all series, that of 2020-01-06 (c lacks 1); use series of the same trading days if the"
+                                + " rows inside matter",
+                        "b: 2 of 4 rows of b fall away: 1 after 2020-01-07, where another series has none, and 1 inside the"
+                                + " range of all series, that of 2020-01-06 (c lacks 1); use series of the same trading days if the"
+                                + " rows inside matter",
+                        "c: 2 of 4 rows of c fall away: 2 before 2020-01-03 or after 2020-01-07, where another series has"
+                                + " none; nothing to do unless the longer history matters");
     }
 
     @Test

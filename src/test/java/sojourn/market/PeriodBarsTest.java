@@ -70,6 +70,14 @@ class PeriodBarsTest {
     }
 
     @Test
+    void oneDayMakesNoBar() {
+        PriceSeries days =
+                PriceSeries.of("stocks", dates("2020-01-31", "2020-02-28", "2020-03-02"), Bars.ofCloses(1, 2, 3));
+        assertThat(market(List.of(days), BarLength.MONTHLY).findings().stream().map(Finding::what))
+                .contains("the day 2020-03-02 makes no bar: no later month has begun");
+    }
+
+    @Test
     void daysThatOneSeriesLacksAreNoDaysOfAnyBar() {
         PriceSeries other = PriceSeries.of(
                 "bonds",

@@ -61,7 +61,7 @@ class PrefixTest {
 
     private static PriceSeries read(List<String> lines) {
         TextFile text = new TextFile("stocks.csv", String.join("\n", lines), "");
-        Faults faults = new Faults();
+        Faults faults = new Faults("prices of 'stocks'");
         return PriceFile.read("stocks", text, PriceSource.of("stocks.csv"), BarLength.DAILY, faults, new ArrayList<>())
                 .orElseThrow();
     }

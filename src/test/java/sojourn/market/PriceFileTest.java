@@ -6,8 +6,12 @@ import static sojourn.market.Fixture.market;
 
 import java.nio.file.Path;
 import java.time.LocalDate;
+import java.time.format.DateTimeFormatter;
 import java.util.List;
+import java.util.Locale;
 import java.util.Optional;
+import java.util.stream.Collectors;
+import java.util.stream.IntStream;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 import org.junit.jupiter.params.ParameterizedTest;
@@ -60,9 +64,9 @@ class PriceFileTest {
         PriceSource source = source(new CsvLayout("prices.csv", "date", DatePattern.ISO, Optional.of(Separator.TAB)));
         assertThat(faults(() -> market(folder, GOOD, source, Calendar.DAILY)))
                 .containsExactly(
-                        "prices.csv:1:1: there is no column 'date'; the header has 'date,close'; give it a header line of"
+                        "prices.csv:1:1: there is no column 'date' (prices of 'stocks'); the header has 'date,close'; give it a header line of"
                                 + " several cells, or say what separates them: separator: …",
-                        "prices.csv:1:1: there is no column 'close'; the header has 'date,close'; give it a header line of"
+                        "prices.csv:1:1: there is no column 'close' (prices of 'stocks'); the header has 'date,close'; give it a header line of"
                                 + " several cells, or say what separates them: separator: …");
     }
 
@@ -174,9 +178,9 @@ class PriceFileTest {
     void theNearestColumnIsNamed() {
         assertThat(faults(folder, "Date,Adj Close,Close\n2020-01-02,10,10\n"))
                 .containsExactly(
-                        "prices.csv:1:1: there is no column 'date'; the header has 'Date', 'Adj Close', 'Close'; say which"
+                        "prices.csv:1:1: there is no column 'date' (prices of 'stocks'); the header has 'Date', 'Adj Close', 'Close'; say which"
                                 + " column holds it: date: Date",
-                        "prices.csv:1:1: there is no column 'close'; the header has 'Date', 'Adj Close', 'Close'; say which"
+                        "prices.csv:1:1: there is no column 'close' (prices of 'stocks'); the header has 'Date', 'Adj Close', 'Close'; say which"
                                 + " column holds it: close: Close");
     }
 
@@ -190,8 +194,16 @@ class PriceFileTest {
                 Optional.empty(),
                 Optional.of("volum"));
         assertThat(faults(() -> market(folder, "date,close,volume\n2020-01-02,10,1\n", source, Calendar.DAILY)))
-                .containsExactly("prices.csv:1:1: there is no column 'volum'; the header has 'date', 'close', 'volume';"
-                        + " say which column holds it: volume: volume");
+                .containsExactly("prices.csv:1:1: prices of 'stocks' name the column 'volum', the header has 'date',"
+                        + " 'close', 'volume'; did you mean 'volume'?");
+        assertThat(faults(() -> market(
+                        folder,
+                        "date,close,log_return\n2020-01-02,10,1\n",
+                        PriceSource.of("prices.csv").withClose("Adj Close"),
+                        Calendar.DAILY)))
+                .containsExactly(
+                        "prices.csv:1:1: prices of 'stocks' name the column 'Adj Close', the header has 'date',"
+                                + " 'close', 'log_return'; did you mean 'close'?");
     }
 
     @Test
@@ -205,7 +217,8 @@ class PriceFileTest {
     @ValueSource(strings = {"", "\n\n  \n", "\ufeff"})
     void anEmptyFileIsRefused(String text) {
         assertThat(faults(folder, text))
-                .containsExactly("prices.csv: the file is empty; give a header line and a row for each date");
+                .containsExactly(
+                        "prices.csv: the file is empty (prices of 'stocks'); give a header line and a row for each date");
     }
 
     @Test
@@ -228,14 +241,81 @@ class PriceFileTest {
 
     @Test
     void moreThanTwentyFaultsAreCounted() {
-        StringBuilder text = new StringBuilder("date,close\n");
-        LocalDate.of(2020, 1, 1)
-                .datesUntil(LocalDate.of(2020, 2, 1))
-                .forEach(date -> text.append(date).append(",x\n"));
-        List<String> faults = faults(folder, text.toString());
+        List<String> faults =
+                faults(folder, "date,close" + ",close".repeat(25) + "\n2020-01-02,1" + ",1".repeat(25) + "\n");
         assertThat(faults).hasSize(21);
-        assertThat(faults.get(19)).startsWith("prices.csv:21:12: close 'x'");
-        assertThat(faults.get(20)).isEqualTo("prices.csv:21:12: 11 more faults follow; mend those above first");
+        assertThat(faults.get(19)).startsWith("prices.csv:1:126: the header names column 'close' twice");
+        assertThat(faults.get(20)).isEqualTo("prices.csv:1:126: 5 more faults follow; mend those above first");
+    }
+
+    @ParameterizedTest
+    @CsvSource(
+            delimiter = '|',
+            value = {
+                "dd/MM/yyyy|01/01/2020|4|dd/MM/yyyy if the day comes first, MM/dd/yyyy if the month does",
+                "dd/MM/yyyy|01/01/2020|31|dd/MM/yyyy",
+                "MM/dd/yyyy|01/01/2020|31|MM/dd/yyyy",
+                "d/M/yyyy|1/1/2020|31|d/M/yyyy",
+                "dd.MM.yyyy|01.01.2020|31|dd.MM.yyyy",
+                "yyyyMMdd|20200101|31|yyyyMMdd",
+                "d-MMM-yyyy|1-Jan-2020|31|d-MMM-yyyy",
+                "yyyy-MM-dd' 00:00:00'|2020-01-01 00:00:00|31|yyyy-MM-dd' 00:00:00'"
+            })
+    void datesOfAnotherFormAreToldOnceWithTheirForm(String form, String first, int rows, String remedy) {
+        DateTimeFormatter written = DateTimeFormatter.ofPattern(form, Locale.ENGLISH);
+        StringBuilder text = new StringBuilder("date,close\n");
+        LocalDate start = LocalDate.of(2020, 1, 1);
+        start.datesUntil(start.plusDays(rows))
+                .forEach(date -> text.append(date.format(written)).append(",1\n"));
+        assertThat(faults(folder, text + "2020-02-01,1\n"))
+                .containsExactly("prices.csv:2:1: date '" + first + "' is not written as yyyy-MM-dd, and so in " + rows
+                        + " of " + (rows + 1) + " rows; write date-format: " + remedy);
+    }
+
+    @Test
+    void timesOfDayThatDifferAreToldOnce() {
+        assertThat(faults(
+                        folder,
+                        "date,close\n2020-01-01T09:30,1\n2020-01-02T09:31,1\n2020-01-03T09:30,1\n2020-01-06T09:30,1\n"))
+                .containsExactly(
+                        "prices.csv:2:1: date '2020-01-01T09:30' is not written as yyyy-MM-dd, and so in 4 of 4"
+                                + " rows; cut the time of day off, so that dates read 2001-10-23");
+    }
+
+    @ParameterizedTest
+    @CsvSource(
+            delimiter = '|',
+            value = {
+                "12,5|convert the column to decimal points",
+                "1,234.5|remove the thousands separators from the column",
+                "1.234,56|convert the column to decimal points, without thousands separators",
+                "1,234|remove the thousands separators from the column, or convert it to decimal points if the comma is decimal",
+                "x|write numbers such as 12.5, or leave the cells empty where there is none"
+            })
+    void oneMistakeOnMostRowsIsToldOnce(String written, String remedy) {
+        String rows = IntStream.rangeClosed(1, 31)
+                .mapToObj(day -> String.format(Locale.ROOT, "2020-01-%02d;%s\n", day, day > 2 ? written : "7"))
+                .collect(Collectors.joining());
+        assertThat(faults(folder, "date;close\n" + rows))
+                .containsExactly(
+                        "prices.csv:4:12: close '" + written + "' is not a number, and so in 29 of 31 rows; " + remedy);
+    }
+
+    @Test
+    void oneMistakeOnFewRowsIsToldThreeTimesAndItsOtherRowsCounted() {
+        String rows = IntStream.rangeClosed(1, 31)
+                .mapToObj(day -> String.format(
+                        Locale.ROOT, "2020-01-%02d,%s,%s\n", day, day > 26 ? "x" : "7", day == 28 ? "-1" : "1"))
+                .collect(Collectors.joining());
+        assertThat(faults(folder, "date,close,volume\n" + rows))
+                .containsExactly(
+                        "prices.csv:28:12: close 'x' is not a number; write a number such as 12.5, or leave the cell"
+                                + " empty if there is none",
+                        "prices.csv:29:12: close 'x' is not a number; write a number such as 12.5, or leave the cell"
+                                + " empty if there is none",
+                        "prices.csv:29:14: volume -1 is below 0; mend it, or leave the cell empty if there is none",
+                        "prices.csv:30:12: close 'x' is not a number, and 2 more rows like it; write numbers such as 12.5,"
+                                + " or leave the cells empty where there is none");
     }
 
     @Test

@@ -22,19 +22,21 @@ class TextFileTest {
     @Test
     void aMissingFileIsNamedWithThePlaceItWasLookedFor() {
         assertThat(faultsOf("../none.csv"))
-                .containsExactly("../none.csv: there is no file " + folder.resolveSibling("none.csv")
-                        + "; a path is taken from the folder of the strategy file");
+                .containsExactly("../none.csv: there is no such file (prices of 'stocks'); it was sought as "
+                        + folder.resolveSibling("none.csv") + ": a path is taken from the folder of the strategy file");
     }
 
     @Test
     void aFolderIsRefused() throws IOException {
         Files.createDirectory(folder.resolve("prices"));
-        assertThat(faultsOf("prices")).containsExactly("prices: this is a folder, not a file; name a file in it");
+        assertThat(faultsOf("prices"))
+                .containsExactly("prices: this is a folder, not a file (prices of 'stocks'); name a file in it");
     }
 
     @Test
     void aNameThatIsNoPathIsRefused() {
-        assertThat(faultsOf("a\0b")).containsExactly("a\0b: this is no path: Nul character not allowed; name a file");
+        assertThat(faultsOf("a\0b"))
+                .containsExactly("a\0b: this is no path: Nul character not allowed (prices of 'stocks'); name a file");
     }
 
     @Test
@@ -45,7 +47,7 @@ class TextFileTest {
         }
         assertThat(faultsOf("huge.csv"))
                 .containsExactly(
-                        "huge.csv: the file has 536870913 bytes, more than 512 MiB; keep only the columns and dates that are needed");
+                        "huge.csv: the file has 536870913 bytes, more than 512 MiB (prices of 'stocks'); keep only the columns and dates that are needed");
     }
 
     @Test
@@ -64,7 +66,7 @@ class TextFileTest {
     @Test
     void theDigestIsThatOfTheBytes() {
         Fixture.write(folder, "abc.csv", "abc");
-        Faults faults = new Faults();
+        Faults faults = new Faults("prices of 'stocks'");
         TextFile read = TextFile.read(folder, "abc.csv", faults).orElseThrow();
         // FIPS 180-2, appendix B.1: the digest of "abc"
         assertThat(read.sha256()).isEqualTo("ba7816bf8f01cfea414140de5dae2223b00361a396177a9cb410ff61f20015ad");
@@ -82,7 +84,7 @@ class TextFileTest {
                 Fixture.faults(() -> PriceReader.read(folder, sources, Calendar.DAILY, cash, List.of("a", "b")));
         assertThat(faults).hasSize(3);
         assertThat(faults.get(0)).startsWith("a.csv:2:12: close 'x'");
-        assertThat(faults.get(1)).startsWith("b.csv: there is no file");
+        assertThat(faults.get(1)).startsWith("b.csv: there is no such file (prices of 'b');");
         assertThat(faults.get(2)).startsWith("bills.csv:2:12: rate 'y'");
     }
 
