@@ -14,6 +14,11 @@ import sojourn.market.Faults.Kind;
  * @param bound what its numbers must keep to
  */
 record PriceColumn(String key, OptionalInt index, Bound bound) {
+    /** Ratios of any two numbers between these, and the squares of such ratios, stay within double precision. */
+    private static final double LEAST = 1e-30;
+
+    private static final double MOST = 1e30;
+
     /** What a number must keep to. */
     enum Bound {
         ABOVE_ZERO("is not above 0") {
@@ -62,6 +67,10 @@ record PriceColumn(String key, OptionalInt index, Bound bound) {
         } else if (Double.isInfinite(number.getAsDouble())) {
             String remedy = "mend the number";
             faults.add(at(row, key + " " + text + " is too large", remedy), kind("size"), remedy);
+        } else if (number.getAsDouble() != 0
+                && (Math.abs(number.getAsDouble()) < LEAST || Math.abs(number.getAsDouble()) > MOST)) {
+            String remedy = "write prices and volumes between 1e-30 and 1e30, in another unit if need be";
+            faults.add(at(row, key + " " + text + " is beyond any price or volume", remedy), kind("size"), remedy);
         } else if (!bound.allows(number.getAsDouble())) {
             String remedy = "mend it, or leave the cell empty if there is none";
             faults.add(at(row, key + " " + text + " " + bound.fault, remedy), kind("bound"), remedy);
