@@ -7,6 +7,7 @@ import java.nio.file.Path;
 import java.time.LocalDate;
 import java.util.ArrayList;
 import java.util.List;
+import sojourn.numeric.RandomStream;
 
 /** Open price files, cut short: written into a folder as they would have stood there in the past. */
 final class PriceHistory {
@@ -55,6 +56,23 @@ final class PriceHistory {
         cells[1] = Double.toString(close);
         changed.set(row + 1, String.join(",", cells));
         return new PriceHistory(changed);
+    }
+
+    /** The same closes, with opens between closes and made-up highs and lows around both; a bar in 40 has no range. */
+    PriceHistory withRanges(long seed) {
+        RandomStream random = RandomStream.of(seed, "ranges");
+        List<String> candles = new ArrayList<>(List.of("date,close,open,high,low"));
+        for (int row = 0; row < rows(); row++) {
+            double close = close(row);
+            double open = row == 0 ? close : close(row - 1);
+            double above = 1 + 0.01 * random.nextDouble();
+            double below = 1 - 0.01 * random.nextDouble();
+            boolean still = random.nextDouble() < 0.025;
+            double high = still ? close : above * Math.max(open, close);
+            double low = still ? close : below * Math.min(open, close);
+            candles.add(date(row) + "," + close + "," + (still ? close : open) + "," + high + "," + low);
+        }
+        return new PriceHistory(candles);
     }
 
     /** Writes the first {@code rows} price rows. */

@@ -2,9 +2,11 @@ package sojourn.compare;
 
 import java.nio.file.InvalidPathException;
 import java.nio.file.Path;
+import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Objects;
 import java.util.Optional;
 import sojourn.allocate.RulePolicy;
 import sojourn.document.InputException;
@@ -12,8 +14,11 @@ import sojourn.document.Problem;
 import sojourn.market.InputFile;
 import sojourn.market.Market;
 import sojourn.market.PriceReader;
+import sojourn.market.PriceTable;
 import sojourn.strategy.Strategy;
 import sojourn.strategy.StrategyFile;
+import sojourn.walk.BarColumn;
+import sojourn.walk.Observation;
 import sojourn.walk.TimelineAddress;
 
 /** A strategy with its market read, ready to be walked; or the reason why it cannot be. */
@@ -101,9 +106,33 @@ public sealed interface Prepared {
         try {
             Market market = PriceReader.read(
                     file.folder(), strategy.prices(), strategy.calendar(), strategy.cash(), strategy.usedAssets());
-            return new Ready(file, market, TimelineAddress.of(file.walkSettings(), market.table()));
+            List<Observation> observed = strategy.regimes().observe();
+            List<Problem> lacking = lacking(strategy, market.table());
+            return lacking.isEmpty()
+                    ? new Ready(file, market, TimelineAddress.of(file.walkSettings(), market.table(), observed))
+                    : new Unreadable(file, lacking);
         } catch (InputException e) {
             return new Unreadable(file, e.problems());
         }
+    }
+
+    /** Columns that an observation needs and its file does not have. */
+    private static List<Problem> lacking(Strategy strategy, PriceTable table) {
+        List<Problem> problems = new ArrayList<>();
+        for (Observation one : strategy.regimes().observe()) {
+            String csv = Objects.requireNonNull(strategy.prices().get(one.asset()), one.asset())
+                    .layout()
+                    .csv();
+            for (BarColumn column : one.lacking(table)) {
+                problems.add(new Problem(
+                        csv,
+                        1,
+                        1,
+                        one.asset() + " has no " + column.word() + " on any bar, and " + one.word()
+                                + " cannot be computed without",
+                        "name the column under prices (" + column.word() + ": ...), or observe something else"));
+            }
+        }
+        return problems;
     }
 }

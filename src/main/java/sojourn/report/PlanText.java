@@ -20,6 +20,7 @@ import sojourn.strategy.Strategy;
 import sojourn.trade.TradeSettings;
 import sojourn.walk.FitPlan;
 import sojourn.walk.FixedParameters;
+import sojourn.walk.Observation;
 import sojourn.walk.RefitSchedule;
 import sojourn.walk.RefitSettings;
 import sojourn.walk.RegimeSettings;
@@ -106,9 +107,7 @@ public final class PlanText {
     }
 
     private static String watches(RegimeSettings regimes) {
-        String observed = regimes.observe().stream()
-                .map(one -> one.word() + " of " + one.asset())
-                .collect(Collectors.joining(", "));
+        String observed = regimes.observe().stream().map(Observation::inWords).collect(Collectors.joining(", "));
         String model = regimes.model().word() + ", " + regimes.emission().word() + " emissions";
         String order = regimes.model() == ModelKind.ONE_REGIME
                 ? ""

@@ -58,7 +58,7 @@ final class BetweenSections {
             sound("/regimes/observe", RegimeSettings.OBSERVATIONS).ifPresent(observed -> {
                 for (int i = 0; i < observed.size(); i++) {
                     Observation one = observed.get(i);
-                    checkAsset("/observe/" + i + "/" + one.word(), one.asset(), known, found);
+                    checkAsset("/observe/" + i + "/" + one.word() + "/of", one.asset(), known, found);
                 }
             });
             sound("/regimes/order-by", Shapes.text()).ifPresent(asset -> checkAsset("/order-by", asset, known, found));

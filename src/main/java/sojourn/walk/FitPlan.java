@@ -25,7 +25,7 @@ public record FitPlan(int observations, List<LocalDate> fitDates) {
         int present = 0;
         for (int bar = 0; bar < table.size(); bar++) {
             Known known = table.knownAt(bar);
-            boolean here = observation.at(known).isPresent();
+            boolean here = bar > 0 && observation.at(known).isPresent(); // a walk passes over the first bar
             present += here ? 1 : 0;
             if (refit.schedule().due(known, present, here, refit.firstFitAfter())) {
                 dates.add(known.date());

@@ -2,7 +2,6 @@ package sojourn.walk;
 
 import java.util.OptionalDouble;
 import sojourn.document.Shape;
-import sojourn.document.Shapes;
 import sojourn.market.Known;
 
 /**
@@ -13,9 +12,8 @@ import sojourn.market.Known;
 public record LogReturn(String asset) implements Observation {
     static final String WORD = "log-return";
 
-    static final Shape<LogReturn> SHAPE = Shapes.text()
-            .<LogReturn>as(LogReturn::new)
-            .described("the asset whose log return is observed: ln(close / previous close), per bar");
+    static final Shape<Observation> SHAPE = Observed.shape(
+            WORD, LogReturn::new, "the asset whose log return is observed: ln(close / previous close), per bar");
 
     @Override
     public OptionalDouble at(Known known) {

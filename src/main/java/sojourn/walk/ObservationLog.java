@@ -1,5 +1,6 @@
 package sojourn.walk;
 
+import java.time.LocalDate;
 import java.util.Arrays;
 import java.util.OptionalDouble;
 import java.util.OptionalInt;
@@ -75,6 +76,15 @@ final class ObservationLog {
     /** The bar of a row. */
     int bar(int row) {
         return firstBar + row;
+    }
+
+    /** The row of a bar's date. */
+    int row(Known known, LocalDate date) {
+        int row = 0;
+        while (!known.date(bar(row)).equals(date)) {
+            row++;
+        }
+        return row;
     }
 
     /** The last row. */

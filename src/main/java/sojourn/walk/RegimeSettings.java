@@ -113,8 +113,19 @@ public record RegimeSettings(
                     "the model one-regime has one regime, not " + states.size(),
                     "name one, or choose another model"));
         }
+        if (emission == EmissionFamily.NORMAL_ZERO_MEAN) {
+            observe.stream().filter(one -> !one.aroundZero()).findFirst().ifPresent(one -> faults.add(sized(one)));
+        }
         fixed.ifPresent(given -> faults.addAll(faultsOf(given)));
         return faults;
+    }
+
+    private static Refusal sized(Observation one) {
+        return new Refusal(
+                "emission",
+                "normal-zero-mean takes the mean of the observation for 0 in every regime, which that of " + one.word()
+                        + " is not",
+                "set emission: normal, or observe a return");
     }
 
     private List<Refusal> faultsOf(FixedParameters given) {

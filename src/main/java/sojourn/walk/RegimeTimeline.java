@@ -8,6 +8,8 @@ import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.OptionalInt;
 import sojourn.market.Known;
+import sojourn.market.PriceTable;
+import sojourn.numeric.Check;
 import sojourn.regime.WindowMoments;
 
 /**
@@ -93,6 +95,14 @@ public final class RegimeTimeline implements Signal {
         return Double.isNaN(score) ? OptionalDouble.empty() : OptionalDouble.of(score);
     }
 
+    /** The accepted fit that was made last; there must be one. */
+    FitRecord lastAccepted() {
+        return fits.stream()
+                .filter(record -> record.fit().outcome().accepted())
+                .reduce((before, after) -> after)
+                .orElseThrow();
+    }
+
     @Override
     public Optional<Reading> at(Known known) {
         return reading(known.bar());
@@ -143,6 +153,29 @@ public final class RegimeTimeline implements Signal {
             WINDOW,
             /** The cash rate, because the emission fits no mean. */
             CASH
+        }
+
+        /** Takes over the fits and bars of a timeline on the first bars of {@code table}; nothing, if no fit was accepted. */
+        void takeOver(RegimeTimeline earlier, PriceTable table) {
+            Check.that(earlier.regimes.equals(regimes), "the regimes were " + earlier.regimes + ", now " + regimes);
+            Check.that(earlier.assets.equals(assets), "the assets were " + earlier.assets + ", now " + assets);
+            Check.that(
+                    earlier.endBar() <= table.size(),
+                    "the timeline ends after bar " + earlier.endBar() + " of " + table.size());
+            if (earlier.firstBar().isEmpty()) {
+                return;
+            }
+            fits.addAll(earlier.fits);
+            for (int bar = earlier.firstBar; bar < earlier.endBar(); bar++) {
+                Known known = table.knownAt(bar);
+                int row = bar - earlier.firstBar;
+                Check.that(
+                        known.date().equals(earlier.dates[row]),
+                        "bar " + bar + " was of " + earlier.dates[row] + ", now " + known.date());
+                double[] probabilities =
+                        Arrays.copyOfRange(earlier.filtered, row * regimes.size(), (row + 1) * regimes.size());
+                bar(known, earlier.fitInForce[row], probabilities, earlier.logScores[row]);
+            }
         }
 
         int nextFitNumber() {

@@ -2,7 +2,6 @@ package sojourn.walk;
 
 import java.util.OptionalDouble;
 import sojourn.document.Shape;
-import sojourn.document.Shapes;
 import sojourn.market.Known;
 
 /**
@@ -13,9 +12,8 @@ import sojourn.market.Known;
 public record SimpleReturn(String asset) implements Observation {
     static final String WORD = "simple-return";
 
-    static final Shape<SimpleReturn> SHAPE = Shapes.text()
-            .<SimpleReturn>as(SimpleReturn::new)
-            .described("the asset whose simple return is observed: close / previous close - 1, per bar");
+    static final Shape<Observation> SHAPE = Observed.shape(
+            WORD, SimpleReturn::new, "the asset whose simple return is observed: close / previous close - 1, per bar");
 
     @Override
     public OptionalDouble at(Known known) {

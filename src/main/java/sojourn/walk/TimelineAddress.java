@@ -4,12 +4,13 @@ import java.nio.ByteBuffer;
 import java.security.MessageDigest;
 import java.security.NoSuchAlgorithmException;
 import java.util.HexFormat;
+import java.util.List;
 import sojourn.market.Known;
 import sojourn.market.PriceTable;
 
 /**
  * The address of a timeline: a hash chain that starts from the settings and takes in bar after bar exactly what a walk may see
- * (date, closes, the cash rate). Equal addresses mean equal timelines; the address at an earlier bar is that of the shorter
+ * (date, closes, what the observations read besides closes, the cash rate). Equal addresses mean equal timelines; the address at an earlier bar is that of the shorter
  * history.
  */
 public final class TimelineAddress {
@@ -21,22 +22,30 @@ public final class TimelineAddress {
      * The address after the last bar.
      *
      * @param settings the resolved sections that the walk depends on, in one fixed form. Not modified.
+     * @param observed what the walk observes
      */
-    public static String of(byte[] settings, PriceTable table) {
-        return at(settings, table, table.size() - 1);
+    public static String of(byte[] settings, PriceTable table, List<Observation> observed) {
+        return at(settings, table, observed, table.size() - 1);
     }
 
     /** The address after {@code lastBar}; {@code settings} is not modified. */
-    public static String at(byte[] settings, PriceTable table, int lastBar) {
+    public static String at(byte[] settings, PriceTable table, List<Observation> observed, int lastBar) {
         MessageDigest digest = sha256();
         byte[] link = digest.digest(settings);
-        ByteBuffer row = ByteBuffer.allocate(Long.BYTES * (2 + table.assets().size()));
+        int beside = observed.stream().mapToInt(one -> one.reads().size()).sum();
+        ByteBuffer row = ByteBuffer.allocate(Long.BYTES * (2 + table.assets().size() + beside));
         for (int bar = 0; bar <= lastBar; bar++) {
             Known known = table.knownAt(bar);
             row.clear();
             row.putLong(known.date().toEpochDay());
             for (int asset = 0; asset < table.assets().size(); asset++) {
                 row.putLong(Double.doubleToLongBits(known.close(asset, bar)));
+            }
+            for (Observation one : observed) {
+                int asset = table.asset(one.asset());
+                one.reads()
+                        .forEach(column -> row.putLong(Double.doubleToLongBits(
+                                column.of(known, asset, known.bar()).orElse(Double.NaN))));
             }
             row.putLong(Double.doubleToLongBits(known.expectedCashReturn()));
             digest.update(link);

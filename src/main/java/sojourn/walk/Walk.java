@@ -67,6 +67,44 @@ public final class Walk {
         return walk.timeline.build();
     }
 
+    /**
+     * The timeline of a history that has grown: equal, to the bit, to a fresh one of all of it, with only the fits made that the
+     * new bars bring. {@code earlier} is the timeline of the same settings on the same first bars; that it is can be told by its
+     * {@link TimelineAddress}, which the caller compares. Refuses one of other regimes, assets or dates.
+     */
+    public static RegimeTimeline onward(
+            RegimeTimeline earlier,
+            PriceTable table,
+            RegimeSettings regimes,
+            RefitSettings refit,
+            StartRunner runner,
+            IntConsumer walked) {
+        Walk walk = new Walk(table, regimes, refit, runner);
+        walk.resume(earlier, table);
+        for (int bar = earlier.endBar(); bar < table.size(); bar++) {
+            walk.close(table.knownAt(bar));
+            walked.accept(bar);
+        }
+        return walk.timeline.build();
+    }
+
+    /** Stands where the walk of {@code earlier} stopped; at the start, if no fit of it was accepted. */
+    private void resume(RegimeTimeline earlier, PriceTable table) {
+        timeline.takeOver(earlier, table);
+        for (int bar = 0; bar < earlier.endBar(); bar++) {
+            log.append(table.knownAt(bar));
+        }
+        if (earlier.firstBar().isEmpty()) {
+            return;
+        }
+        FitRecord record = earlier.lastAccepted();
+        RegimeModel model = record.fit().model().orElseThrow();
+        FilterState filter =
+                filtered(model, log.window(log.row(table.knownAt(earlier.endBar() - 1), record.windowStart())));
+        inForce = Optional.of(new InForce(record, model, filter));
+        aside = earlier.fitInForce(earlier.endBar() - 1).isEmpty();
+    }
+
     private void close(Known known) {
         log.append(known);
         double score = filterOn();

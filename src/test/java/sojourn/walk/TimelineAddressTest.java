@@ -5,14 +5,16 @@ import static org.assertj.core.api.Assertions.assertThat;
 import java.nio.charset.StandardCharsets;
 import java.time.LocalDate;
 import java.util.HashSet;
+import java.util.List;
 import java.util.Set;
 import org.junit.jupiter.api.Test;
 import sojourn.GivenPrices;
 
-/** An address stands for settings, dates, closes and cash rates, and for nothing else. */
+/** An address stands for settings, dates, closes, what is observed besides, and cash rates; and for nothing else. */
 class TimelineAddressTest {
     private static final int BARS = 60;
     private static final byte[] SETTINGS = "{\"refit\":{\"every\":21}}".getBytes(StandardCharsets.UTF_8);
+    private static final List<Observation> RETURNS = List.of(new LogReturn("a"));
 
     @Test
     void theSameInputsHaveTheSameAddress() {
@@ -33,7 +35,7 @@ class TimelineAddressTest {
     void otherSettingsHaveAnotherAddress() {
         byte[] other = SETTINGS.clone();
         other[other.length - 3] ^= 1;
-        assertThat(TimelineAddress.of(other, prices().table())).isNotEqualTo(address(prices()));
+        assertThat(TimelineAddress.of(other, prices().table(), RETURNS)).isNotEqualTo(address(prices()));
     }
 
     @Test
@@ -57,7 +59,8 @@ class TimelineAddressTest {
     void anEarlierAddressIsThatOfTheShorterHistory() {
         GivenPrices prices = prices();
         for (int bar = 0; bar < BARS; bar++) {
-            assertThat(TimelineAddress.at(SETTINGS, prices.table(), bar)).isEqualTo(address(prices.first(bar + 1)));
+            assertThat(TimelineAddress.at(SETTINGS, prices.table(), RETURNS, bar))
+                    .isEqualTo(address(prices.first(bar + 1)));
         }
     }
 
@@ -69,15 +72,15 @@ class TimelineAddressTest {
             closes[1][changed] = Math.nextUp(closes[1][changed]);
             GivenPrices other = GivenPrices.closes(closes);
             for (int bar = 0; bar < BARS; bar++) {
-                boolean same = TimelineAddress.at(SETTINGS, other.table(), bar)
-                        .equals(TimelineAddress.at(SETTINGS, prices.table(), bar));
+                boolean same = TimelineAddress.at(SETTINGS, other.table(), RETURNS, bar)
+                        .equals(TimelineAddress.at(SETTINGS, prices.table(), RETURNS, bar));
                 assertThat(same).isEqualTo(bar < changed);
             }
         }
     }
 
     private static String address(GivenPrices prices) {
-        return TimelineAddress.of(SETTINGS, prices.table());
+        return TimelineAddress.of(SETTINGS, prices.table(), RETURNS);
     }
 
     private static GivenPrices prices() {

@@ -1,0 +1,53 @@
+package sojourn.compare;
+
+import static org.assertj.core.api.Assertions.assertThat;
+
+import java.io.IOException;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.Optional;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.io.TempDir;
+import sojourn.document.Problem;
+import sojourn.document.Problems;
+import sojourn.strategy.StrategyFile;
+import sojourn.strategy.StrategyReader;
+
+/** Observations that read more than closes, and files that have no more. */
+class MissingColumnsTest {
+    @TempDir
+    private Path folder;
+
+    @Test
+    void aRangeOfAFileOfClosesIsRefusedWithEveryColumnThatIsWanting() throws IOException {
+        Prepared prepared = prepared("date,close,low\n2001-01-01,100,99\n2001-01-02,101,99\n");
+        assertThat(((Prepared.Unreadable) prepared).problems())
+                .extracting(Problem::toString)
+                .containsExactly(
+                        "stocks.csv:1:1: stocks has no open on any bar, and log-garman-klass-volatility cannot be computed"
+                                + " without; name the column under prices (open: ...), or observe something else",
+                        "stocks.csv:1:1: stocks has no high on any bar, and log-garman-klass-volatility cannot be computed"
+                                + " without; name the column under prices (high: ...), or observe something else");
+    }
+
+    @Test
+    void oneBarWithAllPricesIsEnoughToBegin() throws IOException {
+        assertThat(prepared("date,open,high,low,close\n2001-01-01,,,,100\n2001-01-02,100,102,99,101\n"))
+                .isInstanceOf(Prepared.Ready.class);
+    }
+
+    private Prepared prepared(String prices) throws IOException {
+        Files.writeString(folder.resolve("stocks.csv"), prices);
+        Problems problems = new Problems();
+        Optional<StrategyFile> file = StrategyReader.parse("""
+                strategy: Storms by the range
+                prices: {stocks: {csv: stocks.csv}}
+                regimes: {observe: [{log-garman-klass-volatility: stocks}], states: [calm, stormy]}
+                refit: {first-fit-after: 100, every: 50, seed: 7}
+                allocate: {blend: {weights: {calm: {stocks: 1}, stormy: {stocks: 0}}}}
+                judge: {buy-and-hold: {stocks: 1}}
+                """, folder, "strategy.yaml", problems);
+        assertThat(problems.list()).isEmpty();
+        return Prepared.of(file.orElseThrow());
+    }
+}
