@@ -27,8 +27,9 @@ class EmissionsTest {
             for (InitialDistribution initial : InitialDistribution.values()) {
                 RegimeSettings settings = settings(family, initial, Optional.empty());
                 RegimeTimeline whole = Walks.forward(PRICES, settings, REFIT);
-                boolean parts = family.form() != EmissionFamily.Form.NORMAL_TIED; // the weathers have one mean
-                assertThat(whole.firstBar().isPresent()).as(family.word()).isEqualTo(parts);
+                if (family.form() != EmissionFamily.Form.NORMAL_TIED) { // the weathers have one mean
+                    assertThat(whole.firstBar()).as(family.word()).isPresent();
+                }
                 for (int end : new int[] {230, 301}) {
                     same(Walks.forward(PRICES.first(end), settings, REFIT), whole);
                 }
