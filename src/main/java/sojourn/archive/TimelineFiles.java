@@ -7,6 +7,7 @@ import java.util.OptionalDouble;
 import java.util.OptionalInt;
 import sojourn.regime.Fit;
 import sojourn.regime.RegimeModel;
+import sojourn.regime.StudentT;
 import sojourn.walk.FitRecord;
 import sojourn.walk.Forecast;
 import sojourn.walk.Reading;
@@ -15,6 +16,20 @@ import sojourn.walk.RegimeTimeline;
 /** A timeline as two tables: a row a bar, and a row a fit. */
 public final class TimelineFiles {
     private TimelineFiles() {}
+
+    /** Whether the fits have scales and degrees of freedom. */
+    private enum Tails {
+        NORMAL,
+        FAT;
+
+        static Tails of(RegimeTimeline timeline) {
+            return timeline.fits().stream()
+                            .flatMap(record -> record.fit().model().stream())
+                            .anyMatch(model -> model.emission() instanceof StudentT)
+                    ? FAT
+                    : NORMAL;
+        }
+    }
 
     /** {@code timelines/<key>.csv}: a row a bar from the first accepted fit on. */
     public static Table bars(RegimeTimeline timeline) {
@@ -74,6 +89,11 @@ public final class TimelineFiles {
         regimes.forEach(from -> regimes.forEach(to -> header.add("transition." + from + "." + to)));
         regimes.forEach(regime -> header.add("mean." + observation + "." + regime));
         regimes.forEach(regime -> header.add("sd." + observation + "." + regime));
+        Tails tails = Tails.of(timeline);
+        if (tails == Tails.FAT) {
+            regimes.forEach(regime -> header.add("scale." + observation + "." + regime));
+            regimes.forEach(regime -> header.add("dof." + regime));
+        }
         regimes.forEach(regime -> header.add("order_by." + regime));
         regimes.forEach(regime -> header.add("stay_bars." + regime));
         regimes.forEach(regime -> header.add("occupancy." + regime));
@@ -81,12 +101,12 @@ public final class TimelineFiles {
         header.add("explanation");
         Table table = new Table(header);
         for (FitRecord record : timeline.fits()) {
-            addFit(table.row(), record, regimes.size());
+            addFit(table.row(), record, regimes.size(), tails);
         }
         return table;
     }
 
-    private static void addFit(Table.Row row, FitRecord record, int states) {
+    private static void addFit(Table.Row row, FitRecord record, int states, Tails tails) {
         Fit fit = record.fit();
         row.add(Integer.toString(record.number())).add(record.fittedOn());
         row.add(fit.outcome().accepted() ? record.fittedOn().toString() : "");
@@ -99,7 +119,7 @@ public final class TimelineFiles {
         if (modelled) {
             addModel(row, fit, fit.model().orElseThrow());
         } else {
-            for (int blank = 0; blank < states * states + 6 * states; blank++) {
+            for (int blank = 0; blank < states * states + (tails == Tails.FAT ? 8 : 6) * states; blank++) {
                 row.blank();
             }
         }
@@ -121,6 +141,14 @@ public final class TimelineFiles {
         }
         for (int k = 0; k < states; k++) {
             row.add(model.emission().standardDeviation(k, 0));
+        }
+        if (model.emission() instanceof StudentT student) {
+            for (int k = 0; k < states; k++) {
+                row.add(student.scale(k));
+            }
+            for (int k = 0; k < states; k++) {
+                row.add(student.degreesOfFreedom(k));
+            }
         }
         for (double deviation : fit.orderBy()) {
             row.add(deviation);

@@ -31,6 +31,7 @@ final class Climb {
     private final Expectation fast;
     private final Expectation plain;
     private final Maximisation maximisation;
+    private final InitialDistribution initial;
     private final ExpectedSums sums;
     private int evaluations;
     /** Log-likelihood that the next EM step must not fall below after a leap. */
@@ -39,7 +40,9 @@ final class Climb {
     /** The longest stride allowed so far. */
     private double longest = FIRST_LONGEST;
 
-    private Climb(Expectation fast, Expectation plain, Maximisation maximisation, int states) {
+    private Climb(
+            Expectation fast, Expectation plain, Maximisation maximisation, InitialDistribution initial, int states) {
+        this.initial = initial;
         this.fast = fast;
         this.plain = plain;
         this.maximisation = maximisation;
@@ -49,22 +52,33 @@ final class Climb {
     /** Where one start ended. {@code leastCount} is the smallest expected number of rows of a state. */
     record Summit(Parameters parameters, double logLikelihood, double leastCount, int evaluations, boolean converged) {}
 
-    /** Climbs from {@code start}, which is not modified. */
+    /** Climbs from {@code start}, which is not modified, with a free initial distribution. */
     static Summit from(Parameters start, Window window, EmissionFamily family) {
+        return from(start, window, family, InitialDistribution.FREE);
+    }
+
+    /** Climbs from {@code start}, which is not modified. */
+    static Summit from(Parameters start, Window window, EmissionFamily family, InitialDistribution initial) {
+        InitialDistribution ofChain = start.kind() == ModelKind.HIDDEN_MARKOV ? initial : InitialDistribution.FREE;
         Climb climb = new Climb(
-                Expectation.of(start.kind(), start.states(), window),
+                Expectation.of(start.kind(), start.states(), window, family),
                 new PlainExpectation(window, family),
-                new Maximisation(family),
+                new Maximisation(family, ofChain),
+                ofChain,
                 start.states());
         return climb.run(start);
     }
 
     private Summit run(Parameters start) {
-        Parameters at = start;
+        Parameters at = start.copy();
+        if (!startsAsItMust(at)) {
+            throw new IllegalStateException("a start whose chain has no one long run; this is a bug");
+        }
         double reached = evaluate(at);
         boolean converged = false;
         while (!converged && evaluations < MOST_EVALUATIONS) {
-            if (evaluations > PLAIN_STEPS && cornerBeats(at)) {
+            boolean freely = initial == InitialDistribution.FREE;
+            if (freely && evaluations > PLAIN_STEPS && cornerBeats(at)) {
                 at = cornered(at);
                 reached = notBelow(reached, evaluate(at));
             }
@@ -119,7 +133,7 @@ final class Climb {
         double stride = StrictMath.min(wanted, longest);
         for (int attempt = 0; attempt < MOST_HALVINGS && stride > 1; attempt++) {
             Parameters candidate = Extrapolation.point(at, one, two, stride);
-            landed = evaluate(candidate);
+            landed = startsAsItMust(candidate) ? evaluate(candidate) : Double.NEGATIVE_INFINITY;
             if (landed >= first) {
                 longest = stride >= longest ? longest * FIRST_LONGEST : longest;
                 return maximisation.next(candidate, sums);
@@ -128,6 +142,11 @@ final class Climb {
         }
         landed = first;
         return two;
+    }
+
+    /** Puts a chain that starts in its long run there; false if it has none. {@code p} is modified. */
+    private boolean startsAsItMust(Parameters p) {
+        return initial == InitialDistribution.FREE || StationaryStart.impose(p);
     }
 
     /** Fills the sums at those parameters and returns their log-likelihood. */

@@ -1,7 +1,7 @@
 package sojourn.regime;
 
 /** What observations look like in each regime. Immutable. */
-public sealed interface Emission permits Normal {
+public sealed interface Emission permits Normal, StudentT {
     /** Number of regimes. */
     int states();
 

@@ -8,8 +8,16 @@ interface Expectation {
      */
     boolean fill(Parameters parameters, ExpectedSums sums);
 
-    /** The fastest one for that kind of model. */
+    /** The fastest one for that kind of model with normal emissions. */
     static Expectation of(ModelKind kind, int states, Window window) {
+        return of(kind, states, window, EmissionFamily.NORMAL);
+    }
+
+    /** The fastest one for that kind of model and emissions. */
+    static Expectation of(ModelKind kind, int states, Window window, EmissionFamily family) {
+        if (family.fatTailed()) {
+            return new StudentExpectation(states, window);
+        }
         if (kind != ModelKind.HIDDEN_MARKOV) {
             return new IndependentExpectation(states, window);
         }

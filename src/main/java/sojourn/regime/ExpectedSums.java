@@ -4,7 +4,8 @@ import java.util.Arrays;
 
 /**
  * What one pass over a window expects under given parameters, all that the maximisation step needs: how often each state comes
- * first, how often each step is made, and each state's count, sum and sum of squares of the standardised observations.
+ * first, how often each step is made, and each state's count, sum and sum of squares of the standardised observations. For
+ * Student-t emissions each row counts in sum and squares with its weight u, and the sums of u and of ln u - u are kept beside.
  */
 final class ExpectedSums {
     final double[] initial;
@@ -15,6 +16,11 @@ final class ExpectedSums {
     final double[] count;
     final double[] sum;
     final double[] squares;
+    /** Student-t only: sum of the weights u. */
+    final double[] weights;
+    /** Student-t only: sum of ln u - u. */
+    final double[] logWeights;
+
     double logLikelihood;
 
     ExpectedSums(int states) {
@@ -24,6 +30,8 @@ final class ExpectedSums {
         count = new double[states];
         sum = new double[states];
         squares = new double[states];
+        weights = new double[states];
+        logWeights = new double[states];
     }
 
     /** Sets everything to 0. */
@@ -32,6 +40,8 @@ final class ExpectedSums {
         Arrays.fill(count, 0);
         Arrays.fill(sum, 0);
         Arrays.fill(squares, 0);
+        Arrays.fill(weights, 0);
+        Arrays.fill(logWeights, 0);
         Arrays.fill(initial, 0);
         Arrays.fill(likelihoodFrom, 0);
         logLikelihood = 0;

@@ -3,7 +3,7 @@ package sojourn.regime;
 /**
  * Extrapolates two EM steps: with r the first step and v the second minus the first, the stride is |r| / |v| and the point
  * theta0 + 2 stride r + stride^2 v (Varadhan and Roland 2008, Scand. J. Statistics 35, 335-353, scheme S3 with stride = -alpha).
- * Coordinates are the means and probabilities as they are and the logs of the variances.
+ * Coordinates are the means and probabilities as they are and the logs of the variances and of degrees of freedom.
  */
 final class Extrapolation {
     /** A probability that the extrapolation would make negative is cut to this part of where EM had taken it. */
@@ -41,7 +41,10 @@ final class Extrapolation {
             double r = coordinate(one, e) - start;
             double v = (coordinate(two, e) - coordinate(one, e)) - r;
             double value = start + 2 * stride * r + stride * stride * v;
-            if (isVariance(point, e)) {
+            if (isDegreesOfFreedom(point, e)) {
+                boolean still = r == 0 && v == 0; // fixed ones stay to the bit
+                point.set(e, still ? zero.at(e) : withinBounds(StrictMath.exp(value)));
+            } else if (isVariance(point, e)) {
                 point.set(e, StrictMath.max(Maximisation.FLOOR, StrictMath.exp(value)));
             } else if (e < point.firstMean()) {
                 point.set(e, value > 0 ? value : CUT * two.at(e));
@@ -66,11 +69,21 @@ final class Extrapolation {
         }
     }
 
+    private static double withinBounds(double degreesOfFreedom) {
+        return StrictMath.max(
+                EmissionFamily.LEAST_DEGREES_OF_FREEDOM,
+                StrictMath.min(EmissionFamily.MOST_DEGREES_OF_FREEDOM, degreesOfFreedom));
+    }
+
+    private static boolean isDegreesOfFreedom(Parameters p, int entry) {
+        return entry >= p.degreesOfFreedom(0);
+    }
+
     private static boolean isVariance(Parameters p, int entry) {
         return entry >= p.variance(0);
     }
 
     private static double coordinate(Parameters p, int entry) {
-        return isVariance(p, entry) ? StrictMath.log(p.at(entry)) : p.at(entry);
+        return entry >= p.variance(0) ? StrictMath.log(p.at(entry)) : p.at(entry);
     }
 }

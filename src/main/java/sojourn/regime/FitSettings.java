@@ -8,9 +8,11 @@ import sojourn.numeric.Check;
  * @param kind how regimes follow one another
  * @param states number of regimes, 1 to 6; 1 for a single regime
  * @param emission the family of the observations
+ * @param initial where a chain starts; of no concern to other kinds
  * @param starts how often the search starts, at least 1: one deterministic start, the others random
  */
-public record FitSettings(ModelKind kind, int states, EmissionFamily emission, int starts) {
+public record FitSettings(
+        ModelKind kind, int states, EmissionFamily emission, InitialDistribution initial, int starts) {
     /** The most states that a model may have. */
     public static final int MOST_STATES = 6;
 
@@ -20,6 +22,11 @@ public record FitSettings(ModelKind kind, int states, EmissionFamily emission, i
         Check.that(kind != ModelKind.ONE_REGIME || states == 1, "a one-regime model with " + states + " states");
     }
 
+    /** The same with a free initial distribution. */
+    public FitSettings(ModelKind kind, int states, EmissionFamily emission, int starts) {
+        this(kind, states, emission, InitialDistribution.FREE, starts);
+    }
+
     /** The fewest observations that such a fit needs: some for each state, and more than there are parameters. */
     public int leastObservations() {
         return StrictMath.max(Fitter.LEAST_COUNT * states, parameterCount() + 1);
@@ -27,12 +34,12 @@ public record FitSettings(ModelKind kind, int states, EmissionFamily emission, i
 
     /** Number of free parameters of such a model. */
     public int parameterCount() {
-        int emissionParameters = emission.estimatesMeans() ? 2 * states : states;
+        int first = initial == InitialDistribution.FREE ? states - 1 : 0;
         int chain = switch (kind) {
-            case HIDDEN_MARKOV -> states * (states - 1) + (states - 1);
+            case HIDDEN_MARKOV -> states * (states - 1) + first;
             case MIXTURE -> states - 1;
             case ONE_REGIME -> 0;
         };
-        return chain + emissionParameters;
+        return chain + emission.parameterCount(states);
     }
 }

@@ -41,13 +41,14 @@ public final class Fitter {
             return Fit.failed(refusal.get(), Fit.Search.NONE, x.present());
         }
         if (settings.states() == 1) {
-            return closedForm(settings, request, window);
+            return single(settings, request, window);
         }
+        double alone = oneRegime(settings, window).logLikelihood();
         List<Supplier<Climb.Summit>> climbs = new ArrayList<>();
         for (Parameters start : new Starts(settings, window).all(request)) {
-            climbs.add(() -> Climb.from(start, window, settings.emission()));
+            climbs.add(() -> Climb.from(start, window, settings.emission(), settings.initial()));
         }
-        return choose(settings, request, window, runner.run(climbs));
+        return choose(settings, request, window, alone, runner.run(climbs));
     }
 
     /**
@@ -112,34 +113,53 @@ public final class Fitter {
         return lowest == highest;
     }
 
-    /** One state: the mean and the standard deviation with divisor n. */
-    private static Fit closedForm(FitSettings settings, FitRequest request, Window window) {
-        double[] mean = {window.center()};
-        double[] deviation = {window.scale()};
+    /**
+     * A single regime: of normals the mean and the standard deviation with divisor n, which are the center and the scale of the
+     * window; of Student-t one search.
+     */
+    private static Climb.Summit oneRegime(FitSettings settings, Window window) {
+        FitSettings alone = new FitSettings(ModelKind.MIXTURE, 1, settings.emission(), 1);
+        if (settings.emission().fatTailed()) {
+            return Climb.from(new Starts(alone, window).bySize(), window, settings.emission());
+        }
+        Parameters p = Parameters.blank(ModelKind.MIXTURE, 1);
+        p.set(p.initial(0), 1);
+        p.set(p.variance(0), 1);
+        return new Climb.Summit(p, window.oneRegimeLogLikelihood(), window.count(), 0, true);
+    }
+
+    private static Fit single(FitSettings settings, FitRequest request, Window window) {
+        Climb.Summit summit = oneRegime(settings, window);
+        Emission emission =
+                summit.parameters().toModel(window, settings.emission()).emission();
         double[] one = {1};
-        Normal emission =
-                settings.emission().estimatesMeans() ? Normal.of(mean, deviation) : Normal.zeroMean(deviation);
         RegimeModel model = switch (settings.kind()) {
-            case HIDDEN_MARKOV -> HiddenMarkov.of(one, one, emission);
+            case HIDDEN_MARKOV ->
+                settings.initial() == InitialDistribution.STATIONARY
+                        ? HiddenMarkov.stationary(one, emission)
+                        : HiddenMarkov.of(one, one, emission);
             case MIXTURE -> Mixture.of(one, emission);
             case ONE_REGIME -> OneRegime.of(emission);
         };
         Described described = Described.of(model, request);
         List<String> events = StateEvents.of(described, request.previous().flatMap(Fit::model));
-        return Fit.of(Outcome.CONVERGED, "", new Fit.Search(0, 1, 1), window.count(), described, events);
+        Outcome outcome = outcome(summit, Double.NEGATIVE_INFINITY);
+        Fit.Search search = new Fit.Search(summit.evaluations(), 1, 1);
+        return Fit.of(outcome, explanation(outcome, summit), search, window.count(), described, events);
     }
 
-    private static Fit choose(FitSettings settings, FitRequest request, Window window, List<Climb.Summit> summits) {
+    private static Fit choose(
+            FitSettings settings, FitRequest request, Window window, double alone, List<Climb.Summit> summits) {
         List<Climb.Summit> sound =
-                summits.stream().filter(s -> !degenerate(s, window)).toList();
+                summits.stream().filter(s -> !degenerate(s, alone)).toList();
         Climb.Summit best = best(sound.isEmpty() ? summits : sound);
         int agreeing = (int) summits.stream()
-                .filter(s -> degenerate(s, window) == degenerate(best, window)
+                .filter(s -> degenerate(s, alone) == degenerate(best, alone)
                         && StrictMath.abs(s.logLikelihood() - best.logLikelihood()) <= AGREEMENT)
                 .count();
         Fit.Search search = new Fit.Search(best.evaluations(), summits.size(), agreeing);
         Optional<RegimeModel> previous = request.previous().flatMap(Fit::model);
-        RegimeModel unordered = best.parameters().toModel(window, settings.emission());
+        RegimeModel unordered = best.parameters().toModel(window, settings.emission(), settings.initial());
         int[] order = Roles.order(Described.of(unordered, request), previous);
         Described described = Described.of(unordered.ordered(order), request);
         List<String> events = StateEvents.of(described, previous);
@@ -147,7 +167,7 @@ public final class Fitter {
         if (refused > 0) {
             events.add("degenerate-starts " + refused + " of " + summits.size());
         }
-        Outcome outcome = outcome(best, window);
+        Outcome outcome = outcome(best, alone);
         return Fit.of(outcome, explanation(outcome, best), search, window.count(), described, events);
     }
 
@@ -163,8 +183,8 @@ public final class Fitter {
                 .orElseThrow(() -> new IllegalStateException("no start has a likelihood; this is a bug"));
     }
 
-    private static Outcome outcome(Climb.Summit summit, Window window) {
-        if (degenerate(summit, window)) {
+    private static Outcome outcome(Climb.Summit summit, double alone) {
+        if (degenerate(summit, alone)) {
             return Outcome.DEGENERATE;
         }
         return summit.converged() ? Outcome.CONVERGED : Outcome.ITERATION_LIMIT;
@@ -182,14 +202,12 @@ public final class Fitter {
     }
 
     /** A state on too few observations or on a single value; or states that add nothing to one regime, which is no maximum. */
-    private static boolean degenerate(Climb.Summit summit, Window window) {
+    private static boolean degenerate(Climb.Summit summit, double alone) {
         boolean floored = false;
         Parameters p = summit.parameters();
         for (int k = 0; k < p.states(); k++) {
             floored |= p.at(p.variance(k)) <= Maximisation.FLOOR;
         }
-        return floored
-                || summit.leastCount() < LEAST_COUNT
-                || summit.logLikelihood() < window.oneRegimeLogLikelihood() + NOTHING_GAINED;
+        return floored || summit.leastCount() < LEAST_COUNT || summit.logLikelihood() < alone + NOTHING_GAINED;
     }
 }

@@ -2,22 +2,42 @@ package sojourn.regime;
 
 import sojourn.numeric.Check;
 
-/** A hidden Markov model with a free initial distribution. Source: Rabiner (1989), Proc. IEEE 77, 257-286. */
+/** A hidden Markov model. Source: Rabiner (1989), Proc. IEEE 77, 257-286. */
 public final class HiddenMarkov implements RegimeModel {
     private static final double SUM_TOLERANCE = 1e-9;
 
     private final double[] initial;
     private final double[] transition;
     private final Emission emission;
+    private final InitialDistribution start;
 
-    private HiddenMarkov(double[] initial, double[] transition, Emission emission) {
+    private HiddenMarkov(double[] initial, double[] transition, Emission emission, InitialDistribution start) {
+        this.start = start;
         this.initial = initial;
         this.transition = transition;
         this.emission = emission;
     }
 
     /**
-     * Copies its arrays; neither modified.
+     * A chain that starts in its long run: its initial distribution is that of its transition matrix, which must have just one.
+     * Copies {@code transition}; not modified.
+     *
+     * @param transition as in {@link #of}
+     */
+    public static HiddenMarkov stationary(double[] transition, Emission emission) {
+        int states = emission.states();
+        Check.that(
+                transition.length == states * states,
+                transition.length + " transition probabilities for " + states + " states");
+        double[] initial = LongRun.stationary(transition, states)
+                .orElseThrow(
+                        () -> new IllegalArgumentException("the chain has several closed classes, so no one long run"));
+        HiddenMarkov free = of(initial, transition, emission);
+        return new HiddenMarkov(free.initial, free.transition, emission, InitialDistribution.STATIONARY);
+    }
+
+    /**
+     * A free initial distribution. Copies its arrays; neither modified.
      *
      * @param initial probability of each state at the first bar
      * @param transition states × states, row-major: probability of the next state (column) given this one (row)
@@ -32,7 +52,7 @@ public final class HiddenMarkov implements RegimeModel {
         for (int i = 0; i < states; i++) {
             checkDistribution(transition, i * states, states, "transition row " + i);
         }
-        return new HiddenMarkov(initial.clone(), transition.clone(), emission);
+        return new HiddenMarkov(initial.clone(), transition.clone(), emission, InitialDistribution.FREE);
     }
 
     /** Refuses unless the {@code length} entries from {@code start} are probabilities that sum to 1 within 1e-9. */
@@ -42,6 +62,11 @@ public final class HiddenMarkov implements RegimeModel {
             sum += Check.within(values[start + k], 0, 1, name + ", entry " + k);
         }
         Check.that(StrictMath.abs(sum - 1) <= SUM_TOLERANCE, name + " sums to " + sum + ", must sum to 1");
+    }
+
+    /** Whether the initial distribution is free or that of the long run. */
+    public InitialDistribution start() {
+        return start;
     }
 
     @Override
@@ -67,12 +92,13 @@ public final class HiddenMarkov implements RegimeModel {
     @Override
     public int parameterCount() {
         int states = initial.length;
-        return states * (states - 1) + (states - 1) + emission.parameterCount();
+        int initialParameters = start == InitialDistribution.FREE ? states - 1 : 0;
+        return states * (states - 1) + initialParameters + emission.parameterCount();
     }
 
     @Override
     public HiddenMarkov ordered(int[] order) {
         return new HiddenMarkov(
-                Order.apply(order, initial), Order.applyToSquare(order, transition), emission.ordered(order));
+                Order.apply(order, initial), Order.applyToSquare(order, transition), emission.ordered(order), start);
     }
 }

@@ -15,14 +15,25 @@ public final class LongRun {
      */
     public static Optional<double[]> stationary(RegimeModel model) {
         int states = model.states();
-        boolean[] reaches = reachability(model);
+        double[] transition = new double[states * states];
+        for (int i = 0; i < states; i++) {
+            for (int j = 0; j < states; j++) {
+                transition[i * states + j] = model.transition(i, j);
+            }
+        }
+        return stationary(transition, states);
+    }
+
+    /** The same of a transition matrix, row-major. Not modified. */
+    static Optional<double[]> stationary(double[] transition, int states) {
+        boolean[] reaches = reachability(transition, states);
         int[] closed = closedClass(reaches, states);
         for (int k = 0; k < states; k++) {
             if (closed.length == 0 || !reaches[k * states + closed[0]]) {
                 return Optional.empty();
             }
         }
-        double[] within = eliminate(model, closed);
+        double[] within = eliminate(transition, states, closed);
         double[] result = new double[states];
         for (int i = 0; i < closed.length; i++) {
             result[closed[i]] = within[i];
@@ -39,12 +50,11 @@ public final class LongRun {
         return leave > 0 && Double.isFinite(1 / leave) ? OptionalDouble.of(1 / leave) : OptionalDouble.empty();
     }
 
-    private static boolean[] reachability(RegimeModel model) {
-        int n = model.states();
+    private static boolean[] reachability(double[] transition, int n) {
         boolean[] reaches = new boolean[n * n];
         for (int i = 0; i < n; i++) {
             for (int j = 0; j < n; j++) {
-                reaches[i * n + j] = i == j || model.transition(i, j) > 0;
+                reaches[i * n + j] = i == j || transition[i * n + j] > 0;
             }
         }
         for (int via = 0; via < n; via++) {
@@ -76,12 +86,12 @@ public final class LongRun {
         return new int[0];
     }
 
-    private static double[] eliminate(RegimeModel model, int[] members) {
+    private static double[] eliminate(double[] transition, int states, int[] members) {
         int n = members.length;
         double[] a = new double[n * n];
         for (int i = 0; i < n; i++) {
             for (int j = 0; j < n; j++) {
-                a[i * n + j] = model.transition(members[i], members[j]);
+                a[i * n + j] = transition[members[i] * states + members[j]];
             }
         }
         for (int last = n - 1; last > 0; last--) {

@@ -10,9 +10,16 @@ final class Maximisation {
     static final double FLOOR = 1e-4;
 
     private final EmissionFamily family;
+    private final InitialDistribution initial;
 
+    /** For a free initial distribution. */
     Maximisation(EmissionFamily family) {
+        this(family, InitialDistribution.FREE);
+    }
+
+    Maximisation(EmissionFamily family, InitialDistribution initial) {
         this.family = family;
+        this.initial = initial;
     }
 
     /** The next parameters. Neither argument is modified. */
@@ -30,6 +37,12 @@ final class Maximisation {
         for (int i = 0; old.kind() == ModelKind.HIDDEN_MARKOV && i < states; i++) {
             row(next, sums, i);
         }
+        if (family.form() == EmissionFamily.Form.NORMAL_TIED) {
+            tie(next, sums);
+        }
+        if (old.kind() == ModelKind.HIDDEN_MARKOV && initial == InitialDistribution.STATIONARY) {
+            StationaryStart.raise(next, old, sums);
+        }
         return next;
     }
 
@@ -38,10 +51,42 @@ final class Maximisation {
         if (!(n > 0)) {
             return;
         }
+        if (family.fatTailed()) {
+            student(next, sums, k);
+            return;
+        }
         double mean = family.estimatesMeans() ? sums.sum[k] / n : 0;
         double square = sums.squares[k] / n - mean * mean;
         next.set(next.mean(k), mean);
         next.set(next.variance(k), Math.max(FLOOR, square));
+    }
+
+    /** Mean sum(g u z) / sum(g u), squared scale sum(g u (z - mean)^2) / sum(g) (Peel and McLachlan 2000, eqs. 29 and 30). */
+    private void student(Parameters next, ExpectedSums sums, int k) {
+        double mean = sums.sum[k] / sums.weights[k];
+        double square = sums.squares[k] - mean * sums.sum[k];
+        next.set(next.mean(k), mean);
+        next.set(next.variance(k), Math.max(FLOOR, square / sums.count[k]));
+        if (family.fixedDegreesOfFreedom().isEmpty()) {
+            double old = next.at(next.degreesOfFreedom(k));
+            next.set(next.degreesOfFreedom(k), DegreesOfFreedom.next(old, sums.logWeights[k] / sums.count[k]));
+        }
+    }
+
+    /** One variance for all states: sum_k sum_t g (z - mean_k)^2 / n, over the states that have weight. */
+    private static void tie(Parameters next, ExpectedSums sums) {
+        double squares = 0;
+        double count = 0;
+        for (int k = 0; k < next.states(); k++) {
+            if (sums.count[k] > 0) {
+                double mean = next.at(next.mean(k));
+                squares += sums.squares[k] - mean * mean * sums.count[k];
+                count += sums.count[k];
+            }
+        }
+        for (int k = 0; count > 0 && k < next.states(); k++) {
+            next.set(next.variance(k), Math.max(FLOOR, squares / count));
+        }
     }
 
     private static void row(Parameters next, ExpectedSums sums, int i) {

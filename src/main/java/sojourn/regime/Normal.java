@@ -1,5 +1,6 @@
 package sojourn.regime;
 
+import java.util.Arrays;
 import sojourn.numeric.Check;
 
 /**
@@ -34,6 +35,13 @@ public final class Normal implements Emission {
                 EmissionFamily.NORMAL_ZERO_MEAN, new double[standardDeviations.length], standardDeviations.clone());
     }
 
+    /** One mean a regime, the same standard deviation (above 0) in all. Copied; not modified. */
+    public static Normal tied(double[] means, double standardDeviation) {
+        double[] deviations = new double[means.length];
+        Arrays.fill(deviations, standardDeviation);
+        return checked(EmissionFamily.NORMAL_TIED, means.clone(), deviations);
+    }
+
     private static Normal checked(EmissionFamily family, double[] means, double[] deviations) {
         Check.that(
                 means.length == deviations.length && means.length > 0,
@@ -45,7 +53,7 @@ public final class Normal implements Emission {
         return new Normal(family, means, deviations);
     }
 
-    /** Whether the means are free or zero. */
+    /** Whether the means are free or zero, and the standard deviations free or tied. */
     public EmissionFamily family() {
         return family;
     }
@@ -80,7 +88,7 @@ public final class Normal implements Emission {
 
     @Override
     public int parameterCount() {
-        return family.estimatesMeans() ? 2 * states() : states();
+        return family.parameterCount(states());
     }
 
     @Override

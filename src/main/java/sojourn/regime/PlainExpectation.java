@@ -22,13 +22,20 @@ final class PlainExpectation implements Expectation {
     @Override
     public boolean fill(Parameters p, ExpectedSums sums) {
         sums.clear();
-        Smoothed smoothed = Smoothed.of(p.toModel(Window.UNIT, family), standardised);
+        RegimeModel model = p.toModel(Window.UNIT, family);
+        Smoothed smoothed = Smoothed.of(model, standardised);
         int states = p.states();
         for (int t = 0; t < window.size(); t++) {
             double z = window.values()[t];
             for (int k = 0; k < states; k++) {
                 double g = smoothed.at(t, k) * window.present()[t];
                 sums.count[k] += g;
+                if (model.emission() instanceof StudentT student && g > 0) {
+                    double u = student.weight(standardised, t, k);
+                    sums.weights[k] += g * u;
+                    sums.logWeights[k] += g * (StrictMath.log(u) - u);
+                    g *= u;
+                }
                 sums.sum[k] += g * z;
                 sums.squares[k] += g * z * z;
             }

@@ -16,6 +16,8 @@ final class Starts {
     private static final int SMOOTHING = 21;
     private static final double STAY = 0.95;
     private static final double LEAST_VARIANCE = 0.01;
+    /** Degrees of freedom at which a search starts, unless they are given. */
+    private static final double TAILS = 8;
     /** Lets a search that starts at the previous fit leave probabilities of 0 again. */
     private static final double SOFTENING = 0.001;
 
@@ -34,13 +36,35 @@ final class Starts {
         for (int index = 1; index < settings.starts(); index++) {
             RandomStream random = RandomStream.of(
                     request.masterSeed(), "start", request.date(), String.format(Locale.ROOT, "%d", index));
-            starts.add(index % 2 == 1 ? fromStretches(random) : fromValues(random));
+            boolean stretches = index % 2 == 1;
+            if (settings.emission().fatTailed()) {
+                Parameters start = stretches ? fromLongStretches(random) : fromStretches(random);
+                drawTails(start, random);
+                starts.add(start);
+            } else {
+                starts.add(stretches ? fromStretches(random) : fromValues(random));
+            }
         }
         request.previous().flatMap(Fit::model).flatMap(this::fromModel).ifPresent(starts::add);
+        return settings.emission().form() == EmissionFamily.Form.NORMAL_TIED ? tied(starts) : starts;
+    }
+
+    /** Gives every state the mean of the starting variances. */
+    private List<Parameters> tied(List<Parameters> starts) {
+        for (Parameters start : starts) {
+            double mean = 0;
+            for (int k = 0; k < start.states(); k++) {
+                mean += start.at(start.variance(k)) / start.states();
+            }
+            for (int k = 0; k < start.states(); k++) {
+                start.set(start.variance(k), mean);
+            }
+        }
         return starts;
     }
 
-    private Parameters bySize() {
+    /** The deterministic start. */
+    Parameters bySize() {
         List<Integer> rows = presentRows();
         double[] size = new double[rows.size()];
         double sum = 0;
@@ -80,6 +104,34 @@ final class Starts {
         return start;
     }
 
+    /**
+     * As {@link #fromStretches}, of stretches up to as long as an even share of the window, with stays as long. Fat tails explain
+     * single storms without a change of regime, so that what is left to find may be slow. (A start from single observations would
+     * only find spikes inside a fat-tailed regime.)
+     */
+    private Parameters fromLongStretches(RandomStream random) {
+        List<Integer> rows = presentRows();
+        int longest = StrictMath.max(5, rows.size() / settings.states());
+        int length = 5 + random.nextInt(StrictMath.max(1, longest - 4));
+        Parameters start = chain(1 - 1.0 / StrictMath.max(5, length));
+        for (int k = 0; k < settings.states(); k++) {
+            int from = random.nextInt(StrictMath.max(1, rows.size() - length + 1));
+            emission(start, k, rows.subList(from, StrictMath.min(rows.size(), from + length)));
+        }
+        return start;
+    }
+
+    /** Degrees of freedom between 3 and 30, each scale changed so that the standard deviation stays; given ones stay. */
+    private void drawTails(Parameters start, RandomStream random) {
+        for (int k = 0; settings.emission().fixedDegreesOfFreedom().isEmpty() && k < start.states(); k++) {
+            double before = start.at(start.degreesOfFreedom(k));
+            double nu = 3 * StrictMath.exp(random.nextDouble() * StrictMath.log(10));
+            double square = start.at(start.variance(k)) * (before / (before - 2)) * ((nu - 2) / nu);
+            start.set(start.variance(k), StrictMath.max(Maximisation.FLOOR, square));
+            start.set(start.degreesOfFreedom(k), nu);
+        }
+    }
+
     /** Each state takes one observation as its mean, and a variance between a hundredth and four times the window's. */
     private Parameters fromValues(RandomStream random) {
         List<Integer> rows = presentRows();
@@ -89,6 +141,7 @@ final class Starts {
             double size = StrictMath.exp(StrictMath.log(0.01) + random.nextDouble() * StrictMath.log(400));
             start.set(start.mean(k), settings.emission().estimatesMeans() ? mean : 0);
             start.set(start.variance(k), size);
+            tails(start, k);
         }
         return start;
     }
@@ -106,6 +159,13 @@ final class Starts {
             double mean = (model.emission().mean(k, 0) - window.center()) / window.scale();
             start.set(start.mean(k), settings.emission().estimatesMeans() ? mean : 0);
             start.set(start.variance(k), StrictMath.max(Maximisation.FLOOR, deviation * deviation));
+            tails(start, k);
+            if (model.emission() instanceof StudentT student
+                    && settings.emission().fatTailed()) {
+                double scale = student.scale(k) / window.scale();
+                start.set(start.variance(k), StrictMath.max(Maximisation.FLOOR, scale * scale));
+                start.set(start.degreesOfFreedom(k), student.degreesOfFreedom(k));
+            }
             if (settings.kind() == ModelKind.MIXTURE) {
                 start.set(start.initial(k), soft(model.initial(k)));
             }
@@ -123,7 +183,7 @@ final class Starts {
     /** Even initial distribution; {@code stay} on the diagonal, the rest even. */
     private Parameters chain(double stay) {
         int states = settings.states();
-        Parameters start = Parameters.blank(settings.kind(), states);
+        Parameters start = Parameters.blank(settings.kind(), states, settings.emission());
         for (int i = 0; i < states; i++) {
             start.set(start.initial(i), 1.0 / states);
             for (int j = 0; settings.kind() == ModelKind.HIDDEN_MARKOV && j < states; j++) {
@@ -145,6 +205,17 @@ final class Starts {
         }
         start.set(start.mean(k), center);
         start.set(start.variance(k), StrictMath.max(LEAST_VARIANCE, square));
+        tails(start, k);
+    }
+
+    /** For Student-t turns the variance of state {@code k} into the squared scale that has it, degrees of freedom beside. */
+    private void tails(Parameters start, int k) {
+        if (settings.emission().fatTailed()) {
+            double nu = settings.emission().fixedDegreesOfFreedom().orElse(TAILS);
+            double square = start.at(start.variance(k)) * (nu - 2) / nu;
+            start.set(start.variance(k), StrictMath.max(Maximisation.FLOOR, square));
+            start.set(start.degreesOfFreedom(k), nu);
+        }
     }
 
     private List<Integer> presentRows() {

@@ -13,6 +13,8 @@ final class StateEvents {
     private static final double DUPLICATED = 0.00227;
 
     private static final double ABSORBING = 1e-6;
+    /** Degrees of freedom as near to the lower bound as this are held by it. */
+    private static final double AT_BOUND = 1e-6;
 
     private StateEvents() {}
 
@@ -32,6 +34,13 @@ final class StateEvents {
             }
             if (StrictMath.max(now, next) <= NEAR_TIE * StrictMath.min(now, next)) {
                 events.add(pair("near-tie", k, k + 1));
+            }
+        }
+        if (model.emission() instanceof StudentT student) {
+            for (int k = 0; k < states; k++) {
+                if (student.degreesOfFreedom(k) <= EmissionFamily.LEAST_DEGREES_OF_FREEDOM + AT_BOUND) {
+                    events.add("tails-at-bound {" + k + "}");
+                }
             }
         }
         for (int k = 0; states > 1 && k < states; k++) {

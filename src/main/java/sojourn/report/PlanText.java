@@ -5,6 +5,7 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
+import java.util.OptionalDouble;
 import java.util.stream.Collectors;
 import sojourn.archive.Caution;
 import sojourn.compare.Prepared;
@@ -108,7 +109,7 @@ public final class PlanText {
 
     private static String watches(RegimeSettings regimes) {
         String observed = regimes.observe().stream().map(Observation::inWords).collect(Collectors.joining(", "));
-        String model = regimes.model().word() + ", " + regimes.emission().word() + " emissions";
+        String model = regimes.model().word() + ", " + regimes.emission().word() + degrees(regimes) + " emissions";
         String order = regimes.model() == ModelKind.ONE_REGIME
                 ? ""
                 : ", ordered by the volatility of " + regimes.orderedBy() + " at every fit";
@@ -129,6 +130,11 @@ public final class PlanText {
                     fixed.transition().get(k).get(k)));
         }
         return String.join("; ", each);
+    }
+
+    private static String degrees(RegimeSettings regimes) {
+        OptionalDouble fixed = regimes.emission().fixedDegreesOfFreedom();
+        return fixed.isPresent() ? " of " + fixed.getAsDouble() + " degrees of freedom" : "";
     }
 
     private static String fits(RefitSettings refit, RegimeSettings regimes, FitPlan plan) {

@@ -3,11 +3,13 @@ package sojourn.walk;
 import java.math.BigDecimal;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 import java.util.stream.Collectors;
 import sojourn.document.Field;
 import sojourn.document.Refusal;
 import sojourn.document.Shape;
 import sojourn.document.Shapes;
+import sojourn.regime.EmissionFamily;
 
 /**
  * Parameters that are declared instead of fitted: an external prior, which every output says so of. One entry a regime, in the
@@ -17,10 +19,21 @@ import sojourn.document.Shapes;
  * @param transition probability of the next regime (column) given this one (row); each row sums to 1
  * @param mean of the observation in each regime, per bar
  * @param sd standard deviation of the observation in each regime, per bar
+ * @param degreesOfFreedom of Student-t emissions; empty if not written
  */
-public record FixedParameters(List<Double> initial, List<List<Double>> transition, List<Double> mean, List<Double> sd) {
+public record FixedParameters(
+        List<Double> initial,
+        List<List<Double>> transition,
+        List<Double> mean,
+        List<Double> sd,
+        List<Double> degreesOfFreedom) {
     private static final int MOST_STATES = 6;
     private static final double SUM_SLACK = 1e-9;
+
+    /** Reads degrees of freedom. */
+    static final Shape<Double> TAILS = Shapes.number()
+            .atLeast(EmissionFamily.LEAST_DEGREES_OF_FREEDOM)
+            .atMost(EmissionFamily.MOST_DEGREES_OF_FREEDOM);
 
     private static final Shape<List<Double>> PROBABILITIES =
             Shapes.list(Shapes.number().atLeast(0).atMost(1), 1, MOST_STATES);
@@ -37,13 +50,22 @@ public record FixedParameters(List<Double> initial, List<List<Double>> transitio
             Shapes.list(Shapes.number().above(0), 1, MOST_STATES),
             "standard deviation of the observation in each regime, per bar");
 
+    private static final Field<Optional<List<Double>>> DEGREES_OF_FREEDOM = Field.maybe(
+            "degrees-of-freedom", Shapes.list(TAILS, 1, MOST_STATES), "of emission: student-t, one a regime");
+
     static final Shape<FixedParameters> SHAPE = Shapes.object(
                     "fixed",
-                    f -> new FixedParameters(f.get(INITIAL), f.get(TRANSITION), f.get(MEAN), f.get(SD)),
+                    f -> new FixedParameters(
+                            f.get(INITIAL),
+                            f.get(TRANSITION),
+                            f.get(MEAN),
+                            f.get(SD),
+                            f.get(DEGREES_OF_FREEDOM).orElse(List.of())),
                     INITIAL,
                     TRANSITION,
                     MEAN,
-                    SD)
+                    SD,
+                    DEGREES_OF_FREEDOM)
             .refuseEach(FixedParameters::faults);
 
     /** Copies its lists. */
@@ -52,6 +74,12 @@ public record FixedParameters(List<Double> initial, List<List<Double>> transitio
         transition = transition.stream().map(List::copyOf).toList();
         mean = List.copyOf(mean);
         sd = List.copyOf(sd);
+        degreesOfFreedom = List.copyOf(degreesOfFreedom);
+    }
+
+    /** Parameters of normal emissions. */
+    public FixedParameters(List<Double> initial, List<List<Double>> transition, List<Double> mean, List<Double> sd) {
+        this(initial, transition, mean, sd, List.of());
     }
 
     private List<Refusal> faults() {
@@ -80,6 +108,10 @@ public record FixedParameters(List<Double> initial, List<List<Double>> transitio
         }
         if (sd.size() != states) {
             faults.add(new Refusal("sd", "'sd' has " + sd.size() + " numbers", each));
+        }
+        if (!degreesOfFreedom.isEmpty() && degreesOfFreedom.size() != states) {
+            faults.add(new Refusal(
+                    "degrees-of-freedom", "'degrees-of-freedom' has " + degreesOfFreedom.size() + " numbers", each));
         }
         return faults;
     }

@@ -14,6 +14,7 @@ import sojourn.document.Shape;
 import sojourn.document.Shapes;
 import sojourn.regime.EmissionFamily;
 import sojourn.regime.FitSettings;
+import sojourn.regime.InitialDistribution;
 import sojourn.regime.ModelKind;
 
 /**
@@ -23,6 +24,7 @@ import sojourn.regime.ModelKind;
  * @param observe what it sees at each close; one series
  * @param states the regimes' names, from lowest to highest volatility
  * @param emission how an observation is distributed in a regime
+ * @param initial where a chain of regimes starts; free when empty
  * @param orderBy the asset whose returns order the regimes; the observed asset when empty
  * @param fixed parameters that are declared instead of fitted
  */
@@ -31,6 +33,7 @@ public record RegimeSettings(
         List<Observation> observe,
         List<String> states,
         EmissionFamily emission,
+        Optional<InitialDistribution> initial,
         Optional<String> orderBy,
         Optional<FixedParameters> fixed) {
     private static final int MOST_STATES = 6;
@@ -51,8 +54,24 @@ public record RegimeSettings(
             Field.required("observe", OBSERVATIONS, "what the model sees at each close, e.g. log-return of an asset");
     private static final Field<List<String>> STATES =
             Field.required("states", STATE_NAMES, "names of the regimes, from lowest to highest volatility");
+    private static final Field<Double> DEGREES_OF_FREEDOM =
+            Field.required("degrees-of-freedom", FixedParameters.TAILS, "of every regime, fixed instead of estimated");
+    private static final Field<Double> STUDENT_T = Field.required(
+            "student-t",
+            Shapes.object("student-t", f -> f.get(DEGREES_OF_FREEDOM), DEGREES_OF_FREEDOM),
+            "a Student-t distribution whose degrees of freedom are fixed");
     private static final Field<EmissionFamily> EMISSION = Field.defaulted(
-            "emission", Shapes.word(emissions()), "normal", "how an observation is distributed within a regime");
+            "emission",
+            Shapes.<EmissionFamily>either(
+                    Shapes.word(EmissionFamily.values(), EmissionFamily::word),
+                    Shapes.object("emission", f -> EmissionFamily.studentT(f.get(STUDENT_T)), STUDENT_T)),
+            "normal",
+            "how an observation is distributed within a regime; normal-tied: one volatility, only the mean changes; student-t:"
+                    + " fat tails, degrees of freedom estimated between 2.05 and 200");
+    private static final Field<Optional<InitialDistribution>> INITIAL = Field.maybe(
+            "initial",
+            Shapes.word(List.of(InitialDistribution.values()), InitialDistribution::word),
+            "where the chain starts in each window: free (estimated; if left out) or stationary (in its long run)");
     private static final Field<Optional<String>> ORDER_BY = Field.maybe(
             "order-by", Shapes.text(), "the asset whose volatility orders the regimes; the observed one if left out");
     private static final Field<FixedParameters> FIXED = Field.required(
@@ -70,12 +89,14 @@ public record RegimeSettings(
                             f.get(OBSERVE),
                             f.get(STATES),
                             f.get(EMISSION),
+                            f.get(INITIAL),
                             f.get(ORDER_BY),
                             f.get(PARAMETERS)),
                     MODEL,
                     OBSERVE,
                     STATES,
                     EMISSION,
+                    INITIAL,
                     ORDER_BY,
                     PARAMETERS)
             .refuseEach(RegimeSettings::faults);
@@ -86,9 +107,20 @@ public record RegimeSettings(
         states = List.copyOf(states);
     }
 
+    /** The same with a free initial distribution. */
+    public RegimeSettings(
+            ModelKind model,
+            List<Observation> observe,
+            List<String> states,
+            EmissionFamily emission,
+            Optional<String> orderBy,
+            Optional<FixedParameters> fixed) {
+        this(model, observe, states, emission, Optional.empty(), orderBy, fixed);
+    }
+
     /** What is fitted, by so many starts. */
     public FitSettings fitSettings(int starts) {
-        return new FitSettings(model, states.size(), emission, starts);
+        return new FitSettings(model, states.size(), emission, initial.orElse(InitialDistribution.FREE), starts);
     }
 
     /** The asset whose returns order the regimes. */
@@ -113,8 +145,20 @@ public record RegimeSettings(
                     "the model one-regime has one regime, not " + states.size(),
                     "name one, or choose another model"));
         }
-        if (emission == EmissionFamily.NORMAL_ZERO_MEAN) {
+        if (emission.equals(EmissionFamily.NORMAL_ZERO_MEAN)) {
             observe.stream().filter(one -> !one.aroundZero()).findFirst().ifPresent(one -> faults.add(sized(one)));
+        }
+        if (initial.isPresent() && model != ModelKind.HIDDEN_MARKOV) {
+            faults.add(new Refusal(
+                    "initial",
+                    "'initial' says where a chain starts, and the model " + model.word() + " has no chain",
+                    "set model: hidden-markov, or leave 'initial' out"));
+        }
+        if (initial.isPresent() && fixed.isPresent()) {
+            faults.add(new Refusal(
+                    "initial",
+                    "declared parameters say themselves where the chain starts, in 'parameters'",
+                    "leave this 'initial' out"));
         }
         fixed.ifPresent(given -> faults.addAll(faultsOf(given)));
         return faults;
@@ -142,7 +186,15 @@ public record RegimeSettings(
                     "declared parameters are those of the model hidden-markov, not of " + model.word(),
                     "set model: hidden-markov, or leave the parameters out"));
         }
-        if (emission == EmissionFamily.NORMAL_ZERO_MEAN) {
+        faults.addAll(faultsOfTails(given));
+        if (emission.form() == EmissionFamily.Form.NORMAL_TIED
+                && given.sd().stream().distinct().count() > 1) {
+            faults.add(new Refusal(
+                    "parameters",
+                    "the standard deviations differ, those of the emission normal-tied are one",
+                    "write the same 'sd' for each, or set emission: normal"));
+        }
+        if (emission.form() == EmissionFamily.Form.NORMAL_ZERO_MEAN) {
             given.mean().stream()
                     .filter(mean -> mean != 0)
                     .findFirst()
@@ -157,18 +209,34 @@ public record RegimeSettings(
         return faults;
     }
 
+    private List<Refusal> faultsOfTails(FixedParameters given) {
+        boolean declared = !given.degreesOfFreedom().isEmpty();
+        boolean student = emission.form() == EmissionFamily.Form.STUDENT_T;
+        boolean fixedBefore = emission.fixedDegreesOfFreedom().isPresent();
+        if (student && !fixedBefore && !declared) {
+            return List.of(new Refusal(
+                    "parameters",
+                    "declared parameters of the emission student-t lack their degrees of freedom",
+                    "add degrees-of-freedom, one for each regime"));
+        }
+        if (student && fixedBefore && declared) {
+            return List.of(new Refusal(
+                    "parameters",
+                    "degrees-of-freedom stands in 'emission' and in 'parameters'",
+                    "write it in one of the two"));
+        }
+        return student || !declared
+                ? List.of()
+                : List.of(new Refusal(
+                        "parameters",
+                        "degrees-of-freedom belongs to the emission student-t, not to " + emission.word(),
+                        "set emission: student-t, or leave degrees-of-freedom out"));
+    }
+
     private static Map<String, ModelKind> models() {
         Map<String, ModelKind> words = new LinkedHashMap<>();
         for (ModelKind kind : ModelKind.values()) {
             words.put(kind.word(), kind);
-        }
-        return words;
-    }
-
-    private static Map<String, EmissionFamily> emissions() {
-        Map<String, EmissionFamily> words = new LinkedHashMap<>();
-        for (EmissionFamily family : EmissionFamily.values()) {
-            words.put(family.word(), family);
         }
         return words;
     }

@@ -1,12 +1,14 @@
 package sojourn.walk;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import java.util.function.IntConsumer;
 import sojourn.market.Known;
 import sojourn.market.PriceTable;
 import sojourn.regime.Companions;
+import sojourn.regime.Emission;
 import sojourn.regime.EmissionFamily;
 import sojourn.regime.FilterState;
 import sojourn.regime.Fit;
@@ -18,6 +20,7 @@ import sojourn.regime.Normal;
 import sojourn.regime.Observations;
 import sojourn.regime.RegimeModel;
 import sojourn.regime.StartRunner;
+import sojourn.regime.StudentT;
 
 /**
  * Walks a regime model forward through a history, close by close. At each close: the new observation is taken in; the model in
@@ -46,7 +49,7 @@ public final class Walk {
         this.timeline = new RegimeTimeline.Builder(
                 regimes.states(),
                 table.assets(),
-                regimes.emission() == EmissionFamily.NORMAL_ZERO_MEAN
+                regimes.emission().equals(EmissionFamily.NORMAL_ZERO_MEAN)
                         ? RegimeTimeline.Builder.MeanOf.CASH
                         : RegimeTimeline.Builder.MeanOf.WINDOW);
     }
@@ -179,10 +182,27 @@ public final class Walk {
     private RegimeModel model(FixedParameters declared) {
         List<Double> transition = new ArrayList<>();
         declared.transition().forEach(transition::addAll);
-        Normal emission = regimes.emission() == EmissionFamily.NORMAL_ZERO_MEAN
-                ? Normal.zeroMean(array(declared.sd()))
-                : Normal.of(array(declared.mean()), array(declared.sd()));
-        return HiddenMarkov.of(array(declared.initial()), array(transition), emission);
+        return HiddenMarkov.of(array(declared.initial()), array(transition), emission(declared));
+    }
+
+    private Emission emission(FixedParameters declared) {
+        double[] means = array(declared.mean());
+        double[] deviations = array(declared.sd());
+        return switch (regimes.emission().form()) {
+            case NORMAL -> Normal.of(means, deviations);
+            case NORMAL_ZERO_MEAN -> Normal.zeroMean(deviations);
+            case NORMAL_TIED -> Normal.tied(means, deviations[0]);
+            case STUDENT_T -> StudentT.withDeviations(means, deviations, degreesOfFreedom(declared));
+        };
+    }
+
+    private double[] degreesOfFreedom(FixedParameters declared) {
+        if (regimes.emission().fixedDegreesOfFreedom().isEmpty()) {
+            return array(declared.degreesOfFreedom());
+        }
+        double[] same = new double[regimes.states().size()];
+        Arrays.fill(same, regimes.emission().fixedDegreesOfFreedom().getAsDouble());
+        return same;
     }
 
     private static double[] array(List<Double> values) {
