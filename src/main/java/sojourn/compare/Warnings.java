@@ -77,7 +77,8 @@ public final class Warnings {
         doubt(doubts, tally.withEvent("absorbing"), "have a regime that is never left");
         doubt(doubts, tally.withEvent("collapsed"), "have a regime of hardly any bars");
         doubt(doubts, tally.withEvent("duplicated"), "have two regimes that are nearly the same");
-        doubt(doubts, tally.withEvent("degenerate-starts"), "had starts that ran into a spike");
+        int spiked = tally.withEvent("degenerate-starts");
+        doubt(doubts, 4 * spiked >= tally.fits() ? spiked : 0, "had starts that ran into a spike");
         if (!doubts.isEmpty()) {
             warnings.add("timeline " + key + ": of " + tally.fits() + " fits " + String.join(", ", doubts)
                     + "; see timelines/" + key + ".fits.csv before trusting its regimes");
