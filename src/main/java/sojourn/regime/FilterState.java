@@ -33,7 +33,7 @@ public final class FilterState {
     }
 
     /** The filter after all rows of {@code x}. */
-    static FilterState after(RegimeModel model, Observations x) {
+    public static FilterState after(RegimeModel model, Observations x) {
         FilterState state = before(model);
         for (int row = 0; row < x.size(); row++) {
             state = state.step(model, x, row);

@@ -87,11 +87,6 @@ final class ObservationLog {
         return row;
     }
 
-    /** The last row. */
-    int lastRow() {
-        return rows - 1;
-    }
-
     /** The rows from {@code start} to now. */
     Observations window(int start) {
         return Observations.of(1, Arrays.copyOfRange(values, start, rows), Arrays.copyOfRange(missing, start, rows));

@@ -102,8 +102,8 @@ public final class Walk {
         }
         FitRecord record = earlier.lastAccepted();
         RegimeModel model = record.fit().model().orElseThrow();
-        FilterState filter =
-                filtered(model, log.window(log.row(table.knownAt(earlier.endBar() - 1), record.windowStart())));
+        FilterState filter = FilterState.after(
+                model, log.window(log.row(table.knownAt(earlier.endBar() - 1), record.windowStart())));
         inForce = Optional.of(new InForce(record, model, filter));
         aside = earlier.fitInForce(earlier.endBar() - 1).isEmpty();
     }
@@ -160,19 +160,11 @@ public final class Walk {
         timeline.fit(record);
         if (fit.outcome().accepted()) {
             RegimeModel model = fit.model().orElseThrow();
-            inForce = Optional.of(new InForce(record, model, filtered(model, window)));
+            inForce = Optional.of(new InForce(record, model, FilterState.after(model, window)));
             aside = false;
         } else if (refit.onFailure() == RefitSettings.OnFailure.STAND_ASIDE) {
             aside = true;
         }
-    }
-
-    private static FilterState filtered(RegimeModel model, Observations window) {
-        FilterState state = FilterState.before(model);
-        for (int row = 0; row < window.size(); row++) {
-            state = state.step(model, window, row);
-        }
-        return state;
     }
 
     private FitSettings settings() {
