@@ -58,7 +58,8 @@ public final class LocalWorkers implements Workers {
         pool.shutdownNow();
     }
 
-    private static RuntimeException unwrapped(ExecutionException e) {
+    /** What a job threw: an error of the machine goes on as it is, an exception is given back to be thrown. */
+    static RuntimeException unwrapped(ExecutionException e) {
         Throwable cause = e.getCause();
         if (cause instanceof Error error) {
             throw error;

@@ -2,7 +2,7 @@ package sojourn.compare;
 
 import java.nio.file.Path;
 import java.util.LinkedHashSet;
-import java.util.Objects;
+import java.util.Optional;
 import java.util.Set;
 import sojourn.archive.ComparisonFile;
 import sojourn.archive.MeasuresFile;
@@ -22,14 +22,14 @@ public final class ResultWriter {
     private ResultWriter() {}
 
     /**
-     * Writes below {@code results} under {@code name}. The folders that {@code paths} names are written; the table, digests and timelines are always whole.
+     * Writes below {@code results} under {@code name}. The folders that {@code paths} names are written; the table, digests and
+     * timelines are always whole.
      */
     public static ResultFolder.Published write(
             Path results, String name, Compared compared, RunFacts facts, WhichPaths paths) {
         try (ResultFolder folder = ResultFolder.begin(results)) {
             folder.write("comparison.csv", ComparisonFile.of(compared.rows()).csv());
             writeTimelines(folder, compared);
-
             for (Judgement one : paths.of(compared.ranked())) {
                 writeVariant(folder, results.resolve(name), one);
             }
@@ -41,17 +41,19 @@ public final class ResultWriter {
         Set<String> written = new LinkedHashSet<>();
         for (Prepared one : compared.prepared()) {
             if (one instanceof Prepared.Ready ready && written.add(ready.timelineKey())) {
-                RegimeTimeline timeline =
-                        Objects.requireNonNull(compared.timelines().get(ready.timelineKey()), "every key was walked");
-                String observation =
-                        one.file().strategy().regimes().observe().get(0).column();
-                String base = TIMELINES + "/" + ready.timelineKey();
-                folder.write(base + ".csv", TimelineFiles.bars(timeline).csv());
-                folder.write(
-                        base + ".fits.csv",
-                        TimelineFiles.fits(timeline, observation).csv());
+                // a timeline whose walk broke is not there; its variants are failed rows
+                Optional.ofNullable(compared.timelines().get(ready.timelineKey()))
+                        .ifPresent(timeline -> writeTimeline(folder, ready, timeline));
             }
         }
+    }
+
+    private static void writeTimeline(ResultFolder folder, Prepared.Ready ready, RegimeTimeline timeline) {
+        String observation = ready.file().strategy().regimes().observe().get(0).column();
+        String base = TIMELINES + "/" + ready.timelineKey();
+        folder.write(base + ".csv", TimelineFiles.bars(timeline).csv());
+        folder.write(
+                base + ".fits.csv", TimelineFiles.fits(timeline, observation).csv());
     }
 
     private static void writeVariant(ResultFolder folder, Path target, Judgement one) {

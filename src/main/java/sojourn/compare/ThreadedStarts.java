@@ -37,7 +37,7 @@ final class ThreadedStarts implements StartRunner, AutoCloseable {
             try {
                 results.add(one.get());
             } catch (ExecutionException e) {
-                throw new IllegalStateException("a start failed", e.getCause());
+                throw LocalWorkers.unwrapped(e);
             } catch (InterruptedException e) {
                 Thread.currentThread().interrupt();
                 throw new IllegalStateException("interrupted while waiting for a start", e);
