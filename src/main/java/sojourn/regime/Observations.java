@@ -3,19 +3,29 @@ package sojourn.regime;
 import java.util.Arrays;
 import sojourn.numeric.Check;
 
-/** A series of observations without dates: rows of {@code dimension} numbers, some rows missing altogether. Immutable. */
+/**
+ * A series of observations without dates: rows of {@code dimension} numbers, any of which may be missing. A row is missing when
+ * all its numbers are. Immutable.
+ */
 public final class Observations {
     private final int dimension;
     private final double[] values;
-    private final boolean[] missing;
+    private final boolean[] missingCells;
+    private final boolean[] missingRows;
     private final int present;
 
-    private Observations(int dimension, double[] values, boolean[] missing) {
+    private Observations(int dimension, double[] values, boolean[] missingCells) {
         this.dimension = dimension;
         this.values = values;
-        this.missing = missing;
+        this.missingCells = missingCells;
+        this.missingRows = new boolean[missingCells.length / dimension];
         int count = 0;
-        for (boolean gap : missing) {
+        for (int row = 0; row < missingRows.length; row++) {
+            boolean gap = true;
+            for (int i = row * dimension; i < (row + 1) * dimension; i++) {
+                gap &= missingCells[i];
+            }
+            missingRows[row] = gap;
             count += gap ? 0 : 1;
         }
         this.present = count;
@@ -27,28 +37,46 @@ public final class Observations {
     }
 
     /**
-     * Rows of {@code dimension} numbers. Copies its arrays; neither modified.
+     * Rows of {@code dimension} numbers, each row there or missing as a whole. Copies its arrays; neither modified.
      *
      * @param rowMajor rows × dimension; the numbers of a missing row are ignored, all others must be finite
-     * @param missing one entry a row
+     * @param missingRows one entry a row
      */
-    public static Observations of(int dimension, double[] rowMajor, boolean[] missing) {
+    public static Observations of(int dimension, double[] rowMajor, boolean[] missingRows) {
         Check.within(dimension, 1, Integer.MAX_VALUE, "dimension");
         Check.that(
-                rowMajor.length == missing.length * dimension,
-                rowMajor.length + " numbers for " + missing.length + " rows of dimension " + dimension);
+                rowMajor.length == missingRows.length * dimension,
+                rowMajor.length + " numbers for " + missingRows.length + " rows of dimension " + dimension);
+        boolean[] cells = new boolean[rowMajor.length];
+        for (int i = 0; i < cells.length; i++) {
+            cells[i] = missingRows[i / dimension];
+        }
+        return withMissingCells(dimension, rowMajor, cells);
+    }
+
+    /**
+     * Rows of {@code dimension} numbers, each number there or missing. Copies its arrays; neither modified.
+     *
+     * @param rowMajor rows × dimension; missing numbers are ignored, all others must be finite
+     * @param missingCells rows × dimension, row-major
+     */
+    public static Observations withMissingCells(int dimension, double[] rowMajor, boolean[] missingCells) {
+        Check.within(dimension, 1, Integer.MAX_VALUE, "dimension");
+        Check.that(
+                rowMajor.length % dimension == 0 && rowMajor.length == missingCells.length,
+                rowMajor.length + " numbers and " + missingCells.length + " flags for rows of dimension " + dimension);
         double[] values = new double[rowMajor.length];
-        for (int row = 0; row < missing.length; row++) {
-            for (int i = row * dimension; !missing[row] && i < (row + 1) * dimension; i++) {
-                values[i] = Check.finite(rowMajor[i], "observation in row " + row);
+        for (int i = 0; i < values.length; i++) {
+            if (!missingCells[i]) {
+                values[i] = Check.finite(rowMajor[i], "observation in row " + i / dimension);
             }
         }
-        return new Observations(dimension, values, missing.clone());
+        return new Observations(dimension, values, missingCells.clone());
     }
 
     /** Number of rows, missing ones included. */
     public int size() {
-        return missing.length;
+        return missingRows.length;
     }
 
     /** Numbers a row. */
@@ -56,23 +84,40 @@ public final class Observations {
         return dimension;
     }
 
-    /** Whether that row holds no observation. */
+    /** Whether that row holds no number at all. */
     public boolean missing(int row) {
-        return missing[row];
+        return missingRows[row];
     }
 
-    /** One number of a row that is not missing. */
-    public double at(int row, int column) {
-        if (missing[row]) {
-            throw new IllegalArgumentException("row " + row + " is missing");
-        }
+    /** Whether that number is missing. */
+    public boolean missing(int row, int column) {
         Check.within(column, 0, dimension - 1, "column");
-        return values[row * dimension + column];
+        return missingCells[row * dimension + column];
+    }
+
+    /** One number that is not missing. */
+    public double at(int row, int column) {
+        Check.within(column, 0, dimension - 1, "column");
+        int cell = row * dimension + column;
+        if (missingCells[cell]) {
+            String where = missingRows[row] ? "row " + row : "column " + column + " of row " + row;
+            throw new IllegalArgumentException(where + " is missing");
+        }
+        return values[cell];
     }
 
     /** Number of rows that are not missing. */
     public int present() {
         return present;
+    }
+
+    /** Number of numbers in one column that are not missing. */
+    public int present(int column) {
+        int count = 0;
+        for (int row = 0; row < size(); row++) {
+            count += missing(row, column) ? 0 : 1;
+        }
+        return count;
     }
 
     /** The rows from {@code start} up to, not including, {@code end}. */
@@ -83,6 +128,6 @@ public final class Observations {
         return new Observations(
                 dimension,
                 Arrays.copyOfRange(values, start * dimension, end * dimension),
-                Arrays.copyOfRange(missing, start, end));
+                Arrays.copyOfRange(missingCells, start * dimension, end * dimension));
     }
 }

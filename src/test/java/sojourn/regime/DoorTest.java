@@ -35,6 +35,35 @@ class DoorTest {
     }
 
     @Test
+    void aRowIsMissingWhenAllItsNumbersAre() {
+        boolean[] missing = {false, false, true, false, true, true};
+        Observations x = Observations.withMissingCells(2, new double[] {1, 2, Double.NaN, 4, 5, 6}, missing);
+        assertThat(x.size()).isEqualTo(3);
+        assertThat(x.present()).isEqualTo(2);
+        assertThat(x.present(0)).isEqualTo(1);
+        assertThat(x.present(1)).isEqualTo(2);
+        assertThat(x.missing(1)).isFalse();
+        assertThat(x.missing(1, 0)).isTrue();
+        assertThat(x.missing(1, 1)).isFalse();
+        assertThat(x.missing(2)).isTrue();
+        assertThat(x.at(1, 1)).isEqualTo(4);
+        assertThatIllegalArgumentException()
+                .isThrownBy(() -> x.at(1, 0))
+                .withMessageContaining("column 0 of row 1 is missing");
+        assertThatIllegalArgumentException().isThrownBy(() -> x.at(2, 0)).withMessageContaining("row 2 is missing");
+        assertThatIllegalArgumentException().isThrownBy(() -> x.missing(0, 2)).withMessageContaining("column");
+        assertThat(x.range(1, 3).missing(0, 0)).isTrue();
+        assertThat(x.range(1, 3).missing(1)).isTrue();
+        assertThat(x.range(1, 3).present()).isEqualTo(1);
+        assertThatIllegalArgumentException()
+                .isThrownBy(() -> Observations.withMissingCells(2, new double[4], new boolean[2]))
+                .withMessageContaining("4 numbers and 2 flags");
+        assertThatIllegalArgumentException()
+                .isThrownBy(() -> Observations.withMissingCells(2, new double[3], new boolean[3]))
+                .withMessageContaining("3 numbers");
+    }
+
+    @Test
     void modelsRefuseWhatIsNoDistribution() {
         assertThatIllegalArgumentException()
                 .isThrownBy(() -> HiddenMarkov.of(new double[] {0.5, 0.5}, new double[] {0.9, 0.2, 0, 1}, TWO))
