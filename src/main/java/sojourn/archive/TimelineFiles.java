@@ -6,8 +6,6 @@ import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.OptionalInt;
 import sojourn.regime.Fit;
-import sojourn.regime.RegimeModel;
-import sojourn.regime.StudentT;
 import sojourn.walk.FitRecord;
 import sojourn.walk.Forecast;
 import sojourn.walk.Reading;
@@ -16,20 +14,6 @@ import sojourn.walk.RegimeTimeline;
 /** A timeline as two tables: a row a bar, and a row a fit. */
 public final class TimelineFiles {
     private TimelineFiles() {}
-
-    /** Whether the fits have scales and degrees of freedom. */
-    private enum Tails {
-        NORMAL,
-        FAT;
-
-        static Tails of(RegimeTimeline timeline) {
-            return timeline.fits().stream()
-                            .flatMap(record -> record.fit().model().stream())
-                            .anyMatch(model -> model.emission() instanceof StudentT)
-                    ? FAT
-                    : NORMAL;
-        }
-    }
 
     /** {@code timelines/<key>.csv}: a row a bar from the first accepted fit on. */
     public static Table bars(RegimeTimeline timeline) {
@@ -71,7 +55,6 @@ public final class TimelineFiles {
      * @param observation the observed series' column name
      */
     public static Table fits(RegimeTimeline timeline, String observation) {
-        List<String> regimes = timeline.regimes();
         List<String> header = new ArrayList<>(List.of(
                 "fit",
                 "fitted_on",
@@ -85,80 +68,30 @@ public final class TimelineFiles {
                 "iterations",
                 "starts",
                 "starts_agreeing"));
-        regimes.forEach(regime -> header.add("initial." + regime));
-        regimes.forEach(from -> regimes.forEach(to -> header.add("transition." + from + "." + to)));
-        regimes.forEach(regime -> header.add("mean." + observation + "." + regime));
-        regimes.forEach(regime -> header.add("sd." + observation + "." + regime));
-        Tails tails = Tails.of(timeline);
-        if (tails == Tails.FAT) {
-            regimes.forEach(regime -> header.add("scale." + observation + "." + regime));
-            regimes.forEach(regime -> header.add("dof." + regime));
-        }
-        regimes.forEach(regime -> header.add("order_by." + regime));
-        regimes.forEach(regime -> header.add("stay_bars." + regime));
-        regimes.forEach(regime -> header.add("occupancy." + regime));
+        List<FitColumns.Column> numbers = FitColumns.of(timeline, observation);
+        numbers.forEach(column -> header.add(column.name()));
         header.add("events");
         header.add("explanation");
         Table table = new Table(header);
         for (FitRecord record : timeline.fits()) {
-            addFit(table.row(), record, regimes.size(), tails);
+            addFit(table.row(), record, timeline.regimes().size(), numbers);
         }
         return table;
     }
 
-    private static void addFit(Table.Row row, FitRecord record, int states, Tails tails) {
+    private static void addFit(Table.Row row, FitRecord record, int states, List<FitColumns.Column> numbers) {
         Fit fit = record.fit();
         row.add(Integer.toString(record.number())).add(record.fittedOn());
         row.add(fit.outcome().accepted() ? record.fittedOn().toString() : "");
         row.add(record.windowStart()).add(record.fittedOn()).add(Integer.toString(states));
         row.add(Integer.toString(fit.observations())).add(fit.outcome().word());
-        boolean modelled = fit.model().isPresent();
-        row.add(modelled ? OptionalDouble.of(fit.logLikelihood()) : OptionalDouble.empty());
+        boolean likelihood = fit.model().isPresent();
+        row.add(likelihood ? OptionalDouble.of(fit.logLikelihood()) : OptionalDouble.empty());
         row.add(Integer.toString(fit.iterations())).add(Integer.toString(fit.starts()));
         row.add(Integer.toString(fit.startsAgreeing()));
-        if (modelled) {
-            addModel(row, fit, fit.model().orElseThrow());
-        } else {
-            for (int blank = 0; blank < states * states + (tails == Tails.FAT ? 8 : 6) * states; blank++) {
-                row.blank();
-            }
+        for (FitColumns.Column column : numbers) {
+            row.add(column.cell().apply(record));
         }
         row.add(String.join("; ", record.events())).add(fit.explanation()).end();
-    }
-
-    private static void addModel(Table.Row row, Fit fit, RegimeModel model) {
-        int states = model.states();
-        for (int k = 0; k < states; k++) {
-            row.add(model.initial(k));
-        }
-        for (int i = 0; i < states; i++) {
-            for (int j = 0; j < states; j++) {
-                row.add(model.transition(i, j));
-            }
-        }
-        for (int k = 0; k < states; k++) {
-            row.add(model.emission().mean(k, 0));
-        }
-        for (int k = 0; k < states; k++) {
-            row.add(model.emission().standardDeviation(k, 0));
-        }
-        if (model.emission() instanceof StudentT student) {
-            for (int k = 0; k < states; k++) {
-                row.add(student.scale(k));
-            }
-            for (int k = 0; k < states; k++) {
-                row.add(student.degreesOfFreedom(k));
-            }
-        }
-        for (double deviation : fit.orderBy()) {
-            row.add(deviation);
-        }
-        for (int k = 0; k < states; k++) {
-            double leave = 1 - model.transition(k, k);
-            row.add(leave > 0 ? OptionalDouble.of(1 / leave) : OptionalDouble.empty());
-        }
-        for (double share : fit.occupancy()) {
-            row.add(share);
-        }
     }
 }

@@ -4,7 +4,7 @@ import java.util.List;
 import java.util.Optional;
 
 /**
- * One fit of a regime model to a window: how it ended, the model with its states in role order (ascending volatility of the
+ * One fit of a gauge to a window: how it ended, the gauge with its states in role order (ascending volatility of the
  * order-by series; as given for given parameters), and what the window says about each state. Immutable.
  */
 public final class Fit {
@@ -35,12 +35,12 @@ public final class Fit {
         static final Search NONE = new Search(0, 0, 0);
     }
 
-    /** A fit without a model, and why. */
+    /** A fit without a gauge, and why. */
     static Fit failed(String explanation, Search search, int observations) {
         return new Fit(Outcome.FAILED, explanation, search, observations, Optional.empty(), List.of());
     }
 
-    /** A fit with a model. */
+    /** A fit with a gauge. */
     static Fit of(
             Outcome outcome,
             String explanation,
@@ -61,9 +61,14 @@ public final class Fit {
         return explanation;
     }
 
-    /** The model, states in role order; empty when the fit failed. A degenerate fit shows its model, not to be used. */
+    /** What was fitted, states in role order; empty when the fit failed. A degenerate fit shows it, not to be used. */
+    public Optional<Gauge> gauge() {
+        return described.map(Described::gauge);
+    }
+
+    /** The gauge, if it has a likelihood: states in role order, empty when the fit failed. */
     public Optional<RegimeModel> model() {
-        return described.map(Described::model);
+        return described.flatMap(Described::model);
     }
 
     /**
@@ -94,12 +99,12 @@ public final class Fit {
         return observations;
     }
 
-    /** Posterior-weighted standard deviation of the order-by returns in each state; empty without a model. A copy. */
+    /** Posterior-weighted standard deviation of the order-by returns in each state; empty without a gauge. A copy. */
     public double[] orderBy() {
         return described.map(d -> d.orderBy().deviations()).orElse(new double[0]);
     }
 
-    /** Share of the window's observations that each state accounts for, sums to 1; empty without a model. A copy. */
+    /** Share of the window's observations that each state accounts for, sums to 1; empty without a gauge. A copy. */
     public double[] occupancy() {
         return described.map(d -> d.orderBy().occupancy()).orElse(new double[0]);
     }
@@ -112,7 +117,7 @@ public final class Fit {
         return events;
     }
 
-    /** Moments of all assets in each state; present exactly when the model is. */
+    /** Moments of all assets in each state; present exactly when the gauge is. */
     public Optional<WindowMoments> moments() {
         return described.map(Described::moments);
     }

@@ -3,7 +3,7 @@ package sojourn.regime;
 import java.util.List;
 import sojourn.numeric.CompensatedSum;
 
-/** Takes the moments of all assets in each state, weighted by smoothed probabilities. */
+/** Takes the moments of all assets in each state, weighted by how much each row belongs to it. */
 final class PosteriorMoments {
     /** A state with less posterior weight than this many rows has no moments of its own. */
     static final double LEAST_WEIGHT = 1e-6;
@@ -15,15 +15,15 @@ final class PosteriorMoments {
      * and returns are present. A state with practically no weight gets the moments of the whole window, which adds an event.
      * There must be such a row.
      */
-    static WindowMoments of(Smoothed smoothed, FitRequest request, List<String> events) {
+    static WindowMoments of(Membership membership, FitRequest request, List<String> events) {
         Companions returns = request.companions();
-        int states = smoothed.states();
+        int states = membership.states();
         int assets = returns.assets();
         double[] means = new double[states * assets];
         double[] covariances = new double[states * assets * assets];
         double[] weights = new double[returns.size()];
         for (int k = 0; k < states; k++) {
-            double total = weights(smoothed, request, k, weights);
+            double total = weights(membership, request, k, weights);
             if (total < LEAST_WEIGHT) {
                 total = evenWeights(request, weights);
                 events.add("moments-of-window {" + k + "}");
@@ -44,20 +44,20 @@ final class PosteriorMoments {
     }
 
     /** Posterior weight of a state over the rows whose observation is present. */
-    static double weight(Smoothed smoothed, Observations x, int k) {
+    static double weight(Membership membership, Observations x, int k) {
         CompensatedSum total = new CompensatedSum();
         for (int t = 0; t < x.size(); t++) {
             if (!x.missing(t)) {
-                total.add(smoothed.at(t, k));
+                total.add(membership.at(t, k));
             }
         }
         return total.value();
     }
 
-    private static double weights(Smoothed smoothed, FitRequest request, int k, double[] weights) {
+    private static double weights(Membership membership, FitRequest request, int k, double[] weights) {
         CompensatedSum total = new CompensatedSum();
         for (int t = 0; t < weights.length; t++) {
-            weights[t] = usable(request, t) ? smoothed.at(t, k) : 0;
+            weights[t] = usable(request, t) ? membership.at(t, k) : 0;
             total.add(weights[t]);
         }
         return total.value();

@@ -1,18 +1,11 @@
 package sojourn.regime;
 
 /**
- * A regime model with its parameters: where the chain of regimes starts, how it moves, and what is observed in each regime.
- * Immutable.
+ * A gauge with a likelihood: where the chain of regimes starts, how it moves, and what is observed in each regime. Immutable.
  */
-public sealed interface RegimeModel permits HiddenMarkov, Mixture, OneRegime {
-    /** Number of regimes. */
-    int states();
-
+public sealed interface RegimeModel extends Gauge permits HiddenMarkov, Mixture, OneRegime {
     /** Probability that the first bar is in regime {@code k}, before its observation. */
     double initial(int k);
-
-    /** Probability that regime {@code j} follows regime {@code i}. */
-    double transition(int i, int j);
 
     /** What is observed in each regime. */
     Emission emission();
@@ -20,6 +13,11 @@ public sealed interface RegimeModel permits HiddenMarkov, Mixture, OneRegime {
     /** Number of free parameters: of the chain, its start and the emission. */
     int parameterCount();
 
-    /** The same model with its regimes in another order: regime k of the result is regime {@code order[k]} of this. */
+    @Override
     RegimeModel ordered(int[] order);
+
+    @Override
+    default GaugeFilter filter() {
+        return ModelFilter.before(this);
+    }
 }

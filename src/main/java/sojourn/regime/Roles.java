@@ -11,14 +11,15 @@ final class Roles {
 
     /** For each role, from the calmest, the state of the model that takes it. */
     static int[] order(Described described, Optional<RegimeModel> previous) {
-        int states = described.model().states();
+        int states = described.states();
         int[] earlierRole = new int[states];
         for (int k = 0; k < states; k++) {
             earlierRole[k] = k;
         }
         previous.filter(p -> p.states() == states).ifPresent(p -> {
-            int[] newForOld =
-                    Matching.of(p.emission(), described.model().emission()).newForOld();
+            int[] newForOld = Matching.of(
+                            p.emission(), described.model().orElseThrow().emission())
+                    .newForOld();
             for (int old = 0; old < states; old++) {
                 earlierRole[newForOld[old]] = old;
             }

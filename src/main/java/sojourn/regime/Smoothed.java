@@ -5,7 +5,7 @@ package sojourn.regime;
  * evidence, never for a decision. Backward pass of Kim (1994), J. Econometrics 60, 1-22:
  * xi_t(i,j) = p_{t|t}(i) A_ij gamma_{t+1}(j) / p_{t+1|t}(j), 0 where the prediction is 0; gamma_t(i) = sum_j xi_t(i,j).
  */
-public final class Smoothed {
+public final class Smoothed implements Membership {
     private final int states;
     private final double[] gamma;
     private final double[] transitions;
@@ -60,16 +60,19 @@ public final class Smoothed {
     }
 
     /** Number of bars. */
+    @Override
     public int size() {
         return gamma.length / states;
     }
 
     /** Number of regimes. */
+    @Override
     public int states() {
         return states;
     }
 
     /** Probability of regime {@code k} at {@code row} given the whole series. */
+    @Override
     public double at(int row, int k) {
         return gamma[row * states + k];
     }

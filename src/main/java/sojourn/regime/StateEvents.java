@@ -21,7 +21,7 @@ final class StateEvents {
     /** All events of a model in role order, previous fit compared where it has as many states. */
     static List<String> of(Described described, Optional<RegimeModel> previous) {
         List<String> events = new ArrayList<>(described.events());
-        RegimeModel model = described.model();
+        RegimeModel model = described.model().orElseThrow();
         StateWeights weights = described.orderBy();
         double[] occupancy = weights.occupancy();
         int states = model.states();

@@ -18,20 +18,20 @@ final class StateWeights {
      * Posterior-weighted, over the rows whose observation is present. A state that accounts for practically no row gets the plain
      * mean and standard deviation of the window.
      */
-    static StateWeights of(Smoothed smoothed, FitRequest request) {
-        int states = smoothed.states();
+    static StateWeights of(Membership membership, FitRequest request) {
+        int states = membership.states();
         double[] occupancy = new double[states];
         double[] means = new double[states];
         double[] deviations = new double[states];
         Observations x = request.observations();
         for (int k = 0; k < states; k++) {
-            occupancy[k] = PosteriorMoments.weight(smoothed, x, k) / x.present();
+            occupancy[k] = PosteriorMoments.weight(membership, x, k) / x.present();
             boolean empty = occupancy[k] * x.present() < PosteriorMoments.LEAST_WEIGHT;
             CompensatedSum weights = new CompensatedSum();
             CompensatedSum first = new CompensatedSum();
             for (int t = 0; t < x.size(); t++) {
                 if (!x.missing(t)) {
-                    double g = empty ? 1 : smoothed.at(t, k);
+                    double g = empty ? 1 : membership.at(t, k);
                     weights.add(g);
                     first.add(g * request.orderBy(t));
                 }
@@ -41,7 +41,7 @@ final class StateWeights {
             for (int t = 0; t < x.size(); t++) {
                 if (!x.missing(t)) {
                     double d = request.orderBy(t) - means[k];
-                    second.add((empty ? 1 : smoothed.at(t, k)) * d * d);
+                    second.add((empty ? 1 : membership.at(t, k)) * d * d);
                 }
             }
             deviations[k] = Math.sqrt(second.value() / weights.value());

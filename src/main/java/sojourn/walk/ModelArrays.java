@@ -1,7 +1,7 @@
 package sojourn.walk;
 
 import java.util.Arrays;
-import sojourn.regime.RegimeModel;
+import sojourn.regime.Gauge;
 import sojourn.regime.WindowMoments;
 
 /** A fit's parameters laid out flat, as readings hold them. */
@@ -10,12 +10,12 @@ final class ModelArrays {
 
     /** Transition probabilities of an accepted fit, row-major. */
     static double[] transition(FitRecord record) {
-        RegimeModel model = record.fit().model().orElseThrow();
-        int states = model.states();
+        Gauge gauge = record.fit().gauge().orElseThrow();
+        int states = gauge.states();
         double[] flat = new double[states * states];
         for (int i = 0; i < states; i++) {
             for (int j = 0; j < states; j++) {
-                flat[i * states + j] = model.transition(i, j);
+                flat[i * states + j] = gauge.transition(i, j);
             }
         }
         return flat;

@@ -88,7 +88,7 @@ public final class RegimeTimeline implements Signal {
 
     /**
      * ln of the density that the fit in force before this bar gave to this bar's observation: the out-of-sample score. Empty on
-     * the first bar, on bars without an observation and where no fit was in force.
+     * the first bar, on bars without an observation, where no fit was in force and for gauges without a likelihood.
      */
     public OptionalDouble logScore(int bar) {
         double score = logScores[bar - firstBar];
@@ -174,7 +174,7 @@ public final class RegimeTimeline implements Signal {
                         "bar " + bar + " was of " + earlier.dates[row] + ", now " + known.date());
                 double[] probabilities =
                         Arrays.copyOfRange(earlier.filtered, row * regimes.size(), (row + 1) * regimes.size());
-                bar(known, earlier.fitInForce[row], probabilities, earlier.logScores[row]);
+                bar(known, earlier.fitInForce[row], probabilities, earlier.logScore(bar));
             }
         }
 
@@ -187,7 +187,7 @@ public final class RegimeTimeline implements Signal {
         }
 
         /** {@code fitNumber} 0 where the strategy stands aside; {@code probabilities} is not modified. */
-        void bar(Known known, int fitNumber, double[] probabilities, double logScore) {
+        void bar(Known known, int fitNumber, double[] probabilities, OptionalDouble logScore) {
             if (bars == 0) {
                 firstBar = known.bar();
             }
@@ -195,7 +195,7 @@ public final class RegimeTimeline implements Signal {
             dates[bars] = known.date();
             fitInForce[bars] = fitNumber;
             System.arraycopy(probabilities, 0, filtered, bars * regimes.size(), regimes.size());
-            logScores[bars] = logScore;
+            logScores[bars] = logScore.orElse(Double.NaN);
             expectedCash[bars] = known.expectedCashReturn();
             bars++;
         }

@@ -4,17 +4,19 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
+import java.util.OptionalDouble;
 import java.util.function.IntConsumer;
 import sojourn.market.Known;
 import sojourn.market.PriceTable;
 import sojourn.regime.Companions;
 import sojourn.regime.Emission;
 import sojourn.regime.EmissionFamily;
-import sojourn.regime.FilterState;
 import sojourn.regime.Fit;
 import sojourn.regime.FitRequest;
 import sojourn.regime.FitSettings;
 import sojourn.regime.Fitter;
+import sojourn.regime.Gauge;
+import sojourn.regime.GaugeFilter;
 import sojourn.regime.HiddenMarkov;
 import sojourn.regime.Normal;
 import sojourn.regime.Observations;
@@ -23,9 +25,9 @@ import sojourn.regime.StartRunner;
 import sojourn.regime.StudentT;
 
 /**
- * Walks a regime model forward through a history, close by close. At each close: the new observation is taken in; the model in
- * force scores it and filters on with frozen parameters; where a fit is due, the model is fitted to the window that ends here and,
- * if accepted, filters that window afresh and is in force from this close on.
+ * Walks a gauge of regimes forward through a history, close by close. At each close: the new observation is taken in; the gauge in
+ * force scores it, if it has a likelihood, and filters on with frozen parameters; where a fit is due, the gauge is fitted to the
+ * window that ends here and, if accepted, filters that window afresh and is in force from this close on.
  */
 public final class Walk {
     private final RegimeSettings regimes;
@@ -38,7 +40,7 @@ public final class Walk {
     private boolean aside;
 
     /** The fit whose parameters the filter goes by. */
-    private record InForce(FitRecord record, RegimeModel model, FilterState filter) {}
+    private record InForce(FitRecord record, GaugeFilter filter) {}
 
     private Walk(PriceTable table, RegimeSettings regimes, RefitSettings refit, StartRunner runner) {
         this.regimes = regimes;
@@ -101,16 +103,14 @@ public final class Walk {
             return;
         }
         FitRecord record = earlier.lastAccepted();
-        RegimeModel model = record.fit().model().orElseThrow();
-        FilterState filter = FilterState.after(
-                model, log.window(log.row(table.knownAt(earlier.endBar() - 1), record.windowStart())));
-        inForce = Optional.of(new InForce(record, model, filter));
+        int start = log.row(table.knownAt(earlier.endBar() - 1), record.windowStart());
+        inForce = Optional.of(new InForce(record, gauge(record.fit()).filterAfter(log.window(start))));
         aside = earlier.fitInForce(earlier.endBar() - 1).isEmpty();
     }
 
     private void close(Known known) {
         log.append(known);
-        double score = filterOn();
+        OptionalDouble score = filterOn();
         if (refit.schedule().due(known, log.present(), log.lastPresent(), refit.firstFitAfter())) {
             fit(known);
         }
@@ -121,18 +121,18 @@ public final class Walk {
     }
 
     /**
-     * One step with frozen parameters; the log density it gave to the new observation, NaN if there was none to score or no fit
-     * in force. The filter goes on while standing aside, for the next fit that is accepted starts it afresh.
+     * One step with frozen parameters; the log density it gave to the new observation, empty if there was none to score, the gauge
+     * has no likelihood or no fit is in force. The filter goes on while standing aside, for the next fit that is accepted starts
+     * it afresh.
      */
-    private double filterOn() {
+    private OptionalDouble filterOn() {
         if (inForce.isEmpty()) {
-            return Double.NaN;
+            return OptionalDouble.empty();
         }
         InForce before = inForce.get();
-        FilterState after = before.filter().step(before.model(), log.last(), 0);
-        inForce = Optional.of(new InForce(before.record(), before.model(), after));
-        boolean scored = !aside && log.lastPresent() && Double.isFinite(after.lastLogDensity());
-        return scored ? after.lastLogDensity() : Double.NaN;
+        GaugeFilter after = before.filter().step(log.last(), 0);
+        inForce = Optional.of(new InForce(before.record(), after));
+        return aside ? OptionalDouble.empty() : after.lastLogDensity();
     }
 
     private void fit(Known known) {
@@ -159,12 +159,15 @@ public final class Walk {
                 EventWords.named(fit.events(), regimes.states()));
         timeline.fit(record);
         if (fit.outcome().accepted()) {
-            RegimeModel model = fit.model().orElseThrow();
-            inForce = Optional.of(new InForce(record, model, FilterState.after(model, window)));
+            inForce = Optional.of(new InForce(record, gauge(fit).filterAfter(window)));
             aside = false;
         } else if (refit.onFailure() == RefitSettings.OnFailure.STAND_ASIDE) {
             aside = true;
         }
+    }
+
+    private static Gauge gauge(Fit fit) {
+        return fit.gauge().orElseThrow();
     }
 
     private FitSettings settings() {

@@ -1,0 +1,116 @@
+package sojourn.archive;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+import java.util.OptionalDouble;
+import java.util.function.Function;
+import sojourn.regime.Fit;
+import sojourn.regime.Gauge;
+import sojourn.regime.RegimeModel;
+import sojourn.regime.StudentT;
+import sojourn.walk.FitRecord;
+import sojourn.walk.RegimeTimeline;
+
+/** What a fits file says of a gauge in numbers: a column a number, empty for a fit that has no such number. */
+final class FitColumns {
+    private final List<String> regimes;
+    private final List<Column> columns = new ArrayList<>();
+
+    /** A column's name, and what stands in it in the row of a fit. */
+    record Column(String name, Function<FitRecord, OptionalDouble> cell) {}
+
+    /** A number that a part of a fit has for each state. */
+    private interface PerState<T> {
+        double of(T part, int state);
+    }
+
+    private FitColumns(List<String> regimes) {
+        this.regimes = regimes;
+    }
+
+    /**
+     * The columns of a timeline's gauges; those of a model with a likelihood where nothing could be fitted.
+     *
+     * @param observation the observed series' column name
+     */
+    static List<Column> of(RegimeTimeline timeline, String observation) {
+        FitColumns all = new FitColumns(timeline.regimes());
+        List<Gauge> gauges = timeline.fits().stream()
+                .flatMap(record -> record.fit().gauge().stream())
+                .toList();
+        boolean likelihood = gauges.isEmpty() || gauges.stream().anyMatch(RegimeModel.class::isInstance);
+        if (likelihood) {
+            all.each("initial.", Fit::model, RegimeModel::initial);
+        }
+        all.transitions();
+        if (likelihood) {
+            all.each(
+                    "mean." + observation + ".",
+                    Fit::model,
+                    (m, k) -> m.emission().mean(k, 0));
+            all.each(
+                    "sd." + observation + ".",
+                    Fit::model,
+                    (m, k) -> m.emission().standardDeviation(k, 0));
+        }
+        if (timeline.fits().stream().anyMatch(record -> student(record.fit()).isPresent())) {
+            all.each("scale." + observation + ".", FitColumns::student, StudentT::scale);
+            all.each("dof.", FitColumns::student, StudentT::degreesOfFreedom);
+        }
+        all.each("order_by.", FitColumns::gauged, (fit, k) -> fit.orderBy()[k]);
+        all.stays();
+        all.each("occupancy.", FitColumns::gauged, (fit, k) -> fit.occupancy()[k]);
+        return all.columns;
+    }
+
+    private static Optional<StudentT> student(Fit fit) {
+        return fit.model().flatMap(m -> m.emission() instanceof StudentT t ? Optional.of(t) : Optional.empty());
+    }
+
+    private static Optional<Fit> gauged(Fit fit) {
+        return fit.gauge().map(gauge -> fit);
+    }
+
+    private <T> void each(String prefix, Function<Fit, Optional<T>> part, PerState<T> number) {
+        for (int k = 0; k < regimes.size(); k++) {
+            int state = k;
+            columns.add(new Column(
+                    prefix + regimes.get(k), record -> number(part.apply(record.fit()), p -> number.of(p, state))));
+        }
+    }
+
+    private void transitions() {
+        for (int i = 0; i < regimes.size(); i++) {
+            for (int j = 0; j < regimes.size(); j++) {
+                int from = i;
+                int to = j;
+                columns.add(new Column(
+                        "transition." + regimes.get(i) + "." + regimes.get(j),
+                        record -> number(record.fit().gauge(), gauge -> gauge.transition(from, to))));
+            }
+        }
+    }
+
+    /** Expected bars that a regime lasts, 1 / (1 - a_kk); empty for one that is never left. */
+    private void stays() {
+        for (int k = 0; k < regimes.size(); k++) {
+            int state = k;
+            columns.add(new Column(
+                    "stay_bars." + regimes.get(k),
+                    record -> record.fit()
+                            .gauge()
+                            .map(gauge -> stay(gauge.transition(state, state)))
+                            .orElse(OptionalDouble.empty())));
+        }
+    }
+
+    private static OptionalDouble stay(double again) {
+        double leave = 1 - again;
+        return leave > 0 ? OptionalDouble.of(1 / leave) : OptionalDouble.empty();
+    }
+
+    private static <T> OptionalDouble number(Optional<T> part, Function<T, Double> of) {
+        return part.map(p -> OptionalDouble.of(of.apply(p))).orElse(OptionalDouble.empty());
+    }
+}
