@@ -123,7 +123,7 @@ public final class TimelineFiles {
                 row.blank();
             }
         }
-        row.add(String.join("; ", record.events())).add(fit.explanation()).end();
+        row.add(String.join("; ", record.events())).add(record.explanation()).end();
     }
 
     private static void addModel(Table.Row row, Fit fit, RegimeModel model) {
