@@ -92,6 +92,6 @@ public final class TimelineFiles {
         for (FitColumns.Column column : numbers) {
             row.add(column.cell().apply(record));
         }
-        row.add(String.join("; ", record.events())).add(fit.explanation()).end();
+        row.add(String.join("; ", record.events())).add(record.explanation()).end();
     }
 }

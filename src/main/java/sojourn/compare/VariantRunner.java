@@ -6,7 +6,6 @@ import sojourn.archive.PathFile;
 import sojourn.market.PriceTable;
 import sojourn.measure.JudgeSettings;
 import sojourn.measure.Yardstick;
-import sojourn.regime.Fit;
 import sojourn.strategy.Strategy;
 import sojourn.trade.Simulation;
 import sojourn.trade.Terms;
@@ -56,8 +55,7 @@ final class VariantRunner {
                     + " common bars; give longer price files or a smaller first-fit-after";
         }
         FitRecord last = timeline.fits().get(timeline.fits().size() - 1);
-        Fit fit = last.fit();
         return "none of " + timeline.fits().size() + " fits was accepted; the last, on " + last.fittedOn() + ", was "
-                + fit.outcome().word() + " (" + fit.explanation() + ")";
+                + last.fit().outcome().word() + " (" + last.explanation() + ")";
     }
 }

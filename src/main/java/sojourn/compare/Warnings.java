@@ -65,7 +65,7 @@ public final class Warnings {
             if (!record.fit().outcome().accepted()) {
                 warnings.add("timeline " + key + ": fit " + record.number() + " on " + record.fittedOn() + " was "
                         + record.fit().outcome().word() + " and is not used: "
-                        + record.fit().explanation());
+                        + record.explanation());
             }
         }
         FitTally tally = FitTally.of(timeline);

@@ -5,10 +5,17 @@ import java.util.List;
 import java.util.Optional;
 
 /**
- * A gauge with what a window says about its states: likelihood by the plain filter (minus infinity for a gauge without one),
- * occupancy, volatility of the order-by series and moments of all assets, all weighted by how much each row belongs to each state.
+ * A gauge with what a window says about its states: likelihood by the plain filter (minus infinity for a gauge without one), number
+ * of observations, occupancy, volatility of the order-by series and moments of all assets, all weighted by how much each row
+ * belongs to each state.
  */
-record Described(Gauge gauge, double logLikelihood, StateWeights orderBy, WindowMoments moments, List<String> events) {
+record Described(
+        Gauge gauge,
+        double logLikelihood,
+        int observations,
+        StateWeights orderBy,
+        WindowMoments moments,
+        List<String> events) {
     /** Describes the model in the order in which it stands, by the window's smoothed probabilities. */
     static Described of(RegimeModel model, FitRequest request) {
         Smoothed smoothed = Smoothed.of(model, request.observations());
@@ -24,7 +31,8 @@ record Described(Gauge gauge, double logLikelihood, StateWeights orderBy, Window
         StateWeights weights = StateWeights.of(membership, request);
         List<String> events = new ArrayList<>();
         WindowMoments moments = PosteriorMoments.of(membership, request, events);
-        return new Described(gauge, logLikelihood, weights, moments, List.copyOf(events));
+        int observations = request.observations().present();
+        return new Described(gauge, logLikelihood, observations, weights, moments, List.copyOf(events));
     }
 
     /** Number of states. */

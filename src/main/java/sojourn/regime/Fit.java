@@ -31,8 +31,8 @@ public final class Fit {
     }
 
     /** What the search for the maximum took. */
-    record Search(int iterations, int starts, int agreeing) {
-        static final Search NONE = new Search(0, 0, 0);
+    record Search(int iterations, int starts, int agreeing, Optional<RunnerUp> runnerUp) {
+        static final Search NONE = new Search(0, 0, 0, Optional.empty());
     }
 
     /** A fit without a gauge, and why. */
@@ -56,7 +56,10 @@ public final class Fit {
         return outcome;
     }
 
-    /** Why the outcome is not {@link Outcome#CONVERGED}, in plain words; empty when it is. */
+    /**
+     * Why the outcome is not {@link Outcome#CONVERGED}, in plain words; empty when it is. A state is written {@code {k}}, as in
+     * {@link #events()}.
+     */
     public String explanation() {
         return explanation;
     }
@@ -92,6 +95,11 @@ public final class Fit {
     /** Starts that ended within 1e-4 nats of the one that won, itself included. */
     public int startsAgreeing() {
         return search.agreeing();
+    }
+
+    /** The second best place where starts ended, degenerate ones aside; empty where all agree. */
+    public Optional<RunnerUp> runnerUp() {
+        return search.runnerUp();
     }
 
     /** Observations in the window, missing rows not counted. */

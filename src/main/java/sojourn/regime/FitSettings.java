@@ -29,7 +29,7 @@ public record FitSettings(
 
     /** The fewest observations that such a fit needs: some for each state, and more than there are parameters. */
     public int leastObservations() {
-        return StrictMath.max(Fitter.LEAST_COUNT * states, parameterCount() + 1);
+        return StrictMath.max(Soundness.leastCount(1) * states, parameterCount() + 1);
     }
 
     /** Number of free parameters of such a model. */

@@ -1,9 +1,7 @@
 package sojourn.regime;
 
-import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
-import java.util.function.Supplier;
 import sojourn.numeric.Check;
 
 /**
@@ -11,15 +9,8 @@ import sojourn.numeric.Check;
  * returns depends on the request alone, not on threads or time.
  */
 public final class Fitter {
-    /** Fewest observations that a state must account for. */
-    static final int LEAST_COUNT = 5;
-    /** Starts whose log-likelihoods differ by less than this times (1 + |l|) are tied; the earliest wins. */
-    private static final double TIE = 1e-9;
     /** Starts agree when they end within so many nats. */
     private static final double AGREEMENT = 1e-4;
-
-    /** Nats by which several states must beat a single one. */
-    private static final double NOTHING_GAINED = 1e-6;
 
     private Fitter() {}
 
@@ -35,20 +26,16 @@ public final class Fitter {
      */
     public static Fit fit(FitSettings settings, FitRequest request, StartRunner runner) {
         Observations x = request.observations();
-        Window window = Window.of(x, settings.emission());
-        Optional<String> refusal = nothingToDescribe(request).or(() -> refusal(settings, x, window));
+        WindowSearch search = WindowSearch.of(settings, x);
+        Optional<String> refusal =
+                nothingToDescribe(request).or(() -> tooFew(settings, x)).or(search::refusal);
         if (refusal.isPresent()) {
             return Fit.failed(refusal.get(), Fit.Search.NONE, x.present());
         }
-        if (settings.states() == 1) {
-            return single(settings, request, window);
-        }
-        double alone = oneRegime(settings, window).logLikelihood();
-        List<Supplier<Climb.Summit>> climbs = new ArrayList<>();
-        for (Parameters start : new Starts(settings, window).all(request)) {
-            climbs.add(() -> Climb.from(start, window, settings.emission(), settings.initial()));
-        }
-        return choose(settings, request, window, alone, runner.run(climbs));
+        SearchEnd alone = search.alone();
+        return settings.states() == 1
+                ? single(settings, request, alone)
+                : choose(request, alone.logLikelihood(), runner.run(search.starts(request)));
     }
 
     /**
@@ -86,52 +73,16 @@ public final class Fitter {
                 : Optional.of("no row of the window holds an observation and the returns of all assets");
     }
 
-    private static Optional<String> refusal(FitSettings settings, Observations x, Window window) {
+    private static Optional<String> tooFew(FitSettings settings, Observations x) {
         int least = settings.leastObservations();
-        if (x.present() < least) {
-            return Optional.of("the window holds " + x.present() + " observations; " + settings.states()
-                    + " states with " + settings.parameterCount() + " parameters need at least " + least);
-        }
-        if (constant(x)) {
-            return Optional.of("all observations of the window are equal");
-        }
-        if (!(window.scale() > 0 && Double.isFinite(window.scale()))) {
-            return Optional.of("the observations of the window are too large, or too close together, to square");
-        }
-        return Optional.empty();
+        return x.present() >= least
+                ? Optional.empty()
+                : Optional.of("the window holds " + x.present() + " observations; " + settings.states()
+                        + " states with " + settings.parameterCount() + " parameters need at least " + least);
     }
 
-    private static boolean constant(Observations x) {
-        double lowest = Double.POSITIVE_INFINITY;
-        double highest = Double.NEGATIVE_INFINITY;
-        for (int t = 0; t < x.size(); t++) {
-            if (!x.missing(t)) {
-                lowest = StrictMath.min(lowest, x.at(t, 0));
-                highest = StrictMath.max(highest, x.at(t, 0));
-            }
-        }
-        return lowest == highest;
-    }
-
-    /**
-     * A single regime: of normals the mean and the standard deviation with divisor n, which are the center and the scale of the
-     * window; of Student-t one search.
-     */
-    private static Climb.Summit oneRegime(FitSettings settings, Window window) {
-        FitSettings alone = new FitSettings(ModelKind.MIXTURE, 1, settings.emission(), 1);
-        if (settings.emission().fatTailed()) {
-            return Climb.from(new Starts(alone, window).bySize(), window, settings.emission());
-        }
-        Parameters p = Parameters.blank(ModelKind.MIXTURE, 1);
-        p.set(p.initial(0), 1);
-        p.set(p.variance(0), 1);
-        return new Climb.Summit(p, window.oneRegimeLogLikelihood(), window.count(), 0, true);
-    }
-
-    private static Fit single(FitSettings settings, FitRequest request, Window window) {
-        Climb.Summit summit = oneRegime(settings, window);
-        Emission emission =
-                summit.parameters().toModel(window, settings.emission()).emission();
+    private static Fit single(FitSettings settings, FitRequest request, SearchEnd end) {
+        Emission emission = end.model().emission();
         double[] one = {1};
         RegimeModel model = switch (settings.kind()) {
             case HIDDEN_MARKOV ->
@@ -143,71 +94,67 @@ public final class Fitter {
         };
         Described described = Described.of(model, request);
         List<String> events = StateEvents.of(described, request.previous().flatMap(Fit::model));
-        Outcome outcome = outcome(summit, Double.NEGATIVE_INFINITY);
-        Fit.Search search = new Fit.Search(summit.evaluations(), 1, 1);
-        return Fit.of(outcome, explanation(outcome, summit), search, window.count(), described, events);
+        Soundness soundness = new Soundness(emission.dimension(), Double.NEGATIVE_INFINITY);
+        Fit.Search search = new Fit.Search(end.evaluations(), 1, 1, Optional.empty());
+        return ended(end, soundness, search, described, new int[] {0}, events);
     }
 
-    private static Fit choose(
-            FitSettings settings, FitRequest request, Window window, double alone, List<Climb.Summit> summits) {
-        List<Climb.Summit> sound =
-                summits.stream().filter(s -> !degenerate(s, alone)).toList();
-        Climb.Summit best = best(sound.isEmpty() ? summits : sound);
-        int agreeing = (int) summits.stream()
-                .filter(s -> degenerate(s, alone) == degenerate(best, alone)
-                        && StrictMath.abs(s.logLikelihood() - best.logLikelihood()) <= AGREEMENT)
-                .count();
-        Fit.Search search = new Fit.Search(best.evaluations(), summits.size(), agreeing);
+    private static Fit choose(FitRequest request, double alone, List<SearchEnd> ends) {
+        Soundness soundness = new Soundness(request.observations().dimension(), alone);
+        List<SearchEnd> sound = ends.stream().filter(soundness::sound).toList();
+        List<SearchEnd> candidates = sound.isEmpty() ? ends : sound;
+        SearchEnd best = SearchEnd.best(candidates);
+        Fit.Search search =
+                new Fit.Search(best.evaluations(), ends.size(), agreeing(candidates, best), runnerUp(sound, best));
         Optional<RegimeModel> previous = request.previous().flatMap(Fit::model);
-        RegimeModel unordered = best.parameters().toModel(window, settings.emission(), settings.initial());
-        int[] order = Roles.order(Described.of(unordered, request), previous);
-        Described described = Described.of(unordered.ordered(order), request);
+        int[] order = Roles.order(Described.of(best.model(), request), previous);
+        Described described = Described.of(best.model().ordered(order), request);
         List<String> events = StateEvents.of(described, previous);
-        int refused = summits.size() - sound.size();
+        int refused = ends.size() - sound.size();
         if (refused > 0) {
-            events.add("degenerate-starts " + refused + " of " + summits.size());
+            events.add("degenerate-starts " + refused + " of " + ends.size());
         }
-        Outcome outcome = outcome(best, alone);
-        return Fit.of(outcome, explanation(outcome, best), search, window.count(), described, events);
+        return ended(best, soundness, search, described, order, events);
     }
 
-    private static Climb.Summit best(List<Climb.Summit> summits) {
-        double highest = Double.NEGATIVE_INFINITY;
-        for (Climb.Summit each : summits) {
-            highest = StrictMath.max(highest, each.logLikelihood());
-        }
-        double tied = highest - TIE * (1 + StrictMath.abs(highest));
-        return summits.stream()
-                .filter(s -> s.logLikelihood() >= tied)
-                .findFirst()
-                .orElseThrow(() -> new IllegalStateException("no start has a likelihood; this is a bug"));
+    private static int agreeing(List<SearchEnd> ends, SearchEnd with) {
+        return (int) ends.stream()
+                .filter(end -> StrictMath.abs(end.logLikelihood() - with.logLikelihood()) <= AGREEMENT)
+                .count();
     }
 
-    private static Outcome outcome(Climb.Summit summit, double alone) {
-        if (degenerate(summit, alone)) {
-            return Outcome.DEGENERATE;
-        }
-        return summit.converged() ? Outcome.CONVERGED : Outcome.ITERATION_LIMIT;
+    /** The best of the sound ends that do not agree with the best. */
+    private static Optional<RunnerUp> runnerUp(List<SearchEnd> sound, SearchEnd best) {
+        List<SearchEnd> lower = sound.stream()
+                .filter(end -> end.logLikelihood() < best.logLikelihood() - AGREEMENT)
+                .toList();
+        return lower.isEmpty()
+                ? Optional.empty()
+                : Optional.of(runnerUp(lower, SearchEnd.best(lower), best.logLikelihood()));
     }
 
-    private static String explanation(Outcome outcome, Climb.Summit summit) {
-        return switch (outcome) {
-            case DEGENERATE ->
-                "in every start a state closed in on a few observations (it accounts for fewer than " + LEAST_COUNT
-                        + " of them, or its variance fell to a ten-thousandth of the window's), or the states did not part";
-            case ITERATION_LIMIT ->
-                "the likelihood was still rising after " + summit.evaluations() + " evaluations; the model is usable";
-            default -> "";
-        };
+    private static RunnerUp runnerUp(List<SearchEnd> lower, SearchEnd second, double highest) {
+        return new RunnerUp(highest - second.logLikelihood(), agreeing(lower, second));
     }
 
-    /** A state on too few observations or on a single value; or states that add nothing to one regime, which is no maximum. */
-    private static boolean degenerate(Climb.Summit summit, double alone) {
-        boolean floored = false;
-        Parameters p = summit.parameters();
-        for (int k = 0; k < p.states(); k++) {
-            floored |= p.at(p.variance(k)) <= Maximisation.FLOOR;
+    private static Fit ended(
+            SearchEnd end,
+            Soundness soundness,
+            Fit.Search search,
+            Described described,
+            int[] order,
+            List<String> events) {
+        Outcome outcome = Outcome.DEGENERATE;
+        String explanation = "";
+        if (!soundness.sound(end)) {
+            explanation = soundness.wrong(end, described, order, search.starts());
+        } else if (end.converged()) {
+            outcome = Outcome.CONVERGED;
+        } else {
+            outcome = Outcome.ITERATION_LIMIT;
+            explanation =
+                    "the likelihood was still rising after " + end.evaluations() + " evaluations; the model is usable";
         }
-        return floored || summit.leastCount() < LEAST_COUNT || summit.logLikelihood() < alone + NOTHING_GAINED;
+        return Fit.of(outcome, explanation, search, described.observations(), described, events);
     }
 }

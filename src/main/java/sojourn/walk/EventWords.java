@@ -10,7 +10,8 @@ final class EventWords {
         return events.stream().map(event -> named(event, regimes)).toList();
     }
 
-    private static String named(String event, List<String> regimes) {
+    /** The same of one text. */
+    static String named(String event, List<String> regimes) {
         String text = event;
         for (int k = 0; k < regimes.size(); k++) {
             text = text.replace("{" + k + "}", regimes.get(k));

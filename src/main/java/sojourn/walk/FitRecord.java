@@ -13,8 +13,16 @@ import sojourn.regime.Fit;
  * @param windowStart date of the window's first observation
  * @param fit the outcome, regimes in role order
  * @param events what was noticed, with the regimes' names
+ * @param explanation why it did not end at a maximum, with the regimes' names; empty where it did
  */
-public record FitRecord(int number, int bar, LocalDate fittedOn, LocalDate windowStart, Fit fit, List<String> events) {
+public record FitRecord(
+        int number,
+        int bar,
+        LocalDate fittedOn,
+        LocalDate windowStart,
+        Fit fit,
+        List<String> events,
+        String explanation) {
     /** Copies its list. */
     public FitRecord {
         events = List.copyOf(events);

@@ -156,7 +156,8 @@ public final class Walk {
                 known.date(),
                 known.date(log.bar(start)),
                 fit,
-                EventWords.named(fit.events(), regimes.states()));
+                EventWords.named(fit.events(), regimes.states()),
+                EventWords.named(fit.explanation(), regimes.states()));
         timeline.fit(record);
         if (fit.outcome().accepted()) {
             inForce = Optional.of(new InForce(record, gauge(fit).filterAfter(window)));

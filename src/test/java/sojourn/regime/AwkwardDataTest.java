@@ -36,8 +36,31 @@ class AwkwardDataTest {
         Fit fit = Fitter.fit(settings(2), Fixtures.request(x));
         assertThat(fit.outcome()).isEqualTo(Outcome.DEGENERATE);
         assertThat(fit.outcome().accepted()).isFalse();
-        assertThat(fit.explanation()).contains("variance");
+        // ten bars of 0.01, ten of -0.02: fifteen stretches of each
+        assertThat(fit.explanation())
+                .containsAnyOf("{0} closed in on a single value", "{1} closed in on a single value")
+                .contains("a ten-thousandth of the window's")
+                .contains("150.0 of 300 observations");
+        assertThat(fit.runnerUp()).isEmpty();
         assertFinite(fit);
+    }
+
+    @Test
+    void aStateOfAHandfulOfObservationsIsNamedWithTheirNumber() {
+        RandomStream random = RandomStream.of(36, "handful");
+        double[] x = new double[400];
+        for (int t = 0; t < x.length; t++) {
+            x[t] = 0.01 * random.nextNormal();
+        }
+        x[100] = 1; // three observations a hundred standard deviations out, far from one another
+        x[200] = -1;
+        x[300] = 1.5;
+        Fit fit = Fitter.fit(settings(2), Fixtures.request(x));
+        assertThat(fit.outcome()).isEqualTo(Outcome.DEGENERATE);
+        // by construction the stormy state is those three, and a tenth of one that might be calm
+        assertThat(fit.explanation())
+                .matches("all 5 starts ended in degenerate models; in the likeliest \\{1} accounts for 3\\.[01] of 400"
+                        + " observations, fewer than the 5 it needs");
     }
 
     @Test
@@ -124,7 +147,7 @@ class AwkwardDataTest {
                 for (int k = 0; k < 3; k++) {
                     double ratio = fit.model().orElseThrow().emission().standardDeviation(k, 0) / scale;
                     assertThat(ratio).isGreaterThan(0.01);
-                    assertThat(fit.occupancy()[k] * x.length).isGreaterThan(Fitter.LEAST_COUNT - 1e-6);
+                    assertThat(fit.occupancy()[k] * x.length).isGreaterThan(Soundness.leastCount(1) - 1e-6);
                 }
             } else {
                 assertThat(fit.outcome()).isEqualTo(Outcome.DEGENERATE);

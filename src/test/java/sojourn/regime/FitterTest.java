@@ -4,7 +4,9 @@ import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.assertThatThrownBy;
 import static org.assertj.core.api.Assertions.within;
 
+import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.Comparator;
 import java.util.List;
 import java.util.function.Supplier;
 import org.junit.jupiter.api.Test;
@@ -211,6 +213,42 @@ class FitterTest {
             assertThat(moments.covariance(k, 0, 0)).isCloseTo(square, within(1e-15));
             assertThat(fit.occupancy()[k]).isCloseTo(weight / x.length, within(1e-12));
         }
+    }
+
+    @Test
+    void theRunnerUpIsTheBestOfTheStartsThatEndedLower() {
+        double[] x = OpenData.column("smi/eustock_smi.csv", "log_return");
+        FitSettings three = new FitSettings(ModelKind.HIDDEN_MARKOV, 3, EmissionFamily.NORMAL, 20);
+        Fit fit = Fitter.fit(three, Fixtures.request(x));
+        List<Double> below = new ArrayList<>();
+        double highest = Double.NEGATIVE_INFINITY;
+        Soundness soundness = new Soundness(1, Double.NEGATIVE_INFINITY);
+        List<SearchEnd> ends = new ScalarSearch(three, Observations.univariate(x))
+                .starts(Fixtures.request(x)).stream().map(Supplier::get).toList();
+        for (SearchEnd end : ends) {
+            highest = soundness.sound(end) ? Math.max(highest, end.logLikelihood()) : highest;
+        }
+        for (SearchEnd end : ends) {
+            if (soundness.sound(end) && end.logLikelihood() < highest - 1e-4) {
+                below.add(end.logLikelihood());
+            }
+        }
+        below.sort(Comparator.reverseOrder());
+        RunnerUp second = fit.runnerUp().orElseThrow();
+        assertThat(second.gapNats())
+                .isCloseTo(highest - below.get(0), within(1e-6))
+                .isGreaterThan(1e-4);
+        assertThat(second.starts()).isEqualTo((int)
+                below.stream().filter(l -> l >= below.get(0) - 1e-4).count());
+        assertThat(fit.startsAgreeing() + below.size()).isLessThanOrEqualTo(20);
+    }
+
+    @Test
+    void startsThatAllAgreeLeaveNoRunnerUp() {
+        double[] x = OpenData.column("nyse/nyse_1990_2005.csv", "log_return");
+        Fit fit = Fitter.fit(TWO, Fixtures.request(x));
+        assertThat(fit.startsAgreeing()).isEqualTo(fit.starts());
+        assertThat(fit.runnerUp()).isEmpty();
     }
 
     @Test
