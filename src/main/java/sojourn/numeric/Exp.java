@@ -32,6 +32,33 @@ public final class Exp {
         return reduced((x - k * LN2_HIGH) - k * LN2_LOW) * powerOfTwo((int) k);
     }
 
+    /**
+     * Replaces every x by e^x, for -700 <= x <= 100, as e^(x/1024) squared ten times, that by its Taylor series to the ninth power.
+     * Without a branch or a change between whole and broken numbers, in short loops, so that the compiler makes vectors of it. Relative
+     * error below 4e-13 where |x| <= 100 and growing to 1e-5 at -700. {@code x} is modified.
+     */
+    public static void bySquaring(double[] x) {
+        for (int t = 0; t < x.length; t++) {
+            double y = x[t] * (1.0 / 1024);
+            double s = y * y;
+            double fourth = (1.0 / 24 + y * (1.0 / 120))
+                    + s * ((1.0 / 720 + y * (1.0 / 5040)) + s * (1.0 / 40320 + y * (1.0 / 362880)));
+            x[t] = (1 + y) + s * ((1.0 / 2 + y * (1.0 / 6)) + s * fourth);
+        }
+        for (int t = 0; t < x.length; t++) {
+            double e = x[t] * x[t];
+            e *= e;
+            e *= e;
+            e *= e;
+            e *= e;
+            e *= e;
+            e *= e;
+            e *= e;
+            e *= e;
+            x[t] = e * e;
+        }
+    }
+
     /** 2^k for -1022 <= k <= 1023, exactly. */
     public static double powerOfTwo(int k) {
         return Double.longBitsToDouble((long) (k + Double.MAX_EXPONENT) << 52);

@@ -9,6 +9,9 @@ import sojourn.numeric.Exp;
 final class Densities {
     private static final double HALF_LN_TWO_PI = 0.9189385332046727;
 
+    /** Logs below this give e^-700, which is as good as 0 beside 1. */
+    private static final double LOWEST = -700;
+
     private final Window window;
     private final int states;
     private final double[] logScale;
@@ -21,31 +24,6 @@ final class Densities {
         this.logScale = new double[states];
         this.mean = new double[states];
         this.halfPrecision = new double[states];
-    }
-
-    /** Fills two arrays, one a state, and returns the sum of the logs of the divisors. Both modified. */
-    double fillTwo(Parameters p, double[] first, double[] second) {
-        unpack(p);
-        double[] z = window.values();
-        double[] present = window.present();
-        double c0 = logScale[0];
-        double c1 = logScale[1];
-        double m0 = mean[0];
-        double m1 = mean[1];
-        double h0 = halfPrecision[0];
-        double h1 = halfPrecision[1];
-        double shift = 0;
-        for (int t = 0; t < z.length; t++) {
-            double d0 = z[t] - m0;
-            double d1 = z[t] - m1;
-            double l0 = (c0 - h0 * d0 * d0) * present[t];
-            double l1 = (c1 - h1 * d1 * d1) * present[t];
-            double ratio = Exp.of(-Math.abs(l0 - l1));
-            shift += Math.max(l0, l1);
-            first[t] = l0 >= l1 ? 1 : ratio;
-            second[t] = l0 >= l1 ? ratio : 1;
-        }
-        return shift;
     }
 
     /** Fills rows × states, row-major, and returns the sum of the logs of the divisors. {@code densities} is modified. */
@@ -64,10 +42,11 @@ final class Densities {
                 highest = Math.max(highest, log);
             }
             for (int k = 0; k < states; k++) {
-                densities[row + k] = Exp.of(densities[row + k] - highest);
+                densities[row + k] = Math.max(LOWEST, densities[row + k] - highest);
             }
             shift += highest;
         }
+        Exp.bySquaring(densities);
         return shift;
     }
 

@@ -1,5 +1,8 @@
 package sojourn.regime;
 
+import java.util.List;
+import java.util.function.Supplier;
+
 /** The expectation step of EM over one window. Has working arrays of its own: one object belongs to one start. */
 interface Expectation {
     /**
@@ -21,6 +24,12 @@ interface Expectation {
         if (kind != ModelKind.HIDDEN_MARKOV) {
             return new IndependentExpectation(states, window);
         }
-        return states == 2 ? new TwoStateExpectation(window) : new ManyStateExpectation(states, window);
+        Supplier<Expectation> any = () -> new ManyStateExpectation(states, window);
+        return switch (states) {
+            case 2 -> new InTurn(List.of(() -> new TwoStateExpectation(window), any));
+            case 3 -> new InTurn(List.of(() -> new ThreeStateExpectation(window), any));
+            case 4 -> new InTurn(List.of(() -> new FourStateExpectation(window), any));
+            default -> any.get();
+        };
     }
 }

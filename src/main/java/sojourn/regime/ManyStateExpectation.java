@@ -6,7 +6,7 @@ import sojourn.numeric.Exp;
 /** The recursion of {@link TwoStateExpectation} for any number of states. */
 final class ManyStateExpectation implements Expectation {
     private static final int BLOCK = 16;
-    private static final double LEAST = 1e-250;
+    private static final double LEAST = 1e-100;
     private static final double LN2 = 0.6931471805599453;
 
     private final int states;

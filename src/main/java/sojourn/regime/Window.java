@@ -17,8 +17,26 @@ final class Window {
     private final int count;
     private final double center;
     private final double scale;
+    private final double sum;
+    private final double squares;
+    private final double lowest;
+    private final double highest;
 
     private Window(double[] values, double[] present, int count, double center, double scale) {
+        CompensatedSum plain = new CompensatedSum();
+        CompensatedSum squared = new CompensatedSum();
+        double low = 0;
+        double high = 0;
+        for (double value : values) {
+            plain.add(value);
+            squared.add(value * value);
+            low = StrictMath.min(low, value);
+            high = StrictMath.max(high, value);
+        }
+        this.sum = plain.value();
+        this.squares = squared.value();
+        this.lowest = low;
+        this.highest = high;
         this.values = values;
         this.present = present;
         this.count = count;
@@ -80,6 +98,26 @@ final class Window {
     /** 1 where the observation is present, 0 where it is missing; not to be modified. */
     double[] present() {
         return present;
+    }
+
+    /** Sum of the standardised observations: about 0 unless the family has no means. */
+    double sum() {
+        return sum;
+    }
+
+    /** Sum of their squares. */
+    double squares() {
+        return squares;
+    }
+
+    /** The lowest of them and 0. */
+    double lowest() {
+        return lowest;
+    }
+
+    /** The highest of them and 0. */
+    double highest() {
+        return highest;
     }
 
     /** What was subtracted. */

@@ -58,4 +58,40 @@ class ExpTest {
         double got = Exp.of(x);
         return got == expected ? 0 : Math.abs(got - expected) / Math.ulp(expected);
     }
+
+    /** The error of a Taylor series to the ninth power at x / 1024, and ten squarings that double a rounding error each. */
+    @Test
+    void squaringAgreesWithTheStrictExponential() {
+        for (double[] limit : new double[][] {{40, 4e-13}, {-100, 4e-13}, {-230, 1e-9}, {-700, 2e-5}}) {
+            int count = 20_001;
+            double[] exponential = new double[count];
+            for (int i = 0; i < count; i++) {
+                exponential[i] = limit[0] * i / (count - 1);
+            }
+            Exp.bySquaring(exponential);
+            for (int i = 0; i < count; i++) {
+                double expected = StrictMath.exp(limit[0] * i / (count - 1));
+                assertThat(Math.abs(exponential[i] - expected)).isLessThanOrEqualTo(limit[1] * expected);
+            }
+            assertThat(exponential[0]).isEqualTo(1);
+        }
+    }
+
+    /** Vector instructions or not, a number's place in the array does not matter. */
+    @Test
+    void squaringDoesNotDependOnThePlace() {
+        double[] many = new double[5000];
+        for (int i = 0; i < many.length; i++) {
+            many[i] = -0.013 * i;
+        }
+        for (int round = 0; round < 500; round++) { // until it is compiled
+            double[] again = many.clone();
+            Exp.bySquaring(again);
+            for (int i = round; i < many.length; i += 501) {
+                double[] one = {many[i]};
+                Exp.bySquaring(one);
+                assertThat(again[i]).isEqualTo(one[0]);
+            }
+        }
+    }
 }

@@ -101,10 +101,72 @@ class ExpectationTest {
             Window window = window(values, missing);
             Parameters p = Fixtures.standardised(model, window);
             agree(window, p, new ManyStateExpectation(states, window));
-            if (states == 2) {
-                agree(window, p, new TwoStateExpectation(window));
+            agree(window, p, fastest(states, window));
+        }
+    }
+
+    /** An observation 50 standard deviations out, variances at the floor, and steps that hardly ever happen or never. */
+    @ParameterizedTest
+    @ValueSource(ints = {2, 3, 4, 5})
+    void extremeDataAndParametersAgreeWithThePlainStep(int states) {
+        RandomStream random = RandomStream.of(15, "extremes", "states " + states);
+        int reached = 0;
+        for (int trial = 0; trial < 200; trial++) {
+            HiddenMarkov model = Fixtures.randomModel(states, random);
+            double[] values = Fixtures.simulate(model, 60, random);
+            boolean[] missing = new boolean[60];
+            missing[random.nextInt(60)] = true;
+            values[random.nextInt(60)] *= trial % 3 == 0 ? 50 : 1;
+            Window window = window(values, missing);
+            Parameters p = Fixtures.standardised(model, window);
+            for (int k = 0; k < states; k++) {
+                if (random.nextInt(3) == 0) {
+                    p.set(p.variance(k), Maximisation.FLOOR * (1 + random.nextDouble()));
+                }
+                if (random.nextInt(3) == 0) {
+                    int never = random.nextInt(states);
+                    int instead = (never + 1) % states;
+                    double least = random.nextInt(2) == 0 ? 1e-300 : 0;
+                    p.set(
+                            p.transition(k, instead),
+                            p.at(p.transition(k, instead)) + p.at(p.transition(k, never)) - least);
+                    p.set(p.transition(k, never), least);
+                }
+            }
+            Expectation fast = Expectation.of(ModelKind.HIDDEN_MARKOV, states, window);
+            if (fast.fill(p, new ExpectedSums(states))) {
+                agree(window, p, fast);
+                reached++;
             }
         }
+        assertThat(reached).isGreaterThan(100);
+    }
+
+    /** Means far apart beside equal variances: a ratio to the widest state would overflow within a block. */
+    @ParameterizedTest
+    @ValueSource(ints = {2, 3, 4})
+    void ratiosBeyondTheirRangeAreLeftToTheNextStep(int states) {
+        double[] values = new double[50];
+        double[] means = new double[states];
+        double[] deviations = new double[states];
+        double[] transition = new double[states * states];
+        double[] initial = new double[states];
+        for (int k = 0; k < states; k++) {
+            means[k] = 10 * k;
+            deviations[k] = 0.5;
+            initial[k] = 1.0 / states;
+            for (int j = 0; j < states; j++) {
+                transition[k * states + j] = 1.0 / states;
+            }
+        }
+        for (int t = 0; t < 50; t++) {
+            values[t] = means[t % states] + 0.3 * (t % 5 - 2);
+        }
+        Window window = Window.of(Observations.univariate(values), EmissionFamily.NORMAL);
+        HiddenMarkov model = HiddenMarkov.of(initial, transition, Normal.of(means, deviations));
+        Parameters p = Fixtures.standardised(model, window);
+        assertThat(fastest(states, window).fill(p, new ExpectedSums(states))).isFalse();
+        agree(window, p, Expectation.of(ModelKind.HIDDEN_MARKOV, states, window));
     }
 
     @ParameterizedTest
@@ -176,6 +238,8 @@ class ExpectationTest {
         ExpectedSums sums = new ExpectedSums(2);
         assertThat(new TwoStateExpectation(window).fill(p, sums)).isFalse();
         assertThat(new ManyStateExpectation(2, window).fill(p, sums)).isFalse();
+        assertThat(Expectation.of(ModelKind.HIDDEN_MARKOV, 2, window).fill(p, sums))
+                .isFalse();
         assertThat(new PlainExpectation(window, EmissionFamily.NORMAL).fill(p, sums))
                 .isTrue();
         assertThat(sums.count).containsExactly(5, 0);
@@ -184,6 +248,15 @@ class ExpectationTest {
 
     private static Window window(double[] values, boolean[] missing) {
         return Window.of(Observations.of(1, values, missing), EmissionFamily.NORMAL_ZERO_MEAN);
+    }
+
+    private static Expectation fastest(int states, Window window) {
+        return switch (states) {
+            case 2 -> new TwoStateExpectation(window);
+            case 3 -> new ThreeStateExpectation(window);
+            case 4 -> new FourStateExpectation(window);
+            default -> new ManyStateExpectation(states, window);
+        };
     }
 
     private static void agree(Window window, Parameters p, Expectation fast) {
