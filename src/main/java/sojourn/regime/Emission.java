@@ -1,14 +1,17 @@
 package sojourn.regime;
 
 /** What observations look like in each regime. Immutable. */
-public sealed interface Emission permits Normal, StudentT {
+public sealed interface Emission permits Normal, StudentT, MultivariateNormal {
     /** Number of regimes. */
     int states();
 
     /** Numbers an observation has. */
     int dimension();
 
-    /** Natural log of the density of row {@code row}, which is not missing, in regime {@code state}. */
+    /**
+     * Natural log of the density of row {@code row}, which is not missing, in regime {@code state}; of the numbers that are there
+     * where some are missing.
+     */
     double logDensity(Observations x, int row, int state);
 
     /** Mean of one column in one regime. */

@@ -18,6 +18,9 @@ public record EmissionFamily(Form form, OptionalDouble fixedDegreesOfFreedom) {
 
     /** Normal, each regime with its own mean and standard deviation. */
     public static final EmissionFamily NORMAL = new EmissionFamily(Form.NORMAL, OptionalDouble.empty());
+    /** Normal, of several series independent within a regime; of one series the same as {@link #NORMAL}. */
+    public static final EmissionFamily NORMAL_DIAGONAL =
+            new EmissionFamily(Form.NORMAL_DIAGONAL, OptionalDouble.empty());
     /** Normal with mean zero in every regime: only the volatility changes. */
     public static final EmissionFamily NORMAL_ZERO_MEAN =
             new EmissionFamily(Form.NORMAL_ZERO_MEAN, OptionalDouble.empty());
@@ -26,12 +29,15 @@ public record EmissionFamily(Form form, OptionalDouble fixedDegreesOfFreedom) {
     /** Student-t, each regime with its own mean, scale and degrees of freedom. */
     public static final EmissionFamily STUDENT_T = new EmissionFamily(Form.STUDENT_T, OptionalDouble.empty());
 
-    private static final List<EmissionFamily> VALUES = List.of(NORMAL, NORMAL_ZERO_MEAN, NORMAL_TIED, STUDENT_T);
+    private static final List<EmissionFamily> VALUES =
+            List.of(NORMAL, NORMAL_DIAGONAL, NORMAL_ZERO_MEAN, NORMAL_TIED, STUDENT_T);
 
     /** The kinds of distribution. */
     public enum Form {
-        /** Mean and standard deviation free. */
+        /** Mean and standard deviation free; of several series the correlations too. */
         NORMAL("normal"),
+        /** Mean and standard deviation free, correlations zero. */
+        NORMAL_DIAGONAL("normal-diagonal"),
         /** Mean zero. */
         NORMAL_ZERO_MEAN("normal-zero-mean"),
         /** One standard deviation. */
@@ -78,10 +84,22 @@ public record EmissionFamily(Form form, OptionalDouble fixedDegreesOfFreedom) {
         return form == Form.STUDENT_T;
     }
 
-    /** Number of free parameters of that many regimes. */
+    /** Whether it can be the distribution of several series at once. */
+    public boolean multivariate() {
+        return form == Form.NORMAL || form == Form.NORMAL_DIAGONAL;
+    }
+
+    /** Number of free parameters of that many regimes of one series. */
     int parameterCount(int states) {
+        return parameterCount(states, 1);
+    }
+
+    /** Number of free parameters of that many regimes of so many series. */
+    int parameterCount(int states, int dimension) {
+        Check.that(dimension == 1 || multivariate(), form.word + " emissions of dimension " + dimension);
         return switch (form) {
-            case NORMAL -> 2 * states;
+            case NORMAL -> states * (dimension + dimension * (dimension + 1) / 2);
+            case NORMAL_DIAGONAL -> 2 * states * dimension;
             case NORMAL_ZERO_MEAN -> states;
             case NORMAL_TIED -> states + 1;
             case STUDENT_T -> fixedDegreesOfFreedom.isPresent() ? 2 * states : 3 * states;
@@ -95,7 +113,7 @@ public record EmissionFamily(Form form, OptionalDouble fixedDegreesOfFreedom) {
      */
     Emission emission(double[] means, double[] scales, double[] degreesOfFreedom) {
         return switch (form) {
-            case NORMAL -> Normal.of(means, scales);
+            case NORMAL, NORMAL_DIAGONAL -> Normal.of(means, scales);
             case NORMAL_ZERO_MEAN -> Normal.zeroMean(scales);
             case NORMAL_TIED -> Normal.tied(means, scales[0]);
             case STUDENT_T -> StudentT.of(this, means, scales, degreesOfFreedom);

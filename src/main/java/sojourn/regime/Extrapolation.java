@@ -59,7 +59,8 @@ final class Extrapolation {
         return point;
     }
 
-    private static void normalise(Parameters point, int start, int length) {
+    /** Brings {@code length} entries to sum 1; {@code point} is modified. */
+    static void normalise(Parameters point, int start, int length) {
         double total = 0;
         for (int e = start; e < start + length; e++) {
             total += point.at(e);

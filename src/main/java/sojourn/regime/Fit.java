@@ -58,7 +58,7 @@ public final class Fit {
 
     /**
      * Why the outcome is not {@link Outcome#CONVERGED}, in plain words; empty when it is. A state is written {@code {k}}, as in
-     * {@link #events()}.
+     * {@link #events()}; a series of several observed is written {@code [j]}, its column.
      */
     public String explanation() {
         return explanation;

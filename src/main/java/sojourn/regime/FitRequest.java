@@ -30,7 +30,7 @@ public final class FitRequest {
     /**
      * A first fit. Copies {@code orderBy}; not modified.
      *
-     * @param observations of the window, of dimension 1
+     * @param observations of the window, of dimension 1 to 6
      * @param orderBy one simple return a row, whose volatility orders the regimes; ignored where the observation is missing,
      *     otherwise finite
      * @param companions the simple returns of all assets on the same rows
@@ -40,7 +40,7 @@ public final class FitRequest {
     public static FitRequest of(
             Observations observations, double[] orderBy, Companions companions, long masterSeed, String date) {
         int rows = observations.size();
-        Check.within(observations.dimension(), 1, 1, "dimension of the observations");
+        Check.within(observations.dimension(), 1, FitSettings.MOST_SERIES, "dimension of the observations");
         Check.that(
                 orderBy.length == rows && companions.size() == rows,
                 rows + " observations, " + orderBy.length + " returns to order by, " + companions.size()

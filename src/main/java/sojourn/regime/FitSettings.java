@@ -13,6 +13,9 @@ import sojourn.numeric.Check;
  */
 public record FitSettings(
         ModelKind kind, int states, EmissionFamily emission, InitialDistribution initial, int starts) {
+    /** The most series that a model may see. */
+    public static final int MOST_SERIES = 6;
+
     /** The most states that a model may have. */
     public static final int MOST_STATES = 6;
 
@@ -27,19 +30,29 @@ public record FitSettings(
         this(kind, states, emission, InitialDistribution.FREE, starts);
     }
 
-    /** The fewest observations that such a fit needs: some for each state, and more than there are parameters. */
+    /** The fewest observations of one series that such a fit needs: some for each state, and more than there are parameters. */
     public int leastObservations() {
-        return StrictMath.max(Soundness.leastCount(1) * states, parameterCount() + 1);
+        return leastObservations(1);
     }
 
-    /** Number of free parameters of such a model. */
+    /** The same for so many series. */
+    public int leastObservations(int dimension) {
+        return StrictMath.max(Soundness.leastCount(dimension) * states, parameterCount(dimension) + 1);
+    }
+
+    /** Number of free parameters of such a model of one series. */
     public int parameterCount() {
+        return parameterCount(1);
+    }
+
+    /** The same for so many series. */
+    public int parameterCount(int dimension) {
         int first = initial == InitialDistribution.FREE ? states - 1 : 0;
         int chain = switch (kind) {
             case HIDDEN_MARKOV -> states * (states - 1) + first;
             case MIXTURE -> states - 1;
             case ONE_REGIME -> 0;
         };
-        return chain + emission.parameterCount(states);
+        return chain + emission.parameterCount(states, dimension);
     }
 }

@@ -40,11 +40,11 @@ public final class Fitter {
 
     /**
      * The fit of given parameters: nothing is estimated, the states keep their order. Their volatilities not ascending is an
-     * event. The model must be of dimension 1.
+     * event. The model must be of the dimension of the observations.
      */
     public static Fit given(RegimeModel model, FitRequest request) {
         Observations x = request.observations();
-        Check.within(model.emission().dimension(), 1, 1, "dimension of the model");
+        Check.within(model.emission().dimension(), x.dimension(), x.dimension(), "dimension of the model");
         Optional<String> refusal = nothingToDescribe(request);
         if (refusal.isPresent()) {
             return Fit.failed(refusal.get(), Fit.Search.NONE, x.present());
@@ -74,11 +74,12 @@ public final class Fitter {
     }
 
     private static Optional<String> tooFew(FitSettings settings, Observations x) {
-        int least = settings.leastObservations();
+        int least = settings.leastObservations(x.dimension());
         return x.present() >= least
                 ? Optional.empty()
-                : Optional.of("the window holds " + x.present() + " observations; " + settings.states()
-                        + " states with " + settings.parameterCount() + " parameters need at least " + least);
+                : Optional.of(
+                        "the window holds " + x.present() + " observations; " + settings.states() + " states with "
+                                + settings.parameterCount(x.dimension()) + " parameters need at least " + least);
     }
 
     private static Fit single(FitSettings settings, FitRequest request, SearchEnd end) {

@@ -1,5 +1,6 @@
 package sojourn.regime;
 
+import java.util.Arrays;
 import sojourn.numeric.Check;
 
 /** Orders of states: position k takes state {@code order[k]}. */
@@ -14,6 +15,23 @@ final class Order {
             result[k] = values[order[k]];
         }
         return result;
+    }
+
+    /** The rows of {@code table}, one a state, in that order, a new array. Neither modified. */
+    static double[] applyToRows(int[] order, double[] table) {
+        int n = order.length;
+        check(order, n);
+        int width = table.length / n;
+        double[] result = new double[table.length];
+        for (int k = 0; k < n; k++) {
+            System.arraycopy(table, order[k] * width, result, k * width, width);
+        }
+        return result;
+    }
+
+    /** One row of {@code table}, a copy. Not modified. */
+    static double[] row(double[] table, int row, int width) {
+        return Arrays.copyOfRange(table, row * width, (row + 1) * width);
     }
 
     /** Rows and columns of a square row-major table in that order, a new array. Neither modified. */

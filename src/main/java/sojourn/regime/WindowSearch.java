@@ -3,6 +3,7 @@ package sojourn.regime;
 import java.util.List;
 import java.util.Optional;
 import java.util.function.Supplier;
+import sojourn.numeric.Check;
 
 /** The search for the likeliest model of one window, whatever its observations look like. */
 interface WindowSearch {
@@ -17,6 +18,12 @@ interface WindowSearch {
 
     /** The search that fits those observations. */
     static WindowSearch of(FitSettings settings, Observations x) {
-        return new ScalarSearch(settings, x);
+        if (x.dimension() == 1) {
+            return new ScalarSearch(settings, x);
+        }
+        Check.that(
+                settings.emission().multivariate(),
+                settings.emission().word() + " emissions for " + x.dimension() + " series");
+        return new VectorSearch(settings, x);
     }
 }

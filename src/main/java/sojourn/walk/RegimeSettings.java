@@ -66,7 +66,8 @@ public record RegimeSettings(
                     Shapes.word(EmissionFamily.values(), EmissionFamily::word),
                     Shapes.object("emission", f -> EmissionFamily.studentT(f.get(STUDENT_T)), STUDENT_T)),
             "normal",
-            "how an observation is distributed within a regime; normal-tied: one volatility, only the mean changes; student-t:"
+            "how an observation is distributed within a regime; normal-diagonal: several series,"
+                    + " independent within a regime; normal-tied: one volatility, only the mean changes; student-t:"
                     + " fat tails, degrees of freedom estimated between 2.05 and 200");
     private static final Field<Optional<InitialDistribution>> INITIAL = Field.maybe(
             "initial",
@@ -147,6 +148,12 @@ public record RegimeSettings(
         }
         if (emission.equals(EmissionFamily.NORMAL_ZERO_MEAN)) {
             observe.stream().filter(one -> !one.aroundZero()).findFirst().ifPresent(one -> faults.add(sized(one)));
+        }
+        if (emission.equals(EmissionFamily.NORMAL_DIAGONAL) && observe.size() == 1) {
+            faults.add(new Refusal(
+                    "emission",
+                    "normal-diagonal says that several series are independent within a regime, and one is observed",
+                    "set emission: normal"));
         }
         if (initial.isPresent() && model != ModelKind.HIDDEN_MARKOV) {
             faults.add(new Refusal(

@@ -185,7 +185,7 @@ public final class Walk {
         double[] means = array(declared.mean());
         double[] deviations = array(declared.sd());
         return switch (regimes.emission().form()) {
-            case NORMAL -> Normal.of(means, deviations);
+            case NORMAL, NORMAL_DIAGONAL -> Normal.of(means, deviations);
             case NORMAL_ZERO_MEAN -> Normal.zeroMean(deviations);
             case NORMAL_TIED -> Normal.tied(means, deviations[0]);
             case STUDENT_T -> StudentT.withDeviations(means, deviations, degreesOfFreedom(declared));
