@@ -9,6 +9,7 @@ import sojourn.regime.Fit;
 import sojourn.regime.Gauge;
 import sojourn.regime.RegimeModel;
 import sojourn.regime.StudentT;
+import sojourn.regime.VolatilityThreshold;
 import sojourn.walk.FitRecord;
 import sojourn.walk.RegimeTimeline;
 
@@ -54,6 +55,10 @@ final class FitColumns {
                     Fit::model,
                     (m, k) -> m.emission().standardDeviation(k, 0));
         }
+        if (gauges.stream().anyMatch(VolatilityThreshold.class::isInstance)) {
+            all.level("storm_above", VolatilityThreshold.Levels::stormAbove);
+            all.level("calm_below", VolatilityThreshold.Levels::calmBelow);
+        }
         if (timeline.fits().stream().anyMatch(record -> student(record.fit()).isPresent())) {
             all.each("scale." + observation + ".", FitColumns::student, StudentT::scale);
             all.each("dof.", FitColumns::student, StudentT::degreesOfFreedom);
@@ -78,6 +83,14 @@ final class FitColumns {
             columns.add(new Column(
                     prefix + regimes.get(k), record -> number(part.apply(record.fit()), p -> number.of(p, state))));
         }
+    }
+
+    private void level(String name, Function<VolatilityThreshold.Levels, Double> level) {
+        columns.add(new Column(name, record -> number(threshold(record.fit()), t -> level.apply(t.levels()))));
+    }
+
+    private static Optional<VolatilityThreshold> threshold(Fit fit) {
+        return fit.gauge().flatMap(g -> g instanceof VolatilityThreshold t ? Optional.of(t) : Optional.empty());
     }
 
     private void transitions() {

@@ -38,7 +38,7 @@ record ObjectShape<T>(String name, Function<Fields, T> build, List<Field<?>> fie
                 problems.add(node, "key '" + field.key() + "' is missing", "add it: " + field.help());
             }
             Optional<?> value = field.value(written, problems);
-            clean &= value.isPresent();
+            clean &= field.belongs(map, problems) && value.isPresent();
             value.ifPresent(v -> values.put(field, v));
         }
         return clean ? Optional.of(build.apply(new ReadFields(name, values))) : Optional.empty();
@@ -66,8 +66,7 @@ record ObjectShape<T>(String name, Function<Fields, T> build, List<Field<?>> fie
     public JsonNode resolved(Node node) {
         ObjectNode resolved = Json.object();
         for (Field<?> field : fields) {
-            Optional<Node> written = ((MapNode) node).get(field.key());
-            field.resolved(written).ifPresent(value -> resolved.set(field.key(), value));
+            field.resolved((MapNode) node).ifPresent(value -> resolved.set(field.key(), value));
         }
         return resolved;
     }

@@ -5,14 +5,14 @@ import sojourn.numeric.Check;
 /**
  * What to fit.
  *
- * @param kind how regimes follow one another
+ * @param kind how regimes follow one another; one that has a likelihood
  * @param states number of regimes, 1 to 6; 1 for a single regime
  * @param emission the family of the observations
  * @param initial where a chain starts; of no concern to other kinds
  * @param starts how often the search starts, at least 1: one deterministic start, the others random
  */
-public record FitSettings(
-        ModelKind kind, int states, EmissionFamily emission, InitialDistribution initial, int starts) {
+public record FitSettings(ModelKind kind, int states, EmissionFamily emission, InitialDistribution initial, int starts)
+        implements GaugeSettings {
     /** The most series that a model may see. */
     public static final int MOST_SERIES = 6;
 
@@ -22,6 +22,7 @@ public record FitSettings(
     public FitSettings {
         Check.within(states, 1, MOST_STATES, "states");
         Check.within(starts, 1, Integer.MAX_VALUE, "starts");
+        Check.that(kind.hasLikelihood(), kind.word() + " has no likelihood");
         Check.that(kind != ModelKind.ONE_REGIME || states == 1, "a one-regime model with " + states + " states");
     }
 
@@ -31,6 +32,7 @@ public record FitSettings(
     }
 
     /** The fewest observations of one series that such a fit needs: some for each state, and more than there are parameters. */
+    @Override
     public int leastObservations() {
         return leastObservations(1);
     }
@@ -38,6 +40,11 @@ public record FitSettings(
     /** The same for so many series. */
     public int leastObservations(int dimension) {
         return StrictMath.max(Soundness.leastCount(dimension) * states, parameterCount(dimension) + 1);
+    }
+
+    @Override
+    public Fit fit(FitRequest request, StartRunner runner) {
+        return Fitter.fit(this, request, runner);
     }
 
     /** Number of free parameters of such a model of one series. */
@@ -51,7 +58,7 @@ public record FitSettings(
         int chain = switch (kind) {
             case HIDDEN_MARKOV -> states * (states - 1) + first;
             case MIXTURE -> states - 1;
-            case ONE_REGIME -> 0;
+            default -> 0;
         };
         return chain + emission.parameterCount(states, dimension);
     }

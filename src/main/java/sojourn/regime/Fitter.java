@@ -64,7 +64,8 @@ public final class Fitter {
                 events);
     }
 
-    private static Optional<String> nothingToDescribe(FitRequest request) {
+    /** Why no gauge could be described by the request's window, if so. */
+    static Optional<String> nothingToDescribe(FitRequest request) {
         if (request.observations().present() == 0) {
             return Optional.of("the window holds no observation");
         }
@@ -91,7 +92,7 @@ public final class Fitter {
                         ? HiddenMarkov.stationary(one, emission)
                         : HiddenMarkov.of(one, one, emission);
             case MIXTURE -> Mixture.of(one, emission);
-            case ONE_REGIME -> OneRegime.of(emission);
+            default -> OneRegime.of(emission);
         };
         Described described = Described.of(model, request);
         List<String> events = StateEvents.of(described, request.previous().flatMap(Fit::model));

@@ -1,18 +1,25 @@
 package sojourn.regime;
 
-/** How regimes follow one another. */
+/** The kinds of gauge that are fitted to a window. */
 public enum ModelKind {
     /** A Markov chain that is seen only through the observations. */
     HIDDEN_MARKOV("hidden-markov"),
     /** Every bar draws its regime afresh, whatever came before. */
     MIXTURE("mixture"),
     /** There is a single regime. */
-    ONE_REGIME("one-regime");
+    ONE_REGIME("one-regime"),
+    /** Recent volatility lies above or below a line. */
+    VOLATILITY_THRESHOLD("volatility-threshold");
 
     private final String word;
 
     ModelKind(String word) {
         this.word = word;
+    }
+
+    /** Whether observations have a density in each regime, so that a fit maximises their likelihood. */
+    public boolean hasLikelihood() {
+        return this == HIDDEN_MARKOV || this == MIXTURE || this == ONE_REGIME;
     }
 
     /** The word of the strategy file. */

@@ -22,20 +22,9 @@ final class StateEvents {
     static List<String> of(Described described, Optional<RegimeModel> previous) {
         List<String> events = new ArrayList<>(described.events());
         RegimeModel model = described.model().orElseThrow();
-        StateWeights weights = described.orderBy();
-        double[] occupancy = weights.occupancy();
         int states = model.states();
         previous.filter(p -> p.states() == states).ifPresent(p -> swaps(p, model, events));
-        for (int k = 0; k + 1 < states; k++) {
-            double now = weights.deviation(k);
-            double next = weights.deviation(k + 1);
-            if (next < now) {
-                events.add(pair("not-ascending", k, k + 1));
-            }
-            if (StrictMath.max(now, next) <= NEAR_TIE * StrictMath.min(now, next)) {
-                events.add(pair("near-tie", k, k + 1));
-            }
-        }
+        volatilities(described, events);
         if (model.emission() instanceof StudentT student) {
             for (int k = 0; k < states; k++) {
                 if (student.degreesOfFreedom(k) <= EmissionFamily.LEAST_DEGREES_OF_FREEDOM + AT_BOUND) {
@@ -44,9 +33,7 @@ final class StateEvents {
             }
         }
         for (int k = 0; states > 1 && k < states; k++) {
-            if (occupancy[k] < COLLAPSED) {
-                events.add(String.format(Locale.ROOT, "collapsed {%d} occupancy %.4f", k, occupancy[k]));
-            }
+            collapsed(described.orderBy(), k, events);
             for (int j = k + 1; j < states; j++) {
                 if (Matching.squaredHellinger(model.emission(), k, model.emission(), j) < DUPLICATED) {
                     events.add(pair("duplicated", k, j));
@@ -57,6 +44,36 @@ final class StateEvents {
             }
         }
         return events;
+    }
+
+    /** All events of a gauge without a likelihood, in role order. */
+    static List<String> ofGauge(Described described) {
+        List<String> events = new ArrayList<>(described.events());
+        volatilities(described, events);
+        for (int k = 0; described.states() > 1 && k < described.states(); k++) {
+            collapsed(described.orderBy(), k, events);
+        }
+        return events;
+    }
+
+    private static void volatilities(Described described, List<String> events) {
+        for (int k = 0; k + 1 < described.states(); k++) {
+            double now = described.orderBy().deviation(k);
+            double next = described.orderBy().deviation(k + 1);
+            if (next < now) {
+                events.add(pair("not-ascending", k, k + 1));
+            }
+            if (StrictMath.max(now, next) <= NEAR_TIE * StrictMath.min(now, next)) {
+                events.add(pair("near-tie", k, k + 1));
+            }
+        }
+    }
+
+    private static void collapsed(StateWeights weights, int k, List<String> events) {
+        double occupancy = weights.occupancy()[k];
+        if (occupancy < COLLAPSED) {
+            events.add(String.format(Locale.ROOT, "collapsed {%d} occupancy %.4f", k, occupancy));
+        }
     }
 
     private static void swaps(RegimeModel previous, RegimeModel model, List<String> events) {

@@ -1,11 +1,9 @@
 package sojourn.report;
 
 import java.time.LocalDate;
-import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
-import java.util.OptionalDouble;
 import java.util.stream.Collectors;
 import sojourn.archive.Caution;
 import sojourn.compare.Prepared;
@@ -16,15 +14,9 @@ import sojourn.market.InputFile;
 import sojourn.market.Known;
 import sojourn.market.PriceTable;
 import sojourn.measure.Yardstick;
-import sojourn.regime.ModelKind;
 import sojourn.strategy.Strategy;
 import sojourn.trade.TradeSettings;
 import sojourn.walk.FitPlan;
-import sojourn.walk.FixedParameters;
-import sojourn.walk.Observation;
-import sojourn.walk.RefitSchedule;
-import sojourn.walk.RefitSettings;
-import sojourn.walk.RegimeSettings;
 
 /** What would be run, in plain English, with everything odd about the files and everything that is left out. */
 public final class PlanText {
@@ -79,10 +71,12 @@ public final class PlanText {
                 table.size() + " common " + table.barLength().word() + " bars of "
                         + String.join(", ", table.assets()) + ", " + last.date(0) + " to " + last.date() + "; "
                         + (int) table.barLength().periodsPerYear() + " count as a year");
-        line("Watches", watches(strategy.regimes()));
-        strategy.regimes().fixed().ifPresent(fixed -> line("Declared", declared(strategy.regimes(), fixed, table)));
+        line("Watches", GaugeText.watches(strategy.regimes()));
+        strategy.regimes()
+                .fixed()
+                .ifPresent(fixed -> line("Declared", GaugeText.declared(strategy.regimes(), fixed, table)));
         FitPlan plan = FitPlan.of(table, strategy.regimes(), strategy.refit());
-        line("Fits", fits(strategy.refit(), strategy.regimes(), plan));
+        line("Fits", GaugeText.fits(strategy.refit(), strategy.regimes(), plan));
         line("Rule", RuleText.of(strategy.rule()));
         line("Trades", trades(strategy, plan));
         line("Judged", judged(strategy));
@@ -105,64 +99,6 @@ public final class PlanText {
                             + constant.dayCount().word();
         }
         return "earns the last rate dated at or before the close before, for the calendar days between two bars";
-    }
-
-    private static String watches(RegimeSettings regimes) {
-        String observed = regimes.observe().stream().map(Observation::inWords).collect(Collectors.joining(", "));
-        String model = regimes.model().word() + ", " + regimes.emission().word() + degrees(regimes) + " emissions";
-        String order = regimes.model() == ModelKind.ONE_REGIME
-                ? ""
-                : ", ordered by the volatility of " + regimes.orderedBy() + " at every fit";
-        return observed + "; " + model + "; regimes " + String.join(", ", regimes.states()) + order;
-    }
-
-    private static String declared(RegimeSettings regimes, FixedParameters fixed, PriceTable table) {
-        List<String> each = new ArrayList<>();
-        double year = Math.sqrt(table.barLength().periodsPerYear());
-        for (int k = 0; k < regimes.states().size(); k++) {
-            each.add(String.format(
-                    Locale.ROOT,
-                    "%s has mean %s and deviation %s a bar (%.1f %% a year), stays with probability %s",
-                    regimes.states().get(k),
-                    fixed.mean().get(k),
-                    fixed.sd().get(k),
-                    100 * year * fixed.sd().get(k),
-                    fixed.transition().get(k).get(k)));
-        }
-        return String.join("; ", each);
-    }
-
-    private static String degrees(RegimeSettings regimes) {
-        OptionalDouble fixed = regimes.emission().fixedDegreesOfFreedom();
-        return fixed.isPresent() ? " of " + fixed.getAsDouble() + " degrees of freedom" : "";
-    }
-
-    private static String fits(RefitSettings refit, RegimeSettings regimes, FitPlan plan) {
-        if (plan.fitDates().isEmpty()) {
-            return "none: first-fit-after is " + refit.firstFitAfter() + " and there are " + plan.observations()
-                    + " observations; this strategy will fail";
-        }
-        List<LocalDate> dates = plan.fitDates();
-        if (regimes.fixed().isPresent()) {
-            return "none: its parameters are declared (an external prior), in use from " + dates.get(0)
-                    + " on; the filter begins" + " afresh " + every(refit.schedule());
-        }
-        String what = "maximum likelihood from " + refit.starts() + " starts and the fit before (seed " + refit.seed()
-                + "), ";
-        String window = refit.rolling().isPresent()
-                ? "on the last " + refit.rolling().getAsInt() + " observations"
-                : "on all observations so far";
-        return what + dates.size() + " times from " + dates.get(0) + " to " + dates.get(dates.size() - 1) + ", "
-                + every(refit.schedule()) + ", " + window + "; parameters are frozen in between";
-    }
-
-    private static String every(RefitSchedule schedule) {
-        if (schedule instanceof RefitSchedule.EveryObservations count) {
-            return count.observations() == 1
-                    ? "at every observation"
-                    : "every " + count.observations() + " observations";
-        }
-        return "on the first bar of each " + schedule.toString().toLowerCase(Locale.ROOT);
     }
 
     private static String trades(Strategy strategy, FitPlan plan) {

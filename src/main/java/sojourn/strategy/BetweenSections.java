@@ -75,14 +75,11 @@ final class BetweenSections {
     /** A rolling window that never holds what a fit needs would leave the strategy without any. */
     private void windowSize(Problems problems) {
         Optional<RefitSettings> refit = sound("/refit", RefitSettings.SHAPE);
-        if (refit.isEmpty()
-                || refit.get().rolling().isEmpty()
-                || regimes.isEmpty()
-                || regimes.get().fixed().isPresent()) {
+        if (refit.isEmpty() || refit.get().rolling().isEmpty() || regimes.isEmpty()) {
             return;
         }
         int window = refit.get().rolling().getAsInt();
-        int least = regimes.get().fitSettings(refit.get().starts()).leastObservations();
+        int least = regimes.get().gauge(refit.get().starts()).leastObservations();
         if (window < least) {
             String what = "a window of " + window + " observations is too small to fit "
                     + regimes.get().states().size() + " regimes";

@@ -2,6 +2,7 @@ package sojourn.walk;
 
 import java.math.BigDecimal;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import java.util.stream.Collectors;
@@ -9,7 +10,12 @@ import sojourn.document.Field;
 import sojourn.document.Refusal;
 import sojourn.document.Shape;
 import sojourn.document.Shapes;
+import sojourn.regime.Emission;
 import sojourn.regime.EmissionFamily;
+import sojourn.regime.HiddenMarkov;
+import sojourn.regime.Normal;
+import sojourn.regime.RegimeModel;
+import sojourn.regime.StudentT;
 
 /**
  * Parameters that are declared instead of fitted: an external prior, which every output says so of. One entry a regime, in the
@@ -80,6 +86,37 @@ public record FixedParameters(
     /** Parameters of normal emissions. */
     public FixedParameters(List<Double> initial, List<List<Double>> transition, List<Double> mean, List<Double> sd) {
         this(initial, transition, mean, sd, List.of());
+    }
+
+    /** The model with these parameters; {@code emission} says which of them it has. */
+    RegimeModel model(EmissionFamily emission) {
+        List<Double> rows = new ArrayList<>();
+        transition.forEach(rows::addAll);
+        return HiddenMarkov.of(array(initial), array(rows), emissions(emission));
+    }
+
+    private Emission emissions(EmissionFamily emission) {
+        double[] means = array(mean);
+        double[] deviations = array(sd);
+        return switch (emission.form()) {
+            case NORMAL, NORMAL_DIAGONAL -> Normal.of(means, deviations);
+            case NORMAL_ZERO_MEAN -> Normal.zeroMean(deviations);
+            case NORMAL_TIED -> Normal.tied(means, deviations[0]);
+            case STUDENT_T -> StudentT.withDeviations(means, deviations, tails(emission));
+        };
+    }
+
+    private double[] tails(EmissionFamily emission) {
+        if (emission.fixedDegreesOfFreedom().isEmpty()) {
+            return array(degreesOfFreedom);
+        }
+        double[] same = new double[mean.size()];
+        Arrays.fill(same, emission.fixedDegreesOfFreedom().getAsDouble());
+        return same;
+    }
+
+    private static double[] array(List<Double> values) {
+        return values.stream().mapToDouble(Double::doubleValue).toArray();
     }
 
     private List<Refusal> faults() {

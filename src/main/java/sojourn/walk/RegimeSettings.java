@@ -8,14 +8,19 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
+import java.util.function.Predicate;
+import java.util.stream.Stream;
 import sojourn.document.Field;
 import sojourn.document.Refusal;
 import sojourn.document.Shape;
 import sojourn.document.Shapes;
 import sojourn.regime.EmissionFamily;
 import sojourn.regime.FitSettings;
+import sojourn.regime.GaugeSettings;
+import sojourn.regime.GivenParameters;
 import sojourn.regime.InitialDistribution;
 import sojourn.regime.ModelKind;
+import sojourn.regime.VolatilityThresholdSettings;
 
 /**
  * The section {@code regimes} of a strategy file.
@@ -27,6 +32,7 @@ import sojourn.regime.ModelKind;
  * @param initial where a chain of regimes starts; free when empty
  * @param orderBy the asset whose returns order the regimes; the observed asset when empty
  * @param fixed parameters that are declared instead of fitted
+ * @param particulars what only some models have
  */
 public record RegimeSettings(
         ModelKind model,
@@ -35,7 +41,8 @@ public record RegimeSettings(
         EmissionFamily emission,
         Optional<InitialDistribution> initial,
         Optional<String> orderBy,
-        Optional<FixedParameters> fixed) {
+        Optional<FixedParameters> fixed,
+        Particulars particulars) {
     private static final int MOST_STATES = 6;
 
     /** Reads the list {@code observe}. */
@@ -61,26 +68,34 @@ public record RegimeSettings(
             Shapes.object("student-t", f -> f.get(DEGREES_OF_FREEDOM), DEGREES_OF_FREEDOM),
             "a Student-t distribution whose degrees of freedom are fixed");
     private static final Field<EmissionFamily> EMISSION = Field.defaulted(
-            "emission",
-            Shapes.<EmissionFamily>either(
-                    Shapes.word(EmissionFamily.values(), EmissionFamily::word),
-                    Shapes.object("emission", f -> EmissionFamily.studentT(f.get(STUDENT_T)), STUDENT_T)),
-            "normal",
-            "how an observation is distributed within a regime; normal-diagonal: several series,"
-                    + " independent within a regime; normal-tied: one volatility, only the mean changes; student-t:"
-                    + " fat tails, degrees of freedom estimated between 2.05 and 200");
+                    "emission",
+                    Shapes.<EmissionFamily>either(
+                            Shapes.word(EmissionFamily.values(), EmissionFamily::word),
+                            Shapes.object("emission", f -> EmissionFamily.studentT(f.get(STUDENT_T)), STUDENT_T)),
+                    "normal",
+                    "how an observation is distributed within a regime; normal-diagonal: several series,"
+                            + " independent within a regime; normal-tied: one volatility, only the mean changes; student-t:"
+                            + " fat tails, degrees of freedom estimated between 2.05 and 200")
+            .onlyWith(MODEL, words(ModelKind::hasLikelihood));
     private static final Field<Optional<InitialDistribution>> INITIAL = Field.maybe(
             "initial",
             Shapes.word(List.of(InitialDistribution.values()), InitialDistribution::word),
             "where the chain starts in each window: free (estimated; if left out) or stationary (in its long run)");
     private static final Field<Optional<String>> ORDER_BY = Field.maybe(
-            "order-by", Shapes.text(), "the asset whose volatility orders the regimes; the observed one if left out");
+                    "order-by",
+                    Shapes.text(),
+                    "the asset whose volatility orders the regimes; the observed one if left out")
+            .onlyWith(MODEL, words(kind -> kind != ModelKind.VOLATILITY_THRESHOLD));
     private static final Field<FixedParameters> FIXED = Field.required(
             "fixed", FixedParameters.SHAPE, "declared parameters: an external prior, marked so on every output");
     private static final Field<Optional<FixedParameters>> PARAMETERS = Field.maybe(
             "parameters",
             Shapes.object("parameters", f -> f.get(FIXED), FIXED),
             "declares parameters instead of fitting them");
+
+    private static final Field<Optional<VolatilityThresholdSettings>> THRESHOLD = Field.maybe(
+                    "threshold", ThresholdKeys.SHAPE, "what volatility-threshold measures and where it draws the line")
+            .onlyWith(MODEL, List.of(ModelKind.VOLATILITY_THRESHOLD.word()));
 
     /** The section's shape. */
     public static final Shape<RegimeSettings> SHAPE = Shapes.object(
@@ -92,14 +107,16 @@ public record RegimeSettings(
                             f.get(EMISSION),
                             f.get(INITIAL),
                             f.get(ORDER_BY),
-                            f.get(PARAMETERS)),
+                            f.get(PARAMETERS),
+                            new Particulars(f.get(THRESHOLD))),
                     MODEL,
                     OBSERVE,
                     STATES,
                     EMISSION,
                     INITIAL,
                     ORDER_BY,
-                    PARAMETERS)
+                    PARAMETERS,
+                    THRESHOLD)
             .refuseEach(RegimeSettings::faults);
 
     /** Copies its lists. */
@@ -108,7 +125,19 @@ public record RegimeSettings(
         states = List.copyOf(states);
     }
 
-    /** The same with a free initial distribution. */
+    /** The same with nothing that only some models have. */
+    public RegimeSettings(
+            ModelKind model,
+            List<Observation> observe,
+            List<String> states,
+            EmissionFamily emission,
+            Optional<InitialDistribution> initial,
+            Optional<String> orderBy,
+            Optional<FixedParameters> fixed) {
+        this(model, observe, states, emission, initial, orderBy, fixed, Particulars.NONE);
+    }
+
+    /** The same with a free initial distribution, and nothing that only some models have. */
     public RegimeSettings(
             ModelKind model,
             List<Observation> observe,
@@ -119,8 +148,16 @@ public record RegimeSettings(
         this(model, observe, states, emission, Optional.empty(), orderBy, fixed);
     }
 
-    /** What is fitted, by so many starts. */
-    public FitSettings fitSettings(int starts) {
+    /** What is fitted, by so many starts where there is a search. */
+    public GaugeSettings gauge(int starts) {
+        if (particulars.threshold().isPresent()) {
+            return particulars.threshold().get();
+        }
+        return fixed.<GaugeSettings>map(declared -> new GivenParameters(declared.model(emission)))
+                .orElseGet(() -> likelihood(starts));
+    }
+
+    private FitSettings likelihood(int starts) {
         return new FitSettings(model, states.size(), emission, initial.orElse(InitialDistribution.FREE), starts);
     }
 
@@ -146,6 +183,9 @@ public record RegimeSettings(
                     "the model one-regime has one regime, not " + states.size(),
                     "name one, or choose another model"));
         }
+        if (model == ModelKind.VOLATILITY_THRESHOLD) {
+            faults.addAll(faultsOfThreshold());
+        }
         if (emission.equals(EmissionFamily.NORMAL_ZERO_MEAN)) {
             observe.stream().filter(one -> !one.aroundZero()).findFirst().ifPresent(one -> faults.add(sized(one)));
         }
@@ -168,6 +208,31 @@ public record RegimeSettings(
                     "leave this 'initial' out"));
         }
         fixed.ifPresent(given -> faults.addAll(faultsOf(given)));
+        return faults;
+    }
+
+    private List<Refusal> faultsOfThreshold() {
+        List<Refusal> faults = new ArrayList<>();
+        if (particulars.threshold().isEmpty()) {
+            faults.add(new Refusal(
+                    "",
+                    "the model volatility-threshold lacks 'threshold'",
+                    "add one, e.g. threshold: {volatility: {ewma: 0.94}, storm-above: 0.8, calm-below: 0.6}"));
+        }
+        if (states.size() != 2) {
+            faults.add(new Refusal(
+                    "states",
+                    "the model volatility-threshold has two regimes, not " + states.size(),
+                    "name two, the calmer first, or choose another model"));
+        }
+        observe.stream()
+                .filter(one -> !one.aroundZero())
+                .findFirst()
+                .ifPresent(one -> faults.add(new Refusal(
+                        "observe",
+                        "volatility-threshold measures volatility from returns, and " + one.word()
+                                + " is a size already",
+                        "observe a return, or choose another model")));
         return faults;
     }
 
@@ -238,6 +303,10 @@ public record RegimeSettings(
                         "parameters",
                         "degrees-of-freedom belongs to the emission student-t, not to " + emission.word(),
                         "set emission: student-t, or leave degrees-of-freedom out"));
+    }
+
+    private static List<String> words(Predicate<ModelKind> which) {
+        return Stream.of(ModelKind.values()).filter(which).map(ModelKind::word).toList();
     }
 
     private static Map<String, ModelKind> models() {

@@ -1,28 +1,18 @@
 package sojourn.walk;
 
-import java.util.ArrayList;
-import java.util.Arrays;
-import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.function.IntConsumer;
 import sojourn.market.Known;
 import sojourn.market.PriceTable;
 import sojourn.regime.Companions;
-import sojourn.regime.Emission;
 import sojourn.regime.EmissionFamily;
 import sojourn.regime.Fit;
 import sojourn.regime.FitRequest;
-import sojourn.regime.FitSettings;
-import sojourn.regime.Fitter;
 import sojourn.regime.Gauge;
 import sojourn.regime.GaugeFilter;
-import sojourn.regime.HiddenMarkov;
-import sojourn.regime.Normal;
 import sojourn.regime.Observations;
-import sojourn.regime.RegimeModel;
 import sojourn.regime.StartRunner;
-import sojourn.regime.StudentT;
 
 /**
  * Walks a gauge of regimes forward through a history, close by close. At each close: the new observation is taken in; the gauge in
@@ -147,9 +137,7 @@ public final class Walk {
                 known.date().toString());
         FitRequest request =
                 inForce.map(previous -> cold.after(previous.record().fit())).orElse(cold);
-        Fit fit = regimes.fixed()
-                .map(declared -> Fitter.given(model(declared), request))
-                .orElseGet(() -> Fitter.fit(settings(), request, runner));
+        Fit fit = regimes.gauge(refit.starts()).fit(request, runner);
         FitRecord record = new FitRecord(
                 timeline.nextFitNumber(),
                 known.bar(),
@@ -169,39 +157,5 @@ public final class Walk {
 
     private static Gauge gauge(Fit fit) {
         return fit.gauge().orElseThrow();
-    }
-
-    private FitSettings settings() {
-        return regimes.fitSettings(refit.starts());
-    }
-
-    private RegimeModel model(FixedParameters declared) {
-        List<Double> transition = new ArrayList<>();
-        declared.transition().forEach(transition::addAll);
-        return HiddenMarkov.of(array(declared.initial()), array(transition), emission(declared));
-    }
-
-    private Emission emission(FixedParameters declared) {
-        double[] means = array(declared.mean());
-        double[] deviations = array(declared.sd());
-        return switch (regimes.emission().form()) {
-            case NORMAL, NORMAL_DIAGONAL -> Normal.of(means, deviations);
-            case NORMAL_ZERO_MEAN -> Normal.zeroMean(deviations);
-            case NORMAL_TIED -> Normal.tied(means, deviations[0]);
-            case STUDENT_T -> StudentT.withDeviations(means, deviations, degreesOfFreedom(declared));
-        };
-    }
-
-    private double[] degreesOfFreedom(FixedParameters declared) {
-        if (regimes.emission().fixedDegreesOfFreedom().isEmpty()) {
-            return array(declared.degreesOfFreedom());
-        }
-        double[] same = new double[regimes.states().size()];
-        Arrays.fill(same, regimes.emission().fixedDegreesOfFreedom().getAsDouble());
-        return same;
-    }
-
-    private static double[] array(List<Double> values) {
-        return values.stream().mapToDouble(Double::doubleValue).toArray();
     }
 }

@@ -75,6 +75,46 @@ class ObjectShapeTest {
                 .containsExactly("t.yaml:1:7: 'high' is \"x\"; give a whole number");
     }
 
+    private static final Field<String> KIND =
+            Field.defaulted("kind", Shapes.word(List.of("round", "square", "flat"), word -> word), "round", "the kind");
+    private static final Field<Double> RADIUS = Field.defaulted("radius", Shapes.number(), "1", "of something round")
+            .onlyWith(KIND, List.of("round"));
+    private static final Field<Optional<Double>> SIDE =
+            Field.maybe("side", Shapes.number(), "of something with corners").onlyWith(KIND, List.of("square", "flat"));
+    private static final Shape<String> FORM =
+            Shapes.object("form", f -> f.get(KIND) + " " + f.get(RADIUS) + " " + f.get(SIDE), KIND, RADIUS, SIDE);
+
+    @Test
+    void aKeyThatBelongsToAWordIsReadAndWrittenOutBesideItOnly() {
+        assertThat(resolved("{}", FORM)).isEqualTo("{\"kind\":\"round\",\"radius\":1.0}");
+        assertThat(resolved("kind: square\nside: 2", FORM)).isEqualTo("{\"kind\":\"square\",\"side\":2.0}");
+        assertThat(Reading.of("kind: flat\nside: 2", FORM).value()).contains("flat 1.0 Optional[2.0]");
+    }
+
+    @Test
+    void aKeyBesideAWordItDoesNotBelongToIsRefusedWhereItStands() {
+        assertThat(Reading.of("side: 2", FORM).problems())
+                .containsExactly(
+                        "t.yaml:1:1: 'side' belongs to kind: square or flat, not to round; leave it out, or change"
+                                + " 'kind'");
+        assertThat(Reading.of("kind: flat\nradius: 3", FORM).problems())
+                .containsExactly(
+                        "t.yaml:2:1: 'radius' belongs to kind: round, not to flat; leave it out, or change 'kind'");
+    }
+
+    @Test
+    void besideAWordThatMeansNothingOnlyTheWordIsTold() {
+        assertThat(Reading.of("kind: sqare\nradius: 3", FORM).problems())
+                .hasSize(1)
+                .allSatisfy(told -> assertThat(told).startsWith("t.yaml:1:7: 'kind' is \"sqare\"; "));
+    }
+
+    @Test
+    void onlyAKeyThatMayBeMissingBelongsToAWordAndOnlyToOneThatHolds() {
+        assertThatThrownBy(() -> HIGH.onlyWith(KIND, List.of("flat"))).hasMessageContaining("'high' is required");
+        assertThatThrownBy(() -> LOW.onlyWith(NOTE, List.of("n"))).hasMessageContaining("'note' has no word");
+    }
+
     @Test
     void mistakesInADeclarationAreRefused() {
         assertThatThrownBy(() -> Field.defaulted("low", Shapes.number().atMost(1), "2", "a level"))

@@ -8,6 +8,7 @@ import java.util.List;
 import java.util.Optional;
 import org.junit.jupiter.api.Test;
 import sojourn.GivenPrices;
+import sojourn.archive.TimelineFiles;
 import sojourn.regime.RegimeModel;
 import sojourn.regime.StartRunner;
 
@@ -43,6 +44,14 @@ class WalkOnwardTest {
                     .anySatisfy(record ->
                             assertThat(record.fit().outcome().accepted()).isFalse());
         }
+    }
+
+    @Test
+    void withAThresholdOnVolatilityItEqualsAFreshOneToTheBit() {
+        GivenPrices prices = Walks.weathers(14, BARS, 2);
+        Observation gappy = new Walks.Gappy(bar -> bar % 7 == 3);
+        assertOnward(prices, Walks.threshold(new LogReturn("a")), Walks.expanding(200, Walks.every(20)));
+        assertOnward(prices, Walks.threshold(gappy), Walks.rolling(120, 150, RefitSchedule.FirstBarOf.MONTH));
     }
 
     @Test
@@ -106,6 +115,8 @@ class WalkOnwardTest {
                 assertThat(got.probability(bar, k)).isEqualTo(expected.probability(bar, k));
             }
         }
+        assertThat(TimelineFiles.fits(got, "x").csv())
+                .isEqualTo(TimelineFiles.fits(expected, "x").csv());
         assertThat(got.fits()).hasSameSizeAs(expected.fits());
         for (int i = 0; i < expected.fits().size(); i++) {
             FitRecord a = expected.fits().get(i);

@@ -10,7 +10,9 @@ import sojourn.market.Known;
 import sojourn.numeric.RandomStream;
 import sojourn.regime.EmissionFamily;
 import sojourn.regime.ModelKind;
+import sojourn.regime.RecentVolatility;
 import sojourn.regime.StartRunner;
+import sojourn.regime.VolatilityThresholdSettings;
 
 /** Prices with a calm and a stormy weather in them, and walks over them that are quick to fit. */
 final class Walks {
@@ -47,6 +49,20 @@ final class Walks {
                 EmissionFamily.NORMAL,
                 Optional.empty(),
                 Optional.empty());
+    }
+
+    /** Calm and stormy by the exponentially weighted volatility. */
+    static RegimeSettings threshold(Observation observation) {
+        return new RegimeSettings(
+                ModelKind.VOLATILITY_THRESHOLD,
+                List.of(observation),
+                List.of("calm", "stormy"),
+                EmissionFamily.NORMAL,
+                Optional.empty(),
+                Optional.empty(),
+                Optional.empty(),
+                new Particulars(
+                        Optional.of(new VolatilityThresholdSettings(new RecentVolatility.Exponential(0.9), 0.7, 0.5))));
     }
 
     /** One regime, which is fitted by a closed form: for tests that ask when fits are made, not what they find. */

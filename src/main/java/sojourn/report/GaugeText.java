@@ -1,0 +1,108 @@
+package sojourn.report;
+
+import java.time.LocalDate;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Locale;
+import java.util.OptionalDouble;
+import java.util.stream.Collectors;
+import sojourn.market.PriceTable;
+import sojourn.regime.ModelKind;
+import sojourn.regime.RecentVolatility;
+import sojourn.regime.VolatilityThresholdSettings;
+import sojourn.walk.FitPlan;
+import sojourn.walk.FixedParameters;
+import sojourn.walk.Observation;
+import sojourn.walk.RefitSchedule;
+import sojourn.walk.RefitSettings;
+import sojourn.walk.RegimeSettings;
+
+/** The sections {@code regimes} and {@code refit} in plain English. */
+final class GaugeText {
+    private GaugeText() {}
+
+    /** What it looks at, and what regimes it tells apart. */
+    static String watches(RegimeSettings regimes) {
+        String observed = regimes.observe().stream().map(Observation::inWords).collect(Collectors.joining(", "));
+        String ordered = ", ordered by the volatility of " + regimes.orderedBy() + " at every fit";
+        boolean named = regimes.model() == ModelKind.ONE_REGIME || regimes.model() == ModelKind.VOLATILITY_THRESHOLD;
+        return observed + "; " + model(regimes) + "; regimes " + String.join(", ", regimes.states())
+                + (named ? "" : ordered);
+    }
+
+    private static String model(RegimeSettings regimes) {
+        String kind = regimes.model().word();
+        return regimes.particulars()
+                .threshold()
+                .map(threshold -> kind + ": " + threshold(threshold, regimes.states()))
+                .orElseGet(() -> kind + ", " + regimes.emission().word() + degrees(regimes) + " emissions");
+    }
+
+    private static String threshold(VolatilityThresholdSettings threshold, List<String> states) {
+        return states.get(1) + " when " + volatility(threshold.volatility()) + " lies above the "
+                + threshold.stormAbove()
+                + " quantile of the window's, " + states.get(0) + " again when at or below the "
+                + threshold.calmBelow() + " quantile";
+    }
+
+    private static String volatility(RecentVolatility measure) {
+        if (measure instanceof RecentVolatility.Rolling rolling) {
+            return "the standard deviation of the last " + rolling.observations();
+        }
+        double decay = ((RecentVolatility.Exponential) measure).decay();
+        return "the exponentially weighted volatility of decay " + decay;
+    }
+
+    /** The parameters that were declared, in words. */
+    static String declared(RegimeSettings regimes, FixedParameters fixed, PriceTable table) {
+        List<String> each = new ArrayList<>();
+        double year = Math.sqrt(table.barLength().periodsPerYear());
+        for (int k = 0; k < regimes.states().size(); k++) {
+            each.add(String.format(
+                    Locale.ROOT,
+                    "%s has mean %s and deviation %s a bar (%.1f %% a year), stays with probability %s",
+                    regimes.states().get(k),
+                    fixed.mean().get(k),
+                    fixed.sd().get(k),
+                    100 * year * fixed.sd().get(k),
+                    fixed.transition().get(k).get(k)));
+        }
+        return String.join("; ", each);
+    }
+
+    private static String degrees(RegimeSettings regimes) {
+        OptionalDouble fixed = regimes.emission().fixedDegreesOfFreedom();
+        return fixed.isPresent() ? " of " + fixed.getAsDouble() + " degrees of freedom" : "";
+    }
+
+    /** When and on what it is fitted. */
+    static String fits(RefitSettings refit, RegimeSettings regimes, FitPlan plan) {
+        if (plan.fitDates().isEmpty()) {
+            return "none: first-fit-after is " + refit.firstFitAfter() + " and there are " + plan.observations()
+                    + " observations; this strategy will fail";
+        }
+        List<LocalDate> dates = plan.fitDates();
+        if (regimes.fixed().isPresent()) {
+            return "none: its parameters are declared (an external prior), in use from " + dates.get(0)
+                    + " on; the filter begins" + " afresh " + every(refit.schedule());
+        }
+        String what = regimes.model().hasLikelihood()
+                ? "maximum likelihood from " + refit.starts() + " starts and the fit before (seed " + refit.seed()
+                        + "), "
+                : "quantiles taken ";
+        String window = refit.rolling().isPresent()
+                ? "on the last " + refit.rolling().getAsInt() + " observations"
+                : "on all observations so far";
+        return what + dates.size() + " times from " + dates.get(0) + " to " + dates.get(dates.size() - 1) + ", "
+                + every(refit.schedule()) + ", " + window + "; parameters are frozen in between";
+    }
+
+    private static String every(RefitSchedule schedule) {
+        if (schedule instanceof RefitSchedule.EveryObservations count) {
+            return count.observations() == 1
+                    ? "at every observation"
+                    : "every " + count.observations() + " observations";
+        }
+        return "on the first bar of each " + schedule.toString().toLowerCase(Locale.ROOT);
+    }
+}
