@@ -8,7 +8,7 @@ import java.util.List;
  * between emissions, by trying all orders (at most 720). H^2 = 1 - sqrt(2 s1 s2 / (s1^2 + s2^2)) exp(-(m1 - m2)^2 / (4 (s1^2 +
  * s2^2))) for two normals.
  */
-final class Matching {
+public final class Matching {
     private final int[] newForOld;
     private final double cost;
 
@@ -18,7 +18,7 @@ final class Matching {
     }
 
     /** The best assignment, ties to the one that comes first in dictionary order. Both have the same number of states. */
-    static Matching of(Emission before, Emission now) {
+    public static Matching of(Emission before, Emission now) {
         int states = before.states();
         double least = Double.POSITIVE_INFINITY;
         int[] best = new int[0];
@@ -36,7 +36,7 @@ final class Matching {
     }
 
     /** Squared Hellinger distance of one state of each, between 0 and 1. */
-    static double squaredHellinger(Emission a, int i, Emission b, int j) {
+    public static double squaredHellinger(Emission a, int i, Emission b, int j) {
         double s1 = a.standardDeviation(i, 0);
         double s2 = b.standardDeviation(j, 0);
         double larger = StrictMath.max(s1, s2); // ratios do not overflow
@@ -48,12 +48,12 @@ final class Matching {
     }
 
     /** The new state that continues each old one, a copy. */
-    int[] newForOld() {
+    public int[] newForOld() {
         return newForOld.clone();
     }
 
     /** Total squared Hellinger distance. */
-    double cost() {
+    public double cost() {
         return cost;
     }
 
