@@ -24,14 +24,7 @@ final class CardsJson {
             ObjectNode fit = one.putObject("last_fit");
             fit.set("share_of_observations", EstimateNodes.of(card.lastFit().share(), "the fit has no shares"));
             fit.set("stay_bars", EstimateNodes.of(card.lastFit().stay(), NEVER_LEFT));
-            card.lastFit()
-                    .returns()
-                    .found()
-                    .ifPresentOrElse(
-                            moments -> returns(fit, subject, moments),
-                            () -> fit.put(
-                                    "returns_undefined_because",
-                                    card.lastFit().returns().because()));
+            returns(fit, subject, card.lastFit().returns());
             asLived(one.putObject("as_lived"), subject, card.asLived());
         }
     }

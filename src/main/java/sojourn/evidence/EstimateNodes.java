@@ -33,7 +33,7 @@ final class EstimateNodes {
     static ObjectNode of(OptionalDouble number, String because) {
         return number.isPresent()
                 ? of(Estimate.of(number.getAsDouble()))
-                : of(new Estimate.Undefined(Estimate.Reason.DOES_NOT_EXIST, because));
+                : of(new Estimate.Undefined(Estimate.Reason.NOT_APPLICABLE, because));
     }
 
     static ObjectNode test(TestResult test) {

@@ -2,37 +2,37 @@ package sojourn.evidence;
 
 import java.util.ArrayList;
 import java.util.List;
-import java.util.Optional;
-import sojourn.regime.FilterState;
+import sojourn.regime.Gauge;
+import sojourn.regime.GaugeFilter;
 import sojourn.regime.Observations;
-import sojourn.regime.RegimeModel;
 
 /** What one fit says at each bar from its window's start on, its parameters frozen; and what it would have said without a bar. */
 final class FrozenFilter {
-    private static final Observations NOTHING = Observations.of(1, new double[1], new boolean[] {true});
-
-    private final RegimeModel model;
+    private final int states;
+    private final Observations nothing;
     private final Observations rows;
     private final int start;
-    private final List<FilterState> after;
+    private final List<GaugeFilter> after;
 
-    private FrozenFilter(RegimeModel model, Observations rows, int start) {
-        this.model = model;
+    private FrozenFilter(Gauge gauge, Observations rows, int start) {
+        this.states = gauge.states();
+        this.nothing = Observations.of(rows.dimension(), new double[rows.dimension()], new boolean[] {true});
         this.rows = rows;
         this.start = start;
         this.after = new ArrayList<>(rows.size() + 1);
-        after.add(FilterState.before(model));
+        after.add(gauge.filter());
         for (int row = 0; row < rows.size(); row++) {
-            after.add(after.get(row).step(model, rows, row));
+            after.add(after.get(row).step(rows, row));
         }
     }
 
-    /** Up to, not including, bar {@code end}; empty where the fit has no filter to run. */
-    static Optional<FrozenFilter> of(Subject subject, Stretch stretch, int end) {
-        return stretch.record()
+    /** Of a stretch's fit, from its window's start up to, not including, bar {@code end}. */
+    static FrozenFilter of(Subject subject, Stretch stretch, int end) {
+        Gauge gauge = stretch.record()
                 .fit()
-                .model()
-                .map(model -> new FrozenFilter(model, subject.rows(stretch.windowStart(), end), stretch.windowStart()));
+                .gauge()
+                .orElseThrow(() -> new IllegalStateException("an accepted fit has a gauge"));
+        return new FrozenFilter(gauge, subject.rows(stretch.windowStart(), end), stretch.windowStart());
     }
 
     /** Its first bar. */
@@ -46,7 +46,7 @@ final class FrozenFilter {
     }
 
     int states() {
-        return model.states();
+        return states;
     }
 
     /** Probability of a regime at a bar. */
@@ -65,12 +65,12 @@ final class FrozenFilter {
      */
     int[] mostLikelyWithout(int bar) {
         int[] regimes = new int[end() - bar];
-        FilterState now = after.get(bar - start).step(model, NOTHING, 0);
+        GaugeFilter now = after.get(bar - start).step(nothing, 0);
         regimes[0] = mostLikely(now);
         boolean met = false;
         for (int later = bar + 1; later < end(); later++) {
             if (!met) {
-                now = now.step(model, rows, later - start);
+                now = now.step(rows, later - start);
                 met = near(now, after.get(later - start + 1));
             }
             regimes[later - bar] = met ? mostLikely(later) : mostLikely(now);
@@ -78,17 +78,17 @@ final class FrozenFilter {
         return regimes;
     }
 
-    private boolean near(FilterState one, FilterState other) {
+    private boolean near(GaugeFilter one, GaugeFilter other) {
         double apart = 0;
-        for (int k = 0; k < states(); k++) {
+        for (int k = 0; k < states; k++) {
             apart = Math.max(apart, Math.abs(one.probability(k) - other.probability(k)));
         }
         return apart < 1e-12;
     }
 
-    private int mostLikely(FilterState filter) {
+    private int mostLikely(GaugeFilter filter) {
         int best = 0;
-        for (int k = 1; k < states(); k++) {
+        for (int k = 1; k < states; k++) {
             best = filter.probability(k) > filter.probability(best) ? k : best;
         }
         return best;

@@ -19,9 +19,10 @@ public record IdentityCard(String regime, LastFit lastFit, AsLived asLived) {
      *
      * @param share of the window's observations, posterior-weighted
      * @param stay expected bars of a stay; empty where it is never left
-     * @param returns of the asset, a bar, weighted by the posterior probability of the regime
+     * @param returns of the asset, a bar, weighted by the probability of the regime given the whole window; of a gauge without a likelihood
+     *     as its fit has them, without errors
      */
-    public record LastFit(OptionalDouble share, OptionalDouble stay, Answer<WeightedMoments> returns) {}
+    public record LastFit(OptionalDouble share, OptionalDouble stay, WeightedMoments returns) {}
 
     /**
      * The walk.

@@ -11,6 +11,7 @@ import sojourn.inference.WeightedMoments;
 import sojourn.regime.Fit;
 import sojourn.regime.LongRun;
 import sojourn.regime.Smoothed;
+import sojourn.regime.WindowMoments;
 
 /** Makes the identity cards of a subject's regimes. */
 final class IdentityCards {
@@ -52,21 +53,33 @@ final class IdentityCards {
         return new IdentityCard.LastFit(share, stay, windowReturns(last, k));
     }
 
-    /** Weighted by the probability of the regime given the whole window, on bars with an observation. */
-    private Answer<WeightedMoments> windowReturns(Stretch last, int k) {
+    /** On bars with an observation. */
+    private WeightedMoments windowReturns(Stretch last, int k) {
         Fit fit = last.record().fit();
         if (fit.model().isEmpty()) {
-            return Answer.none("this gauge gives no probability of a regime given its whole window");
+            return withoutErrors(fit, k);
         }
         int end = last.from() + 1;
         Smoothed smoothed = Smoothed.of(fit.model().get(), subject.rows(last.windowStart(), end));
         int[] bars = IntStream.range(last.windowStart(), end)
-                .filter(bar -> subject.observed().has(bar) && subject.returns().has(bar))
+                .filter(bar -> subject.anyObserved(bar) && subject.returns().has(bar))
                 .toArray();
         double[] weights = Arrays.stream(bars)
                 .mapToDouble(bar -> smoothed.at(bar - last.windowStart(), k))
                 .toArray();
-        return Answer.of(WeightedMoments.of(weights, subject.returns().at(bars)));
+        return WeightedMoments.of(weights, subject.returns().at(bars));
+    }
+
+    private WeightedMoments withoutErrors(Fit fit, int k) {
+        WindowMoments moments = fit.moments().orElseThrow();
+        Estimate none = new Estimate.Undefined(
+                Estimate.Reason.NOT_APPLICABLE, "this gauge gives no probability of a regime given its whole window");
+        return new WeightedMoments(
+                fit.occupancy()[k] * fit.observations(),
+                Estimate.of(moments.mean(k, subject.asset())),
+                none,
+                Estimate.of(Math.sqrt(moments.covariance(k, subject.asset(), subject.asset()))),
+                none);
     }
 
     private IdentityCard.AsLived asLived(int k) {

@@ -15,7 +15,7 @@ import sojourn.regime.RegimeModel;
  */
 public final class ImpliedMoments {
     private static final Estimate NO_FOURTH = new Estimate.Undefined(
-            Estimate.Reason.DOES_NOT_EXIST,
+            Estimate.Reason.NOT_APPLICABLE,
             "a regime has 4 or fewer degrees of freedom, so that its kurtosis is infinite");
 
     private final RegimeModel model;

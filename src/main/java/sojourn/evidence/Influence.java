@@ -3,7 +3,6 @@ package sojourn.evidence;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
-import java.util.Optional;
 
 /**
  * What hangs on single bars: each bar's observation is left out in turn, everything else as it was, and the most likely regime asked again at
@@ -30,15 +29,15 @@ public final class Influence {
 
     /** Of every observation while a fit was in force. */
     static Answer<Influence> of(Subject subject) {
+        if (subject.stretches().isEmpty()) {
+            return Answer.none("no fit was accepted");
+        }
         List<LeftOut> bars = new ArrayList<>();
         for (Stretch stretch : subject.stretches()) {
-            Optional<FrozenFilter> filter = FrozenFilter.of(subject, stretch, stretch.end());
-            if (filter.isEmpty()) {
-                return Answer.none("this gauge has no filter that could be run without a bar");
-            }
+            FrozenFilter filter = FrozenFilter.of(subject, stretch, stretch.end());
             for (int bar = stretch.from(); bar < stretch.end(); bar++) {
-                if (subject.known(bar) && subject.observed().has(bar)) {
-                    bars.add(leftOut(filter.get(), stretch, bar));
+                if (subject.known(bar) && subject.anyObserved(bar)) {
+                    bars.add(leftOut(filter, stretch, bar));
                 }
             }
         }

@@ -7,9 +7,11 @@ import java.util.Optional;
 import java.util.OptionalDouble;
 import sojourn.regime.Emission;
 import sojourn.regime.Fit;
+import sojourn.regime.Gauge;
 import sojourn.regime.LongRun;
 import sojourn.regime.Matching;
-import sojourn.regime.RegimeModel;
+import sojourn.regime.Normal;
+import sojourn.regime.WindowMoments;
 
 /**
  * Whether the regimes are the same from fit to fit. Each accepted fit's regimes are matched to those of the accepted fit before, by least
@@ -31,53 +33,48 @@ public final class Lineage {
         this.steps = List.copyOf(steps);
     }
 
-    /** Through all accepted fits; nothing for a gauge whose regimes have no distribution to be matched by. */
+    /** Through all accepted fits. */
     static Answer<Lineage> of(Subject subject) {
         List<LineageStep> steps = new ArrayList<>();
-        Optional<FrozenFilter> old = Optional.empty();
         Optional<Stretch> before = Optional.empty();
+        Optional<FrozenFilter> old = Optional.empty();
         for (Stretch stretch : subject.stretches()) {
-            Fit fit = stretch.record().fit();
-            if (fit.model().isEmpty()) {
-                return Answer.none("the regimes of this gauge have no distribution to be matched by");
-            }
             int reach = Math.min(stretch.end() + 1, subject.timeline().endBar());
-            Optional<FrozenFilter> filter = FrozenFilter.of(subject, stretch, reach);
-            Optional<LineageStep.Before> compared = Optional.empty();
-            if (before.isPresent() && old.isPresent() && filter.isPresent()) {
-                compared = compared(before.get(), old.get(), stretch, filter.get());
-            }
-            steps.add(new LineageStep(stretch.record(), regimes(fit), compared));
-            old = filter;
+            FrozenFilter filter = FrozenFilter.of(subject, stretch, reach);
+            Optional<LineageStep.Before> compared = before.isPresent() && old.isPresent()
+                    ? compared(subject, before.get(), old.get(), stretch, filter)
+                    : Optional.empty();
+            steps.add(new LineageStep(stretch.record(), regimes(stretch.record().fit()), compared));
+            old = Optional.of(filter);
             before = Optional.of(stretch);
         }
         return steps.isEmpty() ? Answer.none("no fit was accepted") : Answer.of(new Lineage(steps));
     }
 
     private static List<LineageStep.OneRegime> regimes(Fit fit) {
-        RegimeModel model = fit.model().orElseThrow();
+        Gauge gauge = fit.gauge().orElseThrow();
         double[] deviations = fit.orderBy();
         List<LineageStep.OneRegime> regimes = new ArrayList<>();
         for (int k = 0; k < deviations.length; k++) {
-            regimes.add(new LineageStep.OneRegime(deviations[k], LongRun.expectedStay(model, k)));
+            regimes.add(new LineageStep.OneRegime(deviations[k], LongRun.expectedStay(gauge, k)));
         }
         return regimes;
     }
 
     private static Optional<LineageStep.Before> compared(
-            Stretch before, FrozenFilter old, Stretch now, FrozenFilter filter) {
-        if (old.states() != filter.states()) {
+            Subject subject, Stretch before, FrozenFilter old, Stretch now, FrozenFilter filter) {
+        Optional<Emission> earlier = likeness(subject, before);
+        Optional<Emission> later = likeness(subject, now);
+        if (old.states() != filter.states() || earlier.isEmpty() || later.isEmpty()) {
             return Optional.empty();
         }
-        Emission earlier = emission(before);
-        Emission later = emission(now);
-        Matching matching = Matching.of(earlier, later);
+        Matching matching = Matching.of(earlier.get(), later.get());
         int[] newForOld = matching.newForOld();
         Integer[] ancestor = new Integer[newForOld.length];
         Double[] distance = new Double[newForOld.length];
         for (int k = 0; k < newForOld.length; k++) {
             ancestor[newForOld[k]] = k;
-            distance[newForOld[k]] = Matching.squaredHellinger(earlier, k, later, newForOld[k]);
+            distance[newForOld[k]] = Matching.squaredHellinger(earlier.get(), k, later.get(), newForOld[k]);
         }
         return Optional.of(new LineageStep.Before(
                 before.record().number(),
@@ -87,8 +84,24 @@ public final class Lineage {
                 moved(old, filter, now.from())));
     }
 
-    private static Emission emission(Stretch stretch) {
-        return stretch.record().fit().model().orElseThrow().emission();
+    /** What regimes are matched by: their emissions; without any, normals of the asset's moments in the window. */
+    private static Optional<Emission> likeness(Subject subject, Stretch stretch) {
+        Fit fit = stretch.record().fit();
+        if (fit.model().isPresent()) {
+            return Optional.of(fit.model().get().emission());
+        }
+        WindowMoments moments = fit.moments().orElseThrow();
+        int asset = subject.asset();
+        double[] means = new double[moments.states()];
+        double[] deviations = new double[moments.states()];
+        for (int k = 0; k < means.length; k++) {
+            means[k] = moments.mean(k, asset);
+            deviations[k] = Math.sqrt(moments.covariance(k, asset, asset));
+            if (!(deviations[k] > 0)) {
+                return Optional.empty();
+            }
+        }
+        return Optional.of(Normal.of(means, deviations));
     }
 
     /** Over the bars up to {@code last} that both windows hold. */

@@ -84,7 +84,7 @@ public final class RegimeTables {
         regimes.forEach(regime -> header.add("distance." + regime));
         regimes.forEach(regime -> header.add("deviation." + regime));
         regimes.forEach(regime -> header.add("stay_bars." + regime));
-        header.addAll(List.of("starts", "starts_agreeing", "events"));
+        header.addAll(List.of("starts", "starts_agreeing", "runner_up_gap", "events"));
         Table table = new Table(header);
         List<LineageStep> steps = found.lineage().found().map(Lineage::steps).orElse(List.of());
         for (LineageStep step : steps) {
@@ -96,6 +96,11 @@ public final class RegimeTables {
             step.regimes().forEach(one -> row.add(one.stay()));
             row.add(Integer.toString(step.record().fit().starts()));
             row.add(Integer.toString(step.record().fit().startsAgreeing()));
+            row.add(step.record()
+                    .fit()
+                    .runnerUp()
+                    .map(one -> OptionalDouble.of(one.gapNats()))
+                    .orElseGet(OptionalDouble::empty));
             row.add(String.join("; ", step.record().events())).end();
         }
         return table;

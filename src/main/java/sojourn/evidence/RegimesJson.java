@@ -61,6 +61,7 @@ public final class RegimesJson {
         node.put("searched_from_several_starts", fits.searched());
         node.put("all_starts_agreed", fits.allAgreed());
         node.put("least_share_of_starts_agreeing", fits.leastShare());
+        node.put("with_a_second_maximum_within_2_nats", fits.rivalled());
         ArrayNode refused = node.putArray("refused");
         fits.refused().forEach(refused::add);
         return node;
@@ -105,7 +106,7 @@ public final class RegimesJson {
         for (Influence.LeftOut bar : decisive.subList(0, Math.min(SHOWN_BARS, decisive.size()))) {
             ObjectNode one = bars.addObject();
             one.put("date", subject.date(bar.bar()).toString());
-            one.put("observation", subject.observed().at(bar.bar()).orElseThrow());
+            subject.observed().at(bar.bar()).ifPresent(value -> one.put("observation", value));
             one.put("most_likely", regimes.get(bar.mostLikely()));
             one.put("without", regimes.get(bar.without()));
             one.put("closes_changed", bar.changed());

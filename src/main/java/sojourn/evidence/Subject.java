@@ -20,7 +20,7 @@ public final class Subject {
     private final RefitSettings refit;
     private final RegimeTimeline timeline;
     private final int asset;
-    private final PerBar observed;
+    private final List<PerBar> observed;
     private final PerBar returns;
     private final List<Stretch> stretches;
 
@@ -30,8 +30,7 @@ public final class Subject {
         this.refit = refit;
         this.timeline = timeline;
         this.asset = table.asset(regimes.orderedBy());
-        Observation seen = regimes.observe().get(0);
-        this.observed = PerBar.of(table.size(), bar -> bar == 0 ? OptionalDouble.empty() : seen.at(table.knownAt(bar)));
+        this.observed = regimes.observe().stream().map(this::seen).toList();
         this.returns = PerBar.of(table.size(), this::earned);
         this.stretches = List.copyOf(found());
     }
@@ -39,6 +38,10 @@ public final class Subject {
     /** {@code timeline} is the walk of these settings over these prices. */
     public static Subject of(PriceTable table, RegimeSettings regimes, RefitSettings refit, RegimeTimeline timeline) {
         return new Subject(table, regimes, refit, timeline);
+    }
+
+    private PerBar seen(Observation one) {
+        return PerBar.of(table.size(), bar -> bar == 0 ? OptionalDouble.empty() : one.at(table.knownAt(bar)));
     }
 
     private OptionalDouble earned(int bar) {
@@ -105,9 +108,19 @@ public final class Subject {
         return asset;
     }
 
-    /** What the model saw at a bar. */
+    /** What the gauge saw at each bar: the first of its observations if there are several. */
     public PerBar observed() {
-        return observed;
+        return observed.get(0);
+    }
+
+    /** Whether anything was observed on a bar. */
+    boolean anyObserved(int bar) {
+        return observed.stream().anyMatch(one -> one.has(bar));
+    }
+
+    /** How many numbers are observed at a close. */
+    int dimension() {
+        return observed.size();
     }
 
     /** Simple return of the asset on each bar but the first. */
@@ -149,12 +162,15 @@ public final class Subject {
 
     /** What was observed from bar {@code from} up to, not including, {@code end}. */
     Observations rows(int from, int end) {
-        double[] values = new double[end - from];
-        boolean[] missing = new boolean[end - from];
-        for (int row = 0; row < values.length; row++) {
-            missing[row] = !observed.has(from + row);
-            values[row] = observed.at(from + row).orElse(0);
+        int numbers = observed.size();
+        double[] values = new double[(end - from) * numbers];
+        boolean[] missing = new boolean[values.length];
+        for (int cell = 0; cell < values.length; cell++) {
+            PerBar series = observed.get(cell % numbers);
+            int bar = from + cell / numbers;
+            missing[cell] = !series.has(bar);
+            values[cell] = series.at(bar).orElse(0);
         }
-        return Observations.of(1, values, missing);
+        return Observations.withMissingCells(numbers, values, missing);
     }
 }

@@ -40,7 +40,7 @@ public sealed interface Estimate {
         /** The arithmetic left the range of double precision. */
         OUT_OF_RANGE,
         /** The quantity does not exist for what it is asked of, such as the variance of a distribution whose tails are too fat. */
-        DOES_NOT_EXIST
+        NOT_APPLICABLE
     }
 
     /** {@code amount} as a value; a number that is not finite is {@link Reason#OUT_OF_RANGE}. */

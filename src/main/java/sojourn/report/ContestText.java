@@ -1,5 +1,6 @@
 package sojourn.report;
 
+import java.util.ArrayList;
 import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Optional;
@@ -8,134 +9,170 @@ import java.util.Set;
 import sojourn.evidence.Calibration;
 import sojourn.evidence.Duel;
 import sojourn.evidence.ForecastContest;
+import sojourn.evidence.Ground;
 import sojourn.evidence.RegimeFindings;
 import sojourn.evidence.ScoreContest;
 import sojourn.evidence.Subject;
 
 /** How the strategy's own gauge forecasts beside others, for a terminal. */
 final class ContestText {
-    private ContestText() {}
+    private static final double SIGNIFICANT = 0.05;
+
+    private final Subject subject;
+    private final Set<Ground> grounds = new LinkedHashSet<>();
+
+    private ContestText(Subject subject) {
+        this.subject = subject;
+    }
 
     static String of(RegimeFindings found) {
-        Subject subject = found.subject();
+        ContestText contests = new ContestText(found.subject());
         StringBuilder text = new StringBuilder();
         text.append(RegimesText.section(
                 "Does it score what is observed better than cruder models?",
-                found.ofObservation().map(contest -> scores(subject, contest))));
+                found.ofObservation().map(contests::scores)));
         text.append(RegimesText.section(
                 "Does it score the next return better than other gauges?",
-                found.ofReturn().map(contest -> scores(subject, contest))));
+                found.ofReturn().map(contests::scores)));
         text.append(RegimesText.section(
-                "Which forecasts volatility best?", found.forecasts().map(contest -> forecasts(subject, contest))));
+                "Which forecasts volatility best?", found.forecasts().map(contests::forecasts)));
         found.absent()
                 .forEach((gauge, why) -> text.append(Lines.wrapped("Not compared: " + gauge + ", " + why + ".", 2)));
-        if (!found.absent().isEmpty()) {
-            text.append('\n');
+        if (!contests.grounds.isEmpty()) {
+            text.append(Lines.wrapped(
+                    "own ahead: by how much a bar the strategy's own gauge is better; DM, p: Diebold and Mariano's test of that,"
+                            + " robust to serial correlation; a small p says that it is hardly chance."
+                            + (contests.conditional() ? " GW p: Giacomini and White's." : ""),
+                    0));
         }
-        return text.toString();
+        contests.grounds.forEach(ground -> text.append(Lines.wrapped("Mind: " + ground.words() + ".", 2)));
+        return text.append('\n').toString();
     }
 
-    private static String scores(Subject subject, ScoreContest contest) {
-        Grid grid = new Grid(List.of("log score, out of sample", "nats a bar", "ahead of it", "DM", "p", "GW p"));
-        Set<String> grounds = new LinkedHashSet<>();
+    /** Whether Giacomini and White's test means anything here, so that its p-value has a column. */
+    private boolean conditional() {
+        return subject.refit().rolling().isPresent()
+                && subject.regimes().fixed().isEmpty();
+    }
+
+    private String scores(ScoreContest contest) {
+        Grid grid = new Grid(headings("log score, nats a bar", "mean", "own ahead", "DM", "p"));
         for (ScoreContest.Row row : contest.rows()) {
-            grid.add(cells("  " + row.gauge(), Figures.plain(OptionalDouble.of(row.mean()), "%.4f"), row.duel()));
-            row.duel().ifPresent(duel -> grounds.add(duel.ground().words()));
+            List<String> cells =
+                    new ArrayList<>(List.of("  " + row.gauge(), Figures.plain(OptionalDouble.of(row.mean()), "%.4f")));
+            cells.addAll(duel(row.duel()));
+            grid.add(cells);
         }
-        return grid.text() + window(subject, contest.bars(), contest.firstBar(), contest.lastBar()) + grounds(grounds);
+        return grid.text() + window(contest.bars(), contest.firstBar(), contest.lastBar());
     }
 
-    private static List<String> cells(String name, String mean, Optional<Duel> duel) {
-        return List.of(name, mean, ahead(duel, "%+.4f"), statistic(duel), p(duel), conditional(duel));
-    }
-
-    private static String forecasts(Subject subject, ForecastContest contest) {
-        Grid grid = new Grid(List.of(
-                "forecast of r^2",
-                "QLIKE",
-                "ahead of it",
-                "DM",
-                "p",
-                "sq. error",
-                "p",
+    private String forecasts(ForecastContest contest) {
+        Grid losses = new Grid(headings("loss of forecasts of r^2", "QLIKE", "own ahead", "DM", "p"));
+        Grid right = new Grid(List.of(
+                "right on average, one for one?",
                 "came/forecast",
                 "slope",
-                "a=0, b=1: p"));
-        Set<String> grounds = new LinkedHashSet<>();
+                "a=0, b=1: p",
+                "sq. error",
+                "own ahead: p"));
+        double own = contest.rows().get(0).squaredError();
         for (ForecastContest.Row row : contest.rows()) {
-            Calibration right = row.calibration();
-            grid.add(List.of(
+            List<String> cells =
+                    new ArrayList<>(List.of("  " + row.gauge(), Figures.plain(OptionalDouble.of(row.qlike()), "%.4f")));
+            cells.addAll(duel(row.byQlike()));
+            losses.add(cells);
+            Calibration calibration = row.calibration();
+            right.add(List.of(
                     "  " + row.gauge(),
-                    Figures.plain(OptionalDouble.of(row.qlike()), "%.4f"),
-                    ahead(row.byQlike(), "%+.4f"),
-                    statistic(row.byQlike()),
-                    p(row.byQlike()),
-                    relative(row, contest),
-                    p(row.bySquaredError()),
-                    Figures.plain(right.ratio().number(), "%.2f"),
-                    Figures.plain(right.slope().number(), "%.2f"),
-                    Figures.pValue(right.right().pValue().number())));
-            row.byQlike().ifPresent(duel -> grounds.add(duel.ground().words()));
+                    ContestText.withError(calibration),
+                    Figures.plain(calibration.slope().number(), "%.2f"),
+                    Figures.pValue(calibration.right().pValue().number()),
+                    own > 0 ? Figures.plain(OptionalDouble.of(row.squaredError() / own), "%.3f") : Figures.NONE,
+                    row.bySquaredError().map(ContestText::p).orElse("")));
         }
-        return grid.text()
-                + window(subject, contest.bars(), contest.firstBar(), contest.lastBar())
+        return losses.text()
+                + window(contest.bars(), contest.firstBar(), contest.lastBar())
+                + '\n'
+                + right.text()
                 + Lines.wrapped(
-                        "QLIKE: mean of ln h + r^2/h; sq. error: mean of (r^2 - h)^2 over that of the strategy's own gauge, p of the"
-                                + " difference; came/forecast: mean r^2 over mean h; slope b of r^2 = a + b h.",
+                        "QLIKE: mean of ln h + r^2/h, the less the better; came/forecast: mean r^2 over mean h ± one standard"
+                                + " error; slope b of r^2 = a + b h; sq. error: mean of (r^2 - h)^2 over the strategy's own, p"
+                                + " of the difference.",
                         0)
-                + grounds(grounds)
                 + verdict(contest);
     }
 
-    private static String relative(ForecastContest.Row row, ForecastContest contest) {
-        double own = contest.rows().get(0).squaredError();
-        return own > 0 ? Figures.plain(OptionalDouble.of(row.squaredError() / own), "%.3f") : Figures.NONE;
-    }
-
-    private static String verdict(ForecastContest contest) {
-        String text = "Best by QLIKE: " + contest.best() + ".";
-        if (contest.bestAgainstNext().isPresent()) {
-            Duel duel = contest.bestAgainstNext().get();
-            OptionalDouble p = duel.robust().corrected().pValue().number();
-            text += " It is ahead of " + duel.second() + " by "
-                    + Figures.plain(duel.robust().mean().number(), "%.4f") + " a bar (p " + Figures.pValue(p) + ")"
-                    + (p.isPresent() && p.getAsDouble() < 0.05 ? "." : ", which is no more than chance would give.");
+    private List<String> headings(String... always) {
+        List<String> headings = new ArrayList<>(List.of(always));
+        if (conditional()) {
+            headings.add("GW p");
         }
-        return Lines.wrapped(text, 0);
+        return headings;
     }
 
-    private static String window(Subject subject, int bars, int first, int last) {
-        return Lines.wrapped(
-                bars + " bars that all of them forecast, " + subject.date(first) + " to " + subject.date(last)
-                        + ". ahead of it: how much better the strategy's own is than this one, a bar; DM: Diebold and Mariano's"
-                        + " statistic, robust to serial correlation, with its p-value.",
-                0);
-    }
-
-    private static String grounds(Set<String> grounds) {
-        StringBuilder text = new StringBuilder();
-        grounds.forEach(words -> text.append(Lines.wrapped("Mind: " + words + ".", 2)));
-        return text.toString();
-    }
-
-    private static String ahead(Optional<Duel> duel, String format) {
-        return duel.map(one -> Figures.plain(one.robust().mean().number(), format))
-                .orElse("");
-    }
-
-    private static String statistic(Optional<Duel> duel) {
-        return duel.map(one ->
+    private List<String> duel(Optional<Duel> duel) {
+        duel.ifPresent(one -> grounds.add(one.ground()));
+        List<String> cells = new ArrayList<>();
+        cells.add(duel.map(one -> Figures.plain(one.robust().mean().number(), "%+.4f"))
+                .orElse(""));
+        cells.add(duel.map(one ->
                         Figures.plain(one.robust().corrected().statistic().number(), "%.2f"))
-                .orElse("");
+                .orElse(""));
+        cells.add(duel.map(ContestText::p).orElse(""));
+        if (conditional()) {
+            cells.add(duel.map(one -> Figures.pValue(one.conditional().pValue().number()))
+                    .orElse(""));
+        }
+        return cells;
     }
 
-    private static String p(Optional<Duel> duel) {
-        return duel.map(one -> Figures.pValue(one.robust().corrected().pValue().number()))
-                .orElse("");
+    private static String withError(Calibration calibration) {
+        return Figures.plain(calibration.ratio().number(), "%.2f") + " ± "
+                + Figures.plain(calibration.ratioError().number(), "%.2f");
     }
 
-    private static String conditional(Optional<Duel> duel) {
-        return duel.map(one -> Figures.pValue(one.conditional().pValue().number()))
-                .orElse("");
+    private String verdict(ForecastContest contest) {
+        StringBuilder text =
+                new StringBuilder("Best by QLIKE: ").append(contest.best()).append('.');
+        contest.bestAgainstNext()
+                .ifPresent(duel -> text.append(" It is ahead of ")
+                        .append(duel.second())
+                        .append(" by ")
+                        .append(Figures.plain(duel.robust().mean().number(), "%.4f"))
+                        .append(" a bar")
+                        .append(howSure(duel)));
+        for (ForecastContest.Row row : contest.rows()) {
+            boolean told = contest.bestAgainstNext()
+                    .map(Duel::second)
+                    .filter(subject.gauge()::equals)
+                    .isPresent();
+            if (row.gauge().equals(contest.best()) && row.byQlike().isPresent() && !told) {
+                Duel duel = row.byQlike().get();
+                text.append(" The strategy's own, ")
+                        .append(subject.gauge())
+                        .append(", is behind it by ")
+                        .append(Figures.plain(
+                                OptionalDouble.of(-duel.robust().mean().number().orElseThrow()), "%.4f"))
+                        .append(howSure(duel));
+            }
+        }
+        return Lines.wrapped(text.toString(), 0);
+    }
+
+    private static String howSure(Duel duel) {
+        OptionalDouble p = duel.robust().corrected().pValue().number();
+        boolean sure = p.isPresent() && p.getAsDouble() < SIGNIFICANT;
+        return " (p " + p(duel) + ")" + (sure ? "." : ", which may be chance.");
+    }
+
+    private static String p(Duel duel) {
+        return Figures.pValue(duel.robust().corrected().pValue().number());
+    }
+
+    private String window(int bars, int first, int last) {
+        return Lines.wrapped(
+                "Out of sample, the " + bars + " bars that all of them forecast, " + subject.date(first) + " to "
+                        + subject.date(last) + ".",
+                0);
     }
 }

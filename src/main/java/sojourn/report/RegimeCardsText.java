@@ -25,19 +25,12 @@ final class RegimeCardsText {
         Grid lived =
                 new Grid(List.of("As lived", "share", "likely", "stay", "stays", "vol. next bar", "mean next bar"));
         for (IdentityCard card : cards) {
-            String volatility = "n/a";
-            String mean = "n/a";
-            if (card.lastFit().returns().found().isPresent()) {
-                WeightedMoments returns = card.lastFit().returns().found().get();
-                volatility = volatility(subject, returns);
-                mean = mean(subject, returns);
-            }
             fit.add(List.of(
                     "  " + card.regime(),
                     Figures.percent(card.lastFit().share()),
                     bars(card.lastFit().stay()),
-                    volatility,
-                    mean));
+                    volatility(subject, card.lastFit().returns()),
+                    mean(subject, card.lastFit().returns())));
             IdentityCard.AsLived own = card.asLived();
             lived.add(List.of(
                     "  " + card.regime(),
@@ -51,14 +44,15 @@ final class RegimeCardsText {
         StringBuilder text = new StringBuilder(fit.text());
         text.append(Lines.wrapped(
                 "share: of the window's observations, weighted by the probability given the whole window; stay: expected bars;"
-                        + " volatility and mean of " + subject.assetName()
-                        + "'s simple returns, a year, +- one standard error robust to serial correlation.",
+                        + " volatility and mean of the simple returns of " + subject.assetName()
+                        + ", a year, ± one standard error robust to serial correlation.",
                 0));
-        text.append(lived.text());
+        text.append('\n').append(lived.text());
         text.append(Lines.wrapped(
                 "share: mean filtered probability; likely: share of closes at which it was the most likely; stay: mean bars in a row,"
                         + " stays: how often; next bar: the returns that followed, weighted by the probability forecast for them.",
                 0));
+        text.append('\n');
         for (IdentityCard card : cards) {
             text.append(largest(subject, card));
         }
@@ -90,7 +84,7 @@ final class RegimeCardsText {
         return error.number().isPresent() && value.number().isPresent()
                 ? text
                         + String.format(
-                                Locale.ROOT, " +- %.1f", 100 * error.number().getAsDouble())
+                                Locale.ROOT, " ± %.1f", 100 * error.number().getAsDouble())
                 : text;
     }
 
@@ -135,7 +129,7 @@ final class RegimeCardsText {
                     bars(drift.stay().most()),
                     bars(drift.stay().last())));
         }
-        return text.append(grid.text()).toString();
+        return text.append('\n').append(grid.text()).toString();
     }
 
     private static String moved(Lineage lineage) {

@@ -93,10 +93,14 @@ public final class RegimesText {
         if (fits.searched() == 0) {
             return "";
         }
+        String second = fits.rivalled() == 0
+                ? ""
+                : " A second best maximum lay within 2 nats in " + fits.rivalled() + " of them.";
         return " In " + fits.allAgreed() + " of " + fits.searched()
                 + " fits that were searched for, every start ended at the same likelihood"
                 + (fits.allAgreed() == fits.searched()
                         ? "."
-                        : "; in the worst, " + Figures.percent(fits.leastShare()) + " of them.");
+                        : "; in the worst, " + Figures.percent(fits.leastShare()) + " of them.")
+                + second;
     }
 }

@@ -33,7 +33,7 @@ final class SingleBarsText {
                         Integer.toString(one.changed()),
                         subject.date(one.until()).toString()));
             }
-            text.append(grid.text());
+            text.append('\n').append(grid.text());
         }
         found.residuals().found().ifPresent(all -> text.append(surprises(subject, all, influence)));
         return text.toString();
@@ -57,7 +57,8 @@ final class SingleBarsText {
                     Figures.plain(residuals.onceIn(one.bar()), "%.3g"),
                     Integer.toString(one.changed())));
         }
-        return grid.text()
+        return '\n'
+                + grid.text()
                 + Lines.wrapped(
                         "once in bars: how often something so far out on either side comes, by the distribution forecast the close"
                                 + " before.",
