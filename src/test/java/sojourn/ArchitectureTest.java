@@ -61,9 +61,10 @@ class ArchitectureTest {
                         "strategy",
                         "archive"));
         table.put(
-                "report",
+                "evidence",
                 List.of(
                         "numeric",
+                        "inference",
                         "document",
                         "market",
                         "regime",
@@ -74,7 +75,24 @@ class ArchitectureTest {
                         "strategy",
                         "archive",
                         "compare"));
-        table.put("cli", List.of("document", "market", "world", "strategy", "archive", "compare", "report"));
+        table.put(
+                "report",
+                List.of(
+                        "numeric",
+                        "inference",
+                        "document",
+                        "market",
+                        "regime",
+                        "walk",
+                        "allocate",
+                        "trade",
+                        "measure",
+                        "strategy",
+                        "archive",
+                        "compare",
+                        "evidence"));
+        table.put(
+                "cli", List.of("document", "market", "world", "strategy", "archive", "compare", "evidence", "report"));
         return table;
     }
 
@@ -177,9 +195,10 @@ class ArchitectureTest {
     }
 
     @Test
-    void onlyRegimeSeesSmoothedProbabilities() {
+    void onlyRegimeAndEvidenceSeeSmoothedProbabilities() {
         noClasses()
-                .that(com.tngtech.archunit.base.DescribedPredicate.not(resideInAPackage("sojourn.regime")))
+                .that()
+                .resideOutsideOfPackages("sojourn.regime", "sojourn.evidence")
                 .should()
                 .dependOnClassesThat()
                 .haveFullyQualifiedName("sojourn.regime.Smoothed")

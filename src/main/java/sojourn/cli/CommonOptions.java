@@ -1,7 +1,12 @@
 package sojourn.cli;
 
 import java.nio.file.Path;
+import java.time.Instant;
+import java.time.temporal.ChronoUnit;
+import java.util.List;
+import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.Option;
+import sojourn.archive.RunFacts;
 
 /** Options that commands share. */
 final class CommonOptions {
@@ -40,6 +45,16 @@ final class CommonOptions {
 
     boolean json() {
         return json;
+    }
+
+    /** How this run went, for the record. */
+    RunFacts facts(CommandSpec spec, Instant started) {
+        List<String> command =
+                List.copyOf(spec.root().commandLine().getParseResult().originalArgs());
+        String host = System.getProperty("os.name") + " " + System.getProperty("os.arch") + ", Java "
+                + System.getProperty("java.version");
+        double seconds = ChronoUnit.MILLIS.between(started, Instant.now()) / 1000.0;
+        return new RunFacts(command, host, threads(), started.toString(), seconds);
     }
 
     boolean sensible() {

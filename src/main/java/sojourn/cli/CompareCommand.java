@@ -2,7 +2,6 @@ package sojourn.cli;
 
 import java.nio.file.Path;
 import java.time.Instant;
-import java.time.temporal.ChronoUnit;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.concurrent.Callable;
@@ -85,7 +84,7 @@ final class CompareCommand implements Callable<Integer> {
             compared = new Comparison(workers, progress).run(files);
         }
         String result = name.isEmpty() ? StrategyFiles.resultName(given) : name;
-        RunFacts facts = facts(started);
+        RunFacts facts = options.facts(spec, started);
         ResultFolder.Published published = ResultWriter.write(options.results(), result, compared, facts, paths);
         if (options.json()) {
             console.out().print(ComparisonJson.of(compared, published.folder()));
@@ -119,15 +118,6 @@ final class CompareCommand implements Callable<Integer> {
                         published.arrival() == ResultFolder.Arrival.WRITTEN
                                 ? "written to " + where
                                 : "the same result stands in " + where + " already; it was left alone");
-    }
-
-    private RunFacts facts(Instant started) {
-        List<String> command =
-                List.copyOf(spec.root().commandLine().getParseResult().originalArgs());
-        String host = System.getProperty("os.name") + " " + System.getProperty("os.arch") + ", Java "
-                + System.getProperty("java.version");
-        double seconds = ChronoUnit.MILLIS.between(started, Instant.now()) / 1000.0;
-        return new RunFacts(command, host, options.threads(), started.toString(), seconds);
     }
 
     private void refuseNonsense() {

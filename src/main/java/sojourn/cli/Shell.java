@@ -42,6 +42,7 @@ public final class Shell {
         Console console = new Console(out, err, terminal);
         line.addSubcommand(new CompareCommand(console));
         line.addSubcommand(new CheckCommand(console));
+        line.addSubcommand(new RegimesCommand(console));
         line.addSubcommand(new SchemaCommand(console));
         line.addSubcommand(new InventCommand(console));
         line.setOut(out);

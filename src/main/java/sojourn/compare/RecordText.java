@@ -3,13 +3,12 @@ package sojourn.compare;
 import com.fasterxml.jackson.databind.node.ArrayNode;
 import com.fasterxml.jackson.databind.node.JsonNodeFactory;
 import com.fasterxml.jackson.databind.node.ObjectNode;
-import java.util.LinkedHashMap;
+import java.util.ArrayList;
 import java.util.List;
-import java.util.Map;
 import java.util.OptionalInt;
 import sojourn.archive.Caution;
 import sojourn.archive.Digest;
-import sojourn.archive.ProgramVersion;
+import sojourn.archive.RecordParts;
 import sojourn.archive.RunFacts;
 import sojourn.document.JsonText;
 import sojourn.market.InputFile;
@@ -34,14 +33,7 @@ final class RecordText {
         root.set("timelines", timelines(compared));
         ArrayNode warnings = root.putArray("warnings");
         Warnings.of(compared).forEach(warnings::add);
-        ObjectNode run = root.putObject("outside_the_digest");
-        run.put("version", ProgramVersion.current());
-        ArrayNode command = run.putArray("command");
-        facts.command().forEach(command::add);
-        run.put("host", facts.host());
-        run.put("threads", facts.threads());
-        run.put("started_at", facts.startedAt());
-        run.put("seconds", facts.seconds());
+        root.set("outside_the_digest", RecordParts.outsideTheDigest(facts));
         return JsonText.indented(root);
     }
 
@@ -106,27 +98,13 @@ final class RecordText {
     }
 
     private static ArrayNode inputs(List<Prepared> prepared) {
-        Map<String, InputFile> distinct = new LinkedHashMap<>();
+        List<InputFile> read = new ArrayList<>();
         for (Prepared one : prepared) {
             if (one instanceof Prepared.Ready ready) {
-                ready.market()
-                        .files()
-                        .forEach(file -> distinct.putIfAbsent(
-                                file.sha256() + " " + file.role() + " " + file.contentDigest(), file));
+                read.addAll(ready.market().files());
             }
         }
-        ArrayNode inputs = JSON.arrayNode();
-        for (InputFile file : distinct.values()) {
-            ObjectNode node = inputs.addObject();
-            node.put("role", file.role());
-            node.put("file", file.file());
-            node.put("sha256", file.sha256());
-            node.put("content_sha256", file.contentDigest());
-            node.put("rows", file.rows());
-            node.put("first", file.first().toString());
-            node.put("last", file.last().toString());
-        }
-        return inputs;
+        return RecordParts.inputs(read);
     }
 
     private static ArrayNode timelines(Compared compared) {

@@ -38,7 +38,9 @@ public sealed interface Estimate {
         /** The quantity under a root or below a fraction line came out at or below 0. */
         NOT_POSITIVE,
         /** The arithmetic left the range of double precision. */
-        OUT_OF_RANGE
+        OUT_OF_RANGE,
+        /** The quantity does not exist for what it is asked of, such as the variance of a distribution whose tails are too fat. */
+        NOT_APPLICABLE
     }
 
     /** {@code amount} as a value; a number that is not finite is {@link Reason#OUT_OF_RANGE}. */

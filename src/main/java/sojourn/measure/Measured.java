@@ -116,6 +116,7 @@ public sealed interface Measured {
             case ZERO_VARIANCE -> Reason.ZERO_VARIANCE;
             case NOT_POSITIVE -> Reason.NOT_POSITIVE;
             case OUT_OF_RANGE -> Reason.OUT_OF_RANGE;
+            case NOT_APPLICABLE -> Reason.NOT_APPLICABLE;
         };
     }
 }

@@ -42,10 +42,10 @@ public final class LongRun {
     }
 
     /** Expected number of bars of one stay in regime {@code k}, 1 / (1 - a_kk); empty when the chain never leaves it. */
-    public static OptionalDouble expectedStay(RegimeModel model, int k) {
+    public static OptionalDouble expectedStay(Gauge gauge, int k) {
         double leave = 0;
-        for (int j = 0; j < model.states(); j++) {
-            leave += j == k ? 0 : model.transition(k, j);
+        for (int j = 0; j < gauge.states(); j++) {
+            leave += j == k ? 0 : gauge.transition(k, j);
         }
         return leave > 0 && Double.isFinite(1 / leave) ? OptionalDouble.of(1 / leave) : OptionalDouble.empty();
     }

@@ -10,7 +10,7 @@ import sojourn.numeric.Cholesky;
  * s2^2))) for two normals of one number; of several 1 - |S1|^(1/4) |S2|^(1/4) / |S|^(1/2) exp(-D' S^-1 D / 8), S = (S1 + S2)/2 and D the
  * difference of the means.
  */
-final class Matching {
+public final class Matching {
     private final int[] newForOld;
     private final double cost;
 
@@ -20,7 +20,7 @@ final class Matching {
     }
 
     /** The best assignment, ties to the one that comes first in dictionary order. Both have the same number of states. */
-    static Matching of(Emission before, Emission now) {
+    public static Matching of(Emission before, Emission now) {
         int states = before.states();
         double least = Double.POSITIVE_INFINITY;
         int[] best = new int[0];
@@ -38,7 +38,7 @@ final class Matching {
     }
 
     /** Squared Hellinger distance of one state of each, between 0 and 1. */
-    static double squaredHellinger(Emission a, int i, Emission b, int j) {
+    public static double squaredHellinger(Emission a, int i, Emission b, int j) {
         if (a instanceof MultivariateNormal many && b instanceof MultivariateNormal others) {
             return squaredHellinger(many, i, others, j);
         }
@@ -79,12 +79,12 @@ final class Matching {
     }
 
     /** The new state that continues each old one, a copy. */
-    int[] newForOld() {
+    public int[] newForOld() {
         return newForOld.clone();
     }
 
     /** Total squared Hellinger distance. */
-    double cost() {
+    public double cost() {
         return cost;
     }
 

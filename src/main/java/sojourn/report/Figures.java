@@ -30,6 +30,21 @@ final class Figures {
         return percent(OptionalDouble.of(fraction), "%.1f %%");
     }
 
+    /** A fraction as percent with one decimal, or n/a. */
+    static String percent(OptionalDouble fraction) {
+        return percent(fraction, "%.1f %%");
+    }
+
+    /** A plain number by a format such as {@code %.3f}, or n/a. */
+    static String plain(OptionalDouble number, String format) {
+        return number(number, format);
+    }
+
+    /** A probability of a test: three decimals, {@code <0.001} below. */
+    static String pValue(OptionalDouble p) {
+        return p.isPresent() && p.getAsDouble() < 0.0005 ? "<0.001" : number(p, "%.3f");
+    }
+
     /** A plain number with two decimals. */
     static String ratio(Measured measured) {
         return number(measured.number(), "%.2f");

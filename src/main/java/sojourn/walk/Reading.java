@@ -84,6 +84,11 @@ public final class Reading {
         return now;
     }
 
+    /** What each regime means for returns, by the fit in force. */
+    public WindowMoments moments() {
+        return moments;
+    }
+
     /** What one bar, {@code barsAhead} bars from now, is expected to return. */
     public Forecast forecast(int barsAhead) {
         return Forecast.mixing(predicted(barsAhead), moments);

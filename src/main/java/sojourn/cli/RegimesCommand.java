@@ -1,0 +1,86 @@
+package sojourn.cli;
+
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.time.Instant;
+import java.util.List;
+import java.util.concurrent.Callable;
+import picocli.CommandLine.Command;
+import picocli.CommandLine.Mixin;
+import picocli.CommandLine.Model.CommandSpec;
+import picocli.CommandLine.ParameterException;
+import picocli.CommandLine.Parameters;
+import picocli.CommandLine.Spec;
+import sojourn.archive.ResultFolder;
+import sojourn.compare.LocalWorkers;
+import sojourn.compare.Progress;
+import sojourn.evidence.RegimeInquiry;
+import sojourn.evidence.RegimesJson;
+import sojourn.evidence.RegimesWriter;
+import sojourn.report.RegimesText;
+import sojourn.strategy.StrategyFile;
+
+/** {@code sojourn regimes}. */
+@Command(
+        name = "regimes",
+        mixinStandardHelpOptions = true,
+        description = {
+            "Questions the regimes of one strategy, walked as compare walks them: who they are, whether they stay the same from fit to"
+                    + " fit, whether they forecast better than cruder gauges, whether their distributions are right, and what"
+                    + " hangs on single bars. Writes the findings and prints them.",
+            "",
+            "Example: sojourn regimes strategies/step-aside-in-storms.yaml"
+        })
+final class RegimesCommand implements Callable<Integer> {
+    private final Console console;
+
+    @Spec
+    @SuppressWarnings("NullAway.Init") // set by the command line library
+    private CommandSpec spec;
+
+    @Parameters(paramLabel = "FILE", description = "A strategy file.")
+    @SuppressWarnings("NullAway.Init") // set by the command line library
+    private Path given;
+
+    @Mixin
+    private final CommonOptions options = new CommonOptions();
+
+    RegimesCommand(Console console) {
+        this.console = console;
+    }
+
+    @Override
+    public Integer call() {
+        refuseNonsense();
+        ResultFolder.refuseUnless(options.results());
+        Instant started = Instant.now();
+        StrategyFile file = StrategyFiles.read(List.of(given)).get(0);
+        Progress progress = options.quiet() ? Progress.silent() : TerminalProgress.on(console);
+        RegimeInquiry inquiry;
+        try (LocalWorkers workers = new LocalWorkers(options.threads())) {
+            inquiry = RegimeInquiry.of(file, workers, progress);
+        }
+        String name = StrategyFiles.resultName(List.of(given)) + "-regimes";
+        ResultFolder.Published published =
+                RegimesWriter.write(options.results(), name, inquiry, options.facts(spec, started));
+        console.out().print(options.json() ? RegimesJson.of(inquiry) : RegimesText.of(inquiry));
+        if (!options.quiet()) {
+            String where = published.folder().toString();
+            console.err()
+                    .println(
+                            published.arrival() == ResultFolder.Arrival.WRITTEN
+                                    ? "written to " + where
+                                    : "the same result stands in " + where + " already; it was left alone");
+        }
+        return 0;
+    }
+
+    private void refuseNonsense() {
+        if (!options.sensible()) {
+            throw new ParameterException(spec.commandLine(), "--threads must be from 0 to 1024");
+        }
+        if (Files.isDirectory(given)) {
+            throw new ParameterException(spec.commandLine(), given + " is a folder; name one strategy file");
+        }
+    }
+}

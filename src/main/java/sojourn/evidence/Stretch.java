@@ -1,0 +1,13 @@
+package sojourn.evidence;
+
+import sojourn.walk.FitRecord;
+
+/**
+ * The bars that one accepted fit was in force.
+ *
+ * @param record the fit
+ * @param windowStart the bar of its window's first observation
+ * @param from the bar it was made on
+ * @param end one past its last bar: the next accepted fit's bar, or the end of the walk
+ */
+public record Stretch(FitRecord record, int windowStart, int from, int end) {}
