@@ -3,12 +3,24 @@ package sojourn.evidence;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import sojourn.regime.EmissionFamily;
 import sojourn.regime.ModelKind;
+import sojourn.regime.RecentVolatility;
+import sojourn.regime.VolatilityThresholdSettings;
+import sojourn.walk.Particulars;
 import sojourn.walk.RegimeSettings;
+import sojourn.walk.SimpleReturn;
 
 /** The gauges that a strategy's own is held against: every kind but its own, seeing the same and fitted at the same closes. */
 final class Rivals {
     private static final List<String> TWO = List.of("lower", "higher");
+
+    /** Decay of the volatility that the threshold looks at. Common practice, no source. */
+    private static final double DECAY = 0.94;
+    /** It storms in the upper fifth of the window's volatilities, until they leave the upper two fifths. */
+    private static final double STORM_ABOVE = 0.8;
+
+    private static final double CALM_BELOW = 0.6;
 
     private Rivals() {}
 
@@ -16,12 +28,30 @@ final class Rivals {
     static List<RegimeSettings> of(RegimeSettings own) {
         List<RegimeSettings> rivals = new ArrayList<>();
         for (ModelKind kind : ModelKind.values()) {
-            if (kind != own.model()) {
+            if (kind != own.model() && kind.hasLikelihood()) {
                 rivals.add(new RegimeSettings(
                         kind, own.observe(), states(kind, own), own.emission(), own.orderBy(), Optional.empty()));
             }
         }
+        if (own.model() != ModelKind.VOLATILITY_THRESHOLD) {
+            rivals.add(threshold(own));
+        }
         return List.copyOf(rivals);
+    }
+
+    /** Two regimes told by the recent volatility of the asset itself, as a desk without a model would. */
+    private static RegimeSettings threshold(RegimeSettings own) {
+        VolatilityThresholdSettings settings =
+                new VolatilityThresholdSettings(new RecentVolatility.Exponential(DECAY), STORM_ABOVE, CALM_BELOW);
+        return new RegimeSettings(
+                ModelKind.VOLATILITY_THRESHOLD,
+                List.of(new SimpleReturn(own.orderedBy())),
+                TWO,
+                EmissionFamily.NORMAL,
+                Optional.empty(),
+                Optional.of(own.orderedBy()),
+                Optional.empty(),
+                new Particulars(Optional.of(settings)));
     }
 
     /** As many regimes as the strategy's own, two if it has but one. */
