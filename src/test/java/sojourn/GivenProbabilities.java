@@ -16,12 +16,15 @@ public final class GivenProbabilities implements Signal {
     private final double[][] byBar;
     private final double[] transition;
     private final int from;
+    private final Optional<WindowMoments> moments;
 
-    private GivenProbabilities(List<String> regimes, double[][] byBar, double[] transition, int from) {
+    private GivenProbabilities(
+            List<String> regimes, double[][] byBar, double[] transition, int from, Optional<WindowMoments> moments) {
         this.regimes = regimes;
         this.byBar = byBar;
         this.transition = transition;
         this.from = from;
+        this.moments = moments;
     }
 
     /** Two regimes, calm and stormy, from the probability of stormy. */
@@ -30,7 +33,7 @@ public final class GivenProbabilities implements Signal {
         for (int bar = 0; bar < byBar.length; bar++) {
             byBar[bar] = new double[] {1 - probabilities[bar], probabilities[bar]};
         }
-        return new GivenProbabilities(List.of("calm", "stormy"), byBar, SYMMETRIC, 0);
+        return new GivenProbabilities(List.of("calm", "stormy"), byBar, SYMMETRIC, 0, Optional.empty());
     }
 
     /** Two regimes whose stormy probability wanders and often stands near 0 or 1. */
@@ -54,12 +57,22 @@ public final class GivenProbabilities implements Signal {
             identity[k * states + k] = 1;
             names[k] = "r" + k;
         }
-        return new GivenProbabilities(List.of(names), byBar, identity, 0);
+        return new GivenProbabilities(List.of(names), byBar, identity, 0, Optional.empty());
     }
 
     /** The same without readings before {@code bar}. */
     public GivenProbabilities startingAt(int bar) {
-        return new GivenProbabilities(regimes, byBar, transition, bar);
+        return new GivenProbabilities(regimes, byBar, transition, bar, moments);
+    }
+
+    /** The same with other transition probabilities, row-major. */
+    public GivenProbabilities moving(double... probabilities) {
+        return new GivenProbabilities(regimes, byBar, probabilities, from, moments);
+    }
+
+    /** The same with regimes that mean something for returns; as given, they mean that nothing moves. */
+    public GivenProbabilities meaning(WindowMoments returns) {
+        return new GivenProbabilities(regimes, byBar, transition, from, Optional.of(returns));
     }
 
     @Override
@@ -74,8 +87,8 @@ public final class GivenProbabilities implements Signal {
         }
         int states = regimes.size();
         int assets = known.assets().size();
-        WindowMoments moments =
+        WindowMoments still =
                 WindowMoments.of(states, assets, new double[states * assets], new double[states * assets * assets]);
-        return Optional.of(Reading.of(1, byBar[known.bar()], transition, moments));
+        return Optional.of(Reading.of(1, byBar[known.bar()], transition, moments.orElse(still)));
     }
 }

@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import sojourn.document.Field;
 import sojourn.document.Shape;
 import sojourn.document.Shapes;
@@ -16,7 +17,11 @@ import sojourn.numeric.Check;
  * @param weights by regime, then asset; every regime must be there; the rest is cash
  */
 public record Blend(
-        Map<String, Map<String, Double>> weights, ProbabilityKind probability, int confirm, double stepToward)
+        Map<String, Map<String, Double>> weights,
+        ProbabilityKind probability,
+        Optional<Smoothing> smooth,
+        int confirm,
+        double stepToward)
         implements Rule {
     /** The key under {@code allocate}. */
     static final String WORD = "blend";
@@ -32,9 +37,14 @@ public record Blend(
     public static final Shape<Blend> SHAPE = Shapes.object(
             WORD,
             f -> new Blend(
-                    f.get(WEIGHTS), f.get(RuleKeys.PROBABILITY), f.get(RuleKeys.CONFIRM), f.get(RuleKeys.STEP_TOWARD)),
+                    f.get(WEIGHTS),
+                    f.get(RuleKeys.PROBABILITY),
+                    f.get(RuleKeys.SMOOTH),
+                    f.get(RuleKeys.CONFIRM),
+                    f.get(RuleKeys.STEP_TOWARD)),
             WEIGHTS,
             RuleKeys.PROBABILITY,
+            RuleKeys.SMOOTH,
             RuleKeys.CONFIRM,
             RuleKeys.STEP_TOWARD);
 
@@ -43,6 +53,12 @@ public record Blend(
         Check.within(confirm, 1, Integer.MAX_VALUE, "confirm");
         Check.within(stepToward, Double.MIN_VALUE, 1, "stepToward");
         weights = RuleKeys.ordered(weights);
+    }
+
+    /** Of probabilities as they are. */
+    public Blend(
+            Map<String, Map<String, Double>> weights, ProbabilityKind probability, int confirm, double stepToward) {
+        this(weights, probability, Optional.empty(), confirm, stepToward);
     }
 
     @Override
@@ -68,7 +84,7 @@ public record Blend(
     }
 
     @Override
-    public Mechanism mechanism(List<String> regimes, List<String> assets) {
+    public Mechanism mechanism(List<String> regimes, List<String> assets, Limits limits) {
         return new Average(this, List.copyOf(regimes), RuleKeys.resolve(weights, regimes, assets), assets.size());
     }
 
@@ -83,7 +99,7 @@ public record Blend(
         }
 
         @Override
-        public Weights weights(double[] probabilities, int state, Stance lived) {
+        public Weights weights(Situation situation, double[] probabilities, int state, Stance lived) {
             if (lived.run() < rule.confirm && lived.wanted().isPresent()) {
                 return lived.wanted().get();
             }
@@ -98,8 +114,8 @@ public record Blend(
         }
 
         @Override
-        public Because because(double[] probabilities, Stance before, Stance lived) {
-            return new Mixed(rule.probability.prefix(), regimes, Weights.of(probabilities), lived, rule.confirm);
+        public Because because(Situation situation, double[] probabilities, Stance before, Stance lived) {
+            return new Mixed(RuleKeys.prefix(rule), regimes, Weights.of(probabilities), lived, rule.confirm);
         }
 
         @Override

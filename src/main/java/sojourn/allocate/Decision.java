@@ -16,6 +16,8 @@ public record Decision(Kind kind, Optional<Weights> target, Stance next, Because
     public enum Kind {
         /** Nothing is decided at this close; weights drift. */
         NONE,
+        /** A decision was due and the rule found no weights; nothing is ordered, weights drift. */
+        UNDEFINED,
         /** A target is decided, and what is held is near enough to it. */
         KEEP,
         /** A target is decided and ordered. */
@@ -38,6 +40,11 @@ public record Decision(Kind kind, Optional<Weights> target, Stance next, Because
     /** No decision at this close. */
     public static Decision none(Stance next, Because because) {
         return new Decision(Kind.NONE, Optional.empty(), next, because, Change.SAME);
+    }
+
+    /** A decision was due and there are no weights to decide on. */
+    public static Decision undefined(Stance next, Because because) {
+        return new Decision(Kind.UNDEFINED, Optional.empty(), next, because, Change.SAME);
     }
 
     /** Decided, and near enough to leave things as they are. */

@@ -13,7 +13,7 @@ final class Hysteresis implements Mechanism {
 
     Hysteresis(Switch rule, int regime, Weights in, Weights out) {
         this.rule = rule;
-        this.who = rule.probability().prefix() + rule.regime();
+        this.who = RuleKeys.prefix(rule) + rule.regime();
         this.regime = regime;
         this.in = in;
         this.out = out;
@@ -31,12 +31,12 @@ final class Hysteresis implements Mechanism {
     }
 
     @Override
-    public Weights weights(double[] probabilities, int state, Stance lived) {
+    public Weights weights(Situation situation, double[] probabilities, int state, Stance lived) {
         return state == OUT ? out : in;
     }
 
     @Override
-    public Because because(double[] probabilities, Stance before, Stance lived) {
+    public Because because(Situation situation, double[] probabilities, Stance before, Stance lived) {
         boolean was = before.lived() == OUT;
         boolean is = lived.lived() == OUT;
         return new Crossing(

@@ -86,6 +86,7 @@ public record Limits(double gross, double low, double high) {
     public List<Misfit> misfits(Rule rule) {
         List<Misfit> misfits = new ArrayList<>();
         rule.statedWeights().forEach((pointer, weights) -> misfits.addAll(misfits(pointer, weights)));
+        misfits.addAll(rule.misfits(this));
         return misfits;
     }
 

@@ -8,14 +8,14 @@ import sojourn.walk.Reading;
 /** Which probability of a regime a rule goes by. */
 public enum ProbabilityKind {
     /** Of the regime at this close. */
-    FILTERED("filtered", "") {
+    FILTERED("filtered", "", 0) {
         @Override
         double[] of(Reading reading) {
             return reading.filtered();
         }
     },
     /** Of the regime one bar ahead. */
-    PREDICTED("predicted", "predicted ") {
+    PREDICTED("predicted", "predicted ", 1) {
         @Override
         double[] of(Reading reading) {
             return reading.predicted(1);
@@ -27,10 +27,12 @@ public enum ProbabilityKind {
 
     private final String word;
     private final String prefix;
+    private final int barsAhead;
 
-    ProbabilityKind(String word, String prefix) {
+    ProbabilityKind(String word, String prefix, int barsAhead) {
         this.word = word;
         this.prefix = prefix;
+        this.barsAhead = barsAhead;
     }
 
     /** The word of the strategy file. */
@@ -41,6 +43,11 @@ public enum ProbabilityKind {
     /** What stands before a regime's name in a sentence. */
     String prefix() {
         return prefix;
+    }
+
+    /** Bars from the close to the one that the probabilities are of. */
+    int barsAhead() {
+        return barsAhead;
     }
 
     /** One probability a regime. */

@@ -5,6 +5,7 @@ import java.util.Collections;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import sojourn.document.Field;
 import sojourn.document.Nearest;
 import sojourn.document.Shape;
@@ -17,6 +18,11 @@ final class RuleKeys {
             ProbabilityKind.SHAPE,
             "filtered",
             "which probability of a regime counts: filtered (of this close) or predicted (one bar ahead)");
+
+    static final Field<Optional<Smoothing>> SMOOTH = Field.maybe(
+            "smooth",
+            Smoothing.SHAPE,
+            "average that probability over the closes so far before anything else is made of it; looks back only");
 
     static final Field<Integer> CONFIRM = Field.defaulted(
             "confirm",
@@ -39,6 +45,19 @@ final class RuleKeys {
             Shapes.named(Shapes.text(), WEIGHTS).as(RuleKeys::ordered);
 
     private RuleKeys() {}
+
+    /** A rule's own keys, then those that every rule takes. */
+    static Field<?>[] and(Field<?>... own) {
+        List<Field<?>> all = new ArrayList<>(List.of(own));
+        all.addAll(List.of(PROBABILITY, SMOOTH, CONFIRM, STEP_TOWARD));
+        return all.toArray(Field<?>[]::new);
+    }
+
+    /** What stands before a regime's name in a rule's sentences. */
+    static String prefix(Rule rule) {
+        return (rule.smooth().isPresent() ? "trailing " : "")
+                + rule.probability().prefix();
+    }
 
     /** The JSON pointer of a key below {@code pointer}. */
     static String child(String pointer, String key) {

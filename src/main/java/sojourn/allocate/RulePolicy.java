@@ -43,7 +43,7 @@ public final class RulePolicy implements Policy {
         List<Misfit> stays = Pacing.misfits(rule, stayAtLeast);
         Check.that(stays.isEmpty(), "nothing to stay in: " + stays);
         Pacing pacing = new Pacing(schedule, stayAtLeast, rule.stepToward(), limits, noTradeBand);
-        return new RulePolicy(rule, rule.mechanism(regimes, assets), pacing);
+        return new RulePolicy(rule, rule.mechanism(regimes, assets, limits), pacing);
     }
 
     @Override
@@ -52,14 +52,21 @@ public final class RulePolicy implements Policy {
             return withoutReading(situation, stance);
         }
         Reading reading = situation.reading().get();
-        double[] probabilities = rule.probability().of(reading);
-        Stance lived = mechanism.live(probabilities, stance);
-        Because because = mechanism.because(probabilities, stance, lived);
+        double[] now = rule.probability().of(reading);
+        Stance seen = rule.smooth()
+                .map(smoothing -> stance.averaging(smoothing.after(stance.trailing(), now)))
+                .orElse(stance);
+        double[] probabilities = seen.trailing().map(Trailing::probabilities).orElse(now);
+        Stance lived = mechanism.live(probabilities, seen);
+        Because because = mechanism.because(situation, probabilities, stance, lived);
         if (!pacing.decides(situation)) {
             return Decision.none(lived, because);
         }
         int state = pacing.allowedState(lived, situation.bar());
-        Weights wanted = mechanism.weights(probabilities, state, lived);
+        Wish wish = mechanism.weights(situation, probabilities, state, lived);
+        if (!(wish instanceof Weights wanted)) {
+            return Decision.undefined(lived, ((Wish.Undefined) wish).because());
+        }
         Decision decision = pacing.decide(situation, lived, state, wanted, explained(because, lived, state, stance));
         boolean driftAlone = decision.kind() == Decision.Kind.ORDER
                 && stance.wanted().filter(wanted::equals).isPresent();

@@ -20,6 +20,10 @@ public final class Rules {
                         "two sets of weights; one regime's probability decides between them, with hysteresis"));
         shapes.put(Table.WORD, Table.SHAPE.described("the weights of the most likely regime"));
         shapes.put(Blend.WORD, Blend.SHAPE.described("the weights of all regimes, averaged by their probabilities"));
+        shapes.put(
+                VolatilityTarget.WORD,
+                VolatilityTarget.SHAPE.described(
+                        "as much of a mix, or of each asset, as keeps its forecast volatility" + " at a stated level"));
         return shapes;
     }
 }

@@ -12,12 +12,20 @@ import java.util.Optional;
  * @param decided the state behind the last decision
  * @param switchedOn the bar at which a decision last changed the state; {@link #NONE} before that
  * @param wanted the rule's own weights at the last decision, before steps and limits; empty before the first decision
+ * @param trailing the probabilities averaged so far; empty for a rule that does not smooth them, and before the first reading
  */
-public record Stance(int lived, int candidate, int run, int decided, int switchedOn, Optional<Weights> wanted) {
+public record Stance(
+        int lived,
+        int candidate,
+        int run,
+        int decided,
+        int switchedOn,
+        Optional<Weights> wanted,
+        Optional<Trailing> trailing) {
     /** No state, no bar. */
     public static final int NONE = -1;
 
-    private static final Stance FIRST = new Stance(NONE, NONE, 0, NONE, NONE, Optional.empty());
+    private static final Stance FIRST = new Stance(NONE, NONE, 0, NONE, NONE, Optional.empty(), Optional.empty());
 
     /** Nothing seen, nothing decided. */
     public static Stance first() {
@@ -29,11 +37,16 @@ public record Stance(int lived, int candidate, int run, int decided, int switche
         return wanted.isEmpty();
     }
 
+    /** After one more close, for a rule that smooths its probabilities. */
+    Stance averaging(Trailing average) {
+        return new Stance(lived, candidate, run, decided, switchedOn, wanted, Optional.of(average));
+    }
+
     /** After one more close. */
     Stance living(int state, int forState, int closes) {
         return state == lived && forState == candidate && closes == run
                 ? this
-                : new Stance(state, forState, closes, decided, switchedOn, wanted);
+                : new Stance(state, forState, closes, decided, switchedOn, wanted, trailing);
     }
 
     /** After a decision at {@code bar} for {@code state}. The first decision switches nothing. */
@@ -42,6 +55,6 @@ public record Stance(int lived, int candidate, int run, int decided, int switche
         int switched = switches ? bar : switchedOn;
         return state == decided && wanted.isPresent() && wanted.get().equals(weights)
                 ? this
-                : new Stance(lived, candidate, run, state, switched, Optional.of(weights));
+                : new Stance(lived, candidate, run, state, switched, Optional.of(weights), trailing);
     }
 }

@@ -29,6 +29,7 @@ public record Switch(
         Map<String, Double> in,
         Map<String, Double> out,
         ProbabilityKind probability,
+        Optional<Smoothing> smooth,
         int confirm,
         double stepToward)
         implements Rule {
@@ -60,6 +61,7 @@ public record Switch(
                             f.get(IN),
                             f.get(OUT),
                             f.get(RuleKeys.PROBABILITY),
+                            f.get(RuleKeys.SMOOTH),
                             f.get(RuleKeys.CONFIRM),
                             f.get(RuleKeys.STEP_TOWARD)),
                     REGIME,
@@ -68,6 +70,7 @@ public record Switch(
                     IN,
                     OUT,
                     RuleKeys.PROBABILITY,
+                    RuleKeys.SMOOTH,
                     RuleKeys.CONFIRM,
                     RuleKeys.STEP_TOWARD)
             .refuse(Switch::crossedLevels);
@@ -80,6 +83,19 @@ public record Switch(
         Check.within(stepToward, Double.MIN_VALUE, 1, "stepToward");
         in = RuleKeys.ordered(in);
         out = RuleKeys.ordered(out);
+    }
+
+    /** Of probabilities as they are. */
+    public Switch(
+            String regime,
+            double leaveAbove,
+            double reEnterBelow,
+            Map<String, Double> in,
+            Map<String, Double> out,
+            ProbabilityKind probability,
+            int confirm,
+            double stepToward) {
+        this(regime, leaveAbove, reEnterBelow, in, out, probability, Optional.empty(), confirm, stepToward);
     }
 
     private static Optional<Refusal> crossedLevels(Switch rule) {
@@ -121,7 +137,7 @@ public record Switch(
     }
 
     @Override
-    public Mechanism mechanism(List<String> regimes, List<String> assets) {
+    public Mechanism mechanism(List<String> regimes, List<String> assets, Limits limits) {
         int index = regimes.indexOf(regime);
         Check.that(index >= 0, "no regime '" + regime + "'; known: " + regimes);
         return new Hysteresis(this, index, Weights.named(in, assets), Weights.named(out, assets));

@@ -3,6 +3,7 @@ package sojourn.allocate;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import sojourn.document.Field;
 import sojourn.document.Shape;
 import sojourn.document.Shapes;
@@ -15,7 +16,11 @@ import sojourn.numeric.Check;
  * @param weights by regime, then asset; every regime must be there; the rest is cash
  */
 public record Table(
-        Map<String, Map<String, Double>> weights, ProbabilityKind probability, int confirm, double stepToward)
+        Map<String, Map<String, Double>> weights,
+        ProbabilityKind probability,
+        Optional<Smoothing> smooth,
+        int confirm,
+        double stepToward)
         implements Rule {
     /** The key under {@code allocate}. */
     static final String WORD = "table";
@@ -31,9 +36,14 @@ public record Table(
     public static final Shape<Table> SHAPE = Shapes.object(
             WORD,
             f -> new Table(
-                    f.get(WEIGHTS), f.get(RuleKeys.PROBABILITY), f.get(RuleKeys.CONFIRM), f.get(RuleKeys.STEP_TOWARD)),
+                    f.get(WEIGHTS),
+                    f.get(RuleKeys.PROBABILITY),
+                    f.get(RuleKeys.SMOOTH),
+                    f.get(RuleKeys.CONFIRM),
+                    f.get(RuleKeys.STEP_TOWARD)),
             WEIGHTS,
             RuleKeys.PROBABILITY,
+            RuleKeys.SMOOTH,
             RuleKeys.CONFIRM,
             RuleKeys.STEP_TOWARD);
 
@@ -42,6 +52,12 @@ public record Table(
         Check.within(confirm, 1, Integer.MAX_VALUE, "confirm");
         Check.within(stepToward, Double.MIN_VALUE, 1, "stepToward");
         weights = RuleKeys.ordered(weights);
+    }
+
+    /** Of probabilities as they are. */
+    public Table(
+            Map<String, Map<String, Double>> weights, ProbabilityKind probability, int confirm, double stepToward) {
+        this(weights, probability, Optional.empty(), confirm, stepToward);
     }
 
     @Override
@@ -67,7 +83,7 @@ public record Table(
     }
 
     @Override
-    public Mechanism mechanism(List<String> regimes, List<String> assets) {
+    public Mechanism mechanism(List<String> regimes, List<String> assets, Limits limits) {
         return new Lookup(this, List.copyOf(regimes), RuleKeys.resolve(weights, regimes, assets));
     }
 
@@ -79,15 +95,15 @@ public record Table(
         }
 
         @Override
-        public Weights weights(double[] probabilities, int state, Stance lived) {
+        public Weights weights(Situation situation, double[] probabilities, int state, Stance lived) {
             return byRegime.get(state);
         }
 
         @Override
-        public Because because(double[] probabilities, Stance before, Stance lived) {
+        public Because because(Situation situation, double[] probabilities, Stance before, Stance lived) {
             int label = lived.candidate();
             return new Label(
-                    rule.probability,
+                    RuleKeys.prefix(rule),
                     regimes.get(label),
                     probabilities[label],
                     lived.run(),
@@ -108,12 +124,11 @@ public record Table(
         CANDIDATE
     }
 
-    private record Label(
-            ProbabilityKind kind, String who, double p, int run, int confirm, String held, Standing standing)
+    private record Label(String prefix, String who, double p, int run, int confirm, String held, Standing standing)
             implements Because {
         @Override
         public String sentence() {
-            String start = kind.prefix() + who + " " + Figure.of(p) + " is the most likely regime";
+            String start = prefix + who + " " + Figure.of(p) + " is the most likely regime";
             return standing == Standing.HELD
                     ? start
                     : start + " for " + run + " of " + confirm + " closes, stays with " + held;

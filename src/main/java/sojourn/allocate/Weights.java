@@ -6,7 +6,7 @@ import java.util.Map;
 import sojourn.numeric.Check;
 
 /** Shares of wealth, one an asset, in the order of the price table; what they leave of 1 is cash. Immutable. */
-public final class Weights {
+public final class Weights implements Wish {
     /** Differences of weights up to this are rounding. */
     static final double SLACK = 1e-12;
 

@@ -27,7 +27,10 @@ final class VariantRunner {
         Optional<Track> traded = Simulation.run(table, timeline, ready.policy(), terms, 0);
         if (traded.isEmpty()) {
             return failed(
-                    ready, "no decision bar follows the first accepted fit; give longer price files or fit earlier");
+                    ready,
+                    NeverDecided.reason(ready, timeline)
+                            .orElse("no decision bar follows the first accepted fit;"
+                                    + " give longer price files or fit earlier"));
         }
         Track track = traded.get();
         if (track.lastBar() - track.firstBar() <= terms.fill().barsToFirstReturn()) {

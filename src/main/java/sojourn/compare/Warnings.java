@@ -1,5 +1,6 @@
 package sojourn.compare;
 
+import java.time.LocalDate;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.LinkedHashSet;
@@ -9,6 +10,7 @@ import java.util.Set;
 import sojourn.market.BarLength;
 import sojourn.market.Finding;
 import sojourn.regime.Outcome;
+import sojourn.trade.Undecided;
 import sojourn.walk.FitRecord;
 import sojourn.walk.RegimeTimeline;
 
@@ -51,6 +53,7 @@ public final class Warnings {
                         + " had nothing left when the window began and has no row");
             }
         }
+        compared.ranked().forEach(one -> addUndecided(one.run(), warnings));
         addWindows(compared, warnings);
         return warnings;
     }
@@ -88,6 +91,18 @@ public final class Warnings {
     private static void doubt(List<String> doubts, int count, String what) {
         if (count > 0) {
             doubts.add(count + " " + what);
+        }
+    }
+
+    private static void addUndecided(Run.Traded run, List<String> warnings) {
+        List<Undecided> undecided = run.track().undecided();
+        if (!undecided.isEmpty()) {
+            Undecided first = undecided.get(0);
+            LocalDate date = run.ready().market().table().fillPrices().axis().date(first.bar());
+            warnings.add(
+                    run.file().slug() + ": at " + undecided.size() + " closes a decision was due and the rule had no"
+                            + " weights, so nothing was ordered; the first on " + date + ": "
+                            + first.because().sentence());
         }
     }
 

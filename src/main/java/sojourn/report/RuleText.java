@@ -6,6 +6,7 @@ import java.util.stream.Collectors;
 import sojourn.allocate.Blend;
 import sojourn.allocate.ProbabilityKind;
 import sojourn.allocate.Rule;
+import sojourn.allocate.Sizing;
 import sojourn.allocate.Switch;
 import sojourn.allocate.Table;
 
@@ -16,6 +17,10 @@ final class RuleText {
     static String of(Rule rule) {
         String which = rule.probability() == ProbabilityKind.PREDICTED ? "predicted" : "filtered";
         String text = sentence(rule, which);
+        if (rule.smooth().isPresent()) {
+            text += " Probabilities are averaged over the closes so far, a close counting half as much after "
+                    + rule.smooth().get().halfLife() + " bars.";
+        }
         if (rule.confirm() > 1) {
             text += " A change must hold on " + rule.confirm() + " closes running.";
         }
@@ -37,6 +42,9 @@ final class RuleText {
         }
         if (rule instanceof Blend one) {
             return "averages these mixes by the " + which + " probabilities: " + mixes(one.weights()) + ".";
+        }
+        if (rule instanceof Sizing one) {
+            return SizingText.of(one);
         }
         throw new IllegalArgumentException("no words for the rule '" + rule.word() + "'");
     }

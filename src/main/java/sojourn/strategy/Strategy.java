@@ -115,7 +115,7 @@ public record Strategy(
             named.add(observation.asset());
         }
         named.add(regimes.orderedBy());
-        rule.statedWeights().values().forEach(weights -> named.addAll(weights.keySet()));
+        named.addAll(rule.namedAssets());
         named.addAll(judge.buyAndHold().keySet());
         List<String> used = new ArrayList<>();
         for (String asset : prices.keySet()) {

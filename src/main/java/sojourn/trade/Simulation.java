@@ -30,6 +30,7 @@ public final class Simulation {
     private final Account account;
     private final Deque<Order> pending = new ArrayDeque<>();
     private final List<Order> dropped = new ArrayList<>();
+    private final List<Undecided> undecided = new ArrayList<>();
     private Stance stance = Stance.first();
     private Optional<Weights> target = Optional.empty();
     private double wealth;
@@ -60,7 +61,7 @@ public final class Simulation {
         Optional<Decision> first = Optional.empty();
         while (first.isEmpty() && start < table.size()) {
             Decision decision = ask(start, Weights.none(table.assets().size()));
-            if (decision.kind() == Decision.Kind.NONE) {
+            if (decision.target().isEmpty()) {
                 start++;
             } else {
                 first = Optional.of(decision);
@@ -85,6 +86,7 @@ public final class Simulation {
                 rows,
                 account.fills(),
                 unfilled(),
+                undecided,
                 ruinedOn,
                 account.writtenOff(),
                 stance);
@@ -118,6 +120,9 @@ public final class Simulation {
                 known, signal.at(known), regimes, weights, terms.fill().barsToFirstReturn());
         Decision decision = policy.at(situation, stance);
         stance = decision.next();
+        if (decision.kind() == Decision.Kind.UNDEFINED) {
+            undecided.add(new Undecided(bar, decision.because()));
+        }
         return decision;
     }
 

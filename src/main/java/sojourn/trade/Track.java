@@ -17,6 +17,7 @@ public final class Track {
     private final Rows rows;
     private final List<Fill> fills;
     private final List<Order> unfilled;
+    private final List<Undecided> undecided;
     private final OptionalInt ruinedOn;
     private final double writtenOff;
     private final Stance stance;
@@ -28,6 +29,7 @@ public final class Track {
             Rows rows,
             List<Fill> fills,
             List<Order> unfilled,
+            List<Undecided> undecided,
             OptionalInt ruinedOn,
             double writtenOff,
             Stance stance) {
@@ -37,6 +39,7 @@ public final class Track {
         this.rows = rows;
         this.fills = List.copyOf(fills);
         this.unfilled = List.copyOf(unfilled);
+        this.undecided = List.copyOf(undecided);
         this.ruinedOn = ruinedOn;
         this.writtenOff = writtenOff;
         this.stance = stance;
@@ -169,6 +172,11 @@ public final class Track {
     /** Orders that were never filled: due after the last bar, waiting for a price, replaced while waiting, or overtaken by ruin. */
     public List<Order> unfilled() {
         return unfilled;
+    }
+
+    /** Closes at which a decision was due and there were no weights, also before the first decision; in order. */
+    public List<Undecided> undecided() {
+        return undecided;
     }
 
     /**

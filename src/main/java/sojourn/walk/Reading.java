@@ -69,9 +69,13 @@ public final class Reading {
 
     /** Probability of each regime {@code bars} bars ahead: p A^bars, by repeated steps. */
     public double[] predicted(int bars) {
+        return ahead(filtered, bars);
+    }
+
+    private double[] ahead(double[] from, int bars) {
         Check.within(bars, 0, Integer.MAX_VALUE, "bars");
         int states = filtered.length;
-        double[] now = filtered.clone();
+        double[] now = from.clone();
         for (int step = 0; step < bars; step++) {
             double[] next = new double[states];
             for (int i = 0; i < states; i++) {
@@ -91,6 +95,12 @@ public final class Reading {
 
     /** What one bar, {@code barsAhead} bars from now, is expected to return. */
     public Forecast forecast(int barsAhead) {
-        return Forecast.mixing(predicted(barsAhead), moments);
+        return forecast(filtered, barsAhead);
+    }
+
+    /** The same if the regimes now had the probabilities {@code from}, one a regime. Not modified. */
+    public Forecast forecast(double[] from, int barsAhead) {
+        Check.that(from.length == filtered.length, from.length + " probabilities of " + filtered.length + " regimes");
+        return Forecast.mixing(ahead(from, barsAhead), moments);
     }
 }

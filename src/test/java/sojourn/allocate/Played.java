@@ -9,12 +9,17 @@ import sojourn.walk.Signal;
 /** A policy asked close by close, in a world where every order fills at once and weights never drift. */
 record Played(List<Decision> decisions) {
     static Played of(Policy policy, PriceTable table, Signal signal) {
+        return of(policy, table, signal, 2);
+    }
+
+    /** As {@link #of(Policy, PriceTable, Signal)}, an order's first whole bar ending {@code barsAhead} after its decision. */
+    static Played of(Policy policy, PriceTable table, Signal signal, int barsAhead) {
         List<Decision> decisions = new ArrayList<>();
         Stance stance = Stance.first();
         Weights held = Weights.none(table.assets().size());
         for (int bar = 0; bar < table.size(); bar++) {
             Situation situation =
-                    new Situation(table.knownAt(bar), signal.at(table.knownAt(bar)), signal.regimes(), held, 2);
+                    new Situation(table.knownAt(bar), signal.at(table.knownAt(bar)), signal.regimes(), held, barsAhead);
             Decision decision = policy.at(situation, stance);
             decisions.add(decision);
             stance = decision.next();

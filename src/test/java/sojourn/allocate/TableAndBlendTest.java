@@ -82,7 +82,7 @@ class TableAndBlendTest {
                     .containsExactly(
                             tuple(base + "/st~1ormy", "no regime is called 'st/ormy'"),
                             tuple(base + "/st~1ormy/b", "no asset is called 'b'"));
-            assertThatThrownBy(() -> rule.mechanism(REGIMES, List.of("a", "b")))
+            assertThatThrownBy(() -> rule.mechanism(REGIMES, List.of("a", "b"), Limits.longOnly()))
                     .isInstanceOf(IllegalArgumentException.class)
                     .hasMessageContaining("stormy");
         }

@@ -1,0 +1,44 @@
+package sojourn.allocate;
+
+import java.util.Optional;
+import sojourn.walk.Forecast;
+
+/** A rule that works weights out at every decision, from forecasts say, rather than choosing among stated ones. */
+public sealed interface Sizing extends Rule permits VolatilityTarget {
+    /** What it shares with every rule. */
+    Manner manner();
+
+    @Override
+    default ProbabilityKind probability() {
+        return manner().probability();
+    }
+
+    @Override
+    default Optional<Smoothing> smooth() {
+        return manner().smooth();
+    }
+
+    @Override
+    default int confirm() {
+        return manner().confirm();
+    }
+
+    @Override
+    default double stepToward() {
+        return manner().stepToward();
+    }
+
+    @Override
+    default Motion motion() {
+        return Motion.CONTINUOUS;
+    }
+
+    /**
+     * Moments of the first whole bar that an order decided now would be held for, regimes mixed by probabilities carried forward
+     * to that bar. {@code probabilities} are of this rule's kind, smoothed if it smooths. Not modified.
+     */
+    default Forecast forecast(Situation situation, double[] probabilities) {
+        int bars = situation.barsAhead() - probability().barsAhead();
+        return situation.reading().orElseThrow().forecast(probabilities, bars);
+    }
+}
