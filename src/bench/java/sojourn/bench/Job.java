@@ -66,7 +66,9 @@ final class Job {
                 "stormy", leaveAbove, 0.3, Map.of("a", 1.0), Map.of("a", 0.0), ProbabilityKind.FILTERED, 1, 1);
         RulePolicy policy =
                 RulePolicy.of(rule, Limits.longOnly(), Schedule.AT_EVERY_CLOSE, 1, 0.02, REGIMES, List.of("a"));
-        Track track = Simulation.run(table, timeline, policy, TERMS, 0).orElseThrow();
+        Track track = Simulation.run(
+                        table, timeline, policy, TERMS, timeline.firstBar().orElseThrow())
+                .orElseThrow();
         if (track.ledger().isEmpty()) {
             throw new IllegalStateException("the rule never traded");
         }

@@ -2,6 +2,7 @@ package sojourn.allocate;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 import sojourn.numeric.Check;
 
 /**
@@ -60,8 +61,8 @@ public record Pacing(Schedule schedule, int stayAtLeast, double stepToward, Limi
         Stance next = lived.deciding(state, wanted, situation.bar());
         Decision.Change change =
                 !lived.undecided() && state != lived.decided() ? Decision.Change.SWITCHED : Decision.Change.SAME;
-        return target.strictlyOutside(noTradeBand, held)
-                ? Decision.order(target, next, because, change)
-                : Decision.keep(target, next, because, change);
+        Decision.Kind kind = target.strictlyOutside(noTradeBand, held) ? Decision.Kind.ORDER : Decision.Kind.KEEP;
+        Optional<Weights> decided = target.equals(wanted) ? next.wanted() : Optional.of(target);
+        return new Decision(kind, decided, next, because, change);
     }
 }

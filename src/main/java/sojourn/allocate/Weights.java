@@ -3,6 +3,7 @@ package sojourn.allocate;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Map;
+import java.util.function.IntToDoubleFunction;
 import sojourn.numeric.Check;
 
 /** Shares of wealth, one an asset, in the order of the price table; what they leave of 1 is cash. Immutable. */
@@ -14,21 +15,27 @@ public final class Weights implements Wish {
     private final double cash;
 
     private Weights(double[] shares) {
-        this.shares = shares;
         double rest = 1;
         for (double share : shares) {
-            rest -= share;
+            rest -= Check.finite(share, "weight");
         }
+        this.shares = shares;
         // 1 - 0.7 - 0.2 - 0.1 is not quite 0, and full weight must not borrow a rounding error
         this.cash = Math.abs(rest) <= SLACK ? 0 : rest;
     }
 
     /** Copies {@code shares}; each must be finite. Not modified. */
     public static Weights of(double... shares) {
-        for (double share : shares) {
-            Check.finite(share, "weight");
-        }
         return new Weights(shares.clone());
+    }
+
+    /** The share of each asset by its index; each must be finite. */
+    public static Weights each(int assets, IntToDoubleFunction share) {
+        double[] shares = new double[assets];
+        for (int i = 0; i < assets; i++) {
+            shares[i] = share.applyAsDouble(i);
+        }
+        return new Weights(shares);
     }
 
     /** Nothing but cash. */
@@ -95,7 +102,7 @@ public final class Weights implements Wish {
 
     @Override
     public boolean equals(Object other) {
-        return other instanceof Weights that && Arrays.equals(shares, that.shares);
+        return this == other || (other instanceof Weights that && Arrays.equals(shares, that.shares));
     }
 
     @Override

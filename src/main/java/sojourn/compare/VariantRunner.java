@@ -24,7 +24,8 @@ final class VariantRunner {
         }
         PriceTable table = ready.market().table();
         Terms terms = strategy.trade().terms();
-        Optional<Track> traded = Simulation.run(table, timeline, ready.policy(), terms, 0);
+        Optional<Track> traded = Simulation.run(
+                table, timeline, ready.policy(), terms, timeline.firstBar().getAsInt());
         if (traded.isEmpty()) {
             return failed(
                     ready,

@@ -14,9 +14,6 @@ public final class Known {
     private final int bar;
 
     Known(PriceTable table, int bar) {
-        if (bar < 0 || bar >= table.size()) {
-            throw new IndexOutOfBoundsException("bar " + bar + " of a table of " + table.size());
-        }
         this.table = table;
         this.bar = bar;
     }
@@ -38,7 +35,7 @@ public final class Known {
 
     /** What was known after the close of an earlier bar. */
     public Known at(int knownBar) {
-        return new Known(table, known(knownBar));
+        return table.knownAt(known(knownBar));
     }
 
     /** Length of the bars. */

@@ -15,6 +15,7 @@ public final class PriceTable {
     private final List<String> assets;
     private final Bars[] bars;
     private final CashReturns cash;
+    private final Known[] known;
 
     /**
      * One asset's bars, a value a bar in each column. Closes are positive and finite everywhere; the other columns are there
@@ -86,6 +87,8 @@ public final class PriceTable {
         this.assets = assets;
         this.bars = bars;
         this.cash = cash;
+        this.known = new Known[axis.size()];
+        Arrays.setAll(known, bar -> new Known(this, bar));
     }
 
     /** From one {@link Bars} an asset, in the same order as {@code assets}. */
@@ -131,7 +134,10 @@ public final class PriceTable {
 
     /** What was known after the close of {@code bar}. */
     public Known knownAt(int bar) {
-        return new Known(this, bar);
+        if (bar < 0 || bar >= known.length) {
+            throw new IndexOutOfBoundsException("bar " + bar + " of a table of " + known.length);
+        }
+        return known[bar];
     }
 
     /** The whole table. Only {@code trade}, and what stands below it, may ask for this. */

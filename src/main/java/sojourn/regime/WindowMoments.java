@@ -1,5 +1,7 @@
 package sojourn.regime;
 
+import java.util.Arrays;
+
 /**
  * Mean and covariance of the simple returns of every asset in every regime, over the rows of one fit's window, weighted by the
  * window's posterior probabilities: mean_k = sum_t g_t(k) r_t / sum_t g_t(k), cov_k with the same weights and divisor. One
@@ -30,6 +32,13 @@ public final class WindowMoments {
                     + states + " states and " + assets + " assets");
         }
         return new WindowMoments(states, assets, means.clone(), covariances.clone());
+    }
+
+    /** The same covariances, every mean set to {@code mean}. */
+    public WindowMoments withMeans(double mean) {
+        double[] same = new double[means.length];
+        Arrays.fill(same, mean);
+        return new WindowMoments(states, assets, same, covariances);
     }
 
     /** Number of regimes. */

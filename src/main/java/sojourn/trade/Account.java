@@ -148,18 +148,9 @@ final class Account {
         cash = 0;
     }
 
-    /** The weight of an asset at the close of a bar. */
-    double weight(int asset, int bar, double wealth) {
-        return units[asset] * prices.close(asset, bar) / wealth;
-    }
-
     /** The weights at the close of a bar. */
     Weights weights(int bar, double wealth) {
-        double[] shares = new double[units.length];
-        for (int i = 0; i < shares.length; i++) {
-            shares[i] = weight(i, bar, wealth);
-        }
-        return Weights.of(shares);
+        return Weights.each(units.length, i -> units[i] * prices.close(i, bar) / wealth);
     }
 
     double cash() {

@@ -34,6 +34,7 @@ public final class Simulation {
     private Stance stance = Stance.first();
     private Optional<Weights> target = Optional.empty();
     private double wealth;
+    private Weights held;
     private OptionalInt ruinedOn = OptionalInt.empty();
 
     private Simulation(PriceTable table, Signal signal, Policy policy, Terms terms) {
@@ -43,13 +44,14 @@ public final class Simulation {
         this.terms = terms;
         this.regimes = List.copyOf(signal.regimes());
         this.account = new Account(table.fillPrices(), table.assets().size(), terms);
+        this.held = Weights.none(table.assets().size());
     }
 
     /**
      * The track from the policy's first decision on; empty if it never decides.
      *
-     * @param fromBar the first bar at whose close the policy is asked: 0 for a strategy, the strategy's first decision for a
-     *     yardstick that is to start with it
+     * @param fromBar the first bar at whose close the policy is asked: the first with a reading for a strategy, the strategy's first
+     *     decision for a yardstick that is to start with it
      */
     public static Optional<Track> run(PriceTable table, Signal signal, Policy policy, Terms terms, int fromBar) {
         Check.within(fromBar, 0, table.size() - 1, "fromBar");
@@ -60,7 +62,7 @@ public final class Simulation {
         int start = fromBar;
         Optional<Decision> first = Optional.empty();
         while (first.isEmpty() && start < table.size()) {
-            Decision decision = ask(start, Weights.none(table.assets().size()));
+            Decision decision = ask(start, held);
             if (decision.target().isEmpty()) {
                 start++;
             } else {
@@ -75,9 +77,9 @@ public final class Simulation {
         take(start, first);
         fillDue(start);
         mark(start);
-        write(rows, 0, start, first.change());
+        write(rows, 0, first.change());
         for (int bar = start + 1; bar < table.size(); bar++) {
-            write(rows, bar - start, bar, ruinedOn.isPresent() ? rest() : step(bar));
+            write(rows, bar - start, ruinedOn.isPresent() ? rest() : step(bar));
         }
         return new Track(
                 table.assets(),
@@ -100,7 +102,7 @@ public final class Simulation {
             return Decision.Change.SAME;
         }
         Order last = pending.peekLast();
-        Decision decision = ask(bar, last == null ? account.weights(bar, wealth) : last.target());
+        Decision decision = ask(bar, last == null ? held : last.target());
         take(bar, decision);
         if (due(bar)) { // never after an honest fill rule
             fillDue(bar);
@@ -168,7 +170,9 @@ public final class Simulation {
     private void mark(int bar) {
         if (ruinedOn.isEmpty()) {
             wealth = account.wealth(bar);
-            if (!(wealth > 0)) {
+            if (wealth > 0) {
+                held = account.weights(bar, wealth);
+            } else {
                 ruin(bar);
             }
         }
@@ -177,10 +181,11 @@ public final class Simulation {
     private void ruin(int bar) {
         account.ruin(bar);
         wealth = 0;
+        held = Weights.none(table.assets().size());
         ruinedOn = OptionalInt.of(bar);
     }
 
-    private void write(Track.Rows rows, int row, int bar, Decision.Change change) {
+    private void write(Track.Rows rows, int row, Decision.Change change) {
         rows.wealth[row] = wealth;
         rows.cash[row] = account.cash();
         rows.interest[row] = account.interest();
@@ -191,7 +196,7 @@ public final class Simulation {
         int assets = decided.size();
         for (int i = 0; i < assets; i++) {
             rows.units[row * assets + i] = account.units(i);
-            rows.weights[row * assets + i] = wealth > 0 ? account.weight(i, bar, wealth) : 0;
+            rows.weights[row * assets + i] = held.at(i);
             rows.targets[row * assets + i] = decided.at(i);
         }
     }

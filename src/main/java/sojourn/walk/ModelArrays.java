@@ -1,8 +1,6 @@
 package sojourn.walk;
 
-import java.util.Arrays;
 import sojourn.regime.Gauge;
-import sojourn.regime.WindowMoments;
 
 /** A fit's parameters laid out flat, as readings hold them. */
 final class ModelArrays {
@@ -19,22 +17,5 @@ final class ModelArrays {
             }
         }
         return flat;
-    }
-
-    /** The same covariances, every mean set to {@code mean}. */
-    static WindowMoments withMeans(WindowMoments moments, double mean) {
-        int states = moments.states();
-        int assets = moments.assets();
-        double[] means = new double[states * assets];
-        Arrays.fill(means, mean);
-        double[] covariances = new double[states * assets * assets];
-        for (int k = 0; k < states; k++) {
-            for (int a = 0; a < assets; a++) {
-                for (int b = 0; b < assets; b++) {
-                    covariances[(k * assets + a) * assets + b] = moments.covariance(k, a, b);
-                }
-            }
-        }
-        return WindowMoments.of(states, assets, means, covariances);
     }
 }

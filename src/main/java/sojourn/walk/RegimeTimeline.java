@@ -27,7 +27,7 @@ public final class RegimeTimeline implements Signal {
     private final double[] logScores;
     private final double[] expectedCash;
     private final boolean zeroMean;
-    private final double[][] transitions;
+    private final List<Optional<Reading>> readings;
 
     private RegimeTimeline(Builder builder) {
         this.regimes = builder.regimes;
@@ -40,9 +40,27 @@ public final class RegimeTimeline implements Signal {
         this.logScores = Arrays.copyOf(builder.logScores, builder.bars);
         this.expectedCash = Arrays.copyOf(builder.expectedCash, builder.bars);
         this.zeroMean = builder.zeroMean;
-        this.transitions = fits.stream()
-                .map(record -> record.fit().outcome().accepted() ? ModelArrays.transition(record) : new double[0])
-                .toArray(double[][]::new);
+        this.readings = made();
+    }
+
+    /** Made once, because every rule on this timeline asks for all of them. */
+    private List<Optional<Reading>> made() {
+        List<double[]> transitions = new ArrayList<>();
+        for (FitRecord record : fits) {
+            transitions.add(record.fit().outcome().accepted() ? ModelArrays.transition(record) : new double[0]);
+        }
+        List<Optional<Reading>> made = new ArrayList<>();
+        for (int row = 0; row < dates.length; row++) {
+            made.add(fitInForce[row] == 0 ? Optional.empty() : Optional.of(reading(row, transitions)));
+        }
+        return List.copyOf(made);
+    }
+
+    private Reading reading(int row, List<double[]> transitions) {
+        int fit = fitInForce[row];
+        int states = regimes.size();
+        double[] now = Arrays.copyOfRange(filtered, row * states, (row + 1) * states);
+        return Reading.sharing(fit, now, transitions.get(fit - 1), moments(fits.get(fit - 1), expectedCash[row]));
     }
 
     @Override
@@ -111,19 +129,12 @@ public final class RegimeTimeline implements Signal {
     /** The reading at a bar; empty before the first accepted fit and where the strategy stands aside. */
     public Optional<Reading> reading(int bar) {
         int row = bar - firstBar;
-        if (row < 0 || row >= dates.length || fitInForce[row] == 0) {
-            return Optional.empty();
-        }
-        FitRecord record = fits.get(fitInForce[row] - 1);
-        int states = regimes.size();
-        double[] now = Arrays.copyOfRange(filtered, row * states, (row + 1) * states);
-        return Optional.of(Reading.sharing(
-                record.number(), now, transitions[record.number() - 1], moments(record, expectedCash[row])));
+        return row < 0 || row >= readings.size() ? Optional.empty() : readings.get(row);
     }
 
     private WindowMoments moments(FitRecord record, double cash) {
         WindowMoments fitted = record.fit().moments().orElseThrow();
-        return zeroMean ? ModelArrays.withMeans(fitted, cash) : fitted;
+        return zeroMean ? fitted.withMeans(cash) : fitted;
     }
 
     /** Takes in bar after bar. */
