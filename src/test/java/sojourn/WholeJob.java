@@ -31,6 +31,7 @@ import sojourn.strategy.StrategyReader;
 import sojourn.trade.Simulation;
 import sojourn.trade.Terms;
 import sojourn.trade.Track;
+import sojourn.walk.Observation;
 import sojourn.walk.RegimeSettings;
 import sojourn.walk.RegimeTimeline;
 import sojourn.walk.Signal;
@@ -106,8 +107,10 @@ final class WholeJob {
         RegimeTimeline timeline = walk(market);
         List<Row> rows = new ArrayList<>();
         add(rows, "timeline", TimelineFiles.bars(timeline), "date");
-        String observation = file.strategy().regimes().observe().get(0).column();
-        add(rows, "fits", TimelineFiles.fits(timeline, observation), "fitted_on");
+        List<String> observed = file.strategy().regimes().observe().stream()
+                .map(Observation::column)
+                .toList();
+        add(rows, "fits", TimelineFiles.fits(timeline, observed), "fitted_on");
         Optional<Track> traded = trade(table, timeline);
         if (traded.isPresent()) {
             Track track = traded.get();

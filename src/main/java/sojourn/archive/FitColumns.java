@@ -7,6 +7,7 @@ import java.util.OptionalDouble;
 import java.util.function.Function;
 import sojourn.regime.Fit;
 import sojourn.regime.Gauge;
+import sojourn.regime.MultivariateNormal;
 import sojourn.regime.RegimeModel;
 import sojourn.regime.StudentT;
 import sojourn.regime.VolatilityThreshold;
@@ -33,9 +34,9 @@ final class FitColumns {
     /**
      * The columns of a timeline's gauges; those of a model with a likelihood where nothing could be fitted.
      *
-     * @param observation the observed series' column name
+     * @param observed the observed series' column names
      */
-    static List<Column> of(RegimeTimeline timeline, String observation) {
+    static List<Column> of(RegimeTimeline timeline, List<String> observed) {
         FitColumns all = new FitColumns(timeline.regimes());
         List<Gauge> gauges = timeline.fits().stream()
                 .flatMap(record -> record.fit().gauge().stream())
@@ -46,27 +47,52 @@ final class FitColumns {
         }
         all.transitions();
         if (likelihood) {
-            all.each(
-                    "mean." + observation + ".",
-                    Fit::model,
-                    (m, k) -> m.emission().mean(k, 0));
-            all.each(
-                    "sd." + observation + ".",
-                    Fit::model,
-                    (m, k) -> m.emission().standardDeviation(k, 0));
+            all.emissions(observed);
         }
         if (gauges.stream().anyMatch(VolatilityThreshold.class::isInstance)) {
             all.level("storm_above", VolatilityThreshold.Levels::stormAbove);
             all.level("calm_below", VolatilityThreshold.Levels::calmBelow);
         }
         if (timeline.fits().stream().anyMatch(record -> student(record.fit()).isPresent())) {
-            all.each("scale." + observation + ".", FitColumns::student, StudentT::scale);
+            all.each("scale." + observed.get(0) + ".", FitColumns::student, StudentT::scale);
             all.each("dof.", FitColumns::student, StudentT::degreesOfFreedom);
         }
         all.each("order_by.", FitColumns::gauged, (fit, k) -> fit.orderBy()[k]);
         all.stays();
         all.each("occupancy.", FitColumns::gauged, (fit, k) -> fit.occupancy()[k]);
         return all.columns;
+    }
+
+    private void emissions(List<String> observed) {
+        for (int column = 0; column < observed.size(); column++) {
+            int c = column;
+            each(
+                    "mean." + observed.get(c) + ".",
+                    Fit::model,
+                    (m, k) -> m.emission().mean(k, c));
+        }
+        for (int column = 0; column < observed.size(); column++) {
+            int c = column;
+            each(
+                    "sd." + observed.get(c) + ".",
+                    Fit::model,
+                    (m, k) -> m.emission().standardDeviation(k, c));
+        }
+        for (int first = 0; first < observed.size(); first++) {
+            for (int second = first + 1; second < observed.size(); second++) {
+                int a = first;
+                int b = second;
+                each(
+                        "correlation." + observed.get(a) + "." + observed.get(b) + ".",
+                        FitColumns::multivariate,
+                        (normal, k) -> normal.correlation(k, a, b));
+            }
+        }
+    }
+
+    private static Optional<MultivariateNormal> multivariate(Fit fit) {
+        return fit.model()
+                .flatMap(m -> m.emission() instanceof MultivariateNormal n ? Optional.of(n) : Optional.empty());
     }
 
     private static Optional<StudentT> student(Fit fit) {

@@ -52,9 +52,9 @@ public final class TimelineFiles {
     /**
      * {@code timelines/<key>.fits.csv}: a row a fit, refused ones too, with full precision.
      *
-     * @param observation the observed series' column name
+     * @param observed the observed series' column names
      */
-    public static Table fits(RegimeTimeline timeline, String observation) {
+    public static Table fits(RegimeTimeline timeline, List<String> observed) {
         List<String> header = new ArrayList<>(List.of(
                 "fit",
                 "fitted_on",
@@ -68,7 +68,7 @@ public final class TimelineFiles {
                 "iterations",
                 "starts",
                 "starts_agreeing"));
-        List<FitColumns.Column> numbers = FitColumns.of(timeline, observation);
+        List<FitColumns.Column> numbers = FitColumns.of(timeline, observed);
         numbers.forEach(column -> header.add(column.name()));
         header.add("events");
         header.add("explanation");

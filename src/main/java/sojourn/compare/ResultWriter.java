@@ -2,6 +2,7 @@ package sojourn.compare;
 
 import java.nio.file.Path;
 import java.util.LinkedHashSet;
+import java.util.List;
 import java.util.Optional;
 import java.util.Set;
 import sojourn.archive.ComparisonFile;
@@ -12,6 +13,7 @@ import sojourn.archive.TimelineFiles;
 import sojourn.archive.TradeFiles;
 import sojourn.document.YamlText;
 import sojourn.market.TimeAxis;
+import sojourn.walk.Observation;
 import sojourn.walk.RegimeTimeline;
 
 /** Writes a finished comparison: the table, every timeline, and the folders of the variants. */
@@ -49,11 +51,12 @@ public final class ResultWriter {
     }
 
     private static void writeTimeline(ResultFolder folder, Prepared.Ready ready, RegimeTimeline timeline) {
-        String observation = ready.file().strategy().regimes().observe().get(0).column();
+        List<String> observed = ready.file().strategy().regimes().observe().stream()
+                .map(Observation::column)
+                .toList();
         String base = TIMELINES + "/" + ready.timelineKey();
         folder.write(base + ".csv", TimelineFiles.bars(timeline).csv());
-        folder.write(
-                base + ".fits.csv", TimelineFiles.fits(timeline, observation).csv());
+        folder.write(base + ".fits.csv", TimelineFiles.fits(timeline, observed).csv());
     }
 
     private static void writeVariant(ResultFolder folder, Path target, Judgement one) {

@@ -37,9 +37,9 @@ public record FitSettings(ModelKind kind, int states, EmissionFamily emission, I
         return leastObservations(1);
     }
 
-    /** The same for so many series. */
-    public int leastObservations(int dimension) {
-        return StrictMath.max(Soundness.leastCount(dimension) * states, parameterCount(dimension) + 1);
+    @Override
+    public int leastObservations(int series) {
+        return StrictMath.max(Soundness.leastCount(series) * states, parameterCount(series) + 1);
     }
 
     @Override

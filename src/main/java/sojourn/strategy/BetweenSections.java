@@ -79,7 +79,8 @@ final class BetweenSections {
             return;
         }
         int window = refit.get().rolling().getAsInt();
-        int least = regimes.get().gauge(refit.get().starts()).leastObservations();
+        int series = regimes.get().observe().size();
+        int least = regimes.get().gauge(refit.get().starts()).leastObservations(series);
         if (window < least) {
             String what = "a window of " + window + " observations is too small to fit "
                     + regimes.get().states().size() + " regimes";

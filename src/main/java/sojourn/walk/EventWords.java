@@ -10,8 +10,16 @@ final class EventWords {
         return events.stream().map(event -> named(event, regimes)).toList();
     }
 
-    /** The same of one text. */
-    static String named(String event, List<String> regimes) {
+    /** An explanation with the regimes' names in place of {@code {k}}, and the observations' in place of {@code [j]}. */
+    static String named(String explanation, RegimeSettings regimes) {
+        String text = named(explanation, regimes.states());
+        for (int j = 0; j < regimes.observe().size(); j++) {
+            text = text.replace("[" + j + "]", regimes.observe().get(j).inWords());
+        }
+        return text;
+    }
+
+    private static String named(String event, List<String> regimes) {
         String text = event;
         for (int k = 0; k < regimes.size(); k++) {
             text = text.replace("{" + k + "}", regimes.get(k));

@@ -20,12 +20,13 @@ public record FitPlan(int observations, List<LocalDate> fitDates) {
 
     /** The plan of a walk with these settings. */
     public static FitPlan of(PriceTable table, RegimeSettings regimes, RefitSettings refit) {
-        Observation observation = regimes.observe().get(0);
         List<LocalDate> dates = new ArrayList<>();
         int present = 0;
         for (int bar = 0; bar < table.size(); bar++) {
             Known known = table.knownAt(bar);
-            boolean here = bar > 0 && observation.at(known).isPresent(); // a walk passes over the first bar
+            boolean here = bar > 0
+                    && regimes.observe().stream()
+                            .anyMatch(one -> one.at(known).isPresent()); // a walk passes over the first bar
             present += here ? 1 : 0;
             if (refit.schedule().due(known, present, here, refit.firstFitAfter())) {
                 dates.add(known.date());

@@ -2,6 +2,7 @@ package sojourn.walk;
 
 import java.time.LocalDate;
 import java.util.Arrays;
+import java.util.List;
 import java.util.OptionalDouble;
 import java.util.OptionalInt;
 import sojourn.market.Known;
@@ -9,21 +10,24 @@ import sojourn.regime.Observations;
 
 /**
  * Observations and asset returns as they came in, one row a bar from the bar of the first observation on. Rows are only ever
- * appended at a close, so a window taken now cannot hold anything later.
+ * appended at a close, so a window taken now cannot hold anything later. Of several series any may be missing on a bar; the bar has
+ * an observation when at least one is there.
  */
 final class ObservationLog {
-    private final Observation observation;
+    private final List<Observation> observed;
     private final int assets;
     private int firstBar = -1;
     private int rows;
     private int present;
-    private double[] values = new double[64];
-    private boolean[] missing = new boolean[64];
+    private double[] values;
+    private boolean[] missing;
     private double[] returns;
 
-    ObservationLog(Observation observation, int assets) {
-        this.observation = observation;
+    ObservationLog(List<Observation> observed, int assets) {
+        this.observed = List.copyOf(observed);
         this.assets = assets;
+        this.values = new double[64 * observed.size()];
+        this.missing = new boolean[64 * observed.size()];
         this.returns = new double[64 * assets];
     }
 
@@ -32,17 +36,21 @@ final class ObservationLog {
         if (known.bar() == 0) {
             return;
         }
-        OptionalDouble value = observation.at(known);
-        if (rows == 0 && value.isEmpty()) {
+        grow();
+        boolean any = false;
+        for (int column = 0; column < observed.size(); column++) {
+            OptionalDouble value = observed.get(column).at(known);
+            values[rows * observed.size() + column] = value.orElse(0);
+            missing[rows * observed.size() + column] = value.isEmpty();
+            any |= value.isPresent();
+        }
+        if (rows == 0 && !any) {
             return;
         }
         if (rows == 0) {
             firstBar = known.bar();
         }
-        grow();
-        values[rows] = value.orElse(0);
-        missing[rows] = value.isEmpty();
-        present += value.isPresent() ? 1 : 0;
+        present += any ? 1 : 0;
         for (int asset = 0; asset < assets; asset++) {
             returns[rows * assets + asset] = known.close(asset, known.bar()) / known.close(asset, known.bar() - 1) - 1;
         }
@@ -56,7 +64,7 @@ final class ObservationLog {
 
     /** Whether the last bar has an observation. */
     boolean lastPresent() {
-        return rows > 0 && !missing[rows - 1];
+        return rows > 0 && !missing(rows - 1);
     }
 
     /** The first row of a window that ends now: row 0, or the row of the last so-manieth observation. */
@@ -68,7 +76,7 @@ final class ObservationLog {
         int row = rows;
         while (wanted > 0) {
             row--;
-            wanted -= missing[row] ? 0 : 1;
+            wanted -= missing(row) ? 0 : 1;
         }
         return row;
     }
@@ -89,7 +97,11 @@ final class ObservationLog {
 
     /** The rows from {@code start} to now. */
     Observations window(int start) {
-        return Observations.of(1, Arrays.copyOfRange(values, start, rows), Arrays.copyOfRange(missing, start, rows));
+        int columns = observed.size();
+        return Observations.withMissingCells(
+                columns,
+                Arrays.copyOfRange(values, start * columns, rows * columns),
+                Arrays.copyOfRange(missing, start * columns, rows * columns));
     }
 
     /** The last row alone. */
@@ -111,11 +123,19 @@ final class ObservationLog {
         return column;
     }
 
+    private boolean missing(int row) {
+        boolean gap = true;
+        for (int cell = row * observed.size(); cell < (row + 1) * observed.size(); cell++) {
+            gap &= missing[cell];
+        }
+        return gap;
+    }
+
     private void grow() {
-        if (rows == values.length) {
-            values = Arrays.copyOf(values, 2 * rows);
-            missing = Arrays.copyOf(missing, 2 * rows);
-            returns = Arrays.copyOf(returns, 2 * rows * assets);
+        if (rows * observed.size() == values.length) {
+            values = Arrays.copyOf(values, 2 * values.length);
+            missing = Arrays.copyOf(missing, 2 * missing.length);
+            returns = Arrays.copyOf(returns, 2 * returns.length);
         }
     }
 }

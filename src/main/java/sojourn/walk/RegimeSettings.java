@@ -26,7 +26,7 @@ import sojourn.regime.VolatilityThresholdSettings;
  * The section {@code regimes} of a strategy file.
  *
  * @param model the kind of regime model
- * @param observe what it sees at each close; one series
+ * @param observe what it sees at each close: one series, or several of a normal model
  * @param states the regimes' names, from lowest to highest volatility
  * @param emission how an observation is distributed in a regime
  * @param initial where a chain of regimes starts; free when empty
@@ -46,7 +46,8 @@ public record RegimeSettings(
     private static final int MOST_STATES = 6;
 
     /** Reads the list {@code observe}. */
-    public static final Shape<List<Observation>> OBSERVATIONS = Shapes.list(Observation.shape(), 1, 1);
+    public static final Shape<List<Observation>> OBSERVATIONS =
+            Shapes.list(Observation.shape(), 1, FitSettings.MOST_SERIES).refuse(RegimeSettings::observedTwice);
 
     /** Reads the list {@code states}. */
     public static final Shape<List<String>> STATE_NAMES = Shapes.list(
@@ -57,8 +58,10 @@ public record RegimeSettings(
 
     private static final Field<ModelKind> MODEL =
             Field.defaulted("model", Shapes.word(models()), "hidden-markov", "the kind of regime model");
-    private static final Field<List<Observation>> OBSERVE =
-            Field.required("observe", OBSERVATIONS, "what the model sees at each close, e.g. log-return of an asset");
+    private static final Field<List<Observation>> OBSERVE = Field.required(
+            "observe",
+            OBSERVATIONS,
+            "what the model sees at each close, e.g. log-return of an asset; up to six series, seen together");
     private static final Field<List<String>> STATES =
             Field.required("states", STATE_NAMES, "names of the regimes, from lowest to highest volatility");
     private static final Field<Double> DEGREES_OF_FREEDOM =
@@ -166,6 +169,15 @@ public record RegimeSettings(
         return orderBy.orElseGet(() -> observe.get(0).asset());
     }
 
+    private static Optional<Refusal> observedTwice(List<Observation> observed) {
+        Set<String> seen = new HashSet<>();
+        return observed.stream()
+                .filter(one -> !seen.add(one.column()))
+                .findFirst()
+                .map(one -> new Refusal(
+                        "", one.inWords() + " is observed twice, and twice the same is no more", "leave one out"));
+    }
+
     private static Optional<Refusal> namedTwice(List<String> states) {
         Set<String> seen = new HashSet<>();
         return states.stream()
@@ -194,6 +206,13 @@ public record RegimeSettings(
                     "emission",
                     "normal-diagonal says that several series are independent within a regime, and one is observed",
                     "set emission: normal"));
+        }
+        if (observe.size() > 1 && !emission.multivariate()) {
+            faults.add(new Refusal(
+                    "emission",
+                    "the emission " + emission.word() + " is that of one series, and " + observe.size()
+                            + " are observed",
+                    "set emission: normal or normal-diagonal, or observe one"));
         }
         if (initial.isPresent() && model != ModelKind.HIDDEN_MARKOV) {
             faults.add(new Refusal(
@@ -224,6 +243,12 @@ public record RegimeSettings(
                     "states",
                     "the model volatility-threshold has two regimes, not " + states.size(),
                     "name two, the calmer first, or choose another model"));
+        }
+        if (observe.size() > 1) {
+            faults.add(new Refusal(
+                    "observe",
+                    "volatility-threshold measures one series, and " + observe.size() + " are observed",
+                    "observe one, or choose another model"));
         }
         observe.stream()
                 .filter(one -> !one.aroundZero())
@@ -257,6 +282,12 @@ public record RegimeSettings(
                     "parameters",
                     "declared parameters are those of the model hidden-markov, not of " + model.word(),
                     "set model: hidden-markov, or leave the parameters out"));
+        }
+        if (observe.size() > 1) {
+            faults.add(new Refusal(
+                    "parameters",
+                    "declared parameters are those of one series, and " + observe.size() + " are observed",
+                    "observe one, or leave the parameters out and let them be fitted"));
         }
         faults.addAll(faultsOfTails(given));
         if (emission.form() == EmissionFamily.Form.NORMAL_TIED

@@ -37,7 +37,7 @@ public final class Walk {
         this.refit = refit;
         this.runner = runner;
         this.orderAsset = table.asset(regimes.orderedBy());
-        this.log = new ObservationLog(regimes.observe().get(0), table.assets().size());
+        this.log = new ObservationLog(regimes.observe(), table.assets().size());
         this.timeline = new RegimeTimeline.Builder(
                 regimes.states(),
                 table.assets(),
@@ -145,7 +145,7 @@ public final class Walk {
                 known.date(log.bar(start)),
                 fit,
                 EventWords.named(fit.events(), regimes.states()),
-                EventWords.named(fit.explanation(), regimes.states()));
+                EventWords.named(fit.explanation(), regimes));
         timeline.fit(record);
         if (fit.outcome().accepted()) {
             inForce = Optional.of(new InForce(record, gauge(fit).filterAfter(window)));

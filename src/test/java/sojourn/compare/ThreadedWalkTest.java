@@ -52,8 +52,8 @@ class ThreadedWalkTest {
             // shortest decimals differ wherever bits differ
             assertThat(TimelineFiles.bars(threaded).csv())
                     .isEqualTo(TimelineFiles.bars(plain).csv());
-            assertThat(TimelineFiles.fits(threaded, "x").csv())
-                    .isEqualTo(TimelineFiles.fits(plain, "x").csv());
+            assertThat(TimelineFiles.fits(threaded, List.of("x")).csv())
+                    .isEqualTo(TimelineFiles.fits(plain, List.of("x")).csv());
         }
     }
 }

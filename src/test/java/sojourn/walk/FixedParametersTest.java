@@ -53,7 +53,10 @@ class FixedParametersTest {
         double[] x = new double[199];
         Arrays.setAll(x, i -> Math.log(PRICES.close(0, i + 1) / PRICES.close(0, i)));
         List<PlainFilter.Step> steps = PlainFilter.of(
-                        TimelineFiles.fits(timeline, "log_return_a"), 0, List.of("calm", "stormy"), "log_return_a")
+                        TimelineFiles.fits(timeline, List.of("log_return_a")),
+                        0,
+                        List.of("calm", "stormy"),
+                        "log_return_a")
                 .over(x);
         for (int bar = 100; bar < 200; bar++) {
             assertThat(timeline.probability(bar, 1))

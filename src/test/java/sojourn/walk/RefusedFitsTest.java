@@ -51,7 +51,10 @@ class RefusedFitsTest {
         double[] x = new double[nextAccepted.bar() - start];
         Arrays.setAll(x, row -> Math.log(PRICES.close(0, start + row) / PRICES.close(0, start + row - 1)));
         List<PlainFilter.Step> steps = PlainFilter.of(
-                        TimelineFiles.fits(timeline, "log_return_a"), kept - 1, timeline.regimes(), "log_return_a")
+                        TimelineFiles.fits(timeline, List.of("log_return_a")),
+                        kept - 1,
+                        timeline.regimes(),
+                        "log_return_a")
                 .over(x);
         assertThat(nextAccepted.bar()).isGreaterThan(from);
         for (int bar = from; bar < nextAccepted.bar(); bar++) {

@@ -56,7 +56,7 @@ class WalkAgainstPlainFilterTest {
         GivenPrices prices = Walks.weathers(11, BARS, 1);
         Observation observation = regimes.observe().get(0);
         RegimeTimeline timeline = Walks.forward(prices, regimes, refit);
-        Table fits = TimelineFiles.fits(timeline, observation.column());
+        Table fits = TimelineFiles.fits(timeline, List.of(observation.column()));
         assertThat(fits.rows()).hasSize(fitsExpected);
         double[] x = observed(prices.table(), observation);
         int checked = 0;

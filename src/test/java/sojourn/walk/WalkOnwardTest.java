@@ -115,8 +115,8 @@ class WalkOnwardTest {
                 assertThat(got.probability(bar, k)).isEqualTo(expected.probability(bar, k));
             }
         }
-        assertThat(TimelineFiles.fits(got, "x").csv())
-                .isEqualTo(TimelineFiles.fits(expected, "x").csv());
+        assertThat(TimelineFiles.fits(got, List.of("x")).csv())
+                .isEqualTo(TimelineFiles.fits(expected, List.of("x")).csv());
         assertThat(got.fits()).hasSameSizeAs(expected.fits());
         for (int i = 0; i < expected.fits().size(); i++) {
             FitRecord a = expected.fits().get(i);
