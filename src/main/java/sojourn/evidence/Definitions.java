@@ -32,7 +32,7 @@ final class Definitions {
         all.put(
                 "forecasts_of_squared_return",
                 "h = variance + squared mean, forecast the close before. qlike: mean of ln h + r^2/h. squared error: mean of"
-                        + " (r^2 - h)^2. own_ahead: mean loss of the other less that of the strategy's own gauge."
+                        + " (r^2 - h)^2 over the squared mean of r^2. own_ahead: mean loss of the other less that of the strategy's own gauge."
                         + " came_over_forecast: mean r^2 over mean h. intercept, slope: r^2 = a + b h + u. ewma: 0.94 of the"
                         + " last variance and 0.06 of the last squared return. rolling: the last 21 returns.");
         all.put(

@@ -31,7 +31,7 @@ public record ForecastContest(
      *
      * @param gauge its word
      * @param qlike mean of ln h + r^2 / h
-     * @param squaredError mean of (r^2 - h)^2
+     * @param squaredError mean of (r^2 - h)^2 over the square of the mean of r^2
      * @param calibration whether it is right on average and one for one
      * @param byQlike the strategy's own against it; empty for itself
      * @param bySquaredError the same by squared error

@@ -75,6 +75,7 @@ final class IdentityCards {
         Estimate none = new Estimate.Undefined(
                 Estimate.Reason.NOT_APPLICABLE, "this gauge gives no probability of a regime given its whole window");
         return new WeightedMoments(
+                fit.observations(),
                 fit.occupancy()[k] * fit.observations(),
                 Estimate.of(moments.mean(k, subject.asset())),
                 none,

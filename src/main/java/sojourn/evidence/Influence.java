@@ -32,6 +32,9 @@ public final class Influence {
         if (subject.stretches().isEmpty()) {
             return Answer.none("no fit was accepted");
         }
+        if (subject.timeline().regimes().size() == 1) {
+            return Answer.none("there is one regime, whatever is left out");
+        }
         List<LeftOut> bars = new ArrayList<>();
         for (Stretch stretch : subject.stretches()) {
             FrozenFilter filter = FrozenFilter.of(subject, stretch, stretch.end());

@@ -1,6 +1,9 @@
 package sojourn.evidence;
 
+import java.util.Arrays;
+import java.util.Comparator;
 import java.util.HashMap;
+import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
@@ -104,6 +107,15 @@ public final class PseudoResiduals {
         return u.isPresent()
                 ? OptionalDouble.of(0.5 / Math.min(u.getAsDouble(), 1 - u.getAsDouble()))
                 : OptionalDouble.empty();
+    }
+
+    /** The bars that lay furthest out, the furthest first, then the earlier. */
+    public List<Integer> surprising() {
+        return Arrays.stream(uniform.present())
+                .boxed()
+                .sorted(Comparator.comparingDouble((Integer bar) -> -onceIn(bar).orElse(0))
+                        .thenComparingInt(bar -> bar))
+                .toList();
     }
 
     /** The distribution forecast at each close for the next bar. */

@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.OptionalDouble;
 import java.util.TreeMap;
 import java.util.function.IntConsumer;
 import java.util.function.Supplier;
@@ -101,6 +102,6 @@ public final class RegimeEvidence {
                                 && bar >= subject.timeline().firstBar().getAsInt()
                                 && bar < subject.timeline().endBar()
                         ? subject.timeline().logScore(bar)
-                        : java.util.OptionalDouble.empty());
+                        : OptionalDouble.empty());
     }
 }

@@ -37,7 +37,7 @@ public final class RegimesJson {
         section(root, "forecasts_of_squared_return", found.forecasts(), (n, c) -> ContestJson.add(n, subject, c));
         ObjectNode absent = root.putObject("gauges_not_compared");
         found.absent().forEach(absent::put);
-        section(root, "pseudo_residuals", found.residuals(), RegimesJson::residuals);
+        section(root, "pseudo_residuals", found.residuals(), (node, all) -> residuals(node, subject, all));
         section(root, "reproduction", found.reproduction(), RegimesJson::reproduction);
         section(root, "single_bars", found.influence(), (node, all) -> influence(node, subject, all));
         root.set("definitions", Definitions.node());
@@ -67,7 +67,7 @@ public final class RegimesJson {
         return node;
     }
 
-    private static void residuals(ObjectNode node, PseudoResiduals residuals) {
+    private static void residuals(ObjectNode node, Subject subject, PseudoResiduals residuals) {
         node.put("count", residuals.count());
         node.put("clipped", residuals.clipped());
         node.put("lags", PseudoResiduals.LAGS);
@@ -75,6 +75,15 @@ public final class RegimesJson {
         node.set("ljung_box", EstimateNodes.test(residuals.ljungBox()));
         node.set("ljung_box_of_squares", EstimateNodes.test(residuals.ljungBoxOfSquares()));
         node.set("kolmogorov_smirnov", EstimateNodes.test(residuals.kolmogorovSmirnov()));
+        ArrayNode bars = node.putArray("most_surprising");
+        List<Integer> most = residuals.surprising();
+        for (int bar : most.subList(0, Math.min(SHOWN_BARS, most.size()))) {
+            ObjectNode one = bars.addObject();
+            one.put("date", subject.date(bar).toString());
+            one.put("observation", subject.observed().at(bar).orElseThrow());
+            one.put("pseudo_residual", residuals.normal().at(bar).orElseThrow());
+            one.put("once_in_bars", residuals.onceIn(bar).orElseThrow());
+        }
     }
 
     private static void reproduction(ObjectNode node, Reproduction reproduction) {

@@ -3,6 +3,7 @@ package sojourn.evidence;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
+import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.function.Function;
 import sojourn.inference.Autocorrelation;
@@ -46,13 +47,13 @@ public record Reproduction(int fit, int observations, List<Figure> figures) {
      */
     public record Figure(Property what, int lag, Estimate sample, Estimate implied, Estimate low, Estimate high) {
         /** Whether the sample lies where 95 % of the drawn series do; empty where something is undefined. */
-        public java.util.Optional<Boolean> reproduced() {
+        public Optional<Boolean> reproduced() {
             OptionalDouble value = sample.number();
             if (value.isEmpty() || low.number().isEmpty() || high.number().isEmpty()) {
-                return java.util.Optional.empty();
+                return Optional.empty();
             }
             double got = value.getAsDouble();
-            return java.util.Optional.of(
+            return Optional.of(
                     got >= low.number().getAsDouble() && got <= high.number().getAsDouble());
         }
     }
@@ -148,10 +149,14 @@ public record Reproduction(int fit, int observations, List<Figure> figures) {
     /** What one series shows. */
     private record Shown(Moments moments, Autocorrelation squares, Autocorrelation sizes) {
         static Shown by(double[] series) {
-            Moments moments = Moments.of(series);
+            Moments raw = Moments.of(series);
+            double[] standard = series.clone(); // so that neither unit nor origin decides what counts as constant
+            double deviation = Math.sqrt(raw.populationVariance());
+            Arrays.setAll(standard, t -> deviation > 0 ? (series[t] - raw.mean()) / deviation : 0);
+            Moments moments = Moments.of(standard);
             double[] squares = new double[series.length];
             double[] sizes = new double[series.length];
-            Arrays.setAll(sizes, t -> Math.abs(series[t] - moments.mean()));
+            Arrays.setAll(sizes, t -> Math.abs(standard[t] - moments.mean()));
             Arrays.setAll(squares, t -> sizes[t] * sizes[t]);
             return new Shown(moments, Autocorrelation.of(squares), Autocorrelation.of(sizes));
         }

@@ -9,6 +9,7 @@ import sojourn.numeric.CompensatedSum;
  * long-run variance with Bartlett's weights and the usual number of lags (Newey and West 1987). The weights are taken as known. Undefined where
  * the weights sum to less than two, or nothing varies.
  *
+ * @param count number of values, whatever their weights
  * @param weight sum w
  * @param mean m
  * @param meanError standard error of m
@@ -16,7 +17,7 @@ import sojourn.numeric.CompensatedSum;
  * @param deviationError standard error of s
  */
 public record WeightedMoments(
-        double weight, Estimate mean, Estimate meanError, Estimate deviation, Estimate deviationError) {
+        int count, double weight, Estimate mean, Estimate meanError, Estimate deviation, Estimate deviationError) {
     private static final double LEAST_WEIGHT = 2;
 
     /** The moments. Neither array is modified. */
@@ -31,7 +32,7 @@ public record WeightedMoments(
         if (weight < LEAST_WEIGHT) {
             Estimate none = new Estimate.Undefined(
                     Estimate.Reason.TOO_FEW_OBSERVATIONS, "it accounts for fewer than two observations");
-            return new WeightedMoments(weight, none, none, none, none);
+            return new WeightedMoments(values.length, weight, none, none, none, none);
         }
         double mean = sum.value() / weight;
         CompensatedSum squares = new CompensatedSum();
@@ -52,7 +53,12 @@ public record WeightedMoments(
                 ? Estimate.of(value.amount() / (2 * deviation))
                 : varianceError;
         return new WeightedMoments(
-                weight, Estimate.of(mean), error(ofMean, weight), Estimate.of(deviation), deviationError);
+                values.length,
+                weight,
+                Estimate.of(mean),
+                error(ofMean, weight),
+                Estimate.of(deviation),
+                deviationError);
     }
 
     private static Estimate error(double[] influence, double weight) {

@@ -33,7 +33,10 @@ public final class RegimesText {
         text.append(section(
                 "Does the model reproduce fat tails and clustering?",
                 found.reproduction().map(FitnessText::of)));
-        text.append(section("What hangs on single bars?", found.influence().map(all -> SingleBarsText.of(found, all))));
+        text.append(section(
+                "What hangs on single bars?", found.influence().map(all -> SingleBarsText.of(found.subject(), all))));
+        text.append(section(
+                "Which bars surprised most?", found.residuals().map(all -> SingleBarsText.of(found.subject(), all))));
         text.append("belongs to digest ").append(inquiry.comparisonDigest()).append('\n');
         return text.toString();
     }
