@@ -1,13 +1,14 @@
 package sojourn.regime;
 
 import java.util.Locale;
+import java.util.Optional;
 
 /** The fit of a gauge without a likelihood, once the gauge and what it makes of its window are known. */
 final class PlainFit {
     private PlainFit() {}
 
     /** Converged, unless a state stands on fewer observations than it needs: then degenerate. */
-    static Fit of(Described described, Fit.Search search, int dimension) {
+    static Fit of(Described described, Fit.Search search, int dimension, Optional<Matching> matching) {
         int observations = described.observations();
         double[] occupancy = described.orderBy().occupancy();
         int least = 0;
@@ -32,6 +33,6 @@ final class PlainFit {
                 search,
                 observations,
                 described,
-                StateEvents.ofGauge(described));
+                StateEvents.ofGauge(described, matching));
     }
 }

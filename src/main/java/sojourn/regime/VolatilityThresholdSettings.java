@@ -51,7 +51,7 @@ public record VolatilityThresholdSettings(RecentVolatility volatility, double st
         RowWeights storms = storms(levels, x);
         VolatilityThreshold gauge = VolatilityThreshold.of(volatility, levels, storms.transitions());
         Described described = Described.of(gauge, storms, request);
-        return PlainFit.of(described, Fit.Search.CLOSED_FORM, 1);
+        return PlainFit.of(described, Fit.Search.CLOSED_FORM, 1, Optional.empty());
     }
 
     private Optional<String> refusal(Observations x, double[] ascending) {
