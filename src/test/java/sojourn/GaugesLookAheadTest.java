@@ -17,7 +17,7 @@ import sojourn.market.PriceTable;
 import sojourn.regime.Gauge;
 import sojourn.regime.GaugeFilter;
 import sojourn.regime.Observations;
-import sojourn.walk.LogReturn;
+import sojourn.walk.Observation;
 import sojourn.walk.Reading;
 import sojourn.walk.RegimeTimeline;
 import sojourn.walk.Signal;
@@ -38,11 +38,14 @@ class GaugesLookAheadTest {
     private static final String WEIGHTED = "model: volatility-threshold, states: [calm, stormy],"
             + " observe: [{simple-return: stocks}], threshold: {volatility: {ewma: 0.94}, storm-above: 0.7}";
 
+    private static final String JUMP =
+            "model: jump, states: [calm, stormy], observe: [{absolute-return: stocks}], penalty: 8";
+
     @TempDir
     private Path folder;
 
     @ParameterizedTest
-    @ValueSource(strings = {ROLLING, WEIGHTED})
+    @ValueSource(strings = {ROLLING, WEIGHTED, JUMP})
     void everyGaugeSaysTheSameOfEveryBarUpToTheCut(String regimes) {
         WholeJob job = job(regimes);
         PrefixCheck check = check(job);
@@ -52,9 +55,11 @@ class GaugesLookAheadTest {
     }
 
     @ParameterizedTest
-    @ValueSource(strings = {ROLLING, WEIGHTED})
+    @ValueSource(strings = {ROLLING, WEIGHTED, JUMP})
     void aGaugeWithTheParametersOfTheFullSampleIsCaught(String regimes) {
-        PrefixCheck check = check(job(regimes).signalling(Hindsight::new));
+        WholeJob honest = job(regimes);
+        Observation observation = honest.strategy().regimes().observe().get(0);
+        PrefixCheck check = check(honest.signalling((table, timeline) -> new Hindsight(table, timeline, observation)));
         assertThat(differences(check))
                 .isNotEmpty()
                 .allSatisfy(difference -> assertThat(difference.column()).isEqualTo("target.stocks"));
@@ -99,7 +104,7 @@ class GaugesLookAheadTest {
         private final RegimeTimeline timeline;
         private final List<double[]> probabilities = new ArrayList<>();
 
-        Hindsight(PriceTable table, RegimeTimeline timeline) {
+        Hindsight(PriceTable table, RegimeTimeline timeline, Observation observation) {
             this.timeline = timeline;
             if (timeline.fits().isEmpty()) {
                 return;
@@ -111,7 +116,7 @@ class GaugesLookAheadTest {
                     .orElseThrow();
             GaugeFilter filter = last.filter();
             for (int bar = 1; bar < table.size(); bar++) {
-                double x = new LogReturn("stocks").at(table.knownAt(bar)).orElseThrow();
+                double x = observation.at(table.knownAt(bar)).orElseThrow();
                 filter = filter.step(Observations.univariate(new double[] {x}), 0);
                 probabilities.add(filter.probabilities());
             }

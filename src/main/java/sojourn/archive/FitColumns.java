@@ -5,8 +5,10 @@ import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.function.Function;
+import sojourn.regime.Emission;
 import sojourn.regime.Fit;
 import sojourn.regime.Gauge;
+import sojourn.regime.Jump;
 import sojourn.regime.MultivariateNormal;
 import sojourn.regime.RegimeModel;
 import sojourn.regime.StudentT;
@@ -47,15 +49,14 @@ final class FitColumns {
         }
         all.transitions();
         if (likelihood) {
-            all.emissions(observed);
+            all.emissions(observed, gauges);
         }
         if (gauges.stream().anyMatch(VolatilityThreshold.class::isInstance)) {
-            all.level("storm_above", VolatilityThreshold.Levels::stormAbove);
-            all.level("calm_below", VolatilityThreshold.Levels::calmBelow);
+            all.one("storm_above", VolatilityThreshold.class, t -> t.levels().stormAbove());
+            all.one("calm_below", VolatilityThreshold.class, t -> t.levels().calmBelow());
         }
-        if (timeline.fits().stream().anyMatch(record -> student(record.fit()).isPresent())) {
-            all.each("scale." + observed.get(0) + ".", FitColumns::student, StudentT::scale);
-            all.each("dof.", FitColumns::student, StudentT::degreesOfFreedom);
+        if (gauges.stream().anyMatch(Jump.class::isInstance)) {
+            all.centres(observed);
         }
         all.each("order_by.", FitColumns::gauged, (fit, k) -> fit.orderBy()[k]);
         all.stays();
@@ -63,7 +64,7 @@ final class FitColumns {
         return all.columns;
     }
 
-    private void emissions(List<String> observed) {
+    private void emissions(List<String> observed, List<Gauge> gauges) {
         for (int column = 0; column < observed.size(); column++) {
             int c = column;
             each(
@@ -84,19 +85,36 @@ final class FitColumns {
                 int b = second;
                 each(
                         "correlation." + observed.get(a) + "." + observed.get(b) + ".",
-                        FitColumns::multivariate,
+                        fit -> emission(MultivariateNormal.class, fit),
                         (normal, k) -> normal.correlation(k, a, b));
             }
         }
+        if (gauges.stream().anyMatch(gauge -> gauge instanceof RegimeModel m && m.emission() instanceof StudentT)) {
+            each("scale." + observed.get(0) + ".", fit -> emission(StudentT.class, fit), StudentT::scale);
+            each("dof.", fit -> emission(StudentT.class, fit), StudentT::degreesOfFreedom);
+        }
     }
 
-    private static Optional<MultivariateNormal> multivariate(Fit fit) {
-        return fit.model()
-                .flatMap(m -> m.emission() instanceof MultivariateNormal n ? Optional.of(n) : Optional.empty());
+    private void centres(List<String> observed) {
+        for (int column = 0; column < observed.size(); column++) {
+            int c = column;
+            one("scaling." + observed.get(c), Jump.class, jump -> jump.centres().scale(c));
+        }
+        for (int column = 0; column < observed.size(); column++) {
+            int c = column;
+            each(
+                    "mean." + observed.get(c) + ".",
+                    fit -> as(Jump.class, fit),
+                    (jump, k) -> jump.centres().centre(k, c));
+        }
     }
 
-    private static Optional<StudentT> student(Fit fit) {
-        return fit.model().flatMap(m -> m.emission() instanceof StudentT t ? Optional.of(t) : Optional.empty());
+    private static <E extends Emission> Optional<E> emission(Class<E> kind, Fit fit) {
+        return fit.model().map(RegimeModel::emission).filter(kind::isInstance).map(kind::cast);
+    }
+
+    private static <G extends Gauge> Optional<G> as(Class<G> kind, Fit fit) {
+        return fit.gauge().filter(kind::isInstance).map(kind::cast);
     }
 
     private static Optional<Fit> gauged(Fit fit) {
@@ -111,12 +129,8 @@ final class FitColumns {
         }
     }
 
-    private void level(String name, Function<VolatilityThreshold.Levels, Double> level) {
-        columns.add(new Column(name, record -> number(threshold(record.fit()), t -> level.apply(t.levels()))));
-    }
-
-    private static Optional<VolatilityThreshold> threshold(Fit fit) {
-        return fit.gauge().flatMap(g -> g instanceof VolatilityThreshold t ? Optional.of(t) : Optional.empty());
+    private <G extends Gauge> void one(String name, Class<G> kind, Function<G, Double> number) {
+        columns.add(new Column(name, record -> number(as(kind, record.fit()), number)));
     }
 
     private void transitions() {

@@ -51,7 +51,7 @@ final class Rivals {
                 Optional.empty(),
                 Optional.of(own.orderedBy()),
                 Optional.empty(),
-                new Particulars(Optional.of(settings)));
+                Particulars.threshold(settings));
     }
 
     /** As many regimes as the strategy's own, two if it has but one. */

@@ -33,6 +33,7 @@ public final class Fit {
     /** What the search for the maximum took. */
     record Search(int iterations, int starts, int agreeing, Optional<RunnerUp> runnerUp) {
         static final Search NONE = new Search(0, 0, 0, Optional.empty());
+        static final Search CLOSED_FORM = new Search(0, 1, 1, Optional.empty());
     }
 
     /** A fit without a gauge, and why. */

@@ -19,15 +19,24 @@ public final class Matching {
         this.cost = cost;
     }
 
+    /** How far a new state lies from an old one. */
+    interface Distance {
+        double between(int before, int now);
+    }
+
     /** The best assignment, ties to the one that comes first in dictionary order. Both have the same number of states. */
     public static Matching of(Emission before, Emission now) {
-        int states = before.states();
+        return least(before.states(), (old, state) -> squaredHellinger(before, old, now, state));
+    }
+
+    /** The assignment with the least total distance, ties to the one that comes first in dictionary order. */
+    static Matching least(int states, Distance distance) {
         double least = Double.POSITIVE_INFINITY;
         int[] best = new int[0];
         for (int[] order : permutations(states)) {
             double cost = 0;
             for (int k = 0; k < states; k++) {
-                cost += squaredHellinger(before, k, now, order[k]);
+                cost += distance.between(k, order[k]);
             }
             if (cost < least) {
                 least = cost;

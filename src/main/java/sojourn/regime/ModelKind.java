@@ -9,7 +9,9 @@ public enum ModelKind {
     /** There is a single regime. */
     ONE_REGIME("one-regime"),
     /** Recent volatility lies above or below a line. */
-    VOLATILITY_THRESHOLD("volatility-threshold");
+    VOLATILITY_THRESHOLD("volatility-threshold"),
+    /** The nearest of a few centres, every change costing a penalty. */
+    JUMP("jump");
 
     private final String word;
 

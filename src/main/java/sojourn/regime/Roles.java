@@ -11,15 +11,21 @@ final class Roles {
 
     /** For each role, from the calmest, the state of the model that takes it. */
     static int[] order(Described described, Optional<RegimeModel> previous) {
+        return matched(
+                described,
+                previous.filter(p -> p.states() == described.states())
+                        .map(p -> Matching.of(
+                                p.emission(), described.model().orElseThrow().emission())));
+    }
+
+    /** The same where the states are matched to those of the last fit, if there is one to match. */
+    static int[] matched(Described described, Optional<Matching> matching) {
         int states = described.states();
         int[] earlierRole = new int[states];
         for (int k = 0; k < states; k++) {
             earlierRole[k] = k;
         }
-        previous.filter(p -> p.states() == states).ifPresent(p -> {
-            int[] newForOld = Matching.of(
-                            p.emission(), described.model().orElseThrow().emission())
-                    .newForOld();
+        matching.map(Matching::newForOld).ifPresent(newForOld -> {
             for (int old = 0; old < states; old++) {
                 earlierRole[newForOld[old]] = old;
             }

@@ -31,6 +31,15 @@ final class RowWeights implements Membership {
         return new RowWeights(states, weights);
     }
 
+    /** The same with its states in another order: state k of the result is state {@code order[k]} of this. */
+    RowWeights ordered(int[] order) {
+        double[] turned = new double[weights.length];
+        for (int i = 0; i < turned.length; i++) {
+            turned[i] = weights[i - i % states + order[i % states]];
+        }
+        return new RowWeights(states, turned);
+    }
+
     @Override
     public int size() {
         return weights.length / states;

@@ -23,7 +23,8 @@ final class StateEvents {
         List<String> events = new ArrayList<>(described.events());
         RegimeModel model = described.model().orElseThrow();
         int states = model.states();
-        previous.filter(p -> p.states() == states).ifPresent(p -> swaps(p, model, events));
+        previous.filter(p -> p.states() == states)
+                .ifPresent(p -> swaps(Matching.of(p.emission(), model.emission()), events));
         volatilities(described, events);
         if (model.emission() instanceof StudentT student) {
             for (int k = 0; k < states; k++) {
@@ -46,9 +47,10 @@ final class StateEvents {
         return events;
     }
 
-    /** All events of a gauge without a likelihood, in role order. */
-    static List<String> ofGauge(Described described) {
+    /** All events of a gauge without a likelihood, in role order; its states may be matched to those of the previous fit. */
+    static List<String> ofGauge(Described described, Optional<Matching> matching) {
         List<String> events = new ArrayList<>(described.events());
+        matching.ifPresent(m -> swaps(m, events));
         volatilities(described, events);
         for (int k = 0; described.states() > 1 && k < described.states(); k++) {
             collapsed(described.orderBy(), k, events);
@@ -76,8 +78,8 @@ final class StateEvents {
         }
     }
 
-    private static void swaps(RegimeModel previous, RegimeModel model, List<String> events) {
-        int[] newForOld = Matching.of(previous.emission(), model.emission()).newForOld();
+    private static void swaps(Matching matching, List<String> events) {
+        int[] newForOld = matching.newForOld();
         for (int old = 0; old < newForOld.length; old++) {
             if (newForOld[old] != old) {
                 events.add("swap {" + old + "}->{" + newForOld[old] + "}");

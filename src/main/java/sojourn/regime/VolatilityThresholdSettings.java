@@ -51,13 +51,7 @@ public record VolatilityThresholdSettings(RecentVolatility volatility, double st
         RowWeights storms = storms(levels, x);
         VolatilityThreshold gauge = VolatilityThreshold.of(volatility, levels, storms.transitions());
         Described described = Described.of(gauge, storms, request);
-        List<String> events = StateEvents.ofGauge(described);
-        Outcome outcome = tooFew(described, x) ? Outcome.DEGENERATE : Outcome.CONVERGED;
-        String explanation = outcome == Outcome.CONVERGED
-                ? ""
-                : "a regime accounts for fewer than " + Soundness.leastCount(1)
-                        + " observations of the window: the quantiles lie too far out, or many volatilities are equal";
-        return Fit.of(outcome, explanation, new Fit.Search(0, 1, 1, Optional.empty()), x.present(), described, events);
+        return PlainFit.of(described, Fit.Search.CLOSED_FORM, 1, Optional.empty());
     }
 
     private Optional<String> refusal(Observations x, double[] ascending) {
@@ -105,10 +99,5 @@ public record VolatilityThresholdSettings(RecentVolatility volatility, double st
             path[row] = filter.probability(1) == 1 ? 1 : 0;
         }
         return RowWeights.path(2, path);
-    }
-
-    private static boolean tooFew(Described described, Observations x) {
-        return Arrays.stream(described.orderBy().occupancy())
-                .anyMatch(share -> share * x.present() < Soundness.leastCount(1) - 0.5);
     }
 }

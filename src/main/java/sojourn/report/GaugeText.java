@@ -35,7 +35,25 @@ final class GaugeText {
         return regimes.particulars()
                 .threshold()
                 .map(threshold -> kind + ": " + threshold(threshold, regimes.states()))
-                .orElseGet(() -> kind + ", " + regimes.emission().word() + degrees(regimes) + " emissions");
+                .orElseGet(() -> kind + ", " + within(regimes));
+    }
+
+    private static String within(RegimeSettings regimes) {
+        OptionalDouble penalty = regimes.particulars().penalty();
+        return penalty.isPresent()
+                ? "each change of regime costs " + penalty.getAsDouble() + " squared deviations"
+                : regimes.emission().word() + degrees(regimes) + " emissions";
+    }
+
+    /** What should be known before such regimes are relied on. */
+    static List<String> findings(RegimeSettings regimes) {
+        boolean signed = regimes.observe().stream().allMatch(Observation::aroundZero);
+        return regimes.model() == ModelKind.JUMP && signed
+                ? List.of(
+                        "the model jump tells regimes apart by the level of what it observes, and a return has the same"
+                                + " level in calm and in storm: these regimes are of rises and falls; observe absolute-return"
+                                + " or log-realised-volatility to tell storms")
+                : List.of();
     }
 
     private static String threshold(VolatilityThresholdSettings threshold, List<String> states) {

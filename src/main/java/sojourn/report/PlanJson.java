@@ -8,7 +8,6 @@ import java.util.List;
 import sojourn.archive.Caution;
 import sojourn.compare.Prepared;
 import sojourn.document.JsonText;
-import sojourn.market.Finding;
 import sojourn.market.InputFile;
 import sojourn.market.Known;
 import sojourn.market.PriceTable;
@@ -64,8 +63,6 @@ public final class PlanJson {
             input.put("last", file.last().toString());
         }
         ArrayNode findings = plan.putArray("findings");
-        for (Finding finding : ready.market().findings()) {
-            findings.add(finding.toString());
-        }
+        PlanText.findings(ready).forEach(findings::add);
     }
 }

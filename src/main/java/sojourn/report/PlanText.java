@@ -1,6 +1,7 @@
 package sojourn.report;
 
 import java.time.LocalDate;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
@@ -81,14 +82,25 @@ public final class PlanText {
         line("Trades", trades(strategy, plan));
         line("Judged", judged(strategy));
         line("Left out", NOT_MODELLED);
-        for (Finding finding : ready.market().findings()) {
-            line("Finding", finding.toString());
+        List<String> findings = findings(ready);
+        for (String finding : findings) {
+            line("Finding", finding);
         }
         if (plan.fitDates().isEmpty()) {
             line("Fault", "no fit will ever be due, so the strategy cannot run; see Fits above");
-        } else if (ready.market().findings().isEmpty()) {
+        } else if (findings.isEmpty()) {
             line("Findings", "none");
         }
+    }
+
+    /** What is odd about the files, then what is odd about the settings. */
+    static List<String> findings(Prepared.Ready ready) {
+        List<String> found = new ArrayList<>();
+        for (Finding finding : ready.market().findings()) {
+            found.add(finding.toString());
+        }
+        found.addAll(GaugeText.findings(ready.file().strategy().regimes()));
+        return found;
     }
 
     private static String cash(CashSource cash) {

@@ -7,6 +7,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.OptionalDouble;
 import java.util.Set;
 import java.util.function.Predicate;
 import java.util.stream.Stream;
@@ -19,6 +20,7 @@ import sojourn.regime.FitSettings;
 import sojourn.regime.GaugeSettings;
 import sojourn.regime.GivenParameters;
 import sojourn.regime.InitialDistribution;
+import sojourn.regime.JumpSettings;
 import sojourn.regime.ModelKind;
 import sojourn.regime.VolatilityThresholdSettings;
 
@@ -100,6 +102,13 @@ public record RegimeSettings(
                     "threshold", ThresholdKeys.SHAPE, "what volatility-threshold measures and where it draws the line")
             .onlyWith(MODEL, List.of(ModelKind.VOLATILITY_THRESHOLD.word()));
 
+    private static final Field<Optional<Double>> PENALTY = Field.maybe(
+                    "penalty",
+                    Shapes.number().atLeast(0),
+                    "what each change of regime costs, in squared standard deviations of what is observed: at 0 every bar goes to"
+                            + " the nearest regime; the larger, the longer the stays")
+            .onlyWith(MODEL, List.of(ModelKind.JUMP.word()));
+
     /** The section's shape. */
     public static final Shape<RegimeSettings> SHAPE = Shapes.object(
                     "regimes",
@@ -111,7 +120,7 @@ public record RegimeSettings(
                             f.get(INITIAL),
                             f.get(ORDER_BY),
                             f.get(PARAMETERS),
-                            new Particulars(f.get(THRESHOLD))),
+                            new Particulars(f.get(THRESHOLD), number(f.get(PENALTY)))),
                     MODEL,
                     OBSERVE,
                     STATES,
@@ -119,7 +128,8 @@ public record RegimeSettings(
                     INITIAL,
                     ORDER_BY,
                     PARAMETERS,
-                    THRESHOLD)
+                    THRESHOLD,
+                    PENALTY)
             .refuseEach(RegimeSettings::faults);
 
     /** Copies its lists. */
@@ -155,6 +165,9 @@ public record RegimeSettings(
     public GaugeSettings gauge(int starts) {
         if (particulars.threshold().isPresent()) {
             return particulars.threshold().get();
+        }
+        if (particulars.penalty().isPresent()) {
+            return new JumpSettings(states.size(), particulars.penalty().getAsDouble(), starts);
         }
         return fixed.<GaugeSettings>map(declared -> new GivenParameters(declared.model(emission)))
                 .orElseGet(() -> likelihood(starts));
@@ -194,6 +207,9 @@ public record RegimeSettings(
                     "states",
                     "the model one-regime has one regime, not " + states.size(),
                     "name one, or choose another model"));
+        }
+        if (model == ModelKind.JUMP && particulars.penalty().isEmpty()) {
+            faults.add(new Refusal("", "the model jump lacks 'penalty'", "add one, e.g. penalty: 50"));
         }
         if (model == ModelKind.VOLATILITY_THRESHOLD) {
             faults.addAll(faultsOfThreshold());
@@ -334,6 +350,10 @@ public record RegimeSettings(
                         "parameters",
                         "degrees-of-freedom belongs to the emission student-t, not to " + emission.word(),
                         "set emission: student-t, or leave degrees-of-freedom out"));
+    }
+
+    private static OptionalDouble number(Optional<Double> written) {
+        return written.map(OptionalDouble::of).orElseGet(OptionalDouble::empty);
     }
 
     private static List<String> words(Predicate<ModelKind> which) {

@@ -135,7 +135,7 @@ class VolatilityThresholdTest {
                 new VolatilityThresholdSettings(new RecentVolatility.Rolling(5), 0.999, 0.999);
         Fit fit = fit(far, Observations.univariate(weathers(2)));
         assertThat(fit.outcome()).isEqualTo(Outcome.DEGENERATE);
-        assertThat(fit.explanation()).contains("fewer than 5 observations");
+        assertThat(fit.explanation()).contains("{1} accounts for 1 of 400 observations, fewer than the 5 it needs");
     }
 
     @Test

@@ -55,6 +55,18 @@ class WalkOnwardTest {
     }
 
     @Test
+    void withAJumpModelItEqualsAFreshOneToTheBit() {
+        GivenPrices prices = Walks.weathers(15, BARS, 2);
+        RegimeSettings jump = Walks.jump(new AbsoluteReturn("a"), 6);
+        assertOnward(prices, jump, Walks.expanding(200, Walks.every(20)));
+        assertOnward(prices, jump, Walks.rolling(120, 150, RefitSchedule.FirstBarOf.MONTH));
+        assertOnward(
+                prices,
+                Walks.jump(new Walks.Gappy(bar -> bar % 7 == 3), 6),
+                Walks.rolling(120, 150, RefitSchedule.FirstBarOf.MONTH));
+    }
+
+    @Test
     void onlyNewFitsAreMade() {
         GivenPrices prices = Walks.weathers(11, BARS, 1);
         RefitSettings refit = Walks.expanding(200, Walks.every(20));

@@ -61,8 +61,21 @@ final class Walks {
                 Optional.empty(),
                 Optional.empty(),
                 Optional.empty(),
-                new Particulars(
-                        Optional.of(new VolatilityThresholdSettings(new RecentVolatility.Exponential(0.9), 0.7, 0.5))));
+                Particulars.threshold(
+                        new VolatilityThresholdSettings(new RecentVolatility.Exponential(0.9), 0.7, 0.5)));
+    }
+
+    /** Calm and stormy by a jump model of that penalty. */
+    static RegimeSettings jump(Observation observation, double penalty) {
+        return new RegimeSettings(
+                ModelKind.JUMP,
+                List.of(observation),
+                List.of("calm", "stormy"),
+                EmissionFamily.NORMAL,
+                Optional.empty(),
+                Optional.empty(),
+                Optional.empty(),
+                Particulars.penalty(penalty));
     }
 
     /** One regime, which is fitted by a closed form: for tests that ask when fits are made, not what they find. */
