@@ -35,6 +35,8 @@ final class ModelArrays {
                 }
             }
         }
-        return WindowMoments.of(states, assets, means, covariances);
+        double[] shares = new double[states];
+        Arrays.setAll(shares, moments::share);
+        return WindowMoments.of(states, assets, shares, means, covariances);
     }
 }
