@@ -87,8 +87,8 @@ public final class GivenProbabilities implements Signal {
         }
         int states = regimes.size();
         int assets = known.assets().size();
-        WindowMoments still =
-                WindowMoments.of(states, assets, new double[states * assets], new double[states * assets * assets]);
+        WindowMoments still = WindowMoments.of(
+                states, assets, new double[states], new double[states * assets], new double[states * assets * assets]);
         return Optional.of(Reading.of(1, byBar[known.bar()], transition, moments.orElse(still)));
     }
 }

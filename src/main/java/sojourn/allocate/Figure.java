@@ -2,6 +2,8 @@ package sojourn.allocate;
 
 import java.math.BigDecimal;
 import java.math.RoundingMode;
+import java.util.ArrayList;
+import java.util.List;
 
 /** Numbers in sentences: two decimals, or as many more as it takes not to say something untrue. */
 final class Figure {
@@ -23,6 +25,18 @@ final class Figure {
     static String level(double level) {
         BigDecimal written = BigDecimal.valueOf(level);
         return written.setScale(Math.max(DECIMALS, written.scale())).toPlainString();
+    }
+
+    /** Weights by name, of {@code chosen} among {@code assets}: "stocks 0.70, bonds 0.20"; the reason where there are none. */
+    static String weights(Wish wish, List<String> assets, int[] chosen) {
+        if (!(wish instanceof Weights weights)) {
+            return ((Wish.Undefined) wish).because().sentence();
+        }
+        List<String> parts = new ArrayList<>();
+        for (int asset : chosen) {
+            parts.add(assets.get(asset) + " " + of(weights.at(asset)));
+        }
+        return String.join(", ", parts);
     }
 
     /** {@code value} with enough decimals to stand on the same side of {@code level} as it does in truth. */

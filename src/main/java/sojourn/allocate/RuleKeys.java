@@ -8,6 +8,8 @@ import java.util.Map;
 import java.util.Optional;
 import sojourn.document.Field;
 import sojourn.document.Nearest;
+import sojourn.document.Quoted;
+import sojourn.document.Refusal;
 import sojourn.document.Shape;
 import sojourn.document.Shapes;
 
@@ -45,6 +47,28 @@ final class RuleKeys {
             Shapes.named(Shapes.text(), WEIGHTS).as(RuleKeys::ordered);
 
     private RuleKeys() {}
+
+    /** Names of assets, each once. */
+    static final Shape<List<String>> ASSETS =
+            Shapes.list(Shapes.text(), 1, Integer.MAX_VALUE).refuse(RuleKeys::namedTwice);
+
+    private static Optional<Refusal> namedTwice(List<String> names) {
+        return names.stream()
+                .filter(name -> names.indexOf(name) != names.lastIndexOf(name))
+                .findFirst()
+                .map(name -> new Refusal("", Quoted.of(name) + " is named twice", "name each asset once"));
+    }
+
+    /** Names in a list at {@code pointer} that are no assets. */
+    static List<Misfit> unknownAssets(String pointer, List<String> names, List<String> assets) {
+        List<Misfit> misfits = new ArrayList<>();
+        for (int i = 0; i < names.size(); i++) {
+            if (!assets.contains(names.get(i))) {
+                misfits.add(Misfit.noAsset(pointer + "/" + i, Misfit.At.VALUE, names.get(i), assets));
+            }
+        }
+        return misfits;
+    }
 
     /** A rule's own keys, then those that every rule takes. */
     static Field<?>[] and(Field<?>... own) {

@@ -24,6 +24,12 @@ public final class Rules {
                 VolatilityTarget.WORD,
                 VolatilityTarget.SHAPE.described(
                         "as much of a mix, or of each asset, as keeps its forecast volatility" + " at a stated level"));
+        shapes.put(
+                MinimumVariance.WORD,
+                MinimumVariance.SHAPE.described("weights of a stated sum with the least forecast variance"));
+        shapes.put(
+                MeanVariance.WORD,
+                MeanVariance.SHAPE.described("the weights that forecast return and risk speak for, within the limits"));
         return shapes;
     }
 }

@@ -2,9 +2,10 @@ package sojourn.allocate;
 
 import java.util.Optional;
 import sojourn.walk.Forecast;
+import sojourn.walk.Reading;
 
 /** A rule that works weights out at every decision, from forecasts say, rather than choosing among stated ones. */
-public sealed interface Sizing extends Rule permits VolatilityTarget {
+public sealed interface Sizing extends Rule permits VolatilityTarget, MinimumVariance, MeanVariance {
     /** What it shares with every rule. */
     Manner manner();
 
@@ -38,7 +39,11 @@ public sealed interface Sizing extends Rule permits VolatilityTarget {
      * to that bar. {@code probabilities} are of this rule's kind, smoothed if it smooths. Not modified.
      */
     default Forecast forecast(Situation situation, double[] probabilities) {
-        int bars = situation.barsAhead() - probability().barsAhead();
-        return situation.reading().orElseThrow().forecast(probabilities, bars);
+        return forecast(situation.reading().orElseThrow(), situation.barsAhead(), probabilities);
+    }
+
+    /** The same by another reading, {@code barsAhead} bars from its close. */
+    default Forecast forecast(Reading reading, int barsAhead, double[] probabilities) {
+        return reading.forecast(probabilities, barsAhead - probability().barsAhead());
     }
 }

@@ -1,5 +1,5 @@
 /**
- * Named numerical ideas that everything else stands on: compensated sums, an exponential of fixed bits, the normal quantile,
+ * Named numerical ideas that everything else stands on: compensated sums, an exponential of fixed bits, the normal quantile, small quadratic programmes,
  * random streams that mean the same numbers everywhere, and argument checks. Plain doubles go in and come out; nothing
  * here knows about markets, files or dates. Start with {@link sojourn.numeric.RandomStream} and
  * {@link sojourn.numeric.CompensatedSum}.

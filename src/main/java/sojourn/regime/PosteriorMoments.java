@@ -19,6 +19,7 @@ final class PosteriorMoments {
         Companions returns = request.companions();
         int states = membership.states();
         int assets = returns.assets();
+        double[] shares = shares(membership, request);
         double[] means = new double[states * assets];
         double[] covariances = new double[states * assets * assets];
         double[] weights = new double[returns.size()];
@@ -40,7 +41,17 @@ final class PosteriorMoments {
                 }
             }
         }
-        return WindowMoments.of(states, assets, means, covariances);
+        return WindowMoments.of(states, assets, shares, means, covariances);
+    }
+
+    private static double[] shares(Membership membership, FitRequest request) {
+        double[] shares = new double[membership.states()];
+        double[] weights = new double[request.companions().size()];
+        double all = evenWeights(request, weights);
+        for (int k = 0; k < shares.length; k++) {
+            shares[k] = weights(membership, request, k, weights) / all;
+        }
+        return shares;
     }
 
     /** Posterior weight of a state over the rows whose observation is present. */

@@ -74,7 +74,11 @@ final class RuleText {
     }
 
     private static String share(double weight) {
-        String percent = String.format(Locale.ROOT, "%.2f", 100 * weight).replaceAll("\\.?0+$", "");
-        return percent + " % ";
+        return percent(weight) + " ";
+    }
+
+    /** {@code 12.5 %}. */
+    static String percent(double fraction) {
+        return String.format(Locale.ROOT, "%.2f", 100 * fraction).replaceAll("\\.?0+$", "") + " %";
     }
 }

@@ -98,7 +98,12 @@ public final class Reading {
         return forecast(filtered, barsAhead);
     }
 
-    /** The same if the regimes now had the probabilities {@code from}, one a regime. Not modified. */
+    /** The same with regimes' means moved by {@code part} of the way to the window's overall mean, in [0, 1]. */
+    public Reading shrinkingMeans(double part) {
+        return new Reading(fit, filtered, transition, moments.shrinkingMeans(part));
+    }
+
+    /** As {@link #forecast(int)} if the regimes now had the probabilities {@code from}, one a regime. Not modified. */
     public Forecast forecast(double[] from, int barsAhead) {
         Check.that(from.length == filtered.length, from.length + " probabilities of " + filtered.length + " regimes");
         return Forecast.mixing(ahead(from, barsAhead), moments);

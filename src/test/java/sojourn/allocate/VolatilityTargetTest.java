@@ -20,7 +20,7 @@ class VolatilityTargetTest {
     private static final double ROUNDING = 1e-14;
     /** Variances whose roots are round: deviations of 1 % and 2 % a bar. */
     private static final WindowMoments ROUND =
-            WindowMoments.of(2, 2, new double[4], new double[] {1e-4, 0, 0, 4e-4, 1e-4, 0, 0, 4e-4});
+            WindowMoments.of(2, 2, new double[2], new double[4], new double[] {1e-4, 0, 0, 4e-4, 1e-4, 0, 0, 4e-4});
 
     private static final double ROOT_OF_BARS = Math.sqrt(252);
 
@@ -33,7 +33,7 @@ class VolatilityTargetTest {
         GivenProbabilities signal = GivenProbabilities.stormy(
                         check.input("filtered").get(1).asDouble())
                 .moving(a[0][0], a[0][1], a[1][0], a[1][1])
-                .meaning(WindowMoments.of(2, 1, mean, variance));
+                .meaning(WindowMoments.of(2, 1, new double[2], mean, variance));
         double cap = check.input("cap").asDouble();
         VolatilityTarget rule = new VolatilityTarget(
                 Together.MIX, Map.of("a", 1.0), 100 * check.input("target_ann").asDouble(), cap, Manner.plain());
@@ -47,7 +47,7 @@ class VolatilityTargetTest {
     /** At two bars ahead the mixture is p A A: the probability of stormy goes from 1 by 0.9 and 0.1 each to 0.82. */
     @Test
     void theForecastIsOfTheFirstWholeBarHeld() {
-        WindowMoments moments = WindowMoments.of(2, 1, new double[2], new double[] {1e-4, 4e-4});
+        WindowMoments moments = WindowMoments.of(2, 1, new double[2], new double[2], new double[] {1e-4, 4e-4});
         GivenProbabilities signal = GivenProbabilities.stormy(1).meaning(moments);
         double weight = played(rule(Together.MIX, Map.of("a", 1.0), 5), Limits.longOnly(), 1, 2, signal)
                 .weight(0)[0];
@@ -92,7 +92,7 @@ class VolatilityTargetTest {
 
     @Test
     void aChangeThatIsNotConfirmedLeavesTheLastTarget() {
-        WindowMoments moments = WindowMoments.of(2, 1, new double[2], new double[] {1e-4, 4e-4});
+        WindowMoments moments = WindowMoments.of(2, 1, new double[2], new double[2], new double[] {1e-4, 4e-4});
         GivenProbabilities signal = GivenProbabilities.stormy(0, 1, 1, 1).meaning(moments);
         Manner manner = new Manner(ProbabilityKind.FILTERED, Optional.empty(), 3, 1);
         VolatilityTarget rule = new VolatilityTarget(Together.MIX, Map.of("a", 1.0), 5, 1, manner);

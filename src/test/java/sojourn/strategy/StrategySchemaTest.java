@@ -57,7 +57,8 @@ class StrategySchemaTest {
         assertThat(property("/calendar/bars").get("enum").toString()).isEqualTo("[\"daily\",\"weekly\",\"monthly\"]");
         List<String> rules = new ArrayList<>();
         property("/allocate").get("properties").fieldNames().forEachRemaining(rules::add);
-        assertThat(rules).containsExactly("switch", "table", "blend", "volatility-target");
+        assertThat(rules)
+                .containsExactly("switch", "table", "blend", "volatility-target", "minimum-variance", "mean-variance");
     }
 
     @Test

@@ -15,7 +15,11 @@ class ReadingWorkedCasesTest {
         double[] filtered = CheckValues.doubles(check.input("filtered"));
         int states = filtered.length;
         WindowMoments moments = WindowMoments.of(
-                states, 1, CheckValues.doubles(check.input("mean")), CheckValues.doubles(check.input("variance")));
+                states,
+                1,
+                new double[states],
+                CheckValues.doubles(check.input("mean")),
+                CheckValues.doubles(check.input("variance")));
         Reading reading = Reading.of(1, filtered, transition(check), moments);
         int bars = check.input("H").asInt();
         double sum = 0;
@@ -52,7 +56,7 @@ class ReadingWorkedCasesTest {
                 }
             }
         }
-        WindowMoments moments = WindowMoments.of(2, 2, means, covariances);
+        WindowMoments moments = WindowMoments.of(2, 2, new double[2], means, covariances);
         Reading reading = Reading.of(1, CheckValues.doubles(check.input("filtered")), transition(check), moments);
         check.assertExpected("state_probs", reading.predicted(1));
         Forecast forecast = reading.forecast(1);

@@ -1,0 +1,98 @@
+package sojourn.allocate;
+
+import java.util.LinkedHashSet;
+import java.util.List;
+import java.util.Map;
+import java.util.OptionalDouble;
+import java.util.Set;
+import sojourn.document.Field;
+import sojourn.document.Shape;
+import sojourn.document.Shapes;
+import sojourn.numeric.Check;
+
+/**
+ * The weights w of named assets that add up to a stated sum with the least forecast variance w'Cov w within the limits; without
+ * limits that bind, w = s Cov^-1 1 / (1'Cov^-1 1).
+ *
+ * @param among the assets, each once
+ * @param invested what their weights add up to, above 0
+ */
+public record MinimumVariance(List<String> among, double invested, Manner manner) implements Sizing {
+    /** The key under {@code allocate}. */
+    static final String WORD = "minimum-variance";
+
+    private static final double MOST = 10;
+
+    private static final Field<List<String>> AMONG =
+            Field.required("among", RuleKeys.ASSETS, "the assets to choose among");
+    private static final Field<Double> INVESTED = Field.defaulted(
+            "invested",
+            Shapes.number().above(0).atMost(MOST),
+            "1",
+            "what the weights add up to, a fraction of wealth; the rest is cash");
+
+    /** Reads the map under {@code minimum-variance}. */
+    public static final Shape<MinimumVariance> SHAPE = Shapes.object(
+                    WORD,
+                    f -> new MinimumVariance(f.get(AMONG), f.get(INVESTED), Manner.from(f)),
+                    RuleKeys.and(AMONG, INVESTED))
+            .refuse(rule -> rule.manner.idleProbability());
+
+    /** Refuses a sum that is not positive. */
+    public MinimumVariance {
+        Check.above(invested, 0, "invested");
+        among = List.copyOf(among);
+    }
+
+    @Override
+    public String word() {
+        return WORD;
+    }
+
+    @Override
+    public Map<String, Map<String, Double>> statedWeights() {
+        return Map.of();
+    }
+
+    @Override
+    public Set<String> namedAssets() {
+        return new LinkedHashSet<>(among);
+    }
+
+    @Override
+    public List<Misfit> misfits(List<String> regimes, List<String> assets) {
+        return RuleKeys.unknownAssets("/" + WORD + "/among", among, assets);
+    }
+
+    /** The sum must be possible within the limits. */
+    @Override
+    public List<Misfit> misfits(Limits limits) {
+        double most = Math.min(limits.gross(), among.size() * limits.high());
+        return invested > most + Weights.SLACK
+                ? List.of(new Misfit(
+                        "/" + WORD + "/invested",
+                        "weights that add up to " + Figure.written(invested) + " are beyond the limits: " + among.size()
+                                + " assets can add up to " + Figure.written(most) + " at most",
+                        "lower invested, name more assets, or raise the limits"))
+                : List.of();
+    }
+
+    @Override
+    public Mechanism mechanism(List<String> regimes, List<String> assets, Limits limits) {
+        Optimum optimum = new Optimum(among, assets, limits, OptionalDouble.of(invested));
+        return new Sized(this, List.copyOf(regimes), new Least(this, optimum, List.copyOf(assets)));
+    }
+
+    private record Least(MinimumVariance rule, Optimum optimum, List<String> assets) implements Sizer {
+        @Override
+        public Wish weights(Situation situation, double[] probabilities, Stance lived) {
+            return optimum.of(rule.forecast(situation, probabilities), 1, new double[rule.among.size()]);
+        }
+
+        @Override
+        public Because because(Situation situation, double[] probabilities, Stance lived) {
+            return () -> "the least forecast variance with " + Figure.written(rule.invested) + " invested: "
+                    + Figure.weights(weights(situation, probabilities, lived), assets, optimum.chosen());
+        }
+    }
+}
