@@ -214,22 +214,7 @@ public record RegimeSettings(
         if (model == ModelKind.VOLATILITY_THRESHOLD) {
             faults.addAll(faultsOfThreshold());
         }
-        if (emission.equals(EmissionFamily.NORMAL_ZERO_MEAN)) {
-            observe.stream().filter(one -> !one.aroundZero()).findFirst().ifPresent(one -> faults.add(sized(one)));
-        }
-        if (emission.equals(EmissionFamily.NORMAL_DIAGONAL) && observe.size() == 1) {
-            faults.add(new Refusal(
-                    "emission",
-                    "normal-diagonal says that several series are independent within a regime, and one is observed",
-                    "set emission: normal"));
-        }
-        if (observe.size() > 1 && !emission.multivariate()) {
-            faults.add(new Refusal(
-                    "emission",
-                    "the emission " + emission.word() + " is that of one series, and " + observe.size()
-                            + " are observed",
-                    "set emission: normal or normal-diagonal, or observe one"));
-        }
+        faults.addAll(EmissionFaults.of(this));
         if (initial.isPresent() && model != ModelKind.HIDDEN_MARKOV) {
             faults.add(new Refusal(
                     "initial",
@@ -275,14 +260,6 @@ public record RegimeSettings(
                                 + " is a size already",
                         "observe a return, or choose another model")));
         return faults;
-    }
-
-    private static Refusal sized(Observation one) {
-        return new Refusal(
-                "emission",
-                "normal-zero-mean takes the mean of the observation for 0 in every regime, which that of " + one.word()
-                        + " is not",
-                "set emission: normal, or observe a return");
     }
 
     private List<Refusal> faultsOf(FixedParameters given) {
