@@ -47,7 +47,7 @@ final class IdentityCards {
         Stretch last = subject.stretches().get(subject.stretches().size() - 1);
         Fit fit = last.record().fit();
         OptionalDouble stay =
-                fit.model().map(model -> LongRun.expectedStay(model, k)).orElseGet(OptionalDouble::empty);
+                fit.gauge().map(gauge -> LongRun.expectedStay(gauge, k)).orElseGet(OptionalDouble::empty);
         double[] occupancy = fit.occupancy();
         OptionalDouble share = k < occupancy.length ? OptionalDouble.of(occupancy[k]) : OptionalDouble.empty();
         return new IdentityCard.LastFit(share, stay, windowReturns(last, k));

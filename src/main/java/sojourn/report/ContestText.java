@@ -68,13 +68,8 @@ final class ContestText {
 
     private String forecasts(ForecastContest contest) {
         Grid losses = new Grid(headings("loss of forecasts of r^2", "QLIKE", "own ahead", "DM", "p"));
-        Grid right = new Grid(List.of(
-                "right on average, one for one?",
-                "came/forecast",
-                "slope",
-                "a=0, b=1: p",
-                "sq. error",
-                "own ahead: p"));
+        Grid right = new Grid(
+                List.of("right on average, one for one?", "came/forecast", "slope", "a=0, b=1: p", "sq. error", "p"));
         double own = contest.rows().get(0).squaredError();
         for (ForecastContest.Row row : contest.rows()) {
             List<String> cells =

@@ -13,6 +13,7 @@ import sojourn.GivenPrices;
 import sojourn.regime.Emission;
 import sojourn.regime.EmissionFamily;
 import sojourn.regime.ModelKind;
+import sojourn.regime.MultivariateNormal;
 import sojourn.regime.Normal;
 import sojourn.regime.Observations;
 import sojourn.regime.StudentT;
@@ -94,6 +95,13 @@ class PseudoResidualsTest {
                 assertThat(function.below(k, 1e200)).isEqualTo(1);
             }
         }
+    }
+
+    /** A new kind of emission of one number must be given a distribution function; several numbers have none. */
+    @Test
+    void everyKindOfEmissionIsKnownHere() {
+        assertThat(Emission.class.getPermittedSubclasses())
+                .containsExactlyInAnyOrder(Normal.class, StudentT.class, MultivariateNormal.class);
     }
 
     private static double simpson(Emission emission, int k, double from, double to) {
