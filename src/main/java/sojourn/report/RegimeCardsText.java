@@ -61,7 +61,7 @@ final class RegimeCardsText {
 
     private static String largest(Subject subject, IdentityCard card) {
         if (card.asLived().largest().isEmpty()) {
-            return Lines.wrapped("It was never most likely: " + card.regime() + ".", 2);
+            return Lines.wrapped("Never the most likely: " + card.regime() + ".", 2);
         }
         String bars = card.asLived().largest().stream()
                 .map(bar -> Figures.percent(bar.earned()) + " on " + subject.date(bar.bar()))
