@@ -6,7 +6,7 @@ import sojourn.regime.RegimeModel;
 import sojourn.regime.StudentT;
 
 /**
- * Observations drawn from a model of one number: the first regime from its long run, the next from the chain, each the least k whose cumulated
+ * Observations drawn from a model, the first of several: the first regime from its long run, the next from the chain, each the least k whose cumulated
  * probability lies above a uniform. Student's t by U, V uniform: sqrt(nu (U^{-2/nu} - 1)) cos(2 pi V), Bailey (1994), Mathematics of Computation 62, 779-781.
  */
 final class DrawnSeries {

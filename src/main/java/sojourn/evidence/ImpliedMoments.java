@@ -58,11 +58,8 @@ public final class ImpliedMoments {
         this.meanSize = size;
     }
 
-    /** Of a model of one number; nothing where the chain has no single long run. */
+    /** Of the first number that the model describes; nothing where the chain has no single long run. */
     static Answer<ImpliedMoments> of(RegimeModel model) {
-        if (model.emission().dimension() != 1) {
-            return Answer.none("several numbers are observed at each close");
-        }
         Optional<double[]> longRun = LongRun.stationary(model);
         return longRun.isPresent()
                 ? Answer.of(new ImpliedMoments(model, longRun.get()))

@@ -17,7 +17,7 @@ import sojourn.walk.Reading;
 /**
  * How each observation lay in the distribution that was forecast for it the close before: u_t = sum_k p_{t|t-1}(k) F_k(x_t), z_t the
  * normal quantile of u_t, u kept within [1e-15, 1 - 1e-15]. If the forecasts were right, u is uniform, z standard normal, and neither has a
- * memory. Out of sample: parameters and probabilities are those of the close before. Zucchini and MacDonald (2009), Hidden Markov Models for
+ * memory. Of several observations, the first. Out of sample: parameters and probabilities are those of the close before. Zucchini and MacDonald (2009), Hidden Markov Models for
  * Time Series, section 6.2; Rosenblatt (1952), Annals of Mathematical Statistics 23, 470-472. The tests' p-values are approximate, for the parameters were estimated.
  */
 public final class PseudoResiduals {
@@ -54,7 +54,7 @@ public final class PseudoResiduals {
         });
         return forecaster.able()
                 ? Answer.of(new PseudoResiduals(uniform, clipped[0]))
-                : Answer.none("this gauge forecasts no distribution of one observed number");
+                : Answer.none("this gauge forecasts no distribution of what it observes");
     }
 
     /** u. */
@@ -129,7 +129,7 @@ public final class PseudoResiduals {
                 stretch.record()
                         .fit()
                         .model()
-                        .flatMap(model -> DistributionFunction.of(model.emission()))
+                        .map(model -> DistributionFunction.of(model.emission()))
                         .ifPresent(function -> byFit.put(stretch.record().number(), function));
             }
         }

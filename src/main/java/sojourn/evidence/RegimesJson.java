@@ -25,7 +25,8 @@ public final class RegimesJson {
         root.put("comparison_digest", inquiry.comparisonDigest());
         root.put("timeline", inquiry.ready().timelineKey());
         root.put("gauge", subject.gauge());
-        root.put("observation", subject.regimes().observe().get(0).column());
+        ArrayNode observations = root.putArray("observations");
+        subject.regimes().observe().forEach(one -> observations.add(one.column()));
         root.put("asset", subject.assetName());
         root.put("parameters", subject.regimes().fixed().isPresent() ? "external-prior" : "fitted");
         root.put("bars_per_year", subject.barsPerYear());

@@ -3,6 +3,7 @@ package sojourn.evidence;
 import java.time.LocalDate;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 import java.util.OptionalDouble;
 import sojourn.market.Known;
 import sojourn.market.PriceTable;
@@ -113,14 +114,16 @@ public final class Subject {
         return observed.get(0);
     }
 
+    /** The first of several observations, in words, where there are several. */
+    public Optional<String> firstOfSeveral() {
+        return observed.size() == 1
+                ? Optional.empty()
+                : Optional.of(regimes.observe().get(0).inWords().replace('-', ' '));
+    }
+
     /** Whether anything was observed on a bar. */
     boolean anyObserved(int bar) {
         return observed.stream().anyMatch(one -> one.has(bar));
-    }
-
-    /** How many numbers are observed at a close. */
-    int dimension() {
-        return observed.size();
     }
 
     /** Simple return of the asset on each bar but the first. */

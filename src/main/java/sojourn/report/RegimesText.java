@@ -29,9 +29,10 @@ public final class RegimesText {
                 found.lineage().map(lineage -> RegimeCardsText.of(found.subject(), lineage))));
         text.append(ContestText.of(found));
         text.append(section(
-                "Are the forecast distributions right?", found.residuals().map(FitnessText::of)));
+                "Are the forecast distributions" + ofWhat(found.subject()) + " right?",
+                found.residuals().map(FitnessText::of)));
         text.append(section(
-                "Does the model reproduce fat tails and clustering?",
+                "Does the model reproduce fat tails and clustering" + ofWhat(found.subject()) + "?",
                 found.reproduction().map(FitnessText::of)));
         text.append(section(
                 "What hangs on single bars?", found.influence().map(all -> SingleBarsText.of(found.subject(), all))));
@@ -39,6 +40,10 @@ public final class RegimesText {
                 "Which bars surprised most?", found.residuals().map(all -> SingleBarsText.of(found.subject(), all))));
         text.append("belongs to digest ").append(inquiry.comparisonDigest()).append('\n');
         return text.toString();
+    }
+
+    private static String ofWhat(Subject subject) {
+        return subject.firstOfSeveral().map(one -> " of the " + one).orElse("");
     }
 
     /** A question with its answer, or with the reason why there is none. */
