@@ -34,7 +34,9 @@ final class Definitions {
                 "h = variance + squared mean, forecast the close before. qlike: mean of ln h + r^2/h. squared error: mean of"
                         + " (r^2 - h)^2 over the squared mean of r^2. own_ahead: mean loss of the other less that of the strategy's own gauge."
                         + " came_over_forecast: mean r^2 over mean h. intercept, slope: r^2 = a + b h + u. ewma: 0.94 of the"
-                        + " last variance and 0.06 of the last squared return. rolling: the last 21 returns.");
+                        + " last variance and 0.06 of the last squared return. rolling: the last 21 returns. As rivals, volatility-threshold looks at"
+                        + " the asset's ewma volatility (storm above the window's 80 % quantile, calm below 60 %) and jump at its log"
+                        + " realised volatility over 5 bars (penalty 50).");
         all.put(
                 "tests",
                 "Diebold and Mariano's statistic with the small-sample factor of Harvey, Leybourne and Newbold on Student's t;"

@@ -7,11 +7,13 @@ import sojourn.regime.EmissionFamily;
 import sojourn.regime.ModelKind;
 import sojourn.regime.RecentVolatility;
 import sojourn.regime.VolatilityThresholdSettings;
+import sojourn.walk.LogRealisedVolatility;
 import sojourn.walk.Particulars;
 import sojourn.walk.RegimeSettings;
 import sojourn.walk.SimpleReturn;
 
-/** The gauges that a strategy's own is held against: every kind but its own, seeing the same and fitted at the same closes. */
+/** The gauges that a strategy's own is held against: every kind but its own, fitted by the same schedule; those
+ * with a likelihood see the same, the others the volatility of the asset that orders the regimes. */
 final class Rivals {
     private static final List<String> TWO = List.of("lower", "higher");
 
@@ -21,6 +23,11 @@ final class Rivals {
     private static final double STORM_ABOVE = 0.8;
 
     private static final double CALM_BELOW = 0.6;
+
+    /** Bars of the volatility that the jump model looks at: a week of days. Our own choice, no source. */
+    private static final int JUMP_BARS = 5;
+    /** What a change of regime costs it, in squared deviations. Our own choice, no source. */
+    private static final double PENALTY = 50;
 
     private Rivals() {}
 
@@ -35,6 +42,9 @@ final class Rivals {
         }
         if (own.model() != ModelKind.VOLATILITY_THRESHOLD) {
             rivals.add(threshold(own));
+        }
+        if (own.model() != ModelKind.JUMP) {
+            rivals.add(jump(own));
         }
         return List.copyOf(rivals);
     }
@@ -52,6 +62,19 @@ final class Rivals {
                 Optional.of(own.orderedBy()),
                 Optional.empty(),
                 Particulars.threshold(settings));
+    }
+
+    /** The nearest of as many centres of the asset's recent volatility, which is slow to change its mind. */
+    private static RegimeSettings jump(RegimeSettings own) {
+        return new RegimeSettings(
+                ModelKind.JUMP,
+                List.of(new LogRealisedVolatility(own.orderedBy(), JUMP_BARS)),
+                states(ModelKind.JUMP, own),
+                EmissionFamily.NORMAL,
+                Optional.empty(),
+                Optional.of(own.orderedBy()),
+                Optional.empty(),
+                Particulars.penalty(PENALTY));
     }
 
     /** As many regimes as the strategy's own, two if it has but one. */
