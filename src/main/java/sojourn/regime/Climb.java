@@ -1,52 +1,68 @@
 package sojourn.regime;
 
+import java.util.Optional;
+
 /**
- * Climbs to a maximum of the likelihood from one start: twenty plain EM steps, and on until a step gains less than 0.1 nats; then
- * EM sped up by SQUAREM, scheme S3 (Varadhan and Roland 2008, Scand. J. Statistics 35, 335-353), and by moving the initial
- * distribution of a chain to its best corner. An extrapolated point is kept only if it is at least as likely as the plain step
- * before it; otherwise the stride is halved, in the end to the plain second step. The longest stride allowed starts at 4 and
- * grows fourfold whenever it was taken in full, which keeps early leaps in the valley that EM is in.
+ * Climbs to a maximum of the likelihood from one start: ten EM steps and on until one gains less than a nat, of three and more states
+ * twenty and a tenth of a nat, so that it is clear which top it is going for; the initial distribution of a chain moved to its best corner; then {@link Ascent}. Where that finds no way up,
+ * EM goes on, sped up by SQUAREM, scheme S3 (Varadhan and Roland 2008, Scand. J. Statistics 35, 335-353): an extrapolated point is kept
+ * only if it is at least as likely as the plain step before it; otherwise the stride is halved, in the end to the plain second step.
+ * A climb that comes near a {@link Landmark} ends there.
  *
- * <p>Stops when the way still to go, the last EM step times the stride, is below 1e-9 in the largest parameter of the
- * standardised series, or when that times the gain of the last step is below 1e-9 nats; after 2000 evaluations without that.
- * Every EM step must not lower the log-likelihood l by more than 1e-9 (1 + |l|).
+ * <p>SQUAREM stops when the way still to go, the last EM step times the stride, is below 1e-9 in the largest parameter of the
+ * standardised series, or when that times the gain of the last step is below 1e-9 nats; every search after 2000 evaluations. No step
+ * of any kind lowers the log-likelihood l by more than 1e-9 (1 + |l|).
  */
 final class Climb {
     /** The most evaluations of the likelihood. */
     static final int MOST_EVALUATIONS = 2000;
 
-    private static final int PLAIN_STEPS = 20;
-    /** Leaps begin when a plain step gains less than so many nats. */
-    private static final double NEAR = 0.1;
+    /** The fewest EM steps; three and more states have more tops close by. */
+    private static final int PLAIN_STEPS_OF_TWO = 10;
+
+    private static final int PLAIN_STEPS_OF_MANY = 20;
+    /** The same from the summit of a window of which this one is little changed. */
+    private static final int PLAIN_STEPS_FROM_BEFORE = 2;
+
+    /** Gain of an EM step, in nats, from which on another top is out of reach. */
+    private static final double NEAR_OF_TWO = 1;
+
+    private static final double NEAR_OF_MANY = 0.1;
 
     /** Relative gain in likelihood that is worth a move to another initial distribution. */
     private static final double CORNER_GAIN = 1e-12;
 
-    private static final double FIRST_LONGEST = 4;
+    private static final int MOST_CORNERS = 5;
+    private static final double LONGEST_STRIDE = 64;
     private static final int MOST_HALVINGS = 3;
     private static final double PARAMETER_TOLERANCE = 1e-9;
     private static final double GAIN_TOLERANCE = 1e-9;
     private static final double FALL_TOLERANCE = 1e-9;
 
-    private final Expectation fast;
-    private final Expectation plain;
+    private final Objective objective;
     private final Maximisation maximisation;
+    private final EmissionFamily family;
     private final InitialDistribution initial;
-    private final ExpectedSums sums;
-    private int evaluations;
-    /** Log-likelihood that the next EM step must not fall below after a leap. */
-    private double landed;
-
-    /** The longest stride allowed so far. */
-    private double longest = FIRST_LONGEST;
+    private final Optional<Landmark> landmark;
+    private final int plainSteps;
+    private Parameters at;
+    private double reached;
 
     private Climb(
-            Expectation fast, Expectation plain, Maximisation maximisation, InitialDistribution initial, int states) {
+            Parameters start,
+            Window window,
+            EmissionFamily family,
+            InitialDistribution initial,
+            Optional<Landmark> landmark,
+            int plainSteps) {
+        this.objective = new Objective(start, window, family, initial);
+        this.maximisation = new Maximisation(family, initial);
+        this.family = family;
         this.initial = initial;
-        this.fast = fast;
-        this.plain = plain;
-        this.maximisation = maximisation;
-        this.sums = new ExpectedSums(states);
+        this.landmark = landmark;
+        this.plainSteps = plainSteps;
+        this.at = start.copy();
+        this.reached = objective.at(at);
     }
 
     /** Where one start ended. {@code leastCount} is the smallest expected number of rows of a state. */
@@ -54,115 +70,161 @@ final class Climb {
 
     /** Climbs from {@code start}, which is not modified, with a free initial distribution. */
     static Summit from(Parameters start, Window window, EmissionFamily family) {
-        return from(start, window, family, InitialDistribution.FREE);
+        return from(start, window, family, InitialDistribution.FREE, Optional.empty());
     }
 
     /** Climbs from {@code start}, which is not modified. */
-    static Summit from(Parameters start, Window window, EmissionFamily family, InitialDistribution initial) {
-        InitialDistribution ofChain = start.kind() == ModelKind.HIDDEN_MARKOV ? initial : InitialDistribution.FREE;
-        Climb climb = new Climb(
-                Expectation.of(start.kind(), start.states(), window, family),
-                new PlainExpectation(window, family),
-                new Maximisation(family, ofChain),
-                ofChain,
-                start.states());
-        return climb.run(start);
+    static Summit from(
+            Parameters start,
+            Window window,
+            EmissionFamily family,
+            InitialDistribution initial,
+            Optional<Landmark> landmark) {
+        return new Climb(start, window, family, ofChain(start, initial), landmark, plainSteps(start)).run();
     }
 
-    private Summit run(Parameters start) {
-        Parameters at = start.copy();
-        if (!startsAsItMust(at)) {
-            throw new IllegalStateException("a start whose chain has no one long run; this is a bug");
+    /** Climbs from {@code start}, the summit of an earlier window; not modified. */
+    static Summit again(Parameters start, Window window, EmissionFamily family, InitialDistribution initial) {
+        InitialDistribution ofChain = ofChain(start, initial);
+        return new Climb(start, window, family, ofChain, Optional.empty(), PLAIN_STEPS_FROM_BEFORE).run();
+    }
+
+    private static int plainSteps(Parameters start) {
+        return start.states() == 2 ? PLAIN_STEPS_OF_TWO : PLAIN_STEPS_OF_MANY;
+    }
+
+    /** The weights of a mixture are always free. */
+    static InitialDistribution ofChain(Parameters start, InitialDistribution initial) {
+        return start.kind() == ModelKind.HIDDEN_MARKOV ? initial : InitialDistribution.FREE;
+    }
+
+    private Summit run() {
+        if (reached == Double.NEGATIVE_INFINITY) {
+            throw new IllegalStateException("a start that makes the window impossible; this is a bug");
         }
-        double reached = evaluate(at);
-        boolean converged = false;
-        while (!converged && evaluations < MOST_EVALUATIONS) {
-            boolean freely = initial == InitialDistribution.FREE;
-            if (freely && evaluations > PLAIN_STEPS && cornerBeats(at)) {
-                at = cornered(at);
-                reached = notBelow(reached, evaluate(at));
-            }
-            Parameters one = maximisation.next(at, sums);
-            double first = notBelow(reached, evaluate(one));
-            Parameters two = maximisation.next(one, sums);
-            double stride = Extrapolation.stride(at, one, two);
-            converged = stride * Extrapolation.largestChange(one, two) < PARAMETER_TOLERANCE
-                    || stride * StrictMath.max(0, first - reached) < GAIN_TOLERANCE;
-            boolean leap = !converged && stride > 1 && evaluations > PLAIN_STEPS && first - reached < NEAR;
-            at = leap ? leap(at, one, two, stride, first) : two;
-            double before = leap ? landed : first;
-            reached = notBelow(before, evaluate(at));
+        double near = at.states() == 2 ? NEAR_OF_TWO : NEAR_OF_MANY;
+        double gain = Double.POSITIVE_INFINITY;
+        while (objective.evaluations() < MOST_EVALUATIONS
+                && !near(at, reached)
+                && (gain > near || objective.evaluations() < plainSteps)) {
+            double before = reached;
+            step();
+            gain = reached - before;
+        }
+        boolean converged = near(at, reached) || ascend() || near(at, reached) || accelerate();
+        if (near(at, reached)) {
+            return landmark.orElseThrow().summit(objective.evaluations());
         }
         double least = Double.POSITIVE_INFINITY;
-        for (double count : sums.count) {
+        for (double count : objective.sums().count) {
             least = StrictMath.min(least, count);
         }
-        return new Summit(at, reached, least, evaluations, converged);
+        return new Summit(at, reached, least, objective.evaluations(), converged);
+    }
+
+    private boolean near(Parameters p, double logLikelihood) {
+        return landmark.isPresent() && landmark.get().nearTo(p, logLikelihood);
+    }
+
+    /** One EM step. */
+    private void step() {
+        Parameters next = maximisation.next(at, objective.sums());
+        arrive(next, objective.at(next));
+    }
+
+    private void arrive(Parameters next, double logLikelihood) {
+        if (!(logLikelihood >= reached - FALL_TOLERANCE * (1 + StrictMath.abs(reached)))) {
+            throw new IllegalStateException(
+                    "a step lowered the log-likelihood from " + reached + " to " + logLikelihood + "; this is a bug");
+        }
+        at = next;
+        reached = logLikelihood;
+    }
+
+    /** To the top by {@link Ascent}, from one corner after the other while another one is better. */
+    private boolean ascend() {
+        for (int corner = 0; corner < MOST_CORNERS; corner++) {
+            if (cornerBeats()) {
+                corner();
+            } else if (corner > 0) {
+                return true;
+            }
+            Ascent ascent = new Ascent(objective, family, at, reached, MOST_EVALUATIONS);
+            boolean converged = ascent.climb(a -> near(a.parameters(), a.logLikelihood()));
+            arrive(ascent.parameters(), ascent.logLikelihood());
+            if (!converged) {
+                return false;
+            }
+        }
+        return false;
     }
 
     /**
      * The likelihood is linear in the initial distribution of a chain, so the best one starts for certain in the state from which
      * the window is most likely. EM goes there too, but slowly where states are about equally likely.
      */
-    private boolean cornerBeats(Parameters at) {
+    private boolean cornerBeats() {
         double average = 0;
         for (int k = 0; k < at.states(); k++) {
-            average += at.at(at.initial(k)) * sums.likelihoodFrom[k];
+            average += at.at(at.initial(k)) * objective.sums().likelihoodFrom[k];
         }
-        return sums.likelihoodFrom[likeliestStart()] > average * (1 + CORNER_GAIN);
+        return initial == InitialDistribution.FREE
+                && objective.sums().likelihoodFrom[likeliestStart()] > average * (1 + CORNER_GAIN);
     }
 
-    private Parameters cornered(Parameters at) {
+    private void corner() {
         Parameters corner = at.copy();
         for (int k = 0; k < at.states(); k++) {
             corner.set(corner.initial(k), k == likeliestStart() ? 1 : 0);
         }
-        return corner;
+        arrive(corner, objective.at(corner));
     }
 
     private int likeliestStart() {
+        double[] from = objective.sums().likelihoodFrom;
         int best = 0;
-        for (int k = 1; k < sums.likelihoodFrom.length; k++) {
-            best = sums.likelihoodFrom[k] > sums.likelihoodFrom[best] ? k : best;
+        for (int k = 1; k < from.length; k++) {
+            best = from[k] > from[best] ? k : best;
         }
         return best;
     }
 
+    /** To the top by SQUAREM. */
+    private boolean accelerate() {
+        while (objective.evaluations() < MOST_EVALUATIONS) {
+            if (cornerBeats()) {
+                corner();
+            }
+            Parameters zero = at;
+            double before = reached;
+            step();
+            Parameters one = at;
+            double gain = reached - before;
+            Parameters two = maximisation.next(one, objective.sums());
+            double stride = Extrapolation.stride(zero, one, two);
+            boolean there = stride * Extrapolation.largestChange(one, two) < PARAMETER_TOLERANCE
+                    || stride * StrictMath.max(0, gain) < GAIN_TOLERANCE;
+            Parameters next = there ? two : leap(zero, one, two, StrictMath.min(stride, LONGEST_STRIDE));
+            arrive(next, objective.at(next));
+            if (there) {
+                return true;
+            }
+        }
+        return false;
+    }
+
     /** One EM step from the farthest extrapolated point that is at least as likely as the first plain step, or the second. */
-    private Parameters leap(Parameters at, Parameters one, Parameters two, double wanted, double first) {
-        double stride = StrictMath.min(wanted, longest);
+    private Parameters leap(Parameters zero, Parameters one, Parameters two, double wanted) {
+        double stride = wanted;
         for (int attempt = 0; attempt < MOST_HALVINGS && stride > 1; attempt++) {
-            Parameters candidate = Extrapolation.point(at, one, two, stride);
-            landed = startsAsItMust(candidate) ? evaluate(candidate) : Double.NEGATIVE_INFINITY;
-            if (landed >= first) {
-                longest = stride >= longest ? longest * FIRST_LONGEST : longest;
-                return maximisation.next(candidate, sums);
+            Parameters candidate = Extrapolation.point(zero, one, two, stride);
+            double landed = objective.at(candidate);
+            if (landed >= reached) {
+                arrive(candidate, landed);
+                return maximisation.next(candidate, objective.sums());
             }
             stride = (stride + 1) / 2;
         }
-        landed = first;
         return two;
-    }
-
-    /** Puts a chain that starts in its long run there; false if it has none. {@code p} is modified. */
-    private boolean startsAsItMust(Parameters p) {
-        return initial == InitialDistribution.FREE || StationaryStart.impose(p);
-    }
-
-    /** Fills the sums at those parameters and returns their log-likelihood. */
-    private double evaluate(Parameters parameters) {
-        evaluations++;
-        if (!fast.fill(parameters, sums) && !plain.fill(parameters, sums)) {
-            return Double.NEGATIVE_INFINITY;
-        }
-        return sums.logLikelihood;
-    }
-
-    private static double notBelow(double before, double after) {
-        if (!(after >= before - FALL_TOLERANCE * (1 + StrictMath.abs(before)))) {
-            throw new IllegalStateException(
-                    "an EM step lowered the log-likelihood from " + before + " to " + after + "; this is a bug");
-        }
-        return after;
     }
 }

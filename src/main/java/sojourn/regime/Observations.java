@@ -68,7 +68,9 @@ public final class Observations {
         double[] values = new double[rowMajor.length];
         for (int i = 0; i < values.length; i++) {
             if (!missingCells[i]) {
-                values[i] = Check.finite(rowMajor[i], "observation in row " + i / dimension);
+                values[i] = Double.isFinite(rowMajor[i])
+                        ? rowMajor[i]
+                        : Check.finite(rowMajor[i], "observation in row " + i / dimension);
             }
         }
         return new Observations(dimension, values, missingCells.clone());

@@ -41,6 +41,21 @@ final class Parameters {
         return new Parameters(kind, states, tails, vector.clone());
     }
 
+    /** The same model with its states in another order: state k of the result is state {@code order[k]} of this. Not modified. */
+    Parameters ordered(int[] order) {
+        Parameters result = copy();
+        for (int k = 0; k < states; k++) {
+            result.set(initial(k), at(initial(order[k])));
+            for (int e = firstMean(); e < size(); e += states) {
+                result.set(e + k, at(e + order[k]));
+            }
+            for (int j = 0; kind == ModelKind.HIDDEN_MARKOV && j < states; j++) {
+                result.set(transition(k, j), at(transition(order[k], order[j])));
+            }
+        }
+        return result;
+    }
+
     ModelKind kind() {
         return kind;
     }

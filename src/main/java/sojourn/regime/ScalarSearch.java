@@ -49,7 +49,7 @@ final class ScalarSearch implements WindowSearch {
     public SearchEnd alone() {
         FitSettings one = new FitSettings(ModelKind.MIXTURE, 1, settings.emission(), 1);
         if (settings.emission().fatTailed()) {
-            Climb.Summit summit = Climb.from(new Starts(one, window).bySize(), window, settings.emission());
+            Climb.Summit summit = Climb.from(new Starts(one, window).sorted(), window, settings.emission());
             return end(summit, InitialDistribution.FREE);
         }
         Parameters p = Parameters.blank(ModelKind.MIXTURE, 1);
@@ -62,12 +62,27 @@ final class ScalarSearch implements WindowSearch {
 
     @Override
     public List<Supplier<SearchEnd>> starts(FitRequest request) {
+        Starts starts = new Starts(settings, window);
+        Optional<Climb.Summit> first = starts.fromPrevious(request)
+                .map(start -> Climb.again(start, window, settings.emission(), settings.initial()));
+        Optional<Landmark> landmark = first.filter(this::sound)
+                .map(summit -> Landmark.of(summit, window, settings.emission(), settings.initial()));
         List<Supplier<SearchEnd>> searches = new ArrayList<>();
-        for (Parameters start : new Starts(settings, window).all(request)) {
-            searches.add(
-                    () -> end(Climb.from(start, window, settings.emission(), settings.initial()), settings.initial()));
+        for (Parameters start : starts.cold(request)) {
+            searches.add(() -> end(climb(start, landmark), settings.initial()));
         }
+        first.ifPresent(summit -> searches.add(() -> end(summit, settings.initial())));
         return searches;
+    }
+
+    private Climb.Summit climb(Parameters start, Optional<Landmark> landmark) {
+        return Climb.from(start, window, settings.emission(), settings.initial(), landmark);
+    }
+
+    private boolean sound(Climb.Summit summit) {
+        return summit.converged()
+                && summit.leastCount() >= Soundness.LEAST_COUNT
+                && end(summit, settings.initial()).squeezed().isEmpty();
     }
 
     private SearchEnd end(Climb.Summit summit, InitialDistribution initial) {

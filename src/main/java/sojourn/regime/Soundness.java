@@ -8,7 +8,7 @@ import sojourn.numeric.Check;
  * (in several dimensions: lost its spread in some direction), or the states add nothing to a single one, which is no maximum.
  */
 final class Soundness {
-    private static final int LEAST_COUNT = 5;
+    static final int LEAST_COUNT = 5;
 
     /** Nats by which several states must beat a single one. */
     private static final double NOTHING_GAINED = 1e-6;

@@ -1,15 +1,15 @@
 package sojourn.regime;
 
 import java.util.ArrayList;
-import java.util.Comparator;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
 import sojourn.numeric.RandomStream;
 
 /**
- * Where the searches of one fit start. Start 0 is deterministic: rows sorted by the mean size of the last 21 observations, cut in
- * as many equal groups as there are states. The others are random, odd ones from stretches of the window, even ones from single
+ * Where the searches of one fit start. Start 0 is deterministic: rows sorted by the mean size, or level, of the last 21
+ * observations, cut in as many equal groups as there are states. The others are random, odd ones from stretches of the window, even ones from single
  * observations. The previous accepted fit, if any, comes last.
  */
 final class Starts {
@@ -31,8 +31,20 @@ final class Starts {
 
     /** All starts of that request, in the order in which ties are decided. */
     List<Parameters> all(FitRequest request) {
+        List<Parameters> starts = new ArrayList<>(cold(request));
+        fromPrevious(request).ifPresent(starts::add);
+        return starts;
+    }
+
+    /** The one from the previous fit, if there is one of the same shape. */
+    Optional<Parameters> fromPrevious(FitRequest request) {
+        return request.previous().flatMap(Fit::model).flatMap(this::fromModel).map(this::settled);
+    }
+
+    /** Those that do not depend on the previous fit. */
+    List<Parameters> cold(FitRequest request) {
         List<Parameters> starts = new ArrayList<>();
-        starts.add(bySize());
+        starts.add(sorted());
         for (int index = 1; index < settings.starts(); index++) {
             RandomStream random = RandomStream.of(
                     request.masterSeed(), "start", request.date(), String.format(Locale.ROOT, "%d", index));
@@ -45,49 +57,52 @@ final class Starts {
                 starts.add(stretches ? fromStretches(random) : fromValues(random));
             }
         }
-        request.previous().flatMap(Fit::model).flatMap(this::fromModel).ifPresent(starts::add);
-        return settings.emission().form() == EmissionFamily.Form.NORMAL_TIED ? tied(starts) : starts;
+        return starts.stream().map(this::settled).toList();
     }
 
-    /** Gives every state the mean of the starting variances. */
-    private List<Parameters> tied(List<Parameters> starts) {
-        for (Parameters start : starts) {
-            double mean = 0;
-            for (int k = 0; k < start.states(); k++) {
-                mean += start.at(start.variance(k)) / start.states();
-            }
-            for (int k = 0; k < start.states(); k++) {
-                start.set(start.variance(k), mean);
-            }
+    /** For tied variances gives every state the mean of the starting ones. {@code start} is modified. */
+    private Parameters settled(Parameters start) {
+        double mean = 0;
+        for (int k = 0; k < start.states(); k++) {
+            mean += start.at(start.variance(k)) / start.states();
         }
-        return starts;
+        for (int k = 0; settings.emission().form() == EmissionFamily.Form.NORMAL_TIED && k < start.states(); k++) {
+            start.set(start.variance(k), mean);
+        }
+        return start;
     }
 
-    /** The deterministic start. */
-    Parameters bySize() {
+    /**
+     * The deterministic start: rows sorted by size, or by level where the observations do not lie around zero, which is where their mean
+     * is farther from it than a standard deviation; the mean of the last 21 is what is sorted.
+     */
+    Parameters sorted() {
+        boolean aroundZero = StrictMath.abs(window.center()) <= window.scale();
         List<Integer> rows = presentRows();
-        double[] size = new double[rows.size()];
+        double[] smooth = new double[rows.size()];
         double sum = 0;
-        for (int i = 0; i < size.length; i++) {
-            sum += StrictMath.abs(value(rows.get(i)));
+        for (int i = 0; i < smooth.length; i++) {
+            sum += aroundZero ? StrictMath.abs(value(rows.get(i))) : value(rows.get(i));
             if (i >= SMOOTHING) {
-                sum -= StrictMath.abs(value(rows.get(i - SMOOTHING)));
+                double left = value(rows.get(i - SMOOTHING));
+                sum -= aroundZero ? StrictMath.abs(left) : left;
             }
-            size[i] = sum / StrictMath.min(i + 1, SMOOTHING);
+            smooth[i] = sum / StrictMath.min(i + 1, SMOOTHING);
         }
-        List<Integer> sorted = new ArrayList<>();
-        for (int i = 0; i < size.length; i++) {
-            sorted.add(i);
-        }
-        sorted.sort(Comparator.comparingDouble((Integer i) -> size[i]));
+        double[] ascending = smooth.clone();
+        Arrays.sort(ascending);
         Parameters start = chain(STAY);
         int states = settings.states();
         for (int k = 0; k < states; k++) {
+            double from = k == 0 ? Double.NEGATIVE_INFINITY : ascending[k * ascending.length / states];
+            double to = k + 1 == states ? Double.POSITIVE_INFINITY : ascending[(k + 1) * ascending.length / states];
             List<Integer> group = new ArrayList<>();
-            for (int i : sorted.subList(k * size.length / states, (k + 1) * size.length / states)) {
-                group.add(rows.get(i));
+            for (int i = 0; i < smooth.length; i++) {
+                if (smooth[i] >= from && smooth[i] < to) {
+                    group.add(rows.get(i));
+                }
             }
-            emission(start, k, group);
+            emission(start, k, group.isEmpty() ? rows : group);
         }
         return start;
     }

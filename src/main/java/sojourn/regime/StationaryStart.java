@@ -57,6 +57,32 @@ final class StationaryStart {
         impose(next);
     }
 
+    /**
+     * The expected steps with what the start in the long run adds: n_ij + pi_i A_ij (h_j - sum_l A_il h_l), the gradient of the
+     * objective in ln A_ij before rows are kept to sum 1. Plain steps where the long run does not allow the first row.
+     */
+    static double[] pulled(Parameters p, ExpectedSums sums) {
+        int states = p.states();
+        double[] at = rows(p);
+        double[] first = firstRow(sums);
+        double[] pulled = sums.transitions.clone();
+        Optional<double[]> pi = LongRun.stationary(at, states);
+        if (pi.isEmpty() || !supports(pi.get(), first)) {
+            return pulled;
+        }
+        double[] potential = potential(at, pi.get(), first, states);
+        for (int i = 0; i < states; i++) {
+            double average = 0;
+            for (int j = 0; j < states; j++) {
+                average += at[i * states + j] * potential[j];
+            }
+            for (int j = 0; j < states; j++) {
+                pulled[i * states + j] += pi.get()[i] * at[i * states + j] * (potential[j] - average);
+            }
+        }
+        return pulled;
+    }
+
     private static double[] firstRow(ExpectedSums sums) {
         double[] first = sums.initial.clone();
         double total = 0;
