@@ -1,11 +1,7 @@
 package sojourn.evidence;
 
 import java.util.ArrayList;
-import java.util.LinkedHashMap;
 import java.util.List;
-import java.util.Map;
-import java.util.OptionalDouble;
-import java.util.TreeMap;
 import java.util.function.IntConsumer;
 import java.util.function.Supplier;
 import sojourn.compare.Progress;
@@ -53,55 +49,19 @@ public final class RegimeEvidence {
 
     /** What there is to say, the rivals being walked already. */
     static RegimeFindings asked(Subject subject, List<Walked> rivals) {
-        Map<String, String> absent = new TreeMap<>();
-        List<Subject> present = new ArrayList<>(List.of(subject));
-        for (Walked rival : rivals) {
-            rival.nothing().ifPresentOrElse(why -> absent.put(rival.gauge(), why), () -> present.add(rival.subject()));
-        }
-        Map<String, PerBar> moments = new LinkedHashMap<>();
-        Map<String, PerBar> ofReturn = new LinkedHashMap<>();
-        Map<String, PerBar> ofObservation = new LinkedHashMap<>();
-        for (Subject one : present) {
-            ReturnForecasts forecasts = ReturnForecasts.of(one);
-            moments.put(one.gauge(), forecasts.secondMoment());
-            ofReturn.put(one.gauge(), forecasts.logScore());
-            PerBar scores = ofObservation(one);
-            if (scores.present().length > 0) {
-                ofObservation.put(one.gauge(), scores);
-            }
-        }
-        moments.put(EXPONENTIAL, PlainVolatility.exponential(subject.returns()));
-        moments.put(ROLLING, PlainVolatility.rolling(subject.returns()));
-        boolean forecast = subject.timeline().firstBar().isPresent();
-        Answer<ScoreContest> unheard = Answer.none("no fit was accepted");
+        Contenders contenders = Contenders.of(subject, rivals);
         return new RegimeFindings(
                 subject,
                 FitsTold.of(subject.timeline()),
                 IdentityCards.of(subject),
                 Lineage.of(subject),
-                forecast ? scored(subject, ofObservation) : unheard,
-                forecast ? ScoreContest.of(subject, ofReturn) : unheard,
-                forecast ? ForecastContest.of(subject, moments) : Answer.none("no fit was accepted"),
+                contenders.ofObservation(),
+                contenders.ofReturn(),
+                contenders.ofSquaredReturn(),
                 PseudoResiduals.of(subject),
                 Reproduction.of(subject),
                 Influence.of(subject),
-                moments,
-                absent);
-    }
-
-    private static Answer<ScoreContest> scored(Subject subject, Map<String, PerBar> scores) {
-        return scores.containsKey(subject.gauge())
-                ? ScoreContest.of(subject, scores)
-                : Answer.none("this gauge gives its observation no density");
-    }
-
-    private static PerBar ofObservation(Subject subject) {
-        return PerBar.of(
-                subject.table().size(),
-                bar -> subject.timeline().firstBar().isPresent()
-                                && bar >= subject.timeline().firstBar().getAsInt()
-                                && bar < subject.timeline().endBar()
-                        ? subject.timeline().logScore(bar)
-                        : OptionalDouble.empty());
+                contenders.secondMoments(),
+                contenders.absent());
     }
 }

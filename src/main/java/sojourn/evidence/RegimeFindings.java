@@ -17,7 +17,7 @@ import java.util.TreeMap;
  * @param residuals how the observations lay in the distributions forecast for them
  * @param reproduction whether the last fit reproduces fat tails and clustering
  * @param influence what hangs on single bars
- * @param secondMoments the forecasts themselves, by gauge
+ * @param secondMoments the forecasts themselves, by gauge, also of those that could not be compared
  * @param absent gauges that could not be compared, and why
  */
 public record RegimeFindings(

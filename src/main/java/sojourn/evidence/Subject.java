@@ -155,12 +155,14 @@ public final class Subject {
         return best;
     }
 
+    /** Whether a bar lies at or after the first accepted fit. */
+    boolean walked(int bar) {
+        return timeline.firstBar().isPresent() && bar >= timeline.firstBar().getAsInt() && bar < timeline.endBar();
+    }
+
     /** Whether a fit was in force at a bar, so that its regimes count. */
     public boolean known(int bar) {
-        return timeline.firstBar().isPresent()
-                && bar >= timeline.firstBar().getAsInt()
-                && bar < timeline.endBar()
-                && timeline.fitInForce(bar).isPresent();
+        return walked(bar) && timeline.fitInForce(bar).isPresent();
     }
 
     /** What was observed from bar {@code from} up to, not including, {@code end}. */

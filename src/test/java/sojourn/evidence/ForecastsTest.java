@@ -4,6 +4,7 @@ import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.within;
 
 import java.util.LinkedHashMap;
+import java.util.List;
 import java.util.Map;
 import java.util.OptionalDouble;
 import org.junit.jupiter.api.Test;
@@ -120,6 +121,22 @@ class ForecastsTest {
         assertThat(contest.best()).isEqualTo(ahead > 0 ? "hidden-markov" : "late");
         forecasts.put("never", PerBar.of(700, bar -> OptionalDouble.empty()));
         assertThat(ForecastContest.of(subject, forecasts).because()).contains("late, never");
+    }
+
+    /** A rival that speaks late would leave few bars to compare the others on; it is named, with its forecasts in the file all the same. */
+    @Test
+    void whoForecastLessThanHalfIsNotCompared() {
+        GivenPrices prices = Subjects.twoWeathers(2, 700);
+        Subject own = Subjects.walked(prices, 300, 200);
+        Subject late = Subjects.walked(prices, Rivals.of(own.regimes()).get(0), Subjects.expanding(600, 200));
+        Contenders contenders = Contenders.of(own, List.of(new Walked(late)));
+        assertThat(contenders.absent().get(late.gauge())).contains("99 bars of the 399");
+        assertThat(contenders.secondMoments()).containsKey(late.gauge());
+        ForecastContest contest = Subjects.found(contenders.ofSquaredReturn());
+        assertThat(contest.bars()).isEqualTo(399);
+        assertThat(contest.rows())
+                .extracting(ForecastContest.Row::gauge)
+                .containsExactly("hidden-markov", RegimeEvidence.EXPONENTIAL, RegimeEvidence.ROLLING);
     }
 
     @Test

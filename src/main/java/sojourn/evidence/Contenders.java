@@ -1,0 +1,100 @@
+package sojourn.evidence;
+
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.OptionalDouble;
+import java.util.TreeMap;
+
+/** Everybody who forecast, the subject's own gauge first, and what each said; who said too little is not compared, and why is told. */
+final class Contenders {
+    private final Subject subject;
+    private final Map<String, PerBar> secondMoments = new LinkedHashMap<>();
+    private final Map<String, PerBar> ofReturn = new LinkedHashMap<>();
+    private final Map<String, PerBar> ofObservation = new LinkedHashMap<>();
+    private final Map<String, String> absent = new TreeMap<>();
+
+    private Contenders(Subject subject) {
+        this.subject = subject;
+    }
+
+    /** The subject's own gauge, its rivals, and two forecasts of volatility that know no regimes. */
+    static Contenders of(Subject subject, List<Walked> rivals) {
+        Contenders all = new Contenders(subject);
+        all.enter(subject);
+        int own = all.forecasts(subject.gauge());
+        for (Walked rival : rivals) {
+            all.enter(rival.subject());
+            all.tooLittle(rival, own).ifPresent(why -> all.absent.put(rival.gauge(), why));
+        }
+        all.secondMoments.put(RegimeEvidence.EXPONENTIAL, PlainVolatility.exponential(subject.returns()));
+        all.secondMoments.put(RegimeEvidence.ROLLING, PlainVolatility.rolling(subject.returns()));
+        return all;
+    }
+
+    private void enter(Subject one) {
+        ReturnForecasts forecasts = ReturnForecasts.of(one);
+        secondMoments.put(one.gauge(), forecasts.secondMoment());
+        ofReturn.put(one.gauge(), forecasts.logScore());
+        PerBar scores = PerBar.of(
+                one.table().size(), bar -> one.walked(bar) ? one.timeline().logScore(bar) : OptionalDouble.empty());
+        if (scores.present().length > 0) {
+            ofObservation.put(one.gauge(), scores);
+        }
+    }
+
+    /** The bars in common would be few, and would say little of the others. */
+    private Optional<String> tooLittle(Walked rival, int own) {
+        int forecast = forecasts(rival.gauge());
+        return rival.nothing()
+                .or(() -> 2 * forecast < own
+                        ? Optional.of("it forecast " + forecast + " bars of the " + own
+                                + " that the strategy's own gauge did, less than half")
+                        : Optional.empty());
+    }
+
+    private int forecasts(String gauge) {
+        return CommonBars.required(secondMoments, gauge).present().length;
+    }
+
+    private boolean speechless() {
+        return subject.timeline().firstBar().isEmpty();
+    }
+
+    /** Log scores of the observation. */
+    Answer<ScoreContest> ofObservation() {
+        if (speechless()) {
+            return Answer.none("no fit was accepted");
+        }
+        return ofObservation.containsKey(subject.gauge())
+                ? ScoreContest.of(subject, compared(ofObservation))
+                : Answer.none("this gauge gives its observation no density");
+    }
+
+    /** Log scores of the next return. */
+    Answer<ScoreContest> ofReturn() {
+        return speechless() ? Answer.none("no fit was accepted") : ScoreContest.of(subject, compared(ofReturn));
+    }
+
+    /** Forecasts of the next squared return. */
+    Answer<ForecastContest> ofSquaredReturn() {
+        return speechless() ? Answer.none("no fit was accepted") : ForecastContest.of(subject, compared(secondMoments));
+    }
+
+    private Map<String, PerBar> compared(Map<String, PerBar> all) {
+        Map<String, PerBar> some = new LinkedHashMap<>(all);
+        some.keySet().removeAll(absent.keySet());
+        return some;
+    }
+
+    /** Every forecast of the squared return, also of those who are not compared. */
+    Map<String, PerBar> secondMoments() {
+        return secondMoments;
+    }
+
+    /** Who is not compared, and why. */
+    Map<String, String> absent() {
+        return absent;
+    }
+}
