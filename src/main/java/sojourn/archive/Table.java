@@ -6,14 +6,13 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.OptionalDouble;
 import org.apache.commons.csv.CSVFormat;
-import org.apache.commons.csv.CSVPrinter;
 import sojourn.numeric.ShortestDecimal;
 
 /**
  * Rows under named columns, as a result file holds them: comma, dot, {@code \n}, shortest decimals that read back to the same
  * double (0.0 for a negative zero), an empty cell for what is undefined. Quoted as RFC 4180 says. A text that a spreadsheet would
  * take for a formula, because it begins with {@code =}, {@code +}, {@code -}, {@code @}, a tab or a carriage return, gets an
- * apostrophe in front; numbers are left as they are.
+ * apostrophe in front; numbers are left as they are, and are written without a look for what may need quotes: most cells are numbers.
  */
 public final class Table {
     private static final CSVFormat FORMAT =
@@ -23,10 +22,15 @@ public final class Table {
 
     private final List<String> columns;
     private final List<List<String>> rows = new ArrayList<>();
+    private final StringBuilder csv = new StringBuilder();
 
     /** With these columns and no row. */
     public Table(List<String> columns) {
         this.columns = List.copyOf(columns);
+        for (int i = 0; i < columns.size(); i++) {
+            write(columns.get(i), i, csv);
+        }
+        csv.append('\n');
     }
 
     /** Begins a row; its cells are added in the order of the columns. */
@@ -46,21 +50,22 @@ public final class Table {
 
     /** The whole table as CSV text. */
     public String csv() {
-        StringBuilder text = new StringBuilder();
-        try (CSVPrinter printer = new CSVPrinter(text, FORMAT)) {
-            printer.printRecord(columns);
-            for (List<String> row : rows) {
-                printer.printRecord(row);
-            }
+        return csv.toString();
+    }
+
+    /** Adds a cell of a column, with what separates it from the one before, and with quotes where it needs them. */
+    private static void write(String cell, int column, StringBuilder to) {
+        try {
+            FORMAT.print(cell, to, column == 0);
         } catch (IOException e) {
             throw new UncheckedIOException("a string cannot fail to be written to", e);
         }
-        return text.toString();
     }
 
     /** A row that is being filled. */
     public final class Row {
         private final List<String> cells = new ArrayList<>(columns.size());
+        private final StringBuilder line = new StringBuilder();
 
         private Row() {}
 
@@ -68,7 +73,9 @@ public final class Table {
         public Row add(Object value) {
             String text = value.toString();
             boolean formula = !text.isEmpty() && FORMULA_STARTS.indexOf(text.charAt(0)) >= 0;
-            cells.add(formula ? "'" + text : text);
+            String cell = formula ? "'" + text : text;
+            write(cell, cells.size(), line);
+            cells.add(cell);
             return this;
         }
 
@@ -77,8 +84,7 @@ public final class Table {
             if (!Double.isFinite(value)) {
                 throw new IllegalArgumentException("column '" + columns.get(cells.size()) + "' was given " + value);
             }
-            cells.add(ShortestDecimal.of(value + 0.0)); // -0.0 + 0.0 is 0.0
-            return this;
+            return addPlain(ShortestDecimal.of(value + 0.0)); // -0.0 + 0.0 is 0.0
         }
 
         /** A number, or nothing. */
@@ -88,8 +94,7 @@ public final class Table {
 
         /** An undefined cell. */
         public Row blank() {
-            cells.add("");
-            return this;
+            return addPlain("");
         }
 
         /** Ends the row, which must be full. */
@@ -98,6 +103,18 @@ public final class Table {
                 throw new IllegalArgumentException(cells.size() + " cells for " + columns.size() + " columns");
             }
             rows.add(List.copyOf(cells));
+            csv.append(line).append('\n');
+        }
+
+        /** A cell that needs no quotes; the first of a row is left to the writer, which tells an empty row from no row. */
+        private Row addPlain(String cell) {
+            if (cells.isEmpty()) {
+                write(cell, 0, line);
+            } else {
+                line.append(',').append(cell);
+            }
+            cells.add(cell);
+            return this;
         }
     }
 }

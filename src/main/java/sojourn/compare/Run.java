@@ -45,6 +45,17 @@ public sealed interface Run {
             return ready.timelineKey();
         }
 
+        /** A run is itself alone, so that it can be a key without a look at every setting and price behind it. */
+        @Override
+        public boolean equals(Object other) {
+            return this == other;
+        }
+
+        @Override
+        public int hashCode() {
+            return System.identityHashCode(this);
+        }
+
         /** When it first held something; its first decision if it never did. */
         public LocalDate firstFill() {
             int bar = track.firstFill().orElse(track.firstBar());

@@ -35,7 +35,7 @@ public final class Moments {
         Check.that(n > 0, "there are no values, moments need at least one");
         CompensatedSum total = new CompensatedSum();
         for (int i = 0; i < n; i++) {
-            total.add(Check.finite(values[i], "value " + i));
+            total.add(Check.finite(values[i], "value", i));
         }
         double near = total.value() / n;
         CompensatedSum first = new CompensatedSum();

@@ -26,7 +26,7 @@ public final class PriceTable {
         /** Refuses columns of different lengths and closes that are not positive and finite. */
         public Bars {
             for (int bar = 0; bar < close.size(); bar++) {
-                Check.above(close.at(bar), 0, "close of bar " + bar);
+                Check.above(close.at(bar), 0, "close of bar", bar);
             }
             for (Optional<Column> other : List.of(open, high, low, volume)) {
                 if (other.isPresent() && other.get().size() != close.size()) {

@@ -73,7 +73,7 @@ public final class Drawdown {
         int longest = 0;
         CompensatedSum squares = new CompensatedSum();
         for (int t = 0; t < wealth.length; t++) {
-            Check.atLeast(wealth[t], 0, "wealth " + t);
+            Check.atLeast(wealth[t], 0, "wealth", t);
             if (wealth[t] > wealth[runningPeak]) {
                 runningPeak = t;
             }

@@ -58,19 +58,8 @@ public final class EvaluatedPath {
             List<LocalDate> dates, double[] wealth, double[] cashReturns, double periodsPerYear) {
         Check.that(!dates.isEmpty(), "there are no dates, a path needs at least its base date");
         Check.that(wealth.length == dates.size(), wealth.length + " amounts of wealth for " + dates.size() + " dates");
-        for (int i = 1; i < dates.size(); i++) {
-            Check.that(
-                    dates.get(i).isAfter(dates.get(i - 1)),
-                    "date " + dates.get(i) + " does not come after " + dates.get(i - 1));
-        }
-        Check.above(wealth[0], 0, "wealth 0");
-        for (int i = 1; i < wealth.length; i++) {
-            Check.atLeast(wealth[i], 0, "wealth " + i);
-            Check.that(wealth[i - 1] > 0 || wealth[i] == 0, "wealth " + i + " is " + wealth[i] + " after ruin");
-            Check.that(
-                    wealth[i - 1] == 0 || Double.isFinite(wealth[i] / wealth[i - 1]),
-                    "wealth " + i + " is " + wealth[i] + " after " + wealth[i - 1] + ", beyond the range of a return");
-        }
+        requireAscending(dates);
+        requireRuinToLast(wealth);
         requireLength(wealth.length - 1, cashReturns, "cash returns");
         for (double one : cashReturns) {
             Check.above(one, -1, "a cash return");
@@ -103,7 +92,7 @@ public final class EvaluatedPath {
         requireNotNegative(gross, "gross exposures");
         for (int i = 0; i < net.length; i++) {
             double reach = gross[i] * (1 + ROUNDING) + ROUNDING;
-            Check.within(net[i], -reach, reach, "net exposure " + i);
+            Check.within(net[i], -reach, reach, "net exposure", i);
         }
         return with(Part.NET_EXPOSURE, net).with(Part.GROSS_EXPOSURE, gross);
     }
@@ -208,10 +197,33 @@ public final class EvaluatedPath {
         return new EvaluatedPath(dates, wealth, periodsPerYear, cash, all);
     }
 
+    private static void requireAscending(List<LocalDate> dates) {
+        for (int i = 1; i < dates.size(); i++) {
+            if (!dates.get(i).isAfter(dates.get(i - 1))) {
+                throw new IllegalArgumentException("date " + dates.get(i) + " does not come after " + dates.get(i - 1));
+            }
+        }
+    }
+
+    private static void requireRuinToLast(double[] wealth) {
+        Check.above(wealth[0], 0, "wealth 0");
+        for (int i = 1; i < wealth.length; i++) {
+            Check.atLeast(wealth[i], 0, "wealth", i);
+            if (wealth[i - 1] == 0 && wealth[i] != 0) {
+                throw new IllegalArgumentException("wealth " + i + " is " + wealth[i] + " after ruin");
+            }
+            if (wealth[i - 1] > 0 && !Double.isFinite(wealth[i] / wealth[i - 1])) {
+                throw new IllegalArgumentException("wealth " + i + " is " + wealth[i] + " after " + wealth[i - 1]
+                        + ", beyond the range of a return");
+            }
+        }
+    }
+
     private void requireNotNegative(double[] values, String name) {
         requireLength(bars(), values, name);
+        String oneOfThem = "one of the " + name;
         for (double one : values) {
-            Check.atLeast(one, 0, "one of the " + name);
+            Check.atLeast(one, 0, oneOfThem);
         }
     }
 

@@ -35,8 +35,7 @@ public final class Companions {
         double[] returns = new double[rowMajor.length];
         for (int row = 0; row < missing.length; row++) {
             for (int a = 0; !missing[row] && a < assets; a++) {
-                returns[row * assets + a] =
-                        Check.finite(rowMajor[row * assets + a], "return of asset " + a + " in row " + row);
+                returns[row * assets + a] = Check.finite(rowMajor[row * assets + a], "return of an asset in row", row);
             }
         }
         return new Companions(assets, returns, missing.clone());

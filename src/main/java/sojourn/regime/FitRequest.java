@@ -47,7 +47,7 @@ public final class FitRequest {
                         + " rows of asset returns");
         double[] copy = new double[rows];
         for (int row = 0; row < rows; row++) {
-            copy[row] = observations.missing(row) ? 0 : Check.finite(orderBy[row], "return to order by in row " + row);
+            copy[row] = observations.missing(row) ? 0 : Check.finite(orderBy[row], "return to order by in row", row);
         }
         return new FitRequest(observations, copy, companions, Optional.empty(), masterSeed, date);
     }

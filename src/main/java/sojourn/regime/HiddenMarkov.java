@@ -59,9 +59,11 @@ public final class HiddenMarkov implements RegimeModel {
     static void checkDistribution(double[] values, int start, int length, String name) {
         double sum = 0;
         for (int k = 0; k < length; k++) {
-            sum += Check.within(values[start + k], 0, 1, name + ", entry " + k);
+            sum += Check.within(values[start + k], 0, 1, name, k);
         }
-        Check.that(StrictMath.abs(sum - 1) <= SUM_TOLERANCE, name + " sums to " + sum + ", must sum to 1");
+        if (!(StrictMath.abs(sum - 1) <= SUM_TOLERANCE)) {
+            throw new IllegalArgumentException(name + " sums to " + sum + ", must sum to 1");
+        }
     }
 
     /** Whether the initial distribution is free or that of the long run. */

@@ -68,9 +68,7 @@ public final class Observations {
         double[] values = new double[rowMajor.length];
         for (int i = 0; i < values.length; i++) {
             if (!missingCells[i]) {
-                values[i] = Double.isFinite(rowMajor[i])
-                        ? rowMajor[i]
-                        : Check.finite(rowMajor[i], "observation in row " + i / dimension);
+                values[i] = Check.finite(rowMajor[i], "observation in row", i / dimension);
             }
         }
         return new Observations(dimension, values, missingCells.clone());

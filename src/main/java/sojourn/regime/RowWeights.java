@@ -17,7 +17,7 @@ final class RowWeights implements Membership {
     static RowWeights of(int states, double[] rowMajor) {
         Check.that(rowMajor.length % states == 0, rowMajor.length + " weights of " + states + " states");
         for (int row = 0; row < rowMajor.length / states; row++) {
-            HiddenMarkov.checkDistribution(rowMajor, row * states, states, "weights of row " + row);
+            HiddenMarkov.checkDistribution(rowMajor, row * states, states, "weights of a row");
         }
         return new RowWeights(states, rowMajor.clone());
     }

@@ -1,64 +1,60 @@
 package sojourn.report;
 
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
-import tech.tablesaw.api.Row;
 import tech.tablesaw.api.StringColumn;
-import tech.tablesaw.api.Table;
 
 /**
  * A table of texts laid out for a terminal: columns as wide as they need, two spaces between them, the first column flush left and the
- * others flush right.
+ * others flush right. Columns without a table around them: the table's class looks through the whole program for readers and
+ * writers of files when it is first used, which takes longer than reading the prices.
  */
 final class Grid {
     private static final String GAP = "  ";
     private static final int LEAST_NAME = 8;
 
     private final List<String> headings;
-    private final Table table;
+    private final List<StringColumn> columns = new ArrayList<>();
 
     /** With headings and no row; two headings may be alike. */
     Grid(List<String> headings) {
         this.headings = List.copyOf(headings);
-        this.table = Table.create();
-        for (int i = 0; i < headings.size(); i++) {
-            table.addColumns(StringColumn.create(i + " " + headings.get(i)));
-        }
+        headings.forEach(heading -> columns.add(StringColumn.create(heading)));
     }
 
     /** Adds a row; one cell a heading. */
     void add(List<String> cells) {
-        Row row = table.appendRow();
-        for (int i = 0; i < cells.size(); i++) {
-            row.setString(i, cells.get(i));
+        for (int i = 0; i < columns.size(); i++) {
+            columns.get(i).append(cells.get(i));
         }
     }
 
     /** The whole, each line ended. */
     String text() {
-        int columns = table.columnCount();
-        int[] widths = new int[columns];
-        for (int i = 0; i < columns; i++) {
+        int[] widths = new int[columns.size()];
+        for (int i = 0; i < widths.length; i++) {
             widths[i] = headings.get(i).length();
-            for (String cell : table.stringColumn(i)) {
+            for (String cell : columns.get(i)) {
                 widths[i] = Math.max(widths[i], cell.length());
             }
         }
         narrow(widths);
         StringBuilder text = new StringBuilder();
         line(text, headings, widths);
-        for (int i = 0; i < columns; i++) {
+        for (int i = 0; i < widths.length; i++) {
             text.append(i == 0 ? "" : GAP).append("-".repeat(widths[i]));
         }
         text.append('\n');
-        for (Row row : table) {
-            String[] cells = new String[columns];
-            for (int i = 0; i < columns; i++) {
-                cells[i] = row.getString(i);
-            }
-            line(text, List.of(cells), widths);
+        for (int row = 0; row < rows(); row++) {
+            int at = row;
+            line(text, columns.stream().map(column -> column.get(at)).toList(), widths);
         }
         return text.toString();
+    }
+
+    private int rows() {
+        return columns.get(0).size();
     }
 
     /** Takes from the first column, which holds names, what is too much for a line. */
