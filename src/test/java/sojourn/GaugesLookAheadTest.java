@@ -9,6 +9,7 @@ import java.util.Optional;
 import java.util.function.IntFunction;
 import org.junit.jupiter.api.io.TempDir;
 import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.MethodSource;
 import org.junit.jupiter.params.provider.ValueSource;
 import sojourn.PrefixCheck.Difference;
 import sojourn.PrefixCheck.Rows;
@@ -41,6 +42,18 @@ class GaugesLookAheadTest {
     private static final String JUMP =
             "model: jump, states: [calm, stormy], observe: [{absolute-return: stocks}], penalty: 8";
 
+    private static final String BY_BIC = choosing("bic");
+    private static final String BY_PREDICTION = choosing("predictive");
+
+    private static String choosing(String by) {
+        return "observe: [{log-return: stocks}], states: [all, calm, stormy], choose: {states: [[all], [calm, stormy]], by: "
+                + by + "}";
+    }
+
+    static List<String> choices() {
+        return List.of(BY_BIC, BY_PREDICTION);
+    }
+
     @TempDir
     private Path folder;
 
@@ -65,8 +78,35 @@ class GaugesLookAheadTest {
                 .allSatisfy(difference -> assertThat(difference.column()).isEqualTo("target.stocks"));
     }
 
+    @ParameterizedTest
+    @MethodSource("choices")
+    void aChosenNumberOfRegimesSaysTheSameOfEveryBarUpToTheCut(String regimes) {
+        PrefixCheck check = check(choosingJob(regimes));
+        assertThat(check.whole().rows().stream()
+                        .filter(row -> row.table().equals("fits"))
+                        .map(row -> row.cells().get(row.columns().indexOf("states")))
+                        .distinct())
+                .containsExactlyInAnyOrder("1", "2");
+        assertThat(differences(check)).isEmpty();
+    }
+
+    @ParameterizedTest
+    @MethodSource("choices")
+    void aNumberChosenFromTheFullSampleIsCaughtEvenIfItsFitsAndFilterAreHonest(String regimes) {
+        PrefixCheck check = check(choosingJob(regimes).signalling(ChosenInHindsight::new));
+        assertThat(differences(check)).isNotEmpty();
+    }
+
+    private WholeJob choosingJob(String regimes) {
+        return WholeJob.of(text(regimes).replace("{calm:", "{all: {stocks: 0.5}, calm:"), folder);
+    }
+
     private WholeJob job(String regimes) {
-        return WholeJob.of("""
+        return WholeJob.of(text(regimes), folder);
+    }
+
+    private static String text(String regimes) {
+        return """
                 strategy: Lean with the odds
                 prices: {stocks: {csv: stocks.csv}}
                 cash: {percent-per-year: 4}
@@ -74,7 +114,7 @@ class GaugesLookAheadTest {
                 refit: {first-fit-after: 300, every: 50, window: {rolling: 250}, starts: 2, seed: 7}
                 allocate: {blend: {weights: {calm: {stocks: 1}, stormy: {stocks: 0}}}}
                 judge: {against: [buy-and-hold], buy-and-hold: {stocks: 1}, rank-by: sharpe}
-                """.formatted(regimes), folder);
+                """.formatted(regimes);
     }
 
     private PrefixCheck check(WholeJob job) {
@@ -135,6 +175,38 @@ class GaugesLookAheadTest {
                             probabilities.get(known.bar() - 1),
                             new double[] {1, 0, 0, 1},
                             timeline.fits().get(0).fit().moments().orElseThrow()));
+        }
+    }
+
+    /** At every bar the number of regimes that the last fit of all chose; its own fits and filter are honest. */
+    private static final class ChosenInHindsight implements Signal {
+        private final RegimeTimeline timeline;
+        private final int last;
+
+        ChosenInHindsight(PriceTable table, RegimeTimeline timeline) {
+            this.timeline = timeline;
+            this.last = timeline.fits().isEmpty()
+                    ? 0
+                    : timeline.fits().get(timeline.fits().size() - 1).regimes().size();
+        }
+
+        @Override
+        public List<String> regimes() {
+            return timeline.regimes();
+        }
+
+        @Override
+        public Optional<Reading> at(Known known) {
+            return timeline.at(known).map(honest -> {
+                double[] own = honest.filtered();
+                double[] one = {1, 0, 0};
+                double[] two = {0, own[0] == 1 ? 1 : own[1], own[0] == 1 ? 0 : own[2]};
+                return Reading.of(
+                        honest.fit(),
+                        last == 1 ? one : two,
+                        new double[] {1, 0, 0, 0, 1, 0, 0, 0, 1},
+                        timeline.reading(known.bar()).orElseThrow().moments());
+            });
         }
     }
 }

@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.OptionalInt;
 import java.util.function.Function;
 import sojourn.regime.Emission;
 import sojourn.regime.Fit;
@@ -13,6 +14,7 @@ import sojourn.regime.MultivariateNormal;
 import sojourn.regime.RegimeModel;
 import sojourn.regime.StudentT;
 import sojourn.regime.VolatilityThreshold;
+import sojourn.walk.CandidateFit;
 import sojourn.walk.FitRecord;
 import sojourn.walk.RegimeTimeline;
 
@@ -61,6 +63,11 @@ final class FitColumns {
         all.each("order_by.", FitColumns::gauged, (fit, k) -> fit.orderBy()[k]);
         all.stays();
         all.each("occupancy.", FitColumns::gauged, (fit, k) -> fit.occupancy()[k]);
+        timeline.fits().stream()
+                .map(FitRecord::candidates)
+                .filter(candidates -> candidates.size() > 1)
+                .findFirst()
+                .ifPresent(all::choice);
         return all.columns;
     }
 
@@ -122,10 +129,13 @@ final class FitColumns {
     }
 
     private <T> void each(String prefix, Function<Fit, Optional<T>> part, PerState<T> number) {
-        for (int k = 0; k < regimes.size(); k++) {
-            int state = k;
-            columns.add(new Column(
-                    prefix + regimes.get(k), record -> number(part.apply(record.fit()), p -> number.of(p, state))));
+        for (String regime : regimes) {
+            columns.add(new Column(prefix + regime, record -> {
+                OptionalInt state = record.state(regime);
+                return state.isEmpty()
+                        ? OptionalDouble.empty()
+                        : number(part.apply(record.fit()), p -> number.of(p, state.getAsInt()));
+            }));
         }
     }
 
@@ -134,27 +144,45 @@ final class FitColumns {
     }
 
     private void transitions() {
-        for (int i = 0; i < regimes.size(); i++) {
-            for (int j = 0; j < regimes.size(); j++) {
-                int from = i;
-                int to = j;
-                columns.add(new Column(
-                        "transition." + regimes.get(i) + "." + regimes.get(j),
-                        record -> number(record.fit().gauge(), gauge -> gauge.transition(from, to))));
+        for (String from : regimes) {
+            for (String to : regimes) {
+                columns.add(new Column("transition." + from + "." + to, record -> {
+                    OptionalInt i = record.state(from);
+                    OptionalInt j = record.state(to);
+                    return i.isEmpty() || j.isEmpty()
+                            ? OptionalDouble.empty()
+                            : number(record.fit().gauge(), gauge -> gauge.transition(i.getAsInt(), j.getAsInt()));
+                }));
             }
         }
     }
 
     /** Expected bars that a regime lasts, 1 / (1 - a_kk); empty for one that is never left. */
     private void stays() {
-        for (int k = 0; k < regimes.size(); k++) {
-            int state = k;
+        for (String regime : regimes) {
+            columns.add(new Column("stay_bars." + regime, record -> {
+                OptionalInt k = record.state(regime);
+                return k.isEmpty()
+                        ? OptionalDouble.empty()
+                        : record.fit()
+                                .gauge()
+                                .map(gauge -> stay(gauge.transition(k.getAsInt(), k.getAsInt())))
+                                .orElseGet(OptionalDouble::empty);
+            }));
+        }
+    }
+
+    /** Of each number of regimes that a fit chose among: its criterion and the score that was compared. */
+    private void choice(List<CandidateFit> candidates) {
+        for (int c = 0; c < candidates.size(); c++) {
+            int candidate = c;
+            int states = candidates.get(c).regimes().size();
             columns.add(new Column(
-                    "stay_bars." + regimes.get(k),
-                    record -> record.fit()
-                            .gauge()
-                            .map(gauge -> stay(gauge.transition(state, state)))
-                            .orElse(OptionalDouble.empty())));
+                    "bic." + states,
+                    record -> record.candidates().get(candidate).bic()));
+            columns.add(new Column(
+                    "score." + states,
+                    record -> record.candidates().get(candidate).compared()));
         }
     }
 

@@ -74,16 +74,18 @@ public final class TimelineFiles {
         header.add("explanation");
         Table table = new Table(header);
         for (FitRecord record : timeline.fits()) {
-            addFit(table.row(), record, timeline.regimes().size(), numbers);
+            addFit(table.row(), record, numbers);
         }
         return table;
     }
 
-    private static void addFit(Table.Row row, FitRecord record, int states, List<FitColumns.Column> numbers) {
+    private static void addFit(Table.Row row, FitRecord record, List<FitColumns.Column> numbers) {
         Fit fit = record.fit();
         row.add(Integer.toString(record.number())).add(record.fittedOn());
         row.add(fit.outcome().accepted() ? record.fittedOn().toString() : "");
-        row.add(record.windowStart()).add(record.fittedOn()).add(Integer.toString(states));
+        row.add(record.windowStart())
+                .add(record.fittedOn())
+                .add(Integer.toString(record.regimes().size()));
         row.add(Integer.toString(fit.observations())).add(fit.outcome().word());
         boolean likelihood = fit.model().isPresent();
         row.add(likelihood ? OptionalDouble.of(fit.logLikelihood()) : OptionalDouble.empty());

@@ -16,6 +16,7 @@ import sojourn.walk.Observation;
 import sojourn.walk.RefitSchedule;
 import sojourn.walk.RefitSettings;
 import sojourn.walk.RegimeSettings;
+import sojourn.walk.StateChoice;
 
 /** The sections {@code regimes} and {@code refit} in plain English. */
 final class GaugeText {
@@ -26,8 +27,20 @@ final class GaugeText {
         String observed = regimes.observe().stream().map(Observation::inWords).collect(Collectors.joining(", "));
         String ordered = ", ordered by the volatility of " + regimes.orderedBy() + " at every fit";
         boolean named = regimes.model() == ModelKind.ONE_REGIME || regimes.model() == ModelKind.VOLATILITY_THRESHOLD;
-        return observed + "; " + model(regimes) + "; regimes " + String.join(", ", regimes.states())
-                + (named ? "" : ordered);
+        return observed + "; " + model(regimes) + "; regimes " + named(regimes) + (named ? "" : ordered);
+    }
+
+    private static String named(RegimeSettings regimes) {
+        return regimes.particulars()
+                .choose()
+                .map(choice -> choice.regimes().stream()
+                                .map(names -> names.size() + " (" + String.join(", ", names) + ")")
+                                .collect(Collectors.joining(" or "))
+                        + ", chosen at every fit by "
+                        + (choice.by() == StateChoice.By.BIC
+                                ? "the information criterion of Bayes on its window"
+                                : "the log score of each number's own forecasts so far"))
+                .orElseGet(() -> String.join(", ", regimes.states()));
     }
 
     private static String model(RegimeSettings regimes) {

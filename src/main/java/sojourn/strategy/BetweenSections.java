@@ -79,11 +79,10 @@ final class BetweenSections {
             return;
         }
         int window = refit.get().rolling().getAsInt();
-        int series = regimes.get().observe().size();
-        int least = regimes.get().gauge(refit.get().starts()).leastObservations(series);
+        int least = regimes.get().leastObservations();
         if (window < least) {
             String what = "a window of " + window + " observations is too small to fit "
-                    + regimes.get().states().size() + " regimes";
+                    + regimes.get().fewestStates() + " regimes";
             Misfit misfit = new Misfit("/window/rolling", what, "give at least " + least + ", better many more");
             add("/refit", List.of(misfit), problems);
         }

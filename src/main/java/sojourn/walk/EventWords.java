@@ -11,10 +11,10 @@ final class EventWords {
     }
 
     /** An explanation with the regimes' names in place of {@code {k}}, and the observations' in place of {@code [j]}. */
-    static String named(String explanation, RegimeSettings regimes) {
-        String text = named(explanation, regimes.states());
-        for (int j = 0; j < regimes.observe().size(); j++) {
-            text = text.replace("[" + j + "]", regimes.observe().get(j).inWords());
+    static String named(String explanation, List<String> regimes, List<Observation> observed) {
+        String text = named(explanation, regimes);
+        for (int j = 0; j < observed.size(); j++) {
+            text = text.replace("[" + j + "]", observed.get(j).inWords());
         }
         return text;
     }

@@ -9,18 +9,25 @@ import sojourn.regime.VolatilityThresholdSettings;
  *
  * @param threshold of the model volatility-threshold
  * @param penalty of the model jump
+ * @param choose among which numbers of regimes each fit chooses, of the models hidden-markov and mixture
  */
-public record Particulars(Optional<VolatilityThresholdSettings> threshold, OptionalDouble penalty) {
+public record Particulars(
+        Optional<VolatilityThresholdSettings> threshold, OptionalDouble penalty, Optional<StateChoice> choose) {
     /** None of it. */
-    public static final Particulars NONE = new Particulars(Optional.empty(), OptionalDouble.empty());
+    public static final Particulars NONE = new Particulars(Optional.empty(), OptionalDouble.empty(), Optional.empty());
 
     /** Those of the model volatility-threshold. */
     public static Particulars threshold(VolatilityThresholdSettings threshold) {
-        return new Particulars(Optional.of(threshold), OptionalDouble.empty());
+        return new Particulars(Optional.of(threshold), OptionalDouble.empty(), Optional.empty());
     }
 
     /** Those of the model jump. */
     public static Particulars penalty(double penalty) {
-        return new Particulars(Optional.empty(), OptionalDouble.of(penalty));
+        return new Particulars(Optional.empty(), OptionalDouble.of(penalty), Optional.empty());
+    }
+
+    /** The number of regimes is chosen at each fit. */
+    public static Particulars choosing(StateChoice choose) {
+        return new Particulars(Optional.empty(), OptionalDouble.empty(), Optional.of(choose));
     }
 }

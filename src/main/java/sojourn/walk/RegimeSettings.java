@@ -1,7 +1,5 @@
 package sojourn.walk;
 
-import java.math.BigDecimal;
-import java.util.ArrayList;
 import java.util.HashSet;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -109,6 +107,12 @@ public record RegimeSettings(
                             + " the nearest regime; the larger, the longer the stays")
             .onlyWith(MODEL, List.of(ModelKind.JUMP.word()));
 
+    private static final Field<Optional<StateChoice>> CHOOSE = Field.maybe(
+                    "choose",
+                    StateChoice.SHAPE,
+                    "lets each fit choose the number of regimes; 'states' then names the regimes of all numbers")
+            .onlyWith(MODEL, List.of(ModelKind.HIDDEN_MARKOV.word(), ModelKind.MIXTURE.word()));
+
     /** The section's shape. */
     public static final Shape<RegimeSettings> SHAPE = Shapes.object(
                     "regimes",
@@ -120,7 +124,7 @@ public record RegimeSettings(
                             f.get(INITIAL),
                             f.get(ORDER_BY),
                             f.get(PARAMETERS),
-                            new Particulars(f.get(THRESHOLD), number(f.get(PENALTY)))),
+                            new Particulars(f.get(THRESHOLD), number(f.get(PENALTY)), f.get(CHOOSE))),
                     MODEL,
                     OBSERVE,
                     STATES,
@@ -129,8 +133,9 @@ public record RegimeSettings(
                     ORDER_BY,
                     PARAMETERS,
                     THRESHOLD,
-                    PENALTY)
-            .refuseEach(RegimeSettings::faults);
+                    PENALTY,
+                    CHOOSE)
+            .refuseEach(RegimeFaults::of);
 
     /** Copies its lists. */
     public RegimeSettings {
@@ -170,11 +175,26 @@ public record RegimeSettings(
             return new JumpSettings(states.size(), particulars.penalty().getAsDouble(), starts);
         }
         return fixed.<GaugeSettings>map(declared -> new GivenParameters(declared.model(emission)))
-                .orElseGet(() -> likelihood(starts));
+                .orElseGet(() -> likelihood(states.size(), starts));
     }
 
-    private FitSettings likelihood(int starts) {
-        return new FitSettings(model, states.size(), emission, initial.orElse(InitialDistribution.FREE), starts);
+    /** The fewest observations from which it may be fitted; with a choice, the smallest number of regimes. */
+    public int leastObservations() {
+        GaugeSettings smallest = particulars.choose().isPresent() ? likelihood(fewestStates(), 1) : gauge(1);
+        return smallest.leastObservations(observe.size());
+    }
+
+    /** The number of regimes; with a choice, the smallest. */
+    public int fewestStates() {
+        return particulars
+                .choose()
+                .map(choice -> choice.regimes().get(0).size())
+                .orElseGet(states::size);
+    }
+
+    /** A model with a likelihood and so many regimes. */
+    FitSettings likelihood(int count, int starts) {
+        return new FitSettings(model, count, emission, initial.orElse(InitialDistribution.FREE), starts);
     }
 
     /** The asset whose returns order the regimes. */
@@ -198,135 +218,6 @@ public record RegimeSettings(
                 .findFirst()
                 .map(name ->
                         new Refusal("", "two regimes have the name '" + name + "'", "give each a name of its own"));
-    }
-
-    private List<Refusal> faults() {
-        List<Refusal> faults = new ArrayList<>();
-        if (model == ModelKind.ONE_REGIME && states.size() != 1) {
-            faults.add(new Refusal(
-                    "states",
-                    "the model one-regime has one regime, not " + states.size(),
-                    "name one, or choose another model"));
-        }
-        if (model == ModelKind.JUMP && particulars.penalty().isEmpty()) {
-            faults.add(new Refusal("", "the model jump lacks 'penalty'", "add one, e.g. penalty: 50"));
-        }
-        if (model == ModelKind.VOLATILITY_THRESHOLD) {
-            faults.addAll(faultsOfThreshold());
-        }
-        faults.addAll(EmissionFaults.of(this));
-        if (initial.isPresent() && model != ModelKind.HIDDEN_MARKOV) {
-            faults.add(new Refusal(
-                    "initial",
-                    "'initial' says where a chain starts, and the model " + model.word() + " has no chain",
-                    "set model: hidden-markov, or leave 'initial' out"));
-        }
-        if (initial.isPresent() && fixed.isPresent()) {
-            faults.add(new Refusal(
-                    "initial",
-                    "declared parameters say themselves where the chain starts, in 'parameters'",
-                    "leave this 'initial' out"));
-        }
-        fixed.ifPresent(given -> faults.addAll(faultsOf(given)));
-        return faults;
-    }
-
-    private List<Refusal> faultsOfThreshold() {
-        List<Refusal> faults = new ArrayList<>();
-        if (particulars.threshold().isEmpty()) {
-            faults.add(new Refusal(
-                    "",
-                    "the model volatility-threshold lacks 'threshold'",
-                    "add one, e.g. threshold: {volatility: {ewma: 0.94}, storm-above: 0.8, calm-below: 0.6}"));
-        }
-        if (states.size() != 2) {
-            faults.add(new Refusal(
-                    "states",
-                    "the model volatility-threshold has two regimes, not " + states.size(),
-                    "name two, the calmer first, or choose another model"));
-        }
-        if (observe.size() > 1) {
-            faults.add(new Refusal(
-                    "observe",
-                    "volatility-threshold measures one series, and " + observe.size() + " are observed",
-                    "observe one, or choose another model"));
-        }
-        observe.stream()
-                .filter(one -> !one.aroundZero())
-                .findFirst()
-                .ifPresent(one -> faults.add(new Refusal(
-                        "observe",
-                        "volatility-threshold measures volatility from returns, and " + one.word()
-                                + " is a size already",
-                        "observe a return, or choose another model")));
-        return faults;
-    }
-
-    private List<Refusal> faultsOf(FixedParameters given) {
-        List<Refusal> faults = new ArrayList<>();
-        if (given.initial().size() != states.size()) {
-            faults.add(new Refusal(
-                    "parameters",
-                    "'parameters' describe " + given.initial().size() + " regimes, 'states' names " + states.size(),
-                    "make the two agree"));
-        }
-        if (model != ModelKind.HIDDEN_MARKOV) {
-            faults.add(new Refusal(
-                    "parameters",
-                    "declared parameters are those of the model hidden-markov, not of " + model.word(),
-                    "set model: hidden-markov, or leave the parameters out"));
-        }
-        if (observe.size() > 1) {
-            faults.add(new Refusal(
-                    "parameters",
-                    "declared parameters are those of one series, and " + observe.size() + " are observed",
-                    "observe one, or leave the parameters out and let them be fitted"));
-        }
-        faults.addAll(faultsOfTails(given));
-        if (emission.form() == EmissionFamily.Form.NORMAL_TIED
-                && given.sd().stream().distinct().count() > 1) {
-            faults.add(new Refusal(
-                    "parameters",
-                    "the standard deviations differ, those of the emission normal-tied are one",
-                    "write the same 'sd' for each, or set emission: normal"));
-        }
-        if (emission.form() == EmissionFamily.Form.NORMAL_ZERO_MEAN) {
-            given.mean().stream()
-                    .filter(mean -> mean != 0)
-                    .findFirst()
-                    .ifPresent(mean -> faults.add(new Refusal(
-                            "parameters",
-                            "a mean is "
-                                    + BigDecimal.valueOf(mean)
-                                            .stripTrailingZeros()
-                                            .toPlainString() + ", those of the emission normal-zero-mean are 0",
-                            "write 0 for each, or set emission: normal")));
-        }
-        return faults;
-    }
-
-    private List<Refusal> faultsOfTails(FixedParameters given) {
-        boolean declared = !given.degreesOfFreedom().isEmpty();
-        boolean student = emission.form() == EmissionFamily.Form.STUDENT_T;
-        boolean fixedBefore = emission.fixedDegreesOfFreedom().isPresent();
-        if (student && !fixedBefore && !declared) {
-            return List.of(new Refusal(
-                    "parameters",
-                    "declared parameters of the emission student-t lack their degrees of freedom",
-                    "add degrees-of-freedom, one for each regime"));
-        }
-        if (student && fixedBefore && declared) {
-            return List.of(new Refusal(
-                    "parameters",
-                    "degrees-of-freedom stands in 'emission' and in 'parameters'",
-                    "write it in one of the two"));
-        }
-        return student || !declared
-                ? List.of()
-                : List.of(new Refusal(
-                        "parameters",
-                        "degrees-of-freedom belongs to the emission student-t, not to " + emission.word(),
-                        "set emission: student-t, or leave degrees-of-freedom out"));
     }
 
     private static OptionalDouble number(Optional<Double> written) {

@@ -46,21 +46,31 @@ public final class RegimeTimeline implements Signal {
     /** Made once, because every rule on this timeline asks for all of them. */
     private List<Optional<Reading>> made() {
         List<double[]> transitions = new ArrayList<>();
+        List<Optional<WindowMoments>> moments = new ArrayList<>();
         for (FitRecord record : fits) {
-            transitions.add(record.fit().outcome().accepted() ? ModelArrays.transition(record) : new double[0]);
+            boolean accepted = record.fit().outcome().accepted();
+            transitions.add(accepted ? ModelArrays.transition(record, regimes) : new double[0]);
+            moments.add(accepted ? Optional.of(ModelArrays.moments(record, regimes)) : Optional.empty());
         }
         List<Optional<Reading>> made = new ArrayList<>();
         for (int row = 0; row < dates.length; row++) {
-            made.add(fitInForce[row] == 0 ? Optional.empty() : Optional.of(reading(row, transitions)));
+            int fit = fitInForce[row];
+            made.add(
+                    fit == 0
+                            ? Optional.empty()
+                            : Optional.of(reading(
+                                    row,
+                                    transitions.get(fit - 1),
+                                    moments.get(fit - 1).orElseThrow())));
         }
         return List.copyOf(made);
     }
 
-    private Reading reading(int row, List<double[]> transitions) {
-        int fit = fitInForce[row];
+    private Reading reading(int row, double[] transition, WindowMoments fitted) {
         int states = regimes.size();
         double[] now = Arrays.copyOfRange(filtered, row * states, (row + 1) * states);
-        return Reading.sharing(fit, now, transitions.get(fit - 1), moments(fits.get(fit - 1), expectedCash[row]));
+        WindowMoments moments = zeroMean ? fitted.withMeans(expectedCash[row]) : fitted;
+        return Reading.sharing(fitInForce[row], now, transition, moments);
     }
 
     @Override
@@ -130,11 +140,6 @@ public final class RegimeTimeline implements Signal {
     public Optional<Reading> reading(int bar) {
         int row = bar - firstBar;
         return row < 0 || row >= readings.size() ? Optional.empty() : readings.get(row);
-    }
-
-    private WindowMoments moments(FitRecord record, double cash) {
-        WindowMoments fitted = record.fit().moments().orElseThrow();
-        return zeroMean ? fitted.withMeans(cash) : fitted;
     }
 
     /** Takes in bar after bar. */

@@ -1,16 +1,18 @@
 package sojourn.walk;
 
+import java.time.LocalDate;
+import java.util.ArrayList;
+import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.OptionalInt;
 import java.util.function.IntConsumer;
+import java.util.stream.Collectors;
 import sojourn.market.Known;
 import sojourn.market.PriceTable;
 import sojourn.regime.Companions;
 import sojourn.regime.EmissionFamily;
-import sojourn.regime.Fit;
 import sojourn.regime.FitRequest;
-import sojourn.regime.Gauge;
-import sojourn.regime.GaugeFilter;
 import sojourn.regime.Observations;
 import sojourn.regime.StartRunner;
 
@@ -26,16 +28,17 @@ public final class Walk {
     private final int orderAsset;
     private final ObservationLog log;
     private final RegimeTimeline.Builder timeline;
-    private Optional<InForce> inForce = Optional.empty();
-    private boolean aside;
+    private final Candidates candidates;
+    /** The fit whose parameters the probabilities go by. */
+    private Optional<FitRecord> inForce = Optional.empty();
 
-    /** The fit whose parameters the filter goes by. */
-    private record InForce(FitRecord record, GaugeFilter filter) {}
+    private boolean aside;
 
     private Walk(PriceTable table, RegimeSettings regimes, RefitSettings refit, StartRunner runner) {
         this.regimes = regimes;
         this.refit = refit;
         this.runner = runner;
+        this.candidates = new Candidates(regimes, refit.starts());
         this.orderAsset = table.asset(regimes.orderedBy());
         this.log = new ObservationLog(regimes.observe(), table.assets().size());
         this.timeline = new RegimeTimeline.Builder(
@@ -92,37 +95,36 @@ public final class Walk {
         if (earlier.firstBar().isEmpty()) {
             return;
         }
-        FitRecord record = earlier.lastAccepted();
-        int start = log.row(table.knownAt(earlier.endBar() - 1), record.windowStart());
-        inForce = Optional.of(new InForce(record, gauge(record.fit()).filterAfter(log.window(start))));
-        aside = earlier.fitInForce(earlier.endBar() - 1).isEmpty();
+        Known last = table.knownAt(earlier.endBar() - 1);
+        candidates.resume(earlier.fits(), log, last);
+        inForce = Optional.of(earlier.lastAccepted());
+        aside = earlier.fitInForce(last.bar()).isEmpty();
     }
 
     private void close(Known known) {
         log.append(known);
-        OptionalDouble score = filterOn();
+        if (inForce.isPresent()) {
+            candidates.step(log.last(), 0);
+        }
+        OptionalDouble score = aside ? OptionalDouble.empty() : score();
         if (refit.schedule().due(known, log.present(), log.lastPresent(), refit.firstFitAfter())) {
             fit(known);
         }
         if (inForce.isPresent()) {
-            InForce now = inForce.get();
-            timeline.bar(known, aside ? 0 : now.record().number(), now.filter().probabilities(), score);
+            FitRecord record = inForce.get();
+            double[] probabilities =
+                    ModelArrays.spread(record, candidate(record).filter().probabilities(), regimes.states());
+            timeline.bar(known, aside ? 0 : record.number(), probabilities, score);
         }
     }
 
-    /**
-     * One step with frozen parameters; the log density it gave to the new observation, empty if there was none to score, the gauge
-     * has no likelihood or no fit is in force. The filter goes on while standing aside, for the next fit that is accepted starts
-     * it afresh.
-     */
-    private OptionalDouble filterOn() {
-        if (inForce.isEmpty()) {
-            return OptionalDouble.empty();
-        }
-        InForce before = inForce.get();
-        GaugeFilter after = before.filter().step(log.last(), 0);
-        inForce = Optional.of(new InForce(before.record(), after));
-        return aside ? OptionalDouble.empty() : after.lastLogDensity();
+    /** The log density that the fit in force gave to the new observation. */
+    private OptionalDouble score() {
+        return inForce.map(record -> candidate(record).score()).orElseGet(OptionalDouble::empty);
+    }
+
+    private Candidate candidate(FitRecord record) {
+        return candidates.named(record.regimes());
     }
 
     private void fit(Known known) {
@@ -135,27 +137,56 @@ public final class Walk {
                 companions,
                 refit.seed(),
                 known.date().toString());
-        FitRequest request =
-                inForce.map(previous -> cold.after(previous.record().fit())).orElse(cold);
-        Fit fit = regimes.gauge(refit.starts()).fit(request, runner);
-        FitRecord record = new FitRecord(
-                timeline.nextFitNumber(),
-                known.bar(),
-                known.date(),
-                known.date(log.bar(start)),
-                fit,
-                EventWords.named(fit.events(), regimes.states()),
-                EventWords.named(fit.explanation(), regimes));
+        List<CandidateFit> made = candidates.fit(cold, runner);
+        OptionalInt choice = Candidates.choose(made);
+        FitRecord record = record(known, known.date(log.bar(start)), made, choice);
         timeline.fit(record);
-        if (fit.outcome().accepted()) {
-            inForce = Optional.of(new InForce(record, gauge(fit).filterAfter(window)));
+        candidates.adopt(made, window);
+        if (choice.isPresent()) {
+            inForce = Optional.of(record);
             aside = false;
         } else if (refit.onFailure() == RefitSettings.OnFailure.STAND_ASIDE) {
             aside = true;
         }
     }
 
-    private static Gauge gauge(Fit fit) {
-        return fit.gauge().orElseThrow();
+    private FitRecord record(Known known, LocalDate windowStart, List<CandidateFit> made, OptionalInt choice) {
+        CandidateFit told = made.get(choice.orElseGet(() -> shown(made)));
+        List<String> events = new ArrayList<>(EventWords.named(told.fit().events(), told.regimes()));
+        int before = inForce.map(record -> record.regimes().size())
+                .orElse(told.regimes().size());
+        if (choice.isPresent() && before != told.regimes().size()) {
+            events.add("states " + before + "->" + told.regimes().size());
+        }
+        return new FitRecord(
+                timeline.nextFitNumber(),
+                known.bar(),
+                known.date(),
+                windowStart,
+                told.regimes(),
+                told.fit(),
+                events,
+                choice.isPresent() || made.size() == 1 ? explanation(told) : refusals(made),
+                made);
+    }
+
+    /** Where none was accepted, the number of regimes that is in force is shown, or the smallest. */
+    private int shown(List<CandidateFit> made) {
+        int shown = 0;
+        for (int c = 0; c < made.size(); c++) {
+            List<String> names = made.get(c).regimes();
+            shown = inForce.filter(record -> record.regimes().equals(names)).isPresent() ? c : shown;
+        }
+        return shown;
+    }
+
+    private String refusals(List<CandidateFit> made) {
+        return made.stream()
+                .map(one -> one.regimes().size() + ": " + explanation(one))
+                .collect(Collectors.joining("; ", "no number of regimes was accepted; ", ""));
+    }
+
+    private String explanation(CandidateFit one) {
+        return EventWords.named(one.fit().explanation(), one.regimes(), regimes.observe());
     }
 }

@@ -67,6 +67,31 @@ class WalkOnwardTest {
     }
 
     @Test
+    void whereTheNumberOfRegimesIsChosenItEqualsAFreshOneToTheBit() {
+        GivenPrices prices = Walks.changing(16, BARS);
+        for (StateChoice.By by : StateChoice.By.values()) {
+            RegimeSettings choosing = Walks.choosing(by, new LogReturn("a"));
+            RegimeTimeline whole = assertOnward(prices, choosing, Walks.expanding(200, Walks.every(20)));
+            assertThat(whole.fits().stream().map(FitRecord::regimes).distinct()).hasSizeGreaterThan(1);
+            RegimeSettings gappy = Walks.choosing(by, new Walks.Gappy(bar -> bar % 7 == 3));
+            assertOnward(prices, gappy, Walks.rolling(120, 150, RefitSchedule.FirstBarOf.MONTH));
+        }
+    }
+
+    @Test
+    void whereNumbersOfRegimesAreRefusedItEqualsAFreshOneToTheBit() {
+        double[] closes = new double[BARS];
+        GivenPrices prices = Walks.weathers(13, BARS, 1);
+        for (int bar = 0; bar < BARS; bar++) {
+            closes[bar] = prices.close(0, bar >= 230 && bar < 300 ? 230 : bar);
+        }
+        for (RefitSettings.OnFailure onFailure : RefitSettings.OnFailure.values()) {
+            RegimeSettings choosing = Walks.choosing(StateChoice.By.PREDICTIVE, new LogReturn("a"));
+            assertOnward(GivenPrices.closes(closes), choosing, Walks.rolling(50, 100, Walks.every(10), onFailure));
+        }
+    }
+
+    @Test
     void onlyNewFitsAreMade() {
         GivenPrices prices = Walks.weathers(11, BARS, 1);
         RefitSettings refit = Walks.expanding(200, Walks.every(20));

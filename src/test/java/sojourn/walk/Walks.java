@@ -18,6 +18,9 @@ import sojourn.regime.VolatilityThresholdSettings;
 final class Walks {
     static final long SEED = 20260101;
 
+    static final List<List<String>> COUNTS =
+            List.of(List.of("all"), List.of("calm", "stormy"), List.of("calm", "uneasy", "stormy"));
+
     private Walks() {}
 
     /** The first asset's weather changes about every 40 bars; the others move against it: quiet in its storms, wild in its calm. */
@@ -32,6 +35,18 @@ final class Walks {
                 double before = bar == 0 ? 100 : closes[asset][bar - 1];
                 closes[asset][bar] = before * StrictMath.exp(0.0003 + deviation * random.nextNormal());
             }
+        }
+        return GivenPrices.closes(closes);
+    }
+
+    /** One asset: one weather for half of the bars, then two that change about every 20 bars. */
+    static GivenPrices changing(long seed, int bars) {
+        RandomStream random = RandomStream.of(seed, "changing");
+        double[] closes = new double[bars];
+        closes[0] = 100;
+        for (int bar = 1; bar < bars; bar++) {
+            boolean stormy = bar > bars / 2 && (bar / 20) % 2 == 0;
+            closes[bar] = closes[bar - 1] * StrictMath.exp((stormy ? 0.03 : 0.01) * random.nextNormal());
         }
         return GivenPrices.closes(closes);
     }
@@ -76,6 +91,19 @@ final class Walks {
                 Optional.empty(),
                 Optional.empty(),
                 Particulars.penalty(penalty));
+    }
+
+    /** One regime (all), two (calm, stormy) or three (calm, uneasy, stormy) of the log return of asset a. */
+    static RegimeSettings choosing(StateChoice.By by, Observation observation) {
+        return new RegimeSettings(
+                ModelKind.HIDDEN_MARKOV,
+                List.of(observation),
+                List.of("all", "calm", "uneasy", "stormy"),
+                EmissionFamily.NORMAL,
+                Optional.empty(),
+                Optional.empty(),
+                Optional.empty(),
+                Particulars.choosing(new StateChoice(COUNTS, by)));
     }
 
     /** One regime, which is fitted by a closed form: for tests that ask when fits are made, not what they find. */
