@@ -58,6 +58,8 @@ class RulesLookAheadTest {
                 "{table: {smooth: {half-life: 5}, weights: {calm: {stocks: 0.8, silver: 0.1}, stormy: {gold: 0.5}}}}",
                 "{blend: {smooth: {half-life: 2}, confirm: 2, weights: {calm: {stocks: 1}, stormy: {gold: 0.5}}}}",
                 VOLATILITY,
+                "{formula: {smooth: {half-life: 2}, weights: {stocks: '1 - probability.stormy', gold: 'most_likely.stormy ? min(0.5,"
+                        + " 0.003 / forecast.volatility.gold) : 0.1 * weight.stocks'}}}",
                 "{minimum-variance: {among: [stocks, gold, silver], invested: 1.2}}",
                 "{mean-variance: {among: [stocks, gold, silver], risk-aversion: 6, shrink-means: 0.5, step-toward: 0.2}}",
                 "{volatility-target: {each: {stocks: 0.5, silver: -0.2}, percent-per-year: 9, smooth: {half-life: 4},"

@@ -11,16 +11,22 @@ import sojourn.market.AssetName;
  *
  * @param pointer JSON pointer of the place, from the section that the fault belongs to: "/switch/in/stocks"
  * @param at which end of the entry at that place is at fault
+ * @param within the character of the text value at that place, counted from 0, that is at fault; 0 for the whole of it
  * @param what what is wrong, with the value
  * @param remedy what to do
  */
-public record Misfit(String pointer, At at, String what, String remedy) {
+public record Misfit(String pointer, At at, int within, String what, String remedy) {
     /** A key or its value. */
     public enum At {
         /** What stands before the colon. */
         KEY,
         /** What stands after it, or an item of a list. */
         VALUE
+    }
+
+    /** At the whole of a key or value. */
+    public Misfit(String pointer, At at, String what, String remedy) {
+        this(pointer, at, 0, what, remedy);
     }
 
     /** At a value. */

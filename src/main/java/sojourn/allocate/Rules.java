@@ -30,6 +30,10 @@ public final class Rules {
         shapes.put(
                 MeanVariance.WORD,
                 MeanVariance.SHAPE.described("the weights that forecast return and risk speak for, within the limits"));
+        shapes.put(
+                Formula.WORD,
+                Formula.SHAPE.described(
+                        "one expression an asset, in the Common Expression Language, over a few known names"));
         return shapes;
     }
 }

@@ -5,7 +5,7 @@ import sojourn.walk.Forecast;
 import sojourn.walk.Reading;
 
 /** A rule that works weights out at every decision, from forecasts say, rather than choosing among stated ones. */
-public sealed interface Sizing extends Rule permits VolatilityTarget, MinimumVariance, MeanVariance {
+public sealed interface Sizing extends Rule permits VolatilityTarget, MinimumVariance, MeanVariance, Formula {
     /** What it shares with every rule. */
     Manner manner();
 

@@ -28,9 +28,11 @@ public final class Document {
     private static final int MOST_BYTES = 4 * Limits.CODE_POINTS;
 
     private final MapNode root;
+    private final String text;
 
-    private Document(MapNode root) {
+    private Document(MapNode root, String text) {
         this.root = root;
+        this.text = text;
     }
 
     /**
@@ -47,7 +49,7 @@ public final class Document {
             }
             return Optional.empty();
         }
-        return tree.map(node -> new Document((MapNode) node));
+        return tree.map(node -> new Document((MapNode) node, withoutMark));
     }
 
     /** Reads a UTF-8 file as {@link #parse} does; {@code shownName} is what messages call it. */
@@ -96,6 +98,17 @@ public final class Document {
         return here;
     }
 
+    /**
+     * Where the character at {@code codePoint} of the text value at a JSON pointer stands, counted from 0; like {@link #nearest}
+     * where there is no such value.
+     */
+    public Place placeWithin(String pointer, int codePoint) {
+        Optional<Node> node = at(pointer);
+        return node.isPresent() && node.get() instanceof ScalarNode scalar
+                ? WithinScalar.of(text, scalar.place(), scalar.text(), codePoint)
+                : nearest(pointer).place();
+    }
+
     /** Where the key of an entry at a JSON pointer stands; like {@link #nearest} where there is no such key. */
     public Place keyPlace(String pointer) {
         List<String> steps = steps(pointer);
@@ -122,14 +135,14 @@ public final class Document {
         if (steps.isEmpty()) {
             return Optional.empty();
         }
-        return Tree.with(root, steps, value).map(tree -> new Document((MapNode) tree));
+        return Tree.with(root, steps, value).map(tree -> new Document((MapNode) tree, text));
     }
 
     /** The same document without a key of its root. */
     public Document without(String key) {
         Map<String, MapNode.Entry> entries = new LinkedHashMap<>(root.entries());
         entries.remove(key);
-        return new Document(new MapNode(root.place(), entries));
+        return new Document(new MapNode(root.place(), entries), text);
     }
 
     private static List<String> steps(String pointer) {

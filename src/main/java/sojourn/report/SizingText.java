@@ -1,7 +1,10 @@
 package sojourn.report;
 
+import java.util.stream.Collectors;
+import sojourn.allocate.Formula;
 import sojourn.allocate.MeanVariance;
 import sojourn.allocate.MinimumVariance;
+import sojourn.allocate.ProbabilityKind;
 import sojourn.allocate.Sizing;
 import sojourn.allocate.VolatilityTarget;
 
@@ -19,6 +22,15 @@ final class SizingText {
             return "holds the mix of " + String.join(", ", one.among()) + " that adds up to "
                     + RuleText.percent(one.invested()) + " with the least forecast variance within the limits; "
                     + FORECAST;
+        }
+        if (rule instanceof Formula one) {
+            String which = one.probability() == ProbabilityKind.PREDICTED ? "predicted" : "filtered";
+            return "weights by formula, " + which + " probabilities: "
+                    + one.weights().entrySet().stream()
+                            .map(entry ->
+                                    entry.getKey() + " = " + entry.getValue().strip())
+                            .collect(Collectors.joining("; "))
+                    + "; " + FORECAST;
         }
         if (rule instanceof MeanVariance one) {
             return meanVariance(one);

@@ -112,12 +112,15 @@ final class BetweenSections {
 
     private void add(String section, List<Misfit> misfits, Problems problems) {
         for (Misfit misfit : misfits) {
-            problems.add(place(section + misfit.pointer(), misfit.at()), misfit.what(), misfit.remedy());
+            problems.add(place(section + misfit.pointer(), misfit), misfit.what(), misfit.remedy());
         }
     }
 
-    private Place place(String pointer, Misfit.At at) {
-        return at == Misfit.At.KEY
+    private Place place(String pointer, Misfit misfit) {
+        if (misfit.within() > 0) {
+            return document.placeWithin(pointer, misfit.within());
+        }
+        return misfit.at() == Misfit.At.KEY
                 ? document.keyPlace(pointer)
                 : document.nearest(pointer).place();
     }

@@ -58,7 +58,14 @@ class StrategySchemaTest {
         List<String> rules = new ArrayList<>();
         property("/allocate").get("properties").fieldNames().forEachRemaining(rules::add);
         assertThat(rules)
-                .containsExactly("switch", "table", "blend", "volatility-target", "minimum-variance", "mean-variance");
+                .containsExactly(
+                        "switch",
+                        "table",
+                        "blend",
+                        "volatility-target",
+                        "minimum-variance",
+                        "mean-variance",
+                        "formula");
     }
 
     @Test
