@@ -5,10 +5,14 @@ import java.util.List;
 import sojourn.regime.Gauge;
 import sojourn.regime.GaugeFilter;
 import sojourn.regime.Observations;
+import sojourn.regime.RegimeModel;
 
 /** What one fit says at each bar from its window's start on, its parameters frozen; and what it would have said without a bar. */
 final class FrozenFilter {
     private final int states;
+    /** Whether the probabilities are all that the gauge remembers, so that equal ones stay equal. */
+    private final boolean forgetful;
+
     private final Observations nothing;
     private final Observations rows;
     private final int start;
@@ -16,6 +20,7 @@ final class FrozenFilter {
 
     private FrozenFilter(Gauge gauge, Observations rows, int start) {
         this.states = gauge.states();
+        this.forgetful = gauge instanceof RegimeModel;
         this.nothing = Observations.of(rows.dimension(), new double[rows.dimension()], new boolean[] {true});
         this.rows = rows;
         this.start = start;
@@ -60,8 +65,8 @@ final class FrozenFilter {
     }
 
     /**
-     * The most likely regimes from a bar to the end, had nothing been observed on that bar. Once the probabilities are within 1e-12 of those
-     * that were, they count as the same from there on.
+     * The most likely regimes from a bar to the end, had nothing been observed on that bar. Once the probabilities of a model with a
+     * likelihood are within 1e-12 of those that were, they count as the same from there on; other gauges remember more than that.
      */
     int[] mostLikelyWithout(int bar) {
         int[] regimes = new int[end() - bar];
@@ -71,7 +76,7 @@ final class FrozenFilter {
         for (int later = bar + 1; later < end(); later++) {
             if (!met) {
                 now = now.step(rows, later - start);
-                met = near(now, after.get(later - start + 1));
+                met = forgetful && near(now, after.get(later - start + 1));
             }
             regimes[later - bar] = met ? mostLikely(later) : mostLikely(now);
         }

@@ -5,6 +5,7 @@ import sojourn.inference.Estimate;
 import sojourn.regime.Emission;
 import sojourn.regime.LongRun;
 import sojourn.regime.RegimeModel;
+import sojourn.regime.StudentT;
 
 /**
  * What a model says of its observations in the long run, whatever any sample showed. With pi the stationary distribution, d_k = mean_k - pi mean
@@ -17,6 +18,9 @@ public final class ImpliedMoments {
     private static final Estimate NO_FOURTH = new Estimate.Undefined(
             Estimate.Reason.NOT_APPLICABLE,
             "a regime has 4 or fewer degrees of freedom, so that its kurtosis is infinite");
+
+    private static final Estimate NO_THIRD = new Estimate.Undefined(
+            Estimate.Reason.NOT_APPLICABLE, "a regime has 3 or fewer degrees of freedom, so that it has no skewness");
 
     private final RegimeModel model;
     private final double[] longRun;
@@ -66,9 +70,19 @@ public final class ImpliedMoments {
                 : Answer.none("the chain of regimes has no single long run");
     }
 
-    /** m3 / m2^1.5. */
+    /** m3 / m2^1.5. Does not exist where a regime's tails are too fat. */
     public Estimate skewness() {
-        return Estimate.of(m3 / (m2 * Math.sqrt(m2)));
+        return thirdExists() ? Estimate.of(m3 / (m2 * Math.sqrt(m2))) : NO_THIRD;
+    }
+
+    private boolean thirdExists() {
+        boolean exists = true;
+        if (model.emission() instanceof StudentT student) {
+            for (int k = 0; k < longRun.length; k++) {
+                exists &= student.degreesOfFreedom(k) > 3 || longRun[k] == 0;
+            }
+        }
+        return exists;
     }
 
     /** m4 / m2^2, 3 for a normal. Does not exist where a regime's tails are too fat. */

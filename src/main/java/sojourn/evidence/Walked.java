@@ -4,7 +4,8 @@ import java.util.Optional;
 import sojourn.walk.RegimeTimeline;
 
 /**
- * A gauge beside the strategy's own, walked over the same prices and fitted at the same closes.
+ * A gauge beside the strategy's own, walked over the same prices and fitted on the same schedule,
+ * which counts what each observes.
  *
  * @param subject its settings and what was known by it
  */

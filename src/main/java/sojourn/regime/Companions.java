@@ -1,5 +1,6 @@
 package sojourn.regime;
 
+import java.util.Arrays;
 import sojourn.numeric.Check;
 
 /** Simple returns per bar of every asset, on the rows of a fit's window: what the regimes' moments are taken of. Immutable. */
@@ -39,6 +40,14 @@ public final class Companions {
             }
         }
         return new Companions(assets, returns, missing.clone());
+    }
+
+    /** The rows from {@code start} on. */
+    Companions from(int start) {
+        return new Companions(
+                assets,
+                Arrays.copyOfRange(returns, start * assets, returns.length),
+                Arrays.copyOfRange(missing, start, missing.length));
     }
 
     /** Number of rows, missing ones included. */

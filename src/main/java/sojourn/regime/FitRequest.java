@@ -1,5 +1,6 @@
 package sojourn.regime;
 
+import java.util.Arrays;
 import java.util.Optional;
 import sojourn.numeric.Check;
 
@@ -58,6 +59,17 @@ public final class FitRequest {
                 accepted.outcome().accepted(),
                 "a refused fit (" + accepted.outcome().word() + ") as the previous one");
         return new FitRequest(observations, orderBy, companions, Optional.of(accepted), masterSeed, date);
+    }
+
+    /** The same of the rows from {@code start} on. */
+    FitRequest from(int start) {
+        return new FitRequest(
+                observations.range(start, observations.size()),
+                Arrays.copyOfRange(orderBy, start, orderBy.length),
+                companions.from(start),
+                previous,
+                masterSeed,
+                date);
     }
 
     /** The observations of the window. */

@@ -55,8 +55,17 @@ final class Soundness {
             return where + lost(described.model().orElseThrow().emission().dimension(), role) + " (it accounts for "
                     + count(occupancy[role], described) + " observations)";
         }
+        int least = least(occupancy);
+        if (end.leastCount() < leastCount && occupancy[least] * described.observations() >= leastCount) {
+            return where
+                    + String.format(
+                            Locale.ROOT,
+                            "a state accounts for %.1f rows that hold the numbers which one of its variances or covariances is"
+                                    + " told by, fewer than the %d it needs: one of the series is missing too often",
+                            end.leastCount(),
+                            leastCount);
+        }
         if (end.leastCount() < leastCount) {
-            int least = least(occupancy);
             return where + "{" + least + "} accounts for " + count(occupancy[least], described)
                     + " observations, fewer than the " + leastCount + " it needs";
         }

@@ -39,6 +39,7 @@ final class VectorExpectation {
         }
         double[] weights = new double[seen.length];
         moments(seen, weights, sums);
+        together(weights, sums);
         int square = window.dimension() * window.dimension();
         for (int e = 0; e < seen.length; e++) {
             seen[e].addRest(weights[e], sums.products, e % states * square, window.dimension());
@@ -75,11 +76,24 @@ final class VectorExpectation {
             for (int k = 0; k < states; k++) {
                 double g = gamma[t * states + k];
                 int index = window.patternOf(t) * states + k;
+                weights[index] += g;
                 if (!complete) {
                     seen[index].complete(row);
-                    weights[index] += g;
                 }
                 add(g, k, sums);
+            }
+        }
+    }
+
+    /** How many rows of each state hold both numbers of a pair, not modified but for {@code sums}. */
+    private void together(double[] weights, VectorSums sums) {
+        int d = window.dimension();
+        for (int e = 0; e < weights.length; e++) {
+            Pattern pattern = window.patterns().get(e / states);
+            for (int i : pattern.present()) {
+                for (int j : pattern.present()) {
+                    sums.together[((e % states) * d + i) * d + j] += weights[e];
+                }
             }
         }
     }

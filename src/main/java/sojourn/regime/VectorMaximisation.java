@@ -15,6 +15,7 @@ final class VectorMaximisation {
     private final EmissionFamily family;
     private final Maximisation ofChain;
     private final double[] floor;
+    private final int dimension;
 
     /**
      * @param least what each state's covariance must exceed, dimension × dimension. Not modified.
@@ -23,6 +24,13 @@ final class VectorMaximisation {
         this.family = family;
         this.ofChain = new Maximisation(EmissionFamily.NORMAL, initial);
         this.floor = least;
+        this.dimension = (int) Math.round(Math.sqrt(least.length));
+    }
+
+    /** Whether that entry of the states' covariance matrices is estimated: all of a full one, the variances of a diagonal one. */
+    boolean estimates(int entry) {
+        int within = entry % (dimension * dimension);
+        return family.form() == EmissionFamily.Form.NORMAL || within / dimension == within % dimension;
     }
 
     /** The next parameters. Neither argument is modified. */

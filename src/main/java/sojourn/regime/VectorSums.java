@@ -11,6 +11,8 @@ final class VectorSums {
     final ExpectedSums chain;
 
     final double[] count;
+    /** States × dimension × dimension: rows that hold both numbers, on the diagonal those that hold the one. */
+    final double[] together;
     /** States × dimension. */
     final double[] sum;
     /** States × dimension × dimension, the lower triangles. */
@@ -19,6 +21,7 @@ final class VectorSums {
     VectorSums(int states, int dimension) {
         chain = new ExpectedSums(states);
         count = new double[states];
+        together = new double[states * dimension * dimension];
         sum = new double[states * dimension];
         products = new double[states * dimension * dimension];
     }
@@ -27,6 +30,7 @@ final class VectorSums {
     void clear() {
         chain.clear();
         Arrays.fill(count, 0);
+        Arrays.fill(together, 0);
         Arrays.fill(sum, 0);
         Arrays.fill(products, 0);
     }

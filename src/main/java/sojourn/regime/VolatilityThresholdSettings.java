@@ -48,9 +48,13 @@ public record VolatilityThresholdSettings(RecentVolatility volatility, double st
         }
         VolatilityThreshold.Levels levels =
                 new VolatilityThreshold.Levels(quantile(ascending, stormAbove), quantile(ascending, calmBelow));
+        FitRequest judged = request.from(firstJudged(x));
+        if (!PosteriorMoments.possible(judged)) {
+            return Fit.failed("no row with a volatility holds the returns of all assets", Fit.Search.NONE, x.present());
+        }
         RowWeights storms = storms(levels, x);
         VolatilityThreshold gauge = VolatilityThreshold.of(volatility, levels, storms.transitions());
-        Described described = Described.of(gauge, storms, request);
+        Described described = Described.of(gauge, storms, judged);
         return PlainFit.of(described, Fit.Search.CLOSED_FORM, 1, Optional.empty());
     }
 
@@ -89,14 +93,28 @@ public record VolatilityThresholdSettings(RecentVolatility volatility, double st
         return ascending[below] + (position - below) * (ascending[above] - ascending[below]);
     }
 
-    /** The window's rows, each in the regime that the filter was in. */
+    /** The first row that has a volatility; those before it were in no regime that anybody could have told. */
+    private int firstJudged(Observations x) {
+        RecentVolatility.SoFar soFar = volatility.start();
+        int row = 0;
+        while (soFar.value().isEmpty()) {
+            soFar = x.missing(row) ? soFar : soFar.with(x.at(row, 0));
+            row++;
+        }
+        return row - 1;
+    }
+
+    /** The window's rows from the first that has a volatility, each in the regime that the filter was in. */
     private RowWeights storms(VolatilityThreshold.Levels levels, Observations x) {
         GaugeFilter filter = VolatilityThreshold.of(volatility, levels, new double[] {1, 0, 0, 1})
                 .filter();
-        int[] path = new int[x.size()];
-        for (int row = 0; row < path.length; row++) {
+        int first = firstJudged(x);
+        int[] path = new int[x.size() - first];
+        for (int row = 0; row < x.size(); row++) {
             filter = filter.step(x, row);
-            path[row] = filter.probability(1) == 1 ? 1 : 0;
+            if (row >= first) {
+                path[row - first] = filter.probability(1) == 1 ? 1 : 0;
+            }
         }
         return RowWeights.path(2, path);
     }

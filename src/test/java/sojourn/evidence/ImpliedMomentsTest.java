@@ -46,6 +46,22 @@ class ImpliedMomentsTest {
         worked.assertExpected("acf_abs_centred", sizes);
     }
 
+    /** A Student's t of 3 or fewer degrees of freedom has no third moment, of 4 or fewer no finite fourth (common knowledge, no source). */
+    @Test
+    void tailsTooFatHaveNoSkewness() {
+        double[] transition = {0.9, 0.1, 0.2, 0.8};
+        double[] mean = {0.001, -0.002};
+        double[] scale = {0.01, 0.02};
+        ImpliedMoments fat = implied(
+                HiddenMarkov.of(new double[] {0.5, 0.5}, transition, StudentT.of(mean, scale, new double[] {2.5, 8})));
+        assertThat(fat.skewness()).isInstanceOf(Estimate.Undefined.class);
+        assertThat(fat.kurtosis()).isInstanceOf(Estimate.Undefined.class);
+        ImpliedMoments less = implied(
+                HiddenMarkov.of(new double[] {0.5, 0.5}, transition, StudentT.of(mean, scale, new double[] {3.5, 8})));
+        assertThat(less.skewness()).isInstanceOf(Estimate.Value.class);
+        assertThat(less.kurtosis()).isInstanceOf(Estimate.Undefined.class);
+    }
+
     @Test
     void anIndependentMixtureHasNoClustering() {
         ImpliedMoments implied = implied(

@@ -8,9 +8,11 @@ import java.util.List;
 import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Test;
 import sojourn.regime.FilterState;
+import sojourn.regime.GaugeFilter;
 import sojourn.regime.Matching;
 import sojourn.regime.Observations;
 import sojourn.regime.RegimeModel;
+import sojourn.walk.RegimeSettings;
 
 /** Filters run again: what a bar changes, and what a refit changes, held to plain runs of the filter from the start of each window. */
 class SingleBarsTest {
@@ -80,6 +82,34 @@ class SingleBarsTest {
         missing[leftOut - stretch.windowStart()] = true;
         FilterState filter = FilterState.after(model, Observations.of(1, values, missing));
         return filter.probability(1) > filter.probability(0) ? 1 : 0;
+    }
+
+    /** A gauge that remembers more than its probabilities may differ again after they were the same for a while. */
+    @Test
+    void leavingABarOutAgreesWithRunningEveryGaugeWithoutIt() {
+        for (RegimeSettings settings : Rivals.of(subject.regimes())) {
+            Subject gauge = Subjects.walked(Subjects.twoWeathers(11, 900), settings, Subjects.expanding(500, 63));
+            Stretch stretch = gauge.stretches().get(gauge.stretches().size() - 2);
+            FrozenFilter filter = FrozenFilter.of(gauge, stretch, stretch.end());
+            for (int bar = stretch.from(); bar < stretch.end(); bar++) {
+                int[] got = filter.mostLikelyWithout(bar);
+                GaugeFilter without =
+                        stretch.record().fit().gauge().orElseThrow().filter();
+                Observations rows = gauge.rows(stretch.windowStart(), stretch.end());
+                Observations gap = Observations.of(1, new double[1], new boolean[] {true});
+                for (int close = stretch.windowStart(); close < stretch.end(); close++) {
+                    without = close == bar ? without.step(gap, 0) : without.step(rows, close - stretch.windowStart());
+                    if (close >= bar) {
+                        int most = without.probabilities().length > 1 && without.probability(1) > without.probability(0)
+                                ? 1
+                                : 0;
+                        assertThat(got[close - bar])
+                                .as("%s, bar %d left out, at %d", gauge.gauge(), bar, close)
+                                .isEqualTo(most);
+                    }
+                }
+            }
+        }
     }
 
     @Test

@@ -56,6 +56,42 @@ class AwkwardVectorsTest {
         assertFinite(fit(diagonal, pair));
     }
 
+    /** Just short of moving together, where rounding is larger than what EM gains. */
+    @ParameterizedTest
+    @ValueSource(doubles = {1e-5, 1.2e-5, 2e-5, 1e-4})
+    void seriesThatNearlyMoveTogetherEndInSomeOutcome(double apart) {
+        for (int seed = 1; seed <= 20; seed++) {
+            double[] x = noise(700, "nearly " + seed);
+            double[] other = noise(700, "own part " + seed);
+            double[] beside = new double[x.length];
+            for (int t = 0; t < x.length; t++) {
+                beside[t] = 0.5 * x[t] + apart * other[t];
+            }
+            for (int states = 2; states <= 3; states++) {
+                assertFinite(fit(settings(states), Vectors.columns(x, beside)));
+            }
+        }
+    }
+
+    /** What is told of a regime's second series would rest on no observation of it. */
+    @Test
+    void aRegimeThatASeriesWasNeverSeenInIsDegenerate() {
+        RandomStream random = RandomStream.of(8, "seen late");
+        double[] values = new double[2400];
+        boolean[] missing = new boolean[2400];
+        for (int t = 0; t < 1200; t++) {
+            double size = t < 600 ? 0.005 : 0.02;
+            values[2 * t] = size * random.nextNormal();
+            values[2 * t + 1] = 0.01 * random.nextNormal();
+            missing[2 * t + 1] = t < 600;
+        }
+        for (int starts = 1; starts <= 5; starts++) {
+            FitSettings settings = new FitSettings(ModelKind.HIDDEN_MARKOV, 2, EmissionFamily.NORMAL, starts);
+            Fit fit = fit(settings, Observations.withMissingCells(2, values, missing));
+            assertThat(fit.outcome()).isEqualTo(Outcome.DEGENERATE);
+        }
+    }
+
     @Test
     void aSumOfTwoOthersFollowsFromThem() {
         double[] a = noise(400, "a");
