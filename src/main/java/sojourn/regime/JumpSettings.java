@@ -28,7 +28,12 @@ public record JumpSettings(int states, double penalty, int starts) implements Ga
 
     @Override
     public int leastObservations() {
-        return states * Soundness.leastCount(1);
+        return leastObservations(1);
+    }
+
+    @Override
+    public int leastObservations(int series) {
+        return states * Soundness.leastCount(series);
     }
 
     @Override

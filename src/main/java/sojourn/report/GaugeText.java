@@ -117,10 +117,10 @@ final class GaugeText {
             return "none: its parameters are declared (an external prior), in use from " + dates.get(0)
                     + " on; the filter begins" + " afresh " + every(refit.schedule());
         }
+        String from = " from " + refit.starts() + " starts and the fit before (seed " + refit.seed() + "), ";
         String what = regimes.model().hasLikelihood()
-                ? "maximum likelihood from " + refit.starts() + " starts and the fit before (seed " + refit.seed()
-                        + "), "
-                : "quantiles taken ";
+                ? "maximum likelihood" + from
+                : regimes.model() == ModelKind.JUMP ? "centres and path of least cost" + from : "quantiles taken ";
         String window = refit.rolling().isPresent()
                 ? "on the last " + refit.rolling().getAsInt() + " observations"
                 : "on all observations so far";
