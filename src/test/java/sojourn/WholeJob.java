@@ -86,7 +86,12 @@ final class WholeJob {
     Market read() {
         Strategy strategy = file.strategy();
         return PriceReader.read(
-                file.folder(), strategy.prices(), strategy.calendar(), strategy.cash(), strategy.usedAssets());
+                file.folder(),
+                strategy.prices(),
+                strategy.calendar(),
+                strategy.cash(),
+                strategy.usedAssets(),
+                strategy.regimes().given());
     }
 
     /** The timeline of a market. */

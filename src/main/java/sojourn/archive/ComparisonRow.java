@@ -12,7 +12,7 @@ import sojourn.measure.Scorecard;
  * @param variant the variant's name, or the yardstick's with the variants it belongs to
  * @param kind what the line stands for
  * @param timeline address of the timeline it rests on; empty for a variant that has none
- * @param parameters whether the regime model was fitted or declared
+ * @param parameters whether the regime model was fitted or declared, or its probabilities computed elsewhere
  * @param reason why a variant failed; empty otherwise
  * @param judged the window and the measures; empty for a variant that failed
  */
@@ -23,7 +23,9 @@ public record ComparisonRow(
         /** Fitted inside each window. */
         FITTED("fitted"),
         /** Declared in the strategy file. */
-        EXTERNAL_PRIOR("external-prior");
+        EXTERNAL_PRIOR("external-prior"),
+        /** There are none: the probabilities were computed elsewhere. */
+        COMPUTED_ELSEWHERE("computed-elsewhere");
 
         private final String word;
 

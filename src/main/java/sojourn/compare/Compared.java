@@ -10,6 +10,7 @@ import sojourn.archive.ComparisonRow;
 import sojourn.archive.Digest;
 import sojourn.measure.Measure;
 import sojourn.measure.Yardstick;
+import sojourn.walk.RegimeSettings;
 import sojourn.walk.RegimeTimeline;
 
 /**
@@ -103,10 +104,12 @@ public record Compared(
                 Optional.of(judged));
     }
 
-    /** Whether the regime model of a variant was fitted or declared. */
-    static ComparisonRow.Parameters parameters(Run run) {
-        return run.file().strategy().regimes().fixed().isPresent()
-                ? ComparisonRow.Parameters.EXTERNAL_PRIOR
-                : ComparisonRow.Parameters.FITTED;
+    /** Whether the regime model of a variant was fitted or declared, or its probabilities computed elsewhere. */
+    public static ComparisonRow.Parameters parameters(Run run) {
+        RegimeSettings regimes = run.file().strategy().regimes();
+        if (regimes.given().isPresent()) {
+            return ComparisonRow.Parameters.COMPUTED_ELSEWHERE;
+        }
+        return regimes.fixed().isPresent() ? ComparisonRow.Parameters.EXTERNAL_PRIOR : ComparisonRow.Parameters.FITTED;
     }
 }

@@ -105,7 +105,12 @@ public sealed interface Prepared {
         Strategy strategy = file.strategy();
         try {
             Market market = PriceReader.read(
-                    file.folder(), strategy.prices(), strategy.calendar(), strategy.cash(), strategy.usedAssets());
+                    file.folder(),
+                    strategy.prices(),
+                    strategy.calendar(),
+                    strategy.cash(),
+                    strategy.usedAssets(),
+                    strategy.regimes().given());
             List<Observation> observed = strategy.regimes().observe();
             List<Problem> lacking = lacking(strategy, market.table());
             return lacking.isEmpty()

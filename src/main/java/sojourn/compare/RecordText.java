@@ -94,6 +94,9 @@ final class RecordText {
         if (file.strategy().regimes().fixed().isPresent()) {
             node.put("parameters", "external prior: declared in the strategy file, not fitted");
         }
+        if (file.strategy().regimes().given().isPresent()) {
+            node.put("parameters", "computed elsewhere: not audited for how they were computed");
+        }
         return node;
     }
 

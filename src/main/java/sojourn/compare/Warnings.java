@@ -20,6 +20,10 @@ public final class Warnings {
             "its parameters are declared, an external prior; if they were estimated on this"
                     + " period, the result has seen its own future";
 
+    private static final String COMPUTED_ELSEWHERE =
+            "its probabilities were computed elsewhere and are not audited for how they were computed: if that looked at this"
+                    + " period, or the file says that they became known earlier than they did, the result has seen its own future";
+
     private Warnings() {}
 
     /** One sentence each; what several variants share is told once, with all their names. */
@@ -32,6 +36,9 @@ public final class Warnings {
                 }
                 if (one.file().strategy().regimes().fixed().isPresent()) {
                     told(shared, EXTERNAL_PRIOR, one);
+                }
+                if (one.file().strategy().regimes().given().isPresent()) {
+                    told(shared, COMPUTED_ELSEWHERE, one);
                 }
                 if (one.file().strategy().hypothesis().isEmpty()) {
                     told(

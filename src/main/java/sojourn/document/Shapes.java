@@ -96,6 +96,11 @@ public final class Shapes {
         return new EitherShape<>(List.of(alternatives));
     }
 
+    /** A map that is read by {@code with} where {@code key} stands in it, else by {@code without}. Both must be of maps. */
+    public static <T> Shape<T> keyed(String key, Shape<? extends T> with, Shape<? extends T> without) {
+        return new KeyedShape<>(key, with, without);
+    }
+
     /** A map with fixed keys. {@code name} is what messages call it. */
     public static <T> Shape<T> object(String name, Function<Fields, T> build, Field<?>... fields) {
         return new ObjectShape<>(name, build, List.of(fields));

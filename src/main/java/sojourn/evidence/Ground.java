@@ -18,7 +18,10 @@ public enum Ground {
     /** Nothing was estimated. */
     DECLARED(
             "this strategy's parameters are declared, not fitted: if they were estimated on this period, the comparison flatters"
-                    + " them");
+                    + " them"),
+    /** Nothing was estimated here. */
+    COMPUTED_ELSEWHERE(
+            "this strategy's probabilities were computed elsewhere: if that looked at this period, the comparison flatters them");
 
     private static final Set<String> EACH_A_SPECIAL_CASE_OF_THE_NEXT =
             Set.of(ModelKind.ONE_REGIME.word(), ModelKind.MIXTURE.word(), ModelKind.HIDDEN_MARKOV.word());
@@ -39,6 +42,9 @@ public enum Ground {
         String own = subject.gauge();
         if (subject.regimes().fixed().isPresent() && (first.equals(own) || second.equals(own))) {
             return DECLARED;
+        }
+        if (subject.regimes().given().isPresent() && (first.equals(own) || second.equals(own))) {
+            return COMPUTED_ELSEWHERE;
         }
         if (subject.refit().rolling().isPresent()) {
             return ROLLING;

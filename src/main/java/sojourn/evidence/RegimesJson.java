@@ -6,7 +6,9 @@ import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.util.List;
 import java.util.function.BiConsumer;
 import sojourn.archive.Caution;
+import sojourn.archive.ComparisonRow;
 import sojourn.document.JsonText;
+import sojourn.walk.RegimeSettings;
 
 /** {@code regimes.json}: every finding, or why there is none, with its definition. */
 public final class RegimesJson {
@@ -28,7 +30,7 @@ public final class RegimesJson {
         ArrayNode observations = root.putArray("observations");
         subject.regimes().observe().forEach(one -> observations.add(one.column()));
         root.put("asset", subject.assetName());
-        root.put("parameters", subject.regimes().fixed().isPresent() ? "external-prior" : "fitted");
+        root.put("parameters", parameters(subject.regimes()));
         root.put("bars_per_year", subject.barsPerYear());
         root.set("fits", fits(found.fits()));
         section(root, "identity", found.cards(), (node, cards) -> CardsJson.add(node, subject, cards));
@@ -43,6 +45,14 @@ public final class RegimesJson {
         section(root, "single_bars", found.influence(), (node, all) -> influence(node, subject, all));
         root.set("definitions", Definitions.node());
         return JsonText.indented(root);
+    }
+
+    private static String parameters(RegimeSettings regimes) {
+        if (regimes.given().isPresent()) {
+            return ComparisonRow.Parameters.COMPUTED_ELSEWHERE.word();
+        }
+        return (regimes.fixed().isPresent() ? ComparisonRow.Parameters.EXTERNAL_PRIOR : ComparisonRow.Parameters.FITTED)
+                .word();
     }
 
     /** A section with what was found, or the reason why there is nothing. */

@@ -8,6 +8,8 @@ import sojourn.regime.ModelKind;
 import sojourn.regime.RecentVolatility;
 import sojourn.regime.VolatilityThresholdSettings;
 import sojourn.walk.LogRealisedVolatility;
+import sojourn.walk.LogReturn;
+import sojourn.walk.Observation;
 import sojourn.walk.Particulars;
 import sojourn.walk.RegimeSettings;
 import sojourn.walk.SimpleReturn;
@@ -37,7 +39,7 @@ final class Rivals {
         for (ModelKind kind : ModelKind.values()) {
             if (kind != own.model() && kind.hasLikelihood()) {
                 rivals.add(new RegimeSettings(
-                        kind, own.observe(), states(kind, own), own.emission(), own.orderBy(), Optional.empty()));
+                        kind, seen(own), states(kind, own), own.emission(), own.orderBy(), Optional.empty()));
             }
         }
         if (own.model() != ModelKind.VOLATILITY_THRESHOLD) {
@@ -47,6 +49,11 @@ final class Rivals {
             rivals.add(jump(own));
         }
         return List.copyOf(rivals);
+    }
+
+    /** What the strategy's own gauge sees; the asset's return where its probabilities were computed elsewhere. */
+    private static List<Observation> seen(RegimeSettings own) {
+        return own.given().isPresent() ? List.of(new LogReturn(own.orderedBy())) : own.observe();
     }
 
     /** Two regimes told by the recent volatility of the asset itself, as a desk without a model would. */

@@ -5,7 +5,7 @@ import java.time.LocalDate;
 /**
  * One file that went in.
  *
- * @param role the asset's name, or {@code cash}
+ * @param role the asset's name, {@code cash} or {@link GivenColumns#ROLE}
  * @param file the file as the strategy file names it
  * @param sha256 of its bytes, hexadecimal
  * @param rows rows that count (those with a price or a rate)

@@ -88,6 +88,15 @@ public final class Known {
         return table.cash().expectedNext(bar);
     }
 
+    /**
+     * Probability of regime {@code state}, computed elsewhere, that counted at the close of a known bar: that of the row which had
+     * become known last. Empty before the first row became known, and where there are no such probabilities.
+     */
+    public OptionalDouble given(int state, int knownBar) {
+        int then = known(knownBar);
+        return table.given().map(rows -> rows.at(then, state)).orElseGet(OptionalDouble::empty);
+    }
+
     private OptionalDouble optional(Optional<PriceTable.Column> column, int knownBar) {
         int index = known(knownBar);
         if (column.isEmpty()) {

@@ -34,22 +34,55 @@ public final class PriceReader {
      */
     public static Market read(
             Path folder, Map<String, PriceSource> sources, Calendar calendar, CashSource cash, List<String> used) {
+        return read(folder, sources, calendar, cash, used, Optional.empty());
+    }
+
+    /** The same with probabilities of regimes that were computed elsewhere, if there are any. */
+    public static Market read(
+            Path folder,
+            Map<String, PriceSource> sources,
+            Calendar calendar,
+            CashSource cash,
+            List<String> used,
+            Optional<GivenColumns> given) {
         if (used.isEmpty() || !sources.keySet().containsAll(used)) {
             throw new IllegalArgumentException("used assets " + used + " must be some of " + sources.keySet());
         }
-        return new PriceReader(folder, calendar).market(sources, cash, used);
+        return new PriceReader(folder, calendar).market(sources, cash, used, given);
     }
 
-    private Market market(Map<String, PriceSource> sources, CashSource cash, List<String> used) {
+    private Market market(
+            Map<String, PriceSource> sources, CashSource cash, List<String> used, Optional<GivenColumns> wanted) {
         Map<String, PriceSeries> series = new LinkedHashMap<>();
         sources.forEach((asset, source) -> prices(asset, source).ifPresent(read -> series.put(asset, read)));
         Optional<CashRates> rates = rates(cash);
+        Optional<GivenRows> given = wanted.flatMap(this::given);
         problems.throwIfAny();
         series.keySet().stream().filter(asset -> !used.contains(asset)).forEach(this::notUsed);
         series.keySet().retainAll(used);
         Market market = Market.of(List.copyOf(series.values()), calendar, rates.orElseThrow());
         findings.addAll(market.findings());
-        return new Market(market.table(), findings, files);
+        PriceTable table = market.table();
+        given.ifPresent(rows -> findings.addAll(rows.findings(table.axis())));
+        return new Market(
+                given.map(rows -> table.withGiven(rows.on(table.axis()))).orElse(table), findings, files);
+    }
+
+    private Optional<GivenRows> given(GivenColumns wanted) {
+        String name = wanted.source().layout().csv();
+        Faults faults = new Faults("probabilities that are given");
+        Optional<TextFile> text = TextFile.read(folder, name, faults);
+        Optional<GivenRows> read = text.flatMap(found -> GivenFile.read(found, wanted, faults));
+        faults.addTo(problems);
+        read.ifPresent(rows -> files.add(new InputFile(
+                GivenColumns.ROLE,
+                name,
+                text.orElseThrow().sha256(),
+                rows.size(),
+                rows.first(),
+                rows.last(),
+                rows.digest())));
+        return read;
     }
 
     private Optional<PriceSeries> prices(String asset, PriceSource source) {

@@ -15,6 +15,7 @@ public final class PriceTable {
     private final List<String> assets;
     private final Bars[] bars;
     private final CashReturns cash;
+    private final Optional<GivenByBar> given;
     private final Known[] known;
 
     /**
@@ -82,11 +83,12 @@ public final class PriceTable {
         }
     }
 
-    private PriceTable(TimeAxis axis, List<String> assets, Bars[] bars, CashReturns cash) {
+    private PriceTable(TimeAxis axis, List<String> assets, Bars[] bars, CashReturns cash, Optional<GivenByBar> given) {
         this.axis = axis;
         this.assets = assets;
         this.bars = bars;
         this.cash = cash;
+        this.given = given;
         this.known = new Known[axis.size()];
         Arrays.setAll(known, bar -> new Known(this, bar));
     }
@@ -105,7 +107,13 @@ public final class PriceTable {
         if (cash.size() != axis.size()) {
             throw new IllegalArgumentException("cash has " + cash.size() + " bars, the calendar " + axis.size());
         }
-        return new PriceTable(axis, List.copyOf(assets), bars.toArray(Bars[]::new), cash);
+        return new PriceTable(axis, List.copyOf(assets), bars.toArray(Bars[]::new), cash, Optional.empty());
+    }
+
+    /** The same with probabilities of regimes that were computed elsewhere, those in force at each close. */
+    PriceTable withGiven(GivenByBar probabilities) {
+        Check.within(probabilities.bars(), size(), size(), "bars of the given probabilities");
+        return new PriceTable(axis, assets, bars, cash, Optional.of(probabilities));
     }
 
     /** Number of bars. */
@@ -155,5 +163,9 @@ public final class PriceTable {
 
     CashReturns cash() {
         return cash;
+    }
+
+    Optional<GivenByBar> given() {
+        return given;
     }
 }

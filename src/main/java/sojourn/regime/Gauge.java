@@ -4,7 +4,7 @@ package sojourn.regime;
  * A gauge of what regime a series is in, with its parameters: whatever can be in force between two fits. It starts a filter, which
  * says at each bar how probable each regime is, and it says how regimes follow one another. Immutable.
  */
-public sealed interface Gauge permits RegimeModel, VolatilityThreshold, Jump {
+public sealed interface Gauge permits RegimeModel, VolatilityThreshold, Jump, GivenProbabilities {
     /** Number of regimes. */
     int states();
 

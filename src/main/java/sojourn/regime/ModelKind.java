@@ -1,6 +1,6 @@
 package sojourn.regime;
 
-/** The kinds of gauge that are fitted to a window. */
+/** The kinds of gauge. */
 public enum ModelKind {
     /** A Markov chain that is seen only through the observations. */
     HIDDEN_MARKOV("hidden-markov"),
@@ -11,7 +11,9 @@ public enum ModelKind {
     /** Recent volatility lies above or below a line. */
     VOLATILITY_THRESHOLD("volatility-threshold"),
     /** The nearest of a few centres, every change costing a penalty. */
-    JUMP("jump");
+    JUMP("jump"),
+    /** Probabilities that were computed elsewhere; nothing is fitted but what they say of returns. */
+    GIVEN("given");
 
     private final String word;
 
@@ -22,6 +24,11 @@ public enum ModelKind {
     /** Whether observations have a density in each regime, so that a fit maximises their likelihood. */
     public boolean hasLikelihood() {
         return this == HIDDEN_MARKOV || this == MIXTURE || this == ONE_REGIME;
+    }
+
+    /** Whether it is fitted, so that a strategy file may name it as its model. */
+    public boolean fitted() {
+        return this != GIVEN;
     }
 
     /** The word of the strategy file. */

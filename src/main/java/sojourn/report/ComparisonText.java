@@ -8,6 +8,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.Set;
 import java.util.TreeSet;
+import java.util.stream.Collectors;
 import sojourn.archive.Caution;
 import sojourn.archive.ComparisonRow.Judged;
 import sojourn.compare.Compared;
@@ -32,13 +33,7 @@ public final class ComparisonText {
             if (compared.ranked().stream().anyMatch(one -> one.yardsticks().size() > 1)) {
                 text.append(againstSameExposure(compared)).append('\n');
             }
-            if (compared.ranked().stream().anyMatch(one -> named(one).endsWith("*"))) {
-                text.append(Lines.wrapped(
-                                "* its parameters are an external prior: declared in the strategy file, not fitted. If they were"
-                                        + " estimated on this period, the result has seen its own future.",
-                                0))
-                        .append('\n');
-            }
+            text.append(marked(compared));
         }
         if (compared.ranked().size() == 1) {
             text.append(VariantText.of(compared.ranked().get(0))).append('\n');
@@ -189,9 +184,37 @@ public final class ComparisonText {
         return measure == Measure.SHARPE ? Figures.ratio(judged.get(measure)) : Figures.percent(judged.get(measure));
     }
 
-    /** A star marks parameters that are an external prior. */
     private static String named(Judgement one) {
-        return one.run().file().slug()
-                + (one.run().file().strategy().regimes().fixed().isPresent() ? "*" : "");
+        return one.run().file().slug() + mark(one);
+    }
+
+    /** One star marks parameters that are an external prior, two mark probabilities that were computed elsewhere. */
+    private static String mark(Judgement one) {
+        return switch (Compared.parameters(one.run())) {
+            case FITTED -> "";
+            case EXTERNAL_PRIOR -> "*";
+            case COMPUTED_ELSEWHERE -> "**";
+        };
+    }
+
+    /** What the marks mean, of those that stand above. */
+    private static String marked(Compared compared) {
+        Set<String> marks = compared.ranked().stream().map(ComparisonText::mark).collect(Collectors.toSet());
+        StringBuilder text = new StringBuilder();
+        if (marks.contains("*")) {
+            text.append(Lines.wrapped(
+                            "* its parameters are an external prior: declared in the strategy file, not fitted. If they were"
+                                    + " estimated on this period, the result has seen its own future.",
+                            0))
+                    .append('\n');
+        }
+        if (marks.contains("**")) {
+            text.append(Lines.wrapped(
+                            "** its probabilities were computed elsewhere, and are not audited for how they were computed. What"
+                                    + " is sure is that none counted before the day on which the file says it became known.",
+                            0))
+                    .append('\n');
+        }
+        return text.toString();
     }
 }

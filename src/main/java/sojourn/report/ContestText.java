@@ -52,7 +52,8 @@ final class ContestText {
     /** Whether Giacomini and White's test means anything here, so that its p-value has a column. */
     private boolean conditional() {
         return subject.refit().rolling().isPresent()
-                && subject.regimes().fixed().isEmpty();
+                && subject.regimes().fixed().isEmpty()
+                && subject.regimes().given().isEmpty();
     }
 
     private String scores(ScoreContest contest) {

@@ -6,6 +6,7 @@ import java.util.List;
 import java.util.Locale;
 import java.util.OptionalDouble;
 import java.util.stream.Collectors;
+import sojourn.market.GivenColumns;
 import sojourn.market.PriceTable;
 import sojourn.regime.ModelKind;
 import sojourn.regime.RecentVolatility;
@@ -24,6 +25,9 @@ final class GaugeText {
 
     /** What it looks at, and what regimes it tells apart. */
     static String watches(RegimeSettings regimes) {
+        if (regimes.given().isPresent()) {
+            return given(regimes.given().get(), regimes.orderedBy());
+        }
         String observed = regimes.observe().stream().map(Observation::inWords).collect(Collectors.joining(", "));
         String ordered = ", ordered by the volatility of " + regimes.orderedBy() + " at every fit";
         boolean named = regimes.model() == ModelKind.ONE_REGIME || regimes.model() == ModelKind.VOLATILITY_THRESHOLD;
@@ -41,6 +45,15 @@ final class GaugeText {
                                 ? "the information criterion of Bayes on its window"
                                 : "the log score of each number's own forecasts so far"))
                 .orElseGet(() -> String.join(", ", regimes.states()));
+    }
+
+    private static String given(GivenColumns given, String asset) {
+        return "nothing itself: the probabilities of " + String.join(", ", given.states())
+                + " were computed elsewhere ("
+                + given.source().layout().csv()
+                + ") and are not audited for how they were computed; a row counts from the"
+                + " first close on or after its " + given.source().knownOn() + "; the returns of " + asset
+                + " tell how volatile each regime is";
     }
 
     private static String model(RegimeSettings regimes) {
@@ -117,15 +130,24 @@ final class GaugeText {
             return "none: its parameters are declared (an external prior), in use from " + dates.get(0)
                     + " on; the filter begins" + " afresh " + every(refit.schedule());
         }
+        if (regimes.given().isPresent()) {
+            return "none: what each regime meant for returns, and how they followed each other, is taken "
+                    + dates.size()
+                    + " times from " + dates.get(0) + " to " + dates.get(dates.size() - 1) + ", "
+                    + every(refit.schedule()) + ", " + window(refit);
+        }
         String from = " from " + refit.starts() + " starts and the fit before (seed " + refit.seed() + "), ";
         String what = regimes.model().hasLikelihood()
                 ? "maximum likelihood" + from
                 : regimes.model() == ModelKind.JUMP ? "centres and path of least cost" + from : "quantiles taken ";
-        String window = refit.rolling().isPresent()
+        return what + dates.size() + " times from " + dates.get(0) + " to " + dates.get(dates.size() - 1) + ", "
+                + every(refit.schedule()) + ", " + window(refit) + "; parameters are frozen in between";
+    }
+
+    private static String window(RefitSettings refit) {
+        return refit.rolling().isPresent()
                 ? "on the last " + refit.rolling().getAsInt() + " observations"
                 : "on all observations so far";
-        return what + dates.size() + " times from " + dates.get(0) + " to " + dates.get(dates.size() - 1) + ", "
-                + every(refit.schedule()) + ", " + window + "; parameters are frozen in between";
     }
 
     private static String every(RefitSchedule schedule) {

@@ -80,6 +80,9 @@ public final class RegimesText {
             text.append(" Its parameters are an external prior: declared, not fitted. If they were estimated on this"
                     + " period, every figure here has seen its own future.");
         }
+        if (subject.regimes().given().isPresent()) {
+            text.append(" Its probabilities were computed elsewhere and are not audited for how they were computed.");
+        }
         text.append(starts(fits));
         StringBuilder all = new StringBuilder(Lines.wrapped(text.toString(), 0));
         List<String> refused = fits.refused();

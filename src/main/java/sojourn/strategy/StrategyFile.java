@@ -7,6 +7,7 @@ import java.nio.file.Path;
 import java.util.Locale;
 import java.util.Map;
 import sojourn.document.JsonText;
+import sojourn.market.GivenColumns;
 
 /**
  * A strategy and where it was read.
@@ -17,6 +18,8 @@ import sojourn.document.JsonText;
  * @param resolved what it says, written out in full
  */
 public record StrategyFile(String shownName, Path folder, Strategy strategy, JsonNode resolved) {
+    private static final String GIVEN = "given";
+
     /** The strategy's name as a folder can bear it: lower-case letters, digits and hyphens. */
     public String slug() {
         String plain = strategy.name().toLowerCase(Locale.ROOT).replaceAll("[^a-z0-9]+", "-");
@@ -28,7 +31,7 @@ public record StrategyFile(String shownName, Path folder, Strategy strategy, Jso
     public byte[] walkSettings() {
         ObjectNode settings = JsonNodeFactory.instance.objectNode();
         settings.set("assets", JsonNodeFactory.instance.textNode(String.join(",", strategy.usedAssets())));
-        settings.set("regimes", resolved.get("regimes"));
+        settings.set("regimes", regimes("by content"));
         settings.set("refit", resolved.get("refit"));
         return JsonText.bytes(settings);
     }
@@ -42,6 +45,9 @@ public record StrategyFile(String shownName, Path folder, Strategy strategy, Jso
                 prices.put(asset, contentByRole.get(asset));
             }
         }
+        if (contentByRole.containsKey(GivenColumns.ROLE)) {
+            settings.set("regimes", regimes(contentByRole.get(GivenColumns.ROLE)));
+        }
         if (contentByRole.containsKey("cash")) {
             settings.put(
                     "cash",
@@ -49,6 +55,12 @@ public record StrategyFile(String shownName, Path folder, Strategy strategy, Jso
                             + settings.get("cash").path("day-count").asText());
         }
         return JsonText.bytes(settings);
+    }
+
+    /** The section {@code regimes}, with {@code content} in place of a file of probabilities. */
+    private JsonNode regimes(String content) {
+        ObjectNode regimes = resolved.get("regimes").deepCopy();
+        return regimes.has(GIVEN) ? regimes.put(GIVEN, content) : regimes;
     }
 
     /** The resolved settings with every path rewritten to be relative to {@code target}. */
@@ -59,6 +71,9 @@ public record StrategyFile(String shownName, Path folder, Strategy strategy, Jso
         }
         if (settings.get("cash").has("csv")) {
             rewrite((ObjectNode) settings.get("cash"), target);
+        }
+        if (settings.get("regimes").has(GIVEN)) {
+            rewrite((ObjectNode) settings.get("regimes").get(GIVEN), target);
         }
         return settings;
     }

@@ -52,6 +52,11 @@ public record KnownAfter(Observation observation, int bars) implements Observati
     }
 
     @Override
+    public boolean fromPrices() {
+        return observation.fromPrices();
+    }
+
+    @Override
     public String inWords() {
         return observation.inWords() + ", known " + bars + (bars == 1 ? " bar" : " bars") + " late";
     }

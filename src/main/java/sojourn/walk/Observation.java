@@ -43,6 +43,11 @@ public interface Observation {
         return true;
     }
 
+    /** Whether it is computed from the table's prices alone, so that an address that holds those holds it. */
+    default boolean fromPrices() {
+        return true;
+    }
+
     /** What it is, in words. */
     default String inWords() {
         return word() + " of " + asset();

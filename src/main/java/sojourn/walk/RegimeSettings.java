@@ -1,5 +1,6 @@
 package sojourn.walk;
 
+import java.util.ArrayList;
 import java.util.HashSet;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -13,10 +14,13 @@ import sojourn.document.Field;
 import sojourn.document.Refusal;
 import sojourn.document.Shape;
 import sojourn.document.Shapes;
+import sojourn.market.GivenColumns;
+import sojourn.market.GivenSource;
 import sojourn.regime.EmissionFamily;
 import sojourn.regime.FitSettings;
 import sojourn.regime.GaugeSettings;
 import sojourn.regime.GivenParameters;
+import sojourn.regime.GivenProbabilitiesSettings;
 import sojourn.regime.InitialDistribution;
 import sojourn.regime.JumpSettings;
 import sojourn.regime.ModelKind;
@@ -113,8 +117,26 @@ public record RegimeSettings(
                     "lets each fit choose the number of regimes; 'states' then names the regimes of all numbers")
             .onlyWith(MODEL, List.of(ModelKind.HIDDEN_MARKOV.word(), ModelKind.MIXTURE.word()));
 
-    /** The section's shape. */
-    public static final Shape<RegimeSettings> SHAPE = Shapes.object(
+    private static final Field<GivenSource> GIVEN = Field.required(
+            "given",
+            GivenSource.SHAPE,
+            "probabilities computed elsewhere, in place of a model; marked so on every output, for how they were computed is not"
+                    + " audited");
+    private static final Field<List<String>> GIVEN_STATES = Field.required(
+            "states", STATE_NAMES, "names of the regimes, which are columns of the file of probabilities");
+    private static final Field<String> GIVEN_ORDER_BY = Field.required(
+            "order-by",
+            Shapes.text(),
+            "the asset whose returns say how volatile each regime is; the regimes keep their order");
+
+    private static final Shape<RegimeSettings> GIVEN_SHAPE = Shapes.object(
+            "regimes",
+            f -> given(f.get(GIVEN), f.get(GIVEN_STATES), f.get(GIVEN_ORDER_BY)),
+            GIVEN,
+            GIVEN_STATES,
+            GIVEN_ORDER_BY);
+
+    private static final Shape<RegimeSettings> FITTED_SHAPE = Shapes.object(
                     "regimes",
                     f -> new RegimeSettings(
                             f.get(MODEL),
@@ -124,7 +146,7 @@ public record RegimeSettings(
                             f.get(INITIAL),
                             f.get(ORDER_BY),
                             f.get(PARAMETERS),
-                            new Particulars(f.get(THRESHOLD), number(f.get(PENALTY)), f.get(CHOOSE))),
+                            new Particulars(f.get(THRESHOLD), number(f.get(PENALTY)), f.get(CHOOSE), Optional.empty())),
                     MODEL,
                     OBSERVE,
                     STATES,
@@ -136,6 +158,9 @@ public record RegimeSettings(
                     PENALTY,
                     CHOOSE)
             .refuseEach(RegimeFaults::of);
+
+    /** The section's shape: probabilities that are given, or a model that is fitted. */
+    public static final Shape<RegimeSettings> SHAPE = Shapes.keyed(GIVEN.key(), GIVEN_SHAPE, FITTED_SHAPE);
 
     /** Copies its lists. */
     public RegimeSettings {
@@ -166,8 +191,33 @@ public record RegimeSettings(
         this(model, observe, states, emission, Optional.empty(), orderBy, fixed);
     }
 
+    /** Probabilities that were computed elsewhere; {@code orderBy} is the asset that tells how volatile each regime is. */
+    public static RegimeSettings given(GivenSource source, List<String> states, String orderBy) {
+        List<Observation> columns = new ArrayList<>();
+        for (int k = 0; k < states.size(); k++) {
+            columns.add(new GivenProbability(k, states.get(k), orderBy));
+        }
+        return new RegimeSettings(
+                ModelKind.GIVEN,
+                columns,
+                states,
+                EmissionFamily.NORMAL,
+                Optional.empty(),
+                Optional.of(orderBy),
+                Optional.empty(),
+                Particulars.given(source));
+    }
+
+    /** The columns of the file of given probabilities, if they are given. */
+    public Optional<GivenColumns> given() {
+        return particulars.given().map(source -> new GivenColumns(source, states));
+    }
+
     /** What is fitted, by so many starts where there is a search. */
     public GaugeSettings gauge(int starts) {
+        if (particulars.given().isPresent()) {
+            return new GivenProbabilitiesSettings(states.size());
+        }
         if (particulars.threshold().isPresent()) {
             return particulars.threshold().get();
         }
@@ -225,13 +275,19 @@ public record RegimeSettings(
     }
 
     private static List<String> words(Predicate<ModelKind> which) {
-        return Stream.of(ModelKind.values()).filter(which).map(ModelKind::word).toList();
+        return Stream.of(ModelKind.values())
+                .filter(ModelKind::fitted)
+                .filter(which)
+                .map(ModelKind::word)
+                .toList();
     }
 
     private static Map<String, ModelKind> models() {
         Map<String, ModelKind> words = new LinkedHashMap<>();
         for (ModelKind kind : ModelKind.values()) {
-            words.put(kind.word(), kind);
+            if (kind.fitted()) {
+                words.put(kind.word(), kind);
+            }
         }
         return words;
     }

@@ -10,7 +10,7 @@ import sojourn.market.PriceTable;
 
 /**
  * The address of a timeline: a hash chain that starts from the settings and takes in bar after bar exactly what a walk may see
- * (date, closes, what the observations read besides closes, the cash rate). Equal addresses mean equal timelines; the address at an earlier bar is that of the shorter
+ * (date, closes, what the observations read besides closes, probabilities computed elsewhere that count, the cash rate). Equal addresses mean equal timelines; the address at an earlier bar is that of the shorter
  * history.
  */
 public final class TimelineAddress {
@@ -32,7 +32,9 @@ public final class TimelineAddress {
     public static String at(byte[] settings, PriceTable table, List<Observation> observed, int lastBar) {
         MessageDigest digest = sha256();
         byte[] link = digest.digest(settings);
-        int beside = observed.stream().mapToInt(one -> one.reads().size()).sum();
+        int beside = observed.stream()
+                .mapToInt(one -> one.reads().size() + (one.fromPrices() ? 0 : 1))
+                .sum();
         ByteBuffer row = ByteBuffer.allocate(Long.BYTES * (2 + table.assets().size() + beside));
         for (int bar = 0; bar <= lastBar; bar++) {
             Known known = table.knownAt(bar);
@@ -46,6 +48,9 @@ public final class TimelineAddress {
                 one.reads()
                         .forEach(column -> row.putLong(Double.doubleToLongBits(
                                 column.of(known, asset, known.bar()).orElse(Double.NaN))));
+                if (!one.fromPrices()) {
+                    row.putLong(Double.doubleToLongBits(one.at(known).orElse(Double.NaN)));
+                }
             }
             row.putLong(Double.doubleToLongBits(known.expectedCashReturn()));
             digest.update(link);

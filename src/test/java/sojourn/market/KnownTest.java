@@ -32,7 +32,7 @@ class KnownTest {
     void theMethodsThatTakeABarAreThese() {
         assertThat(methodsThatTakeABar().map(Method::getName))
                 .containsExactlyInAnyOrder(
-                        "at", "date", "close", "closes", "open", "high", "low", "volume", "cashReturn");
+                        "at", "date", "close", "closes", "open", "high", "low", "volume", "cashReturn", "given");
     }
 
     @ParameterizedTest

@@ -20,6 +20,9 @@ record SchemaKeys(String name, String path, JsonNode schema) {
     }
 
     private static void collect(JsonNode schema, String path, List<SchemaKeys> found) {
+        if (schema.isMissingNode()) {
+            return;
+        }
         schema.path("properties").properties().forEach(entry -> {
             String below = path + "/" + entry.getKey();
             found.add(new SchemaKeys(entry.getKey(), below, entry.getValue()));
@@ -32,5 +35,7 @@ record SchemaKeys(String name, String path, JsonNode schema) {
             collect(schema.get("items"), path + "/-", found);
         }
         schema.path("anyOf").forEach(choice -> collect(choice, path, found));
+        collect(schema.path("then"), path, found);
+        collect(schema.path("else"), path, found);
     }
 }

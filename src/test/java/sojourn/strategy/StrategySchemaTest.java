@@ -89,7 +89,9 @@ class StrategySchemaTest {
     private static JsonNode property(String pointer) {
         JsonNode schema = SCHEMA;
         for (String key : pointer.substring(1).split("/", -1)) {
-            schema = schema.path("properties").path(key);
+            schema = (schema.has("else") ? schema.get("else") : schema)
+                    .path("properties")
+                    .path(key);
         }
         assertThat(schema.isObject()).as(pointer).isTrue();
         return schema;

@@ -1,0 +1,31 @@
+package sojourn.market;
+
+import java.util.OptionalDouble;
+import sojourn.numeric.Check;
+
+/** The given probabilities in force at each close of a calendar; none before the first row became known. Immutable. */
+final class GivenByBar {
+    private final int states;
+    private final int firstBar;
+    private final double[] byBar;
+
+    private GivenByBar(int states, int firstBar, double[] byBar) {
+        this.states = states;
+        this.firstBar = firstBar;
+        this.byBar = byBar;
+    }
+
+    /** {@code byBar} is bars × states, row-major, and counts from {@code firstBar} on. Copied; not modified. */
+    static GivenByBar of(int states, int firstBar, double[] byBar) {
+        return new GivenByBar(states, firstBar, byBar.clone());
+    }
+
+    int bars() {
+        return byBar.length / states;
+    }
+
+    OptionalDouble at(int bar, int state) {
+        Check.within(state, 0, states - 1, "state");
+        return bar < firstBar ? OptionalDouble.empty() : OptionalDouble.of(byBar[bar * states + state]);
+    }
+}
