@@ -39,13 +39,10 @@ final class Hysteresis implements Mechanism {
     public Because because(Situation situation, double[] probabilities, Stance before, Stance lived) {
         boolean was = before.lived() == OUT;
         boolean is = lived.lived() == OUT;
-        return new Crossing(
-                who,
-                probabilities[regime],
-                was ? rule.reEnterBelow() : rule.leaveAbove(),
-                was ? Side.OUT : Side.IN,
-                was != is ? rule.confirm() : lived.run(),
-                rule.confirm());
+        double level = was ? rule.reEnterBelow() : rule.leaveAbove();
+        Side side = was ? Side.OUT : Side.IN;
+        int run = was != is ? rule.confirm() : lived.run();
+        return new Crossing(who, probabilities[regime], level, side, run, rule.confirm());
     }
 
     @Override

@@ -53,10 +53,9 @@ public final class RulePolicy implements Policy {
         }
         Reading reading = situation.reading().get();
         double[] now = rule.probability().of(reading);
-        Stance seen = rule.smooth()
-                .map(smoothing -> stance.averaging(smoothing.after(stance.trailing(), now)))
-                .orElse(stance);
-        double[] probabilities = seen.trailing().map(Trailing::probabilities).orElse(now);
+        Stance seen = rule.smooth().isEmpty() ? stance : averaging(rule.smooth().get(), now, stance);
+        double[] probabilities =
+                seen.trailing().isEmpty() ? now : seen.trailing().get().probabilities();
         Stance lived = mechanism.live(probabilities, seen);
         Because because = mechanism.because(situation, probabilities, stance, lived);
         if (!pacing.decides(situation)) {
@@ -71,6 +70,10 @@ public final class RulePolicy implements Policy {
         boolean driftAlone = decision.kind() == Decision.Kind.ORDER
                 && stance.wanted().filter(wanted::equals).isPresent();
         return driftAlone ? decision.explainedBy(decision.because().and("held weights had drifted from it")) : decision;
+    }
+
+    private static Stance averaging(Smoothing smoothing, double[] now, Stance stance) {
+        return stance.averaging(smoothing.after(stance.trailing(), now));
     }
 
     /** Before the first decision nothing is decided; afterwards a missing reading means standing aside, in cash. */

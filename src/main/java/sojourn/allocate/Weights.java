@@ -14,19 +14,25 @@ public final class Weights implements Wish {
     private final double[] shares;
     private final double cash;
 
-    private Weights(double[] shares) {
+    private Weights(double[] shares, double cash) {
+        this.shares = shares;
+        this.cash = cash;
+    }
+
+    /** Takes over {@code shares}. */
+    private static Weights sharing(double[] shares) {
         double rest = 1;
         for (double share : shares) {
             rest -= Check.finite(share, "weight");
         }
-        this.shares = shares;
         // 1 - 0.7 - 0.2 - 0.1 is not quite 0, and full weight must not borrow a rounding error
-        this.cash = Math.abs(rest) <= SLACK ? 0 : rest;
+        double cash = Math.abs(rest) <= SLACK ? 0 : rest;
+        return new Weights(shares, cash);
     }
 
     /** Copies {@code shares}; each must be finite. Not modified. */
     public static Weights of(double... shares) {
-        return new Weights(shares.clone());
+        return sharing(shares.clone());
     }
 
     /** The share of each asset by its index; each must be finite. */
@@ -35,12 +41,12 @@ public final class Weights implements Wish {
         for (int i = 0; i < assets; i++) {
             shares[i] = share.applyAsDouble(i);
         }
-        return new Weights(shares);
+        return sharing(shares);
     }
 
     /** Nothing but cash. */
     public static Weights none(int assets) {
-        return new Weights(new double[assets]);
+        return sharing(new double[assets]);
     }
 
     /** From weights by name; an asset that is not named gets 0, a name that is no asset is refused. */
@@ -87,7 +93,7 @@ public final class Weights implements Wish {
         for (int i = 0; i < between.length; i++) {
             between[i] = from.shares[i] + fraction * (shares[i] - from.shares[i]);
         }
-        return new Weights(between);
+        return sharing(between);
     }
 
     /** Whether any share differs from {@code other}'s by more than {@code band}, rounding aside. */

@@ -14,6 +14,7 @@ import sojourn.allocate.Weights;
 import sojourn.market.Known;
 import sojourn.market.PriceTable;
 import sojourn.numeric.Check;
+import sojourn.walk.Reading;
 import sojourn.walk.Signal;
 
 /**
@@ -118,8 +119,9 @@ public final class Simulation {
 
     private Decision ask(int bar, Weights weights) {
         Known known = table.knownAt(bar);
-        Situation situation = new Situation(
-                known, signal.at(known), regimes, weights, terms.fill().barsToFirstReturn());
+        Optional<Reading> reading = signal.at(known);
+        int ahead = terms.fill().barsToFirstReturn();
+        Situation situation = new Situation(known, reading, regimes, weights, ahead);
         Decision decision = policy.at(situation, stance);
         stance = decision.next();
         if (decision.kind() == Decision.Kind.UNDEFINED) {
