@@ -45,11 +45,6 @@ public record Formula(Map<String, String> weights, Manner manner) implements Siz
         return WORD;
     }
 
-    @Override
-    public Map<String, Map<String, Double>> statedWeights() {
-        return Map.of();
-    }
-
     /** Those that get a weight, and those that the expressions ask about. */
     @Override
     public Set<String> namedAssets() {

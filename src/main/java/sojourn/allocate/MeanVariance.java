@@ -1,11 +1,8 @@
 package sojourn.allocate;
 
-import java.util.LinkedHashSet;
 import java.util.List;
-import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
-import java.util.Set;
 import sojourn.document.Field;
 import sojourn.document.Refusal;
 import sojourn.document.Shape;
@@ -25,7 +22,7 @@ import sojourn.walk.Reading;
  * @param risk how risk is weighed
  * @param shrinkMeans the part of the way from regimes' means to the overall mean, in [0, 1]
  */
-public record MeanVariance(List<String> among, Risk risk, double shrinkMeans, Manner manner) implements Sizing {
+public record MeanVariance(List<String> among, Risk risk, double shrinkMeans, Manner manner) implements Choosing {
     /** The key under {@code allocate}. */
     static final String WORD = "mean-variance";
 
@@ -48,8 +45,6 @@ public record MeanVariance(List<String> among, Risk risk, double shrinkMeans, Ma
         }
     }
 
-    private static final Field<List<String>> AMONG =
-            Field.required("among", RuleKeys.ASSETS, "the assets to choose among");
     private static final Field<Optional<Double>> RISK_AVERSION = Field.maybe(
             "risk-aversion",
             Shapes.number().above(0).atMost(MOST_AVERSION),
@@ -109,26 +104,11 @@ public record MeanVariance(List<String> among, Risk risk, double shrinkMeans, Ma
         return WORD;
     }
 
-    @Override
-    public Map<String, Map<String, Double>> statedWeights() {
-        return Map.of();
-    }
-
-    @Override
-    public Set<String> namedAssets() {
-        return new LinkedHashSet<>(among);
-    }
-
-    @Override
-    public List<Misfit> misfits(List<String> regimes, List<String> assets) {
-        return RuleKeys.unknownAssets("/" + WORD + "/among", among, assets);
-    }
-
     /** With the means of regimes shrunk. */
     @Override
     public Forecast forecast(Reading reading, int barsAhead, double[] probabilities) {
         Reading taken = shrinkMeans == 0 ? reading : reading.shrinkingMeans(shrinkMeans);
-        return Sizing.super.forecast(taken, barsAhead, probabilities);
+        return Choosing.super.forecast(taken, barsAhead, probabilities);
     }
 
     @Override

@@ -1,10 +1,7 @@
 package sojourn.allocate;
 
-import java.util.LinkedHashSet;
 import java.util.List;
-import java.util.Map;
 import java.util.OptionalDouble;
-import java.util.Set;
 import sojourn.document.Field;
 import sojourn.document.Shape;
 import sojourn.document.Shapes;
@@ -17,14 +14,12 @@ import sojourn.numeric.Check;
  * @param among the assets, each once
  * @param invested what their weights add up to, above 0
  */
-public record MinimumVariance(List<String> among, double invested, Manner manner) implements Sizing {
+public record MinimumVariance(List<String> among, double invested, Manner manner) implements Choosing {
     /** The key under {@code allocate}. */
     static final String WORD = "minimum-variance";
 
     private static final double MOST = 10;
 
-    private static final Field<List<String>> AMONG =
-            Field.required("among", RuleKeys.ASSETS, "the assets to choose among");
     private static final Field<Double> INVESTED = Field.defaulted(
             "invested",
             Shapes.number().above(0).atMost(MOST),
@@ -47,21 +42,6 @@ public record MinimumVariance(List<String> among, double invested, Manner manner
     @Override
     public String word() {
         return WORD;
-    }
-
-    @Override
-    public Map<String, Map<String, Double>> statedWeights() {
-        return Map.of();
-    }
-
-    @Override
-    public Set<String> namedAssets() {
-        return new LinkedHashSet<>(among);
-    }
-
-    @Override
-    public List<Misfit> misfits(List<String> regimes, List<String> assets) {
-        return RuleKeys.unknownAssets("/" + WORD + "/among", among, assets);
     }
 
     /** The sum must be possible within the limits. */

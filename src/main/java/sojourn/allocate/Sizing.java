@@ -1,11 +1,12 @@
 package sojourn.allocate;
 
+import java.util.Map;
 import java.util.Optional;
 import sojourn.walk.Forecast;
 import sojourn.walk.Reading;
 
 /** A rule that works weights out at every decision, from forecasts say, rather than choosing among stated ones. */
-public sealed interface Sizing extends Rule permits VolatilityTarget, MinimumVariance, MeanVariance, Formula {
+public sealed interface Sizing extends Rule permits VolatilityTarget, Choosing, Formula {
     /** What it shares with every rule. */
     Manner manner();
 
@@ -27,6 +28,12 @@ public sealed interface Sizing extends Rule permits VolatilityTarget, MinimumVar
     @Override
     default double stepToward() {
         return manner().stepToward();
+    }
+
+    /** None, unless it scales a mix that is stated. */
+    @Override
+    default Map<String, Map<String, Double>> statedWeights() {
+        return Map.of();
     }
 
     @Override
