@@ -6,10 +6,15 @@ import java.time.temporal.ChronoUnit;
 import java.util.List;
 import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.Option;
+import picocli.CommandLine.ParameterException;
+import sojourn.archive.ResultFolder;
 import sojourn.archive.RunFacts;
+import sojourn.compare.Progress;
 
 /** Options that commands share. */
 final class CommonOptions {
+    private static final int MOST_THREADS = 1024;
+
     @Option(
             names = "--results",
             paramLabel = "DIR",
@@ -57,7 +62,27 @@ final class CommonOptions {
         return new RunFacts(command, host, threads(), started.toString(), seconds);
     }
 
-    boolean sensible() {
-        return threads >= 0 && threads <= 1024;
+    /** Refuses options that no run can have. */
+    void refuseNonsense(CommandSpec spec) {
+        if (threads < 0 || threads > MOST_THREADS) {
+            throw new ParameterException(spec.commandLine(), "--threads must be from 0 to " + MOST_THREADS);
+        }
+    }
+
+    /** Where a run shows how far it is. */
+    Progress progress(Console console) {
+        return quiet ? Progress.silent() : TerminalProgress.on(console);
+    }
+
+    /** Says where the result stands, unless nothing was to be said. */
+    void tell(Console console, ResultFolder.Published published) {
+        if (!quiet) {
+            String where = published.folder().toString();
+            console.err()
+                    .println(
+                            published.arrival() == ResultFolder.Arrival.WRITTEN
+                                    ? "written to " + where
+                                    : "the same result stands in " + where + " already; it was left alone");
+        }
     }
 }

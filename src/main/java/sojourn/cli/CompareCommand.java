@@ -18,7 +18,6 @@ import sojourn.compare.Compared;
 import sojourn.compare.Comparison;
 import sojourn.compare.ComparisonJson;
 import sojourn.compare.LocalWorkers;
-import sojourn.compare.Progress;
 import sojourn.compare.ResultWriter;
 import sojourn.compare.Warnings;
 import sojourn.compare.WhichPaths;
@@ -74,14 +73,14 @@ final class CompareCommand implements Callable<Integer> {
 
     @Override
     public Integer call() {
-        refuseNonsense();
+        options.refuseNonsense(spec);
+        refuseOddName();
         ResultFolder.refuseUnless(options.results());
         Instant started = Instant.now();
         List<StrategyFile> files = StrategyFiles.read(given);
-        Progress progress = options.quiet() ? Progress.silent() : TerminalProgress.on(console);
         Compared compared;
         try (LocalWorkers workers = new LocalWorkers(options.threads())) {
-            compared = new Comparison(workers, progress).run(files);
+            compared = new Comparison(workers, options.progress(console)).run(files);
         }
         String result = name.isEmpty() ? StrategyFiles.resultName(given) : name;
         RunFacts facts = options.facts(spec, started);
@@ -112,18 +111,10 @@ final class CompareCommand implements Callable<Integer> {
         if (warnings.size() > SHOWN_WARNINGS) {
             console.err().println("note: " + (warnings.size() - SHOWN_WARNINGS) + " more, see record.json");
         }
-        String where = published.folder().toString();
-        console.err()
-                .println(
-                        published.arrival() == ResultFolder.Arrival.WRITTEN
-                                ? "written to " + where
-                                : "the same result stands in " + where + " already; it was left alone");
+        options.tell(console, published);
     }
 
-    private void refuseNonsense() {
-        if (!options.sensible()) {
-            throw new ParameterException(spec.commandLine(), "--threads must be from 0 to 1024");
-        }
+    private void refuseOddName() {
         if (!name.isEmpty() && !name.matches("[A-Za-z0-9][A-Za-z0-9._-]*")) {
             throw new ParameterException(
                     spec.commandLine(),

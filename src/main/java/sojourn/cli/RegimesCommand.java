@@ -13,7 +13,6 @@ import picocli.CommandLine.Parameters;
 import picocli.CommandLine.Spec;
 import sojourn.archive.ResultFolder;
 import sojourn.compare.LocalWorkers;
-import sojourn.compare.Progress;
 import sojourn.evidence.RegimeInquiry;
 import sojourn.evidence.RegimesJson;
 import sojourn.evidence.RegimesWriter;
@@ -51,34 +50,24 @@ final class RegimesCommand implements Callable<Integer> {
 
     @Override
     public Integer call() {
-        refuseNonsense();
+        options.refuseNonsense(spec);
+        refuseFolder();
         ResultFolder.refuseUnless(options.results());
         Instant started = Instant.now();
         StrategyFile file = StrategyFiles.read(List.of(given)).get(0);
-        Progress progress = options.quiet() ? Progress.silent() : TerminalProgress.on(console);
         RegimeInquiry inquiry;
         try (LocalWorkers workers = new LocalWorkers(options.threads())) {
-            inquiry = RegimeInquiry.of(file, workers, progress);
+            inquiry = RegimeInquiry.of(file, workers, options.progress(console));
         }
         String name = StrategyFiles.resultName(List.of(given)) + "-regimes";
         ResultFolder.Published published =
                 RegimesWriter.write(options.results(), name, inquiry, options.facts(spec, started));
         console.out().print(options.json() ? RegimesJson.of(inquiry) : RegimesText.of(inquiry));
-        if (!options.quiet()) {
-            String where = published.folder().toString();
-            console.err()
-                    .println(
-                            published.arrival() == ResultFolder.Arrival.WRITTEN
-                                    ? "written to " + where
-                                    : "the same result stands in " + where + " already; it was left alone");
-        }
+        options.tell(console, published);
         return 0;
     }
 
-    private void refuseNonsense() {
-        if (!options.sensible()) {
-            throw new ParameterException(spec.commandLine(), "--threads must be from 0 to 1024");
-        }
+    private void refuseFolder() {
         if (Files.isDirectory(given)) {
             throw new ParameterException(spec.commandLine(), given + " is a folder; name one strategy file");
         }
