@@ -31,6 +31,11 @@ class ArchitectureTest {
     private static JavaClasses ours;
 
     private static Map<String, List<String>> mayImport() {
+        List<String> sections =
+                List.of("numeric", "document", "market", "regime", "walk", "allocate", "trade", "measure");
+        List<String> stored = and(sections, "strategy");
+        List<String> compared = and(stored, "archive");
+        List<String> questioned = and(compared, "inference", "compare");
         Map<String, List<String>> table = new LinkedHashMap<>();
         table.put("numeric", List.of());
         table.put("inference", List.of("numeric"));
@@ -42,58 +47,18 @@ class ArchitectureTest {
         table.put("allocate", List.of("numeric", "document", "market", "walk"));
         table.put("trade", List.of("numeric", "document", "market", "walk", "allocate"));
         table.put("measure", List.of("numeric", "document", "inference", "market", "trade"));
-        table.put(
-                "strategy", List.of("numeric", "document", "market", "regime", "walk", "allocate", "trade", "measure"));
-        table.put(
-                "archive",
-                List.of("numeric", "document", "market", "regime", "walk", "allocate", "trade", "measure", "strategy"));
-        table.put(
-                "compare",
-                List.of(
-                        "numeric",
-                        "document",
-                        "market",
-                        "regime",
-                        "walk",
-                        "allocate",
-                        "trade",
-                        "measure",
-                        "strategy",
-                        "archive"));
-        table.put(
-                "evidence",
-                List.of(
-                        "numeric",
-                        "inference",
-                        "document",
-                        "market",
-                        "regime",
-                        "walk",
-                        "allocate",
-                        "trade",
-                        "measure",
-                        "strategy",
-                        "archive",
-                        "compare"));
-        table.put(
-                "report",
-                List.of(
-                        "numeric",
-                        "inference",
-                        "document",
-                        "market",
-                        "regime",
-                        "walk",
-                        "allocate",
-                        "trade",
-                        "measure",
-                        "strategy",
-                        "archive",
-                        "compare",
-                        "evidence"));
+        table.put("strategy", sections);
+        table.put("archive", stored);
+        table.put("compare", compared);
+        table.put("evidence", questioned);
+        table.put("report", and(questioned, "evidence"));
         table.put(
                 "cli", List.of("document", "market", "world", "strategy", "archive", "compare", "evidence", "report"));
         return table;
+    }
+
+    private static List<String> and(List<String> rooms, String... more) {
+        return Stream.concat(rooms.stream(), Stream.of(more)).toList();
     }
 
     @BeforeAll

@@ -11,7 +11,6 @@ import org.junit.jupiter.api.io.TempDir;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
 import org.junit.jupiter.params.provider.ValueSource;
-import sojourn.PrefixCheck.Difference;
 import sojourn.PrefixCheck.Rows;
 import sojourn.market.Known;
 import sojourn.market.PriceTable;
@@ -62,9 +61,9 @@ class GaugesLookAheadTest {
     void everyGaugeSaysTheSameOfEveryBarUpToTheCut(String regimes) {
         WholeJob job = job(regimes);
         PrefixCheck check = check(job);
-        assertThat(rowsOf("fits", check)).isGreaterThanOrEqualTo(10);
-        assertThat(rowsOf("trades", check)).isGreaterThan(3);
-        assertThat(differences(check)).isEmpty();
+        assertThat(check.rowsOf("fits")).isGreaterThanOrEqualTo(10);
+        assertThat(check.rowsOf("trades")).isGreaterThan(3);
+        assertThat(check.differences(CUTS)).isEmpty();
     }
 
     @ParameterizedTest
@@ -73,7 +72,7 @@ class GaugesLookAheadTest {
         WholeJob honest = job(regimes);
         Observation observation = honest.strategy().regimes().observe().get(0);
         PrefixCheck check = check(honest.signalling((table, timeline) -> new Hindsight(table, timeline, observation)));
-        assertThat(differences(check))
+        assertThat(check.differences(CUTS))
                 .isNotEmpty()
                 .allSatisfy(difference -> assertThat(difference.column()).isEqualTo("target.stocks"));
     }
@@ -87,14 +86,14 @@ class GaugesLookAheadTest {
                         .map(row -> row.cells().get(row.columns().indexOf("states")))
                         .distinct())
                 .containsExactlyInAnyOrder("1", "2");
-        assertThat(differences(check)).isEmpty();
+        assertThat(check.differences(CUTS)).isEmpty();
     }
 
     @ParameterizedTest
     @MethodSource("choices")
     void aNumberChosenFromTheFullSampleIsCaughtEvenIfItsFitsAndFilterAreHonest(String regimes) {
         PrefixCheck check = check(choosingJob(regimes).signalling(ChosenInHindsight::new));
-        assertThat(differences(check)).isNotEmpty();
+        assertThat(check.differences(CUTS)).isNotEmpty();
     }
 
     private WholeJob choosingJob(String regimes) {
@@ -123,20 +122,6 @@ class GaugesLookAheadTest {
             return job.run(job.read());
         };
         return PrefixCheck.of(onRows, ROWS);
-    }
-
-    private static List<Difference> differences(PrefixCheck check) {
-        List<Difference> found = new ArrayList<>();
-        for (int cut : CUTS) {
-            check.difference(cut).ifPresent(found::add);
-        }
-        return found;
-    }
-
-    private static long rowsOf(String table, PrefixCheck check) {
-        return check.whole().rows().stream()
-                .filter(row -> row.table().equals(table))
-                .count();
     }
 
     /** The gauge of the last fit of all, over everything there is; its filter is honest. */

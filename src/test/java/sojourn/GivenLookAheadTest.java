@@ -53,14 +53,14 @@ class GivenLookAheadTest {
     @Test
     void everyBarUpToTheCutIsAsOnTheWholeFiles() {
         PrefixCheck check = check("known");
-        assertThat(rowsOf("fits", check)).isEqualTo((ROWS - FIRST_FIT) / 40 + 1);
-        assertThat(rowsOf("trades", check)).isGreaterThan(30);
-        assertThat(differences(check)).isEmpty();
+        assertThat(check.rowsOf("fits")).isEqualTo((ROWS - FIRST_FIT) / 40 + 1);
+        assertThat(check.rowsOf("trades")).isGreaterThan(30);
+        assertThat(check.differences(CUTS)).isEmpty();
     }
 
     @Test
     void aRowTakenByItsOwnDateIsCaught() {
-        List<Difference> differences = differences(check("date"));
+        List<Difference> differences = check("date").differences(CUTS);
         assertThat(differences).hasSizeGreaterThan(CUTS.length / 2);
         assertThat(differences)
                 .extracting(Difference::column)
@@ -193,19 +193,5 @@ class GivenLookAheadTest {
         } catch (IOException e) {
             throw new UncheckedIOException(e);
         }
-    }
-
-    private static List<Difference> differences(PrefixCheck check) {
-        List<Difference> found = new ArrayList<>();
-        for (int cut : CUTS) {
-            check.difference(cut).ifPresent(found::add);
-        }
-        return found;
-    }
-
-    private static long rowsOf(String table, PrefixCheck check) {
-        return check.whole().rows().stream()
-                .filter(row -> row.table().equals(table))
-                .count();
     }
 }

@@ -1,6 +1,7 @@
 package sojourn;
 
 import java.time.LocalDate;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import java.util.function.IntFunction;
@@ -82,6 +83,19 @@ final class PrefixCheck {
                     cut, extra.name(), "", "no row", extra.cells().toString()));
         }
         return Optional.empty();
+    }
+
+    /** The first difference of each cut that has one. */
+    List<Difference> differences(int... cuts) {
+        return Arrays.stream(cuts)
+                .mapToObj(this::difference)
+                .flatMap(Optional::stream)
+                .toList();
+    }
+
+    /** How many rows of a table the job says on all rows. */
+    long rowsOf(String table) {
+        return whole.rows().stream().filter(row -> row.table().equals(table)).count();
     }
 
     private static Optional<Difference> between(int cut, Row expected, Row got) {

@@ -18,33 +18,7 @@ class MultivariateNormalTest {
     @Test
     void filterSmootherAndPathOfTwoSeriesAgree() {
         CheckValues check = CheckValues.byId("hmm_mvn_k2_d2");
-        RegimeModel model = model(check);
-        Observations x = observations(check);
-        double[][] predicted = new double[x.size()][];
-        double[][] filtered = new double[x.size()][];
-        double[] densities = new double[x.size()];
-        FilterState state = FilterState.before(model);
-        for (int t = 0; t < x.size(); t++) {
-            predicted[t] = state.predicted(model);
-            state = state.step(model, x, t);
-            filtered[t] = state.probabilities();
-            densities[t] = state.lastLogDensity();
-        }
-        check.assertExpected("log_predictive", densities);
-        check.assertExpected("predicted", predicted);
-        check.assertExpected("filtered", filtered);
-        check.assertExpected("loglik", state.logLikelihood());
-        check.assertExpected("next_state_probs", state.predicted(model));
-        Smoothed smoothed = Smoothed.of(model, x);
-        check.assertExpected("smoothed", WorkedCasesTest.table(smoothed));
-        double[][] steps = new double[2][2];
-        for (int e = 0; e < 4; e++) {
-            steps[e / 2][e % 2] = smoothed.expectedTransitions(e / 2, e % 2);
-        }
-        check.assertExpected("expected_transitions", steps);
-        Viterbi path = Viterbi.of(model, x);
-        assertThat(path.path()).isEqualTo(CheckValues.ints(check.expected("viterbi")));
-        check.assertExpected("viterbi_logprob", path.logProbability());
+        WorkedCasesTest.assertAgrees(check, model(check), observations(check));
     }
 
     @Test

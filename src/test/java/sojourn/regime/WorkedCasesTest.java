@@ -25,8 +25,11 @@ class WorkedCasesTest {
             })
     void filterSmootherAndPathAgree(String id) {
         CheckValues check = CheckValues.byId(id);
-        RegimeModel model = Fixtures.model(check);
-        Observations x = Fixtures.observations(check);
+        assertAgrees(check, Fixtures.model(check), Fixtures.observations(check));
+    }
+
+    /** Filter, smoother and most likely path are those of the worked case. */
+    static void assertAgrees(CheckValues check, RegimeModel model, Observations x) {
         double[][] predicted = new double[x.size()][];
         double[][] filtered = new double[x.size()][];
         double[] densities = new double[x.size()];
