@@ -8,6 +8,9 @@ import sojourn.numeric.Check;
 public final class FitRequest {
     private final Observations observations;
     private final double[] orderBy;
+    /** Rows before the end whose return to order by is not known. */
+    private final int withheld;
+
     private final Companions companions;
     private final Optional<Fit> previous;
     private final long masterSeed;
@@ -16,12 +19,14 @@ public final class FitRequest {
     private FitRequest(
             Observations observations,
             double[] orderBy,
+            int withheld,
             Companions companions,
             Optional<Fit> previous,
             long masterSeed,
             String date) {
         this.observations = observations;
         this.orderBy = orderBy;
+        this.withheld = withheld;
         this.companions = companions;
         this.previous = previous;
         this.masterSeed = masterSeed;
@@ -50,7 +55,7 @@ public final class FitRequest {
         for (int row = 0; row < rows; row++) {
             copy[row] = observations.missing(row) ? 0 : Check.finite(orderBy[row], "return to order by in row", row);
         }
-        return new FitRequest(observations, copy, companions, Optional.empty(), masterSeed, date);
+        return new FitRequest(observations, copy, 0, companions, Optional.empty(), masterSeed, date);
     }
 
     /** The same request, made after {@code accepted}: it gives one more start, and is what the new states are matched to. */
@@ -58,7 +63,13 @@ public final class FitRequest {
         Check.that(
                 accepted.outcome().accepted(),
                 "a refused fit (" + accepted.outcome().word() + ") as the previous one");
-        return new FitRequest(observations, orderBy, companions, Optional.of(accepted), masterSeed, date);
+        return new FitRequest(observations, orderBy, withheld, companions, Optional.of(accepted), masterSeed, date);
+    }
+
+    /** The same without the returns to order by of the last rows, because they are not known yet: those rows order nothing. */
+    public FitRequest withholding(int lastRows) {
+        Check.within(lastRows, 0, Integer.MAX_VALUE, "rows withheld");
+        return new FitRequest(observations, orderBy, lastRows, companions, previous, masterSeed, date);
     }
 
     /** The same of the rows from {@code start} on. */
@@ -66,6 +77,7 @@ public final class FitRequest {
         return new FitRequest(
                 observations.range(start, observations.size()),
                 Arrays.copyOfRange(orderBy, start, orderBy.length),
+                withheld,
                 companions.from(start),
                 previous,
                 masterSeed,
@@ -77,7 +89,12 @@ public final class FitRequest {
         return observations;
     }
 
-    /** The return to order by in a row whose observation is present. */
+    /** Whether a row says anything of what orders the regimes: its observation is there and its return is known. */
+    boolean orders(int row) {
+        return row < orderBy.length - withheld && !observations.missing(row);
+    }
+
+    /** The return to order by in a row that {@link #orders(int) orders}. */
     double orderBy(int row) {
         return orderBy[row];
     }

@@ -15,8 +15,8 @@ final class StateWeights {
     }
 
     /**
-     * Posterior-weighted, over the rows whose observation is present. A state that accounts for practically no row gets the plain
-     * mean and standard deviation of the window.
+     * Posterior-weighted, over the rows that order. A state that accounts for practically none of them gets their plain mean and
+     * standard deviation. The occupancy is that of all rows whose observation is present.
      */
     static StateWeights of(Membership membership, FitRequest request) {
         int states = membership.states();
@@ -26,11 +26,11 @@ final class StateWeights {
         Observations x = request.observations();
         for (int k = 0; k < states; k++) {
             occupancy[k] = PosteriorMoments.weight(membership, x, k) / x.present();
-            boolean empty = occupancy[k] * x.present() < PosteriorMoments.LEAST_WEIGHT;
+            boolean empty = ordering(membership, request, k) < PosteriorMoments.LEAST_WEIGHT;
             CompensatedSum weights = new CompensatedSum();
             CompensatedSum first = new CompensatedSum();
             for (int t = 0; t < x.size(); t++) {
-                if (!x.missing(t)) {
+                if (request.orders(t)) {
                     double g = empty ? 1 : membership.at(t, k);
                     weights.add(g);
                     first.add(g * request.orderBy(t));
@@ -39,7 +39,7 @@ final class StateWeights {
             means[k] = first.value() / weights.value();
             CompensatedSum second = new CompensatedSum();
             for (int t = 0; t < x.size(); t++) {
-                if (!x.missing(t)) {
+                if (request.orders(t)) {
                     double d = request.orderBy(t) - means[k];
                     second.add((empty ? 1 : membership.at(t, k)) * d * d);
                 }
@@ -47,6 +47,16 @@ final class StateWeights {
             deviations[k] = Math.sqrt(second.value() / weights.value());
         }
         return new StateWeights(occupancy, means, deviations);
+    }
+
+    private static double ordering(Membership membership, FitRequest request, int k) {
+        CompensatedSum total = new CompensatedSum();
+        for (int t = 0; t < request.observations().size(); t++) {
+            if (request.orders(t)) {
+                total.add(membership.at(t, k));
+            }
+        }
+        return total.value();
     }
 
     double[] occupancy() {

@@ -8,8 +8,7 @@ import sojourn.numeric.Check;
 /**
  * An observation that becomes known some bars late: a close sees the number of so many bars before, computed from nothing dated
  * later. For series that are published after their date (rates, spreads) or close after the market that is traded. None on the
- * first bars. The prices of the asset itself are not late: what orders the regimes, and the moments of each regime, are the
- * returns of the bars on which the late number was seen, which is what a holder of the assets lived through.
+ * first bars. An asset of which every observation is late is late itself: see {@link ObservationLog}.
  *
  * @param observation the number, had it been known at once
  * @param bars at least 1
@@ -54,6 +53,11 @@ public record KnownAfter(Observation observation, int bars) implements Observati
     @Override
     public boolean fromPrices() {
         return observation.fromPrices();
+    }
+
+    @Override
+    public int barsLate() {
+        return bars + observation.barsLate();
     }
 
     @Override

@@ -48,6 +48,11 @@ public interface Observation {
         return true;
     }
 
+    /** How many bars late it is known; its asset is as late as the earliest of the observations of it. */
+    default int barsLate() {
+        return 0;
+    }
+
     /** What it is, in words. */
     default String inWords() {
         return word() + " of " + asset();

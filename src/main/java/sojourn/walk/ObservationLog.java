@@ -6,16 +6,24 @@ import java.util.List;
 import java.util.OptionalDouble;
 import java.util.OptionalInt;
 import sojourn.market.Known;
+import sojourn.regime.Companions;
 import sojourn.regime.Observations;
 
 /**
  * Observations and asset returns as they came in, one row a bar from the bar of the first observation on. Rows are only ever
  * appended at a close, so a window taken now cannot hold anything later. Of several series any may be missing on a bar; the bar has
  * an observation when at least one is there.
+ *
+ * <p>An asset of which every observation is known some bars late is late itself: its returns of the last so many rows are withheld
+ * from a window, as not published yet. What orders the regimes, and the moments of each, are the returns of the bars on which the
+ * late number was seen, which is what a holder of the assets lived through.
  */
 final class ObservationLog {
     private final List<Observation> observed;
     private final int assets;
+    /** Bars that the returns of each asset are late. */
+    private final int[] late;
+
     private int firstBar = -1;
     private int rows;
     private int present;
@@ -23,12 +31,22 @@ final class ObservationLog {
     private boolean[] missing;
     private double[] returns;
 
-    ObservationLog(List<Observation> observed, int assets) {
+    ObservationLog(List<Observation> observed, List<String> assets) {
         this.observed = List.copyOf(observed);
-        this.assets = assets;
+        this.assets = assets.size();
+        this.late = assets.stream().mapToInt(this::barsLate).toArray();
         this.values = new double[64 * observed.size()];
         this.missing = new boolean[64 * observed.size()];
-        this.returns = new double[64 * assets];
+        this.returns = new double[64 * this.assets];
+    }
+
+    /** As late as the earliest of the observations of it; an asset that is not observed is not late. */
+    private int barsLate(String asset) {
+        return observed.stream()
+                .filter(one -> one.asset().equals(asset))
+                .mapToInt(Observation::barsLate)
+                .min()
+                .orElse(0);
     }
 
     /** Takes in the bar that {@code known} ends with; the file's first bar, which has no returns, is passed over. */
@@ -109,12 +127,20 @@ final class ObservationLog {
         return window(rows - 1);
     }
 
-    /** Simple returns of all assets, rows from {@code start} to now, row-major. */
-    double[] assetReturns(int start) {
-        return Arrays.copyOfRange(returns, start * assets, rows * assets);
+    /** Simple returns of all assets, rows from {@code start} to now; missing where one is not published yet. */
+    Companions companions(int start) {
+        boolean[] withheld = new boolean[rows - start];
+        int latest = Arrays.stream(late).max().orElse(0);
+        Arrays.fill(withheld, StrictMath.max(0, withheld.length - latest), withheld.length, true);
+        return Companions.of(assets, Arrays.copyOfRange(returns, start * assets, rows * assets), withheld);
     }
 
-    /** Simple returns of one asset, rows from {@code start} to now. */
+    /** Of how many rows before now the return of an asset is not published yet. */
+    int withheld(int asset) {
+        return late[asset];
+    }
+
+    /** Simple returns of one asset, rows from {@code start} to now, those not published yet included. */
     double[] returnsOf(int asset, int start) {
         double[] column = new double[rows - start];
         for (int row = start; row < rows; row++) {

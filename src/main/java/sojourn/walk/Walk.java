@@ -10,7 +10,6 @@ import java.util.function.IntConsumer;
 import java.util.stream.Collectors;
 import sojourn.market.Known;
 import sojourn.market.PriceTable;
-import sojourn.regime.Companions;
 import sojourn.regime.EmissionFamily;
 import sojourn.regime.FitRequest;
 import sojourn.regime.Observations;
@@ -40,7 +39,7 @@ public final class Walk {
         this.runner = runner;
         this.candidates = new Candidates(regimes, refit.starts());
         this.orderAsset = table.asset(regimes.orderedBy());
-        this.log = new ObservationLog(regimes.observe(), table.assets().size());
+        this.log = new ObservationLog(regimes.observe(), table.assets());
         this.timeline = new RegimeTimeline.Builder(
                 regimes.states(),
                 table.assets(),
@@ -130,13 +129,13 @@ public final class Walk {
     private void fit(Known known) {
         int start = log.windowStart(refit.rolling());
         Observations window = log.window(start);
-        Companions companions = Companions.of(known.assets().size(), log.assetReturns(start));
         FitRequest cold = FitRequest.of(
-                window,
-                log.returnsOf(orderAsset, start),
-                companions,
-                refit.seed(),
-                known.date().toString());
+                        window,
+                        log.returnsOf(orderAsset, start),
+                        log.companions(start),
+                        refit.seed(),
+                        known.date().toString())
+                .withholding(log.withheld(orderAsset));
         List<CandidateFit> made = candidates.fit(cold, runner);
         OptionalInt choice = Candidates.choose(made);
         FitRecord record = record(known, known.date(log.bar(start)), made, choice);

@@ -190,7 +190,7 @@ class ObservationKindsTest {
     @MethodSource("kinds")
     void thePlanCountsWhatAWalkObserves(Observation kind) {
         PriceTable table = Candles.random(9, 60, 20, 0.01).table();
-        ObservationLog log = new ObservationLog(List.of(kind), 1);
+        ObservationLog log = new ObservationLog(List.of(kind), List.of("a"));
         for (int bar = 0; bar < table.size(); bar++) {
             log.append(table.knownAt(bar));
         }
