@@ -83,7 +83,7 @@ class ArchitectureTest {
                 .map(entry -> DynamicTest.dynamicTest(
                         entry.getKey(),
                         () -> classes()
-                                .that(resideInAPackage("sojourn." + entry.getKey()))
+                                .that(resideInAPackage("sojourn." + entry.getKey() + ".."))
                                 .should(importOnly(entry.getKey(), entry.getValue()))
                                 .allowEmptyShould(true)
                                 .check(ours)));
@@ -95,7 +95,7 @@ class ArchitectureTest {
                 .map(name -> DynamicTest.dynamicTest(
                         name,
                         () -> noClasses()
-                                .that(resideInAPackage("sojourn." + name))
+                                .that(resideInAPackage("sojourn." + name + ".."))
                                 .should()
                                 .dependOnClassesThat()
                                 .belongToAnyOf(
@@ -149,7 +149,7 @@ class ArchitectureTest {
     @Test
     void onlyTradingAndWhatStandsBelowSeesTheWholePriceTable() {
         noClasses()
-                .that(resideInAPackage("sojourn.walk").or(resideInAPackage("sojourn.allocate")))
+                .that(resideInAPackage("sojourn.walk..").or(resideInAPackage("sojourn.allocate..")))
                 .should()
                 .dependOnClassesThat()
                 .haveFullyQualifiedName("sojourn.market.FillPrices")
@@ -163,7 +163,7 @@ class ArchitectureTest {
     void onlyRegimeAndEvidenceSeeSmoothedProbabilities() {
         noClasses()
                 .that()
-                .resideOutsideOfPackages("sojourn.regime", "sojourn.evidence")
+                .resideOutsideOfPackages("sojourn.regime..", "sojourn.evidence..")
                 .should()
                 .dependOnClassesThat()
                 .haveFullyQualifiedName("sojourn.regime.Smoothed")
@@ -189,11 +189,20 @@ class ArchitectureTest {
                 .check(ours);
     }
 
+    /** What stands in a sub-package is public for its own package alone: callers start at the front door. */
+    @Test
+    void subPackagesAreUsedOnlyFromWithinTheirOwnPackage() {
+        classes()
+                .that(resideInAPackage("sojourn.."))
+                .should(stayOutOfOthersSubPackages())
+                .check(ours);
+    }
+
     @Test
     void onlyTheDoorsTouchFiles() {
         noClasses()
                 .that()
-                .resideOutsideOfPackages("sojourn.document", "sojourn.market", "sojourn.archive", "sojourn.cli")
+                .resideOutsideOfPackages("sojourn.document..", "sojourn.market..", "sojourn.archive..", "sojourn.cli..")
                 .should()
                 .dependOnClassesThat()
                 .belongToAnyOf(java.io.File.class, java.nio.file.Files.class)
@@ -219,6 +228,20 @@ class ArchitectureTest {
                                 dependency.getTargetClass().getPackageName().startsWith("sojourn."))
                         .filter(dependency -> !room(dependency.getTargetClass()).equals(own)
                                 && !allowed.contains(room(dependency.getTargetClass())))
+                        .forEach(dependency ->
+                                events.add(SimpleConditionEvent.violated(dependency, dependency.getDescription())));
+            }
+        };
+    }
+
+    private static ArchCondition<JavaClass> stayOutOfOthersSubPackages() {
+        return new ArchCondition<>("stay out of other packages' sub-packages") {
+            @Override
+            public void check(JavaClass item, ConditionEvents events) {
+                item.getDirectDependenciesFromSelf().stream()
+                        .filter(dependency ->
+                                dependency.getTargetClass().getPackageName().matches("sojourn\\.[a-z]+\\..+"))
+                        .filter(dependency -> !room(dependency.getTargetClass()).equals(room(item)))
                         .forEach(dependency ->
                                 events.add(SimpleConditionEvent.violated(dependency, dependency.getDescription())));
             }

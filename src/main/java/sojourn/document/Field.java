@@ -4,6 +4,7 @@ import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.util.List;
 import java.util.Optional;
+import sojourn.document.shape.Belonging;
 
 /**
  * One key of a map and the shape of its value.
@@ -20,7 +21,7 @@ public final class Field<T> {
     private final Optional<Belonging> belonging;
 
     /** How a key may be missing. */
-    enum Kind {
+    public enum Kind {
         REQUIRED,
         DEFAULTED,
         MAYBE
@@ -90,27 +91,27 @@ public final class Field<T> {
         return help;
     }
 
-    Kind kind() {
+    public Kind kind() {
         return kind;
     }
 
     /** Refuses the key where it is written in {@code map} beside a word that it does not belong to. */
-    boolean belongs(MapNode map, Problems problems) {
+    public boolean belongs(MapNode map, Problems problems) {
         return belonging.map(b -> b.check(key, map, problems)).orElse(true);
     }
 
     /** Whether the key's shape reads the node without fault. */
-    boolean reads(Node node) {
+    public boolean reads(Node node) {
         return shape.read(node, new Problems()).isPresent();
     }
 
     /** The word that holds when the key is missing, if its default is one. */
-    Optional<String> defaultWord() {
+    public Optional<String> defaultWord() {
         return whenMissing.flatMap(Belonging::word);
     }
 
     /** What {@link Fields#get} gives; empty if the value is at fault, or missing and required. */
-    Optional<?> value(Optional<Node> written, Problems problems) {
+    public Optional<?> value(Optional<Node> written, Problems problems) {
         Optional<?> value = written.or(() -> whenMissing).flatMap(node -> shape.read(node, problems));
         if (kind != Kind.MAYBE) {
             return value;
@@ -119,13 +120,13 @@ public final class Field<T> {
     }
 
     /** The value, or its default where the key belongs, written out; empty if there is neither. */
-    Optional<JsonNode> resolved(MapNode map) {
+    public Optional<JsonNode> resolved(MapNode map) {
         boolean counts = belonging.map(b -> b.holds(map)).orElse(true);
         return map.get(key).or(() -> counts ? whenMissing : Optional.empty()).map(shape::resolved);
     }
 
     /** The schema of the value, with the help text first and the default last. */
-    ObjectNode schema() {
+    public ObjectNode schema() {
         ObjectNode schema = Json.object().put("description", help);
         schema.setAll(shape.schema());
         whenMissing.ifPresent(node -> schema.set("default", shape.resolved(node)));

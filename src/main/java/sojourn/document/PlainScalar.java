@@ -8,7 +8,7 @@ import sojourn.document.ScalarNode.Kind;
  * What a value means that is written without quotes. Readers of YAML disagree about {@code 010} (8 or 10), {@code 1_000},
  * {@code 0x1F}, {@code .5} and their like, so these are refused; a number is what JSON calls one, with a sign allowed.
  */
-final class PlainScalar {
+public final class PlainScalar {
     private static final int LONGEST_NUMBER = 100;
     private static final Pattern NUMBER = Pattern.compile("[-+]?(0|[1-9][0-9]*)(\\.[0-9]+)?([eE][-+]?[0-9]+)?");
     private static final Pattern LEADING_ZEROS = Pattern.compile("[-+]?0[0-9_]+(\\.[0-9_]*)?([eE][-+]?[0-9]+)?");
@@ -31,7 +31,7 @@ final class PlainScalar {
     }
 
     /** Whether the text is a number that we accept, when unquoted. */
-    static boolean isNumber(String text) {
+    public static boolean isNumber(String text) {
         return text.length() <= LONGEST_NUMBER && NUMBER.matcher(text).matches();
     }
 

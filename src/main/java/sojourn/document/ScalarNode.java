@@ -25,12 +25,12 @@ public record ScalarNode(Place place, Kind kind, String text) implements Node {
     }
 
     /** The exact value of a number. */
-    BigDecimal decimal() {
+    public BigDecimal decimal() {
         return new BigDecimal(text);
     }
 
     /** The double nearest to a number; zero is never negative. */
-    double nearestDouble() {
+    public double nearestDouble() {
         return Double.parseDouble(text) + 0.0;
     }
 }

@@ -5,6 +5,9 @@ import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.util.List;
 import java.util.Optional;
 import java.util.function.Function;
+import sojourn.document.shape.ConvertedShape;
+import sojourn.document.shape.DescribedShape;
+import sojourn.document.shape.RefusingShape;
 
 /**
  * One declaration of what a piece of a document looks like: it reads a located node into a {@code T}, writes the node

@@ -10,6 +10,19 @@ import java.util.SortedMap;
 import java.util.TreeMap;
 import java.util.function.Function;
 import java.util.regex.Pattern;
+import sojourn.document.shape.DateShape;
+import sojourn.document.shape.DoubleShape;
+import sojourn.document.shape.EitherShape;
+import sojourn.document.shape.FlagShape;
+import sojourn.document.shape.IntShape;
+import sojourn.document.shape.KeyedShape;
+import sojourn.document.shape.ListShape;
+import sojourn.document.shape.LongShape;
+import sojourn.document.shape.NamedShape;
+import sojourn.document.shape.ObjectShape;
+import sojourn.document.shape.OneKeyShape;
+import sojourn.document.shape.TextShape;
+import sojourn.document.shape.WordShape;
 
 /** The kinds of shape. */
 public final class Shapes {

@@ -4,13 +4,13 @@ import java.util.List;
 import java.util.Optional;
 
 /** How faults are worded, the same way everywhere. */
-final class Wording {
+public final class Wording {
     private static final int LONGEST = 60;
 
     private Wording() {}
 
     /** What stands there: {@code 'confirm' is "abc"}. */
-    static String found(Node node) {
+    public static String found(Node node) {
         if (node instanceof ScalarNode scalar) {
             String shown = shortened(scalar.text());
             return switch (scalar.kind()) {
@@ -23,7 +23,7 @@ final class Wording {
     }
 
     /** Adds "found this; give that", unless the node's fault is already told. */
-    static <T> Optional<T> mismatch(Shape<?> shape, Node node, Problems problems) {
+    public static <T> Optional<T> mismatch(Shape<?> shape, Node node, Problems problems) {
         if (!(node instanceof BrokenNode)) {
             problems.add(node, found(node), remedy(shape, node));
         }
@@ -31,12 +31,12 @@ final class Wording {
     }
 
     /** "did you mean …? give …". */
-    static String remedy(Shape<?> shape, Node node) {
+    public static String remedy(Shape<?> shape, Node node) {
         return shape.hint(node) + "give " + shape.expected();
     }
 
     /** On one line and not too long. */
-    static String shortened(String text) {
+    public static String shortened(String text) {
         String line = text.replace("\\", "\\\\")
                 .replace("\n", "\\n")
                 .replace("\r", "\\r")
@@ -47,7 +47,7 @@ final class Wording {
     }
 
     /** "a", "a and b", "a, b and c". */
-    static String all(List<String> words) {
+    public static String all(List<String> words) {
         if (words.size() < 2) {
             return String.join("", words);
         }

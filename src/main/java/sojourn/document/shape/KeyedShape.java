@@ -1,11 +1,16 @@
-package sojourn.document;
+package sojourn.document.shape;
 
 import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.util.Optional;
+import sojourn.document.Json;
+import sojourn.document.MapNode;
+import sojourn.document.Node;
+import sojourn.document.Problems;
+import sojourn.document.Shape;
 
 /** A map that is of one shape where a certain key stands in it, and of another where it does not. */
-record KeyedShape<T>(String key, Shape<? extends T> with, Shape<? extends T> without) implements Shape<T> {
+public record KeyedShape<T>(String key, Shape<? extends T> with, Shape<? extends T> without) implements Shape<T> {
     private Shape<? extends T> of(Node node) {
         return node instanceof MapNode map && map.keys().contains(key) ? with : without;
     }

@@ -1,4 +1,4 @@
-package sojourn.document;
+package sojourn.document.shape;
 
 import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.node.ArrayNode;
@@ -6,12 +6,18 @@ import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.util.List;
 import java.util.Optional;
 import java.util.stream.Collectors;
+import sojourn.document.Json;
+import sojourn.document.Node;
+import sojourn.document.Problem;
+import sojourn.document.Problems;
+import sojourn.document.Shape;
+import sojourn.document.Wording;
 
 /**
  * One of several shapes. Of those that the node could be meant for, the first that reads it without fault; if there is
  * none, the one with the fewest faults tells them.
  */
-record EitherShape<T>(List<Shape<? extends T>> alternatives) implements Shape<T> {
+public record EitherShape<T>(List<Shape<? extends T>> alternatives) implements Shape<T> {
     @Override
     public Optional<T> read(Node node, Problems problems) {
         Optional<Problems> least = Optional.empty();

@@ -1,11 +1,17 @@
-package sojourn.document;
+package sojourn.document.shape;
 
 import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.util.Optional;
+import sojourn.document.Json;
+import sojourn.document.Node;
+import sojourn.document.Problems;
+import sojourn.document.ScalarNode;
+import sojourn.document.Shape;
+import sojourn.document.Wording;
 
 /** A whole number that fits a long. */
-record LongShape() implements Shape<Long> {
+public record LongShape() implements Shape<Long> {
     @Override
     public Optional<Long> read(Node node, Problems problems) {
         Optional<Long> value = WholeNumbers.read(node, Long.MIN_VALUE, Long.MAX_VALUE);

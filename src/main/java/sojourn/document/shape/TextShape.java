@@ -1,12 +1,18 @@
-package sojourn.document;
+package sojourn.document.shape;
 
 import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.util.Optional;
 import java.util.regex.Pattern;
+import sojourn.document.Json;
+import sojourn.document.Node;
+import sojourn.document.Problems;
+import sojourn.document.ScalarNode;
+import sojourn.document.Shape;
+import sojourn.document.Wording;
 
 /** Text that is not empty and, if there is a pattern, matches it whole. */
-record TextShape(Optional<Pattern> pattern, String expected) implements Shape<String> {
+public record TextShape(Optional<Pattern> pattern, String expected) implements Shape<String> {
     @Override
     public Optional<String> read(Node node, Problems problems) {
         if (mayBe(node)) {

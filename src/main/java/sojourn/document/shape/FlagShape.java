@@ -1,4 +1,4 @@
-package sojourn.document;
+package sojourn.document.shape;
 
 import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.node.BooleanNode;
@@ -6,9 +6,15 @@ import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
+import sojourn.document.Json;
+import sojourn.document.Node;
+import sojourn.document.Problems;
+import sojourn.document.ScalarNode;
+import sojourn.document.Shape;
+import sojourn.document.Wording;
 
 /** true or false. */
-record FlagShape() implements Shape<Boolean> {
+public record FlagShape() implements Shape<Boolean> {
     private static final List<String> TRUE_LIKE = List.of("true", "yes", "on", "y", "1");
     private static final List<String> FALSE_LIKE = List.of("false", "no", "off", "n", "0");
 

@@ -1,4 +1,4 @@
-package sojourn.document;
+package sojourn.document.shape;
 
 import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.node.ObjectNode;
@@ -6,9 +6,17 @@ import java.util.Collections;
 import java.util.LinkedHashMap;
 import java.util.Map;
 import java.util.Optional;
+import sojourn.document.Json;
+import sojourn.document.MapNode;
+import sojourn.document.Node;
+import sojourn.document.Place;
+import sojourn.document.Problems;
+import sojourn.document.ScalarNode;
+import sojourn.document.Shape;
+import sojourn.document.Wording;
 
 /** A map whose keys the user chooses; at least one. */
-record NamedShape<T>(Shape<String> key, Shape<T> value) implements Shape<Map<String, T>> {
+public record NamedShape<T>(Shape<String> key, Shape<T> value) implements Shape<Map<String, T>> {
     @Override
     public Optional<Map<String, T>> read(Node node, Problems problems) {
         if (!(node instanceof MapNode map)) {

@@ -1,4 +1,4 @@
-package sojourn.document;
+package sojourn.document.shape;
 
 import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.node.ObjectNode;
@@ -6,14 +6,21 @@ import java.math.BigDecimal;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import sojourn.document.Json;
+import sojourn.document.Node;
+import sojourn.document.NumberShape;
+import sojourn.document.PlainScalar;
+import sojourn.document.Problems;
+import sojourn.document.ScalarNode;
+import sojourn.document.Wording;
 import sojourn.numeric.Check;
 
 /** A finite number; each bound may be absent. */
-record DoubleShape(Optional<Bound> low, Optional<Bound> high) implements NumberShape {
+public record DoubleShape(Optional<Bound> low, Optional<Bound> high) implements NumberShape {
     /** A number this large where a fraction belongs was probably meant in per cent; one just above 1 may be anything. */
     private static final BigDecimal LEAST_PERCENT = BigDecimal.valueOf(2);
 
-    static final DoubleShape ANY = new DoubleShape(Optional.empty(), Optional.empty());
+    public static final DoubleShape ANY = new DoubleShape(Optional.empty(), Optional.empty());
 
     /** A bound, which itself belongs to the range or does not. */
     record Bound(double value, Edge edge) {}

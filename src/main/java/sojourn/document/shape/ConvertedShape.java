@@ -1,14 +1,18 @@
-package sojourn.document;
+package sojourn.document.shape;
 
 import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.util.Optional;
+import java.util.function.Function;
+import sojourn.document.Node;
+import sojourn.document.Problems;
+import sojourn.document.Shape;
 
-/** A shape that its schema says a sentence on. */
-record DescribedShape<T>(Shape<T> source, String help) implements Shape<T> {
+/** A shape whose value is given another form. */
+public record ConvertedShape<S, T>(Shape<S> source, Function<? super S, ? extends T> conversion) implements Shape<T> {
     @Override
     public Optional<T> read(Node node, Problems problems) {
-        return source.read(node, problems);
+        return source.read(node, problems).map(conversion);
     }
 
     @Override
@@ -18,9 +22,7 @@ record DescribedShape<T>(Shape<T> source, String help) implements Shape<T> {
 
     @Override
     public ObjectNode schema() {
-        ObjectNode schema = Json.object().put("description", help);
-        schema.setAll(source.schema());
-        return schema;
+        return source.schema();
     }
 
     @Override

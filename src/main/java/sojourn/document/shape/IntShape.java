@@ -1,12 +1,18 @@
-package sojourn.document;
+package sojourn.document.shape;
 
 import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.util.Optional;
+import sojourn.document.IntegerShape;
+import sojourn.document.Json;
+import sojourn.document.Node;
+import sojourn.document.Problems;
+import sojourn.document.ScalarNode;
+import sojourn.document.Wording;
 
 /** A whole number from {@code low} to {@code high}. */
-record IntShape(int low, int high) implements IntegerShape {
-    static final IntShape ANY = new IntShape(Integer.MIN_VALUE, Integer.MAX_VALUE);
+public record IntShape(int low, int high) implements IntegerShape {
+    public static final IntShape ANY = new IntShape(Integer.MIN_VALUE, Integer.MAX_VALUE);
 
     @Override
     public IntegerShape atLeast(int bound) {

@@ -1,7 +1,10 @@
-package sojourn.document;
+package sojourn.document.shape;
 
 import java.math.BigDecimal;
 import java.util.Optional;
+import sojourn.document.Node;
+import sojourn.document.PlainScalar;
+import sojourn.document.ScalarNode;
 
 /** What the shapes of whole numbers share. */
 final class WholeNumbers {

@@ -1,11 +1,17 @@
-package sojourn.document;
+package sojourn.document.shape;
 
 import java.util.List;
 import java.util.Optional;
+import sojourn.document.Field;
+import sojourn.document.MapNode;
+import sojourn.document.Node;
+import sojourn.document.Place;
+import sojourn.document.Problems;
+import sojourn.document.ScalarNode;
 
 /** That a key of a map is meant only beside some words of another key of the same map. */
-record Belonging(Field<?> other, List<String> words) {
-    Belonging {
+public record Belonging(Field<?> other, List<String> words) {
+    public Belonging {
         if (other.defaultWord().isEmpty()) {
             throw new IllegalArgumentException("'" + other.key() + "' has no word for a default");
         }
@@ -13,12 +19,12 @@ record Belonging(Field<?> other, List<String> words) {
     }
 
     /** The word that a node is, if it is one. */
-    static Optional<String> word(Node node) {
+    public static Optional<String> word(Node node) {
         return node instanceof ScalarNode scalar ? Optional.of(scalar.text()) : Optional.empty();
     }
 
     /** Whether the other key has one of the words; true as well for a value at fault, which is told of elsewhere. */
-    boolean holds(MapNode map) {
+    public boolean holds(MapNode map) {
         return decides(map).map(words::contains).orElse(true);
     }
 
@@ -30,7 +36,7 @@ record Belonging(Field<?> other, List<String> words) {
     }
 
     /** Refuses {@code own} where it is written and the other key has another word. */
-    boolean check(String own, MapNode map, Problems problems) {
+    public boolean check(String own, MapNode map, Problems problems) {
         Optional<Place> place = map.keyPlace(own);
         Optional<String> word = decides(map).filter(w -> !words.contains(w));
         if (place.isEmpty() || word.isEmpty()) {

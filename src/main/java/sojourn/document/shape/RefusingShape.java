@@ -1,13 +1,18 @@
-package sojourn.document;
+package sojourn.document.shape;
 
 import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.util.List;
 import java.util.Optional;
 import java.util.function.Function;
+import sojourn.document.MapNode;
+import sojourn.document.Node;
+import sojourn.document.Problems;
+import sojourn.document.Refusal;
+import sojourn.document.Shape;
 
 /** A shape with a rule on its value that its schema does not show. */
-record RefusingShape<T>(Shape<T> source, Function<? super T, List<Refusal>> rule) implements Shape<T> {
+public record RefusingShape<T>(Shape<T> source, Function<? super T, List<Refusal>> rule) implements Shape<T> {
     @Override
     public Optional<T> read(Node node, Problems problems) {
         Optional<T> value = source.read(node, problems);

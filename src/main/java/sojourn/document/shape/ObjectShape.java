@@ -1,4 +1,4 @@
-package sojourn.document;
+package sojourn.document.shape;
 
 import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.node.ArrayNode;
@@ -11,10 +11,18 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
 import java.util.function.Function;
+import sojourn.document.Field;
+import sojourn.document.Fields;
+import sojourn.document.Json;
+import sojourn.document.MapNode;
+import sojourn.document.Node;
+import sojourn.document.Problems;
+import sojourn.document.Shape;
+import sojourn.document.Wording;
 
 /** A map with fixed keys. */
-record ObjectShape<T>(String name, Function<Fields, T> build, List<Field<?>> fields) implements Shape<T> {
-    ObjectShape {
+public record ObjectShape<T>(String name, Function<Fields, T> build, List<Field<?>> fields) implements Shape<T> {
+    public ObjectShape {
         Set<String> seen = new HashSet<>();
         for (Field<?> field : fields) {
             if (!seen.add(field.key())) {

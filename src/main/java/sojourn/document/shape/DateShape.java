@@ -1,4 +1,4 @@
-package sojourn.document;
+package sojourn.document.shape;
 
 import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.node.ObjectNode;
@@ -7,9 +7,15 @@ import java.time.LocalDate;
 import java.util.Optional;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
+import sojourn.document.Json;
+import sojourn.document.Node;
+import sojourn.document.Problems;
+import sojourn.document.ScalarNode;
+import sojourn.document.Shape;
+import sojourn.document.Wording;
 
 /** An ISO date, which exists in the calendar. */
-record DateShape() implements Shape<LocalDate> {
+public record DateShape() implements Shape<LocalDate> {
     private static final Pattern DATE = Pattern.compile("([0-9]{4})-([0-9]{2})-([0-9]{2})");
 
     @Override

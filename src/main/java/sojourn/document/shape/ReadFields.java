@@ -1,6 +1,8 @@
-package sojourn.document;
+package sojourn.document.shape;
 
 import java.util.Map;
+import sojourn.document.Field;
+import sojourn.document.Fields;
 
 /** The values of a map's fields; every declared field has one. */
 record ReadFields(String name, Map<Field<?>, Object> values) implements Fields {

@@ -1,4 +1,4 @@
-package sojourn.document;
+package sojourn.document.shape;
 
 import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.node.ArrayNode;
@@ -6,9 +6,15 @@ import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import sojourn.document.Json;
+import sojourn.document.ListNode;
+import sojourn.document.Node;
+import sojourn.document.Problems;
+import sojourn.document.Shape;
+import sojourn.document.Wording;
 
 /** A list whose items have one shape. */
-record ListShape<T>(Shape<T> item, int atLeast, int atMost) implements Shape<List<T>> {
+public record ListShape<T>(Shape<T> item, int atLeast, int atMost) implements Shape<List<T>> {
     @Override
     public Optional<List<T>> read(Node node, Problems problems) {
         if (!(node instanceof ListNode list)) {

@@ -1,15 +1,18 @@
-package sojourn.document;
+package sojourn.document.shape;
 
 import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.util.Optional;
-import java.util.function.Function;
+import sojourn.document.Json;
+import sojourn.document.Node;
+import sojourn.document.Problems;
+import sojourn.document.Shape;
 
-/** A shape whose value is given another form. */
-record ConvertedShape<S, T>(Shape<S> source, Function<? super S, ? extends T> conversion) implements Shape<T> {
+/** A shape that its schema says a sentence on. */
+public record DescribedShape<T>(Shape<T> source, String help) implements Shape<T> {
     @Override
     public Optional<T> read(Node node, Problems problems) {
-        return source.read(node, problems).map(conversion);
+        return source.read(node, problems);
     }
 
     @Override
@@ -19,7 +22,9 @@ record ConvertedShape<S, T>(Shape<S> source, Function<? super S, ? extends T> co
 
     @Override
     public ObjectNode schema() {
-        return source.schema();
+        ObjectNode schema = Json.object().put("description", help);
+        schema.setAll(source.schema());
+        return schema;
     }
 
     @Override

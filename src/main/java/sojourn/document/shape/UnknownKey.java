@@ -1,7 +1,11 @@
-package sojourn.document;
+package sojourn.document.shape;
 
 import java.util.Collection;
 import java.util.Optional;
+import sojourn.document.Nearest;
+import sojourn.document.Place;
+import sojourn.document.Problems;
+import sojourn.document.Wording;
 
 /** The message about a key that means nothing. */
 final class UnknownKey {

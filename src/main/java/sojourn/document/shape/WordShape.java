@@ -1,13 +1,20 @@
-package sojourn.document;
+package sojourn.document.shape;
 
 import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.node.ArrayNode;
 import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.util.Map;
 import java.util.Optional;
+import sojourn.document.Json;
+import sojourn.document.Nearest;
+import sojourn.document.Node;
+import sojourn.document.Problems;
+import sojourn.document.ScalarNode;
+import sojourn.document.Shape;
+import sojourn.document.Wording;
 
 /** One of some words; the map's own order is that of messages and schema. */
-record WordShape<T>(Map<String, T> meanings) implements Shape<T> {
+public record WordShape<T>(Map<String, T> meanings) implements Shape<T> {
     @Override
     public Optional<T> read(Node node, Problems problems) {
         Optional<T> meaning =

@@ -1,4 +1,4 @@
-package sojourn.document;
+package sojourn.document.shape;
 
 import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.node.ObjectNode;
@@ -6,9 +6,16 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import sojourn.document.Json;
+import sojourn.document.MapNode;
+import sojourn.document.Node;
+import sojourn.document.Place;
+import sojourn.document.Problems;
+import sojourn.document.Shape;
+import sojourn.document.Wording;
 
 /** A map with exactly one of some known keys, which says how its value is read. */
-record OneKeyShape<T>(Map<String, Shape<? extends T>> variants) implements Shape<T> {
+public record OneKeyShape<T>(Map<String, Shape<? extends T>> variants) implements Shape<T> {
     @Override
     public Optional<T> read(Node node, Problems problems) {
         if (!(node instanceof MapNode map)) {
