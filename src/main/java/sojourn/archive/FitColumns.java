@@ -10,6 +10,7 @@ import sojourn.regime.Emission;
 import sojourn.regime.Fit;
 import sojourn.regime.Gauge;
 import sojourn.regime.Jump;
+import sojourn.regime.LongRun;
 import sojourn.regime.MultivariateNormal;
 import sojourn.regime.RegimeModel;
 import sojourn.regime.StudentT;
@@ -157,7 +158,7 @@ final class FitColumns {
         }
     }
 
-    /** Expected bars that a regime lasts, 1 / (1 - a_kk); empty for one that is never left. */
+    /** Expected bars of a stay in each regime, as {@link LongRun#expectedStay} has it. */
     private void stays() {
         for (String regime : regimes) {
             columns.add(new Column("stay_bars." + regime, record -> {
@@ -166,7 +167,7 @@ final class FitColumns {
                         ? OptionalDouble.empty()
                         : record.fit()
                                 .gauge()
-                                .map(gauge -> stay(gauge.transition(k.getAsInt(), k.getAsInt())))
+                                .map(gauge -> LongRun.expectedStay(gauge, k.getAsInt()))
                                 .orElseGet(OptionalDouble::empty);
             }));
         }
@@ -184,11 +185,6 @@ final class FitColumns {
                     "score." + states,
                     record -> record.candidates().get(candidate).compared()));
         }
-    }
-
-    private static OptionalDouble stay(double again) {
-        double leave = 1 - again;
-        return leave > 0 ? OptionalDouble.of(1 / leave) : OptionalDouble.empty();
     }
 
     private static <T> OptionalDouble number(Optional<T> part, Function<T, Double> of) {

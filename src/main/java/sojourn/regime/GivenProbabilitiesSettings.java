@@ -5,7 +5,7 @@ import sojourn.numeric.Check;
 
 /**
  * Takes from a window what given probabilities say of returns: moments of every asset in each regime, and how regimes followed one
- * another. Nothing is estimated, and the regimes keep their order; volatilities that do not ascend are an event.
+ * another ({@link ForetoldTransitions}). Nothing is estimated, and the regimes keep their order; volatilities that do not ascend are an event.
  *
  * @param states number of regimes, 1 to 6
  */
@@ -29,7 +29,8 @@ public record GivenProbabilitiesSettings(int states) implements GaugeSettings {
             return Fit.failed(refusal.get(), Fit.Search.NONE, x.present());
         }
         RowWeights weights = RowWeights.of(states, rows(x));
-        Described described = Described.of(GivenProbabilities.of(states, weights.transitions()), weights, request);
+        Described described =
+                Described.of(GivenProbabilities.of(states, ForetoldTransitions.of(weights)), weights, request);
         return Fit.of(
                 Outcome.GIVEN,
                 "the probabilities were given, computed elsewhere",

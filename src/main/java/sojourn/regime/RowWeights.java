@@ -57,7 +57,7 @@ final class RowWeights implements Membership {
 
     /**
      * How regimes followed one another in the window, row-major: sum_t w_t(i) w_{t+1}(j) / sum_t w_t(i), t running over all rows but
-     * the last. A state without weight there is taken to stay.
+     * the last: counts, where each row belongs to one state alone. A state without weight there is taken to stay.
      */
     double[] transitions() {
         double[] transitions = new double[states * states];

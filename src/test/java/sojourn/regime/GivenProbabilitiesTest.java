@@ -46,22 +46,6 @@ class GivenProbabilitiesTest {
         }
     }
 
-    /** transition(i, j) = sum_t p_t(i) p_{t+1}(j) / sum_t p_t(i), over all rows but the last. */
-    @Test
-    void transitionsAreHowProbabilitiesFollowedEachOther() {
-        Gauge gauge = fit().gauge().orElseThrow();
-        for (int i = 0; i < 2; i++) {
-            double from = 0;
-            double both = 0;
-            for (int t = 0; t + 1 < ROWS; t++) {
-                from += p(t, i);
-                both += p(t, i) * p(t + 1, 1);
-            }
-            assertThat(gauge.transition(i, 1)).isCloseTo(both / from, within(ROUNDING));
-            assertThat(gauge.transition(i, 0) + gauge.transition(i, 1)).isCloseTo(1, within(ROUNDING));
-        }
-    }
-
     @Test
     void theFitIsGivenNotSearchedForAndHasNoLikelihood() {
         Fit fit = fit();
