@@ -85,10 +85,15 @@ public final class GivenProbabilities implements Signal {
         if (known.bar() < from) {
             return Optional.empty();
         }
+        Reading reading = reading(known, known.bar());
+        return Optional.of(known.bar() > from ? reading.following(reading(known, known.bar() - 1)) : reading);
+    }
+
+    private Reading reading(Known known, int bar) {
         int states = regimes.size();
         int assets = known.assets().size();
         WindowMoments still = WindowMoments.of(
                 states, assets, new double[states], new double[states * assets], new double[states * assets * assets]);
-        return Optional.of(Reading.of(1, byBar[known.bar()], transition, moments.orElse(still)));
+        return Reading.of(1, byBar[bar], transition, moments.orElse(still));
     }
 }

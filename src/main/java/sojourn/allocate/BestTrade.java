@@ -35,18 +35,21 @@ final class BestTrade implements Sizer {
     }
 
     @Override
-    public Because because(Situation situation, double[] probabilities, Stance lived) {
-        return () -> sentence(situation, probabilities, lived);
-    }
-
-    private String sentence(Situation situation, double[] probabilities, Stance lived) {
-        double[] excess = excess(situation, rule.forecast(situation, probabilities));
-        double periods = situation.known().barLength().periodsPerYear();
+    public String sentence(Close close) {
+        double[] excess = excess(close.situation(), rule.forecast(close.situation(), close.probabilities()));
+        double periods = close.situation().known().barLength().periodsPerYear();
         List<String> parts = new ArrayList<>();
         for (int i = 0; i < excess.length; i++) {
             parts.add(rule.among().get(i) + " " + Figure.of(PERCENT * periods * excess[i]) + " %");
         }
         return "forecast over cash, a year: " + String.join(", ", parts) + "; against their risk that asks for "
-                + Figure.weights(weights(situation, probabilities, lived), assets, optimum.chosen());
+                + mix(close)
+                + close.closeBefore()
+                        .map(before -> "; the bar before for " + mix(before))
+                        .orElse("");
+    }
+
+    private String mix(Close close) {
+        return Figure.weights(weights(close), assets, optimum.chosen());
     }
 }

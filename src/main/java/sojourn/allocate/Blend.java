@@ -114,28 +114,27 @@ public record Blend(
         }
 
         @Override
-        public Because because(Situation situation, double[] probabilities, Stance before, Stance lived) {
-            return new Mixed(RuleKeys.prefix(rule), regimes, Weights.of(probabilities), lived, rule.confirm);
+        public String sentence(Close close) {
+            Stance lived = close.lived();
+            if (lived.run() < rule.confirm && !lived.undecided()) {
+                return regimes.get(lived.candidate()) + " is the most likely regime for " + lived.run() + " of "
+                        + rule.confirm + " closes, the last target stands";
+            }
+            return "weights averaged by " + RuleKeys.prefix(rule) + shares(close.probabilities())
+                    + close.earlier()
+                            .map(earlier -> "; the bar before by " + shares(earlier))
+                            .orElse("");
+        }
+
+        private String shares(double[] probabilities) {
+            String[] parts = new String[regimes.size()];
+            Arrays.setAll(parts, k -> regimes.get(k) + " " + Figure.of(probabilities[k]));
+            return String.join(", ", parts);
         }
 
         @Override
         public String name(int state) {
             return WORD;
-        }
-    }
-
-    /** Probabilities are kept as {@link Weights}, which they are here: the weights of the regimes. */
-    private record Mixed(String prefix, List<String> regimes, Weights probabilities, Stance lived, int confirm)
-            implements Because {
-        @Override
-        public String sentence() {
-            String[] parts = new String[regimes.size()];
-            Arrays.setAll(parts, k -> regimes.get(k) + " " + Figure.of(probabilities.at(k)));
-            String mixture = "weights averaged by " + prefix + String.join(", ", parts);
-            return lived.run() < confirm && lived.wanted().isPresent()
-                    ? regimes.get(lived.candidate()) + " is the most likely regime for " + lived.run() + " of "
-                            + confirm + " closes, the last target stands"
-                    : mixture;
         }
     }
 }

@@ -32,11 +32,6 @@ public record Decision(Kind kind, Optional<Weights> target, Stance next, Because
         SWITCHED
     }
 
-    /** The same decision with another reason. */
-    Decision explainedBy(Because reason) {
-        return new Decision(kind, target, next, reason, change);
-    }
-
     /** No decision at this close. */
     public static Decision none(Stance next, Because because) {
         return new Decision(Kind.NONE, Optional.empty(), next, because, Change.SAME);

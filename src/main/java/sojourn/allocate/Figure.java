@@ -4,6 +4,7 @@ import java.math.BigDecimal;
 import java.math.RoundingMode;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.stream.IntStream;
 
 /** Numbers in sentences: two decimals, or as many more as it takes not to say something untrue. */
 final class Figure {
@@ -37,6 +38,11 @@ final class Figure {
             parts.add(assets.get(asset) + " " + of(weights.at(asset)));
         }
         return String.join(", ", parts);
+    }
+
+    /** Weights of all assets by name: "stocks 0.70, bonds 0.20". */
+    static String weights(Weights weights, List<String> assets) {
+        return weights(weights, assets, IntStream.range(0, assets.size()).toArray());
     }
 
     /** {@code value} with enough decimals to stand on the same side of {@code level} as it does in truth. */

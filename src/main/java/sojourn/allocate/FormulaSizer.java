@@ -6,11 +6,14 @@ import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.regex.Pattern;
 
 /** {@link Formula} at work. */
 final class FormulaSizer implements Sizer {
     private static final MathContext SHOWN = new MathContext(3);
+    /** What a close says by itself, unlike weights held, which are known of this close alone. */
+    private static final String OF_THE_CLOSE = "(probability|forecast)\\..*";
 
     private final Formula rule;
     private final List<String> assets;
@@ -40,32 +43,35 @@ final class FormulaSizer implements Sizer {
     }
 
     @Override
-    public Because because(Situation situation, double[] probabilities, Stance lived) {
-        return () -> sentence(situation, probabilities, lived);
-    }
-
-    private String sentence(Situation situation, double[] probabilities, Stance lived) {
+    public String sentence(Close close) {
         int[] chosen =
                 rule.weights().keySet().stream().mapToInt(assets::indexOf).toArray();
-        String found =
-                "the formula asks for " + Figure.weights(weights(situation, probabilities, lived), assets, chosen);
-        FormulaMoment moment = new FormulaMoment(rule, situation, probabilities, lived);
+        String found = "the formula asks for " + Figure.weights(weights(close), assets, chosen);
+        FormulaMoment now = moment(close);
+        Optional<FormulaMoment> before = close.closeBefore().map(this::moment);
         List<String> used = new ArrayList<>();
         names.numbers().forEach((name, value) -> {
             if (uses(name)) {
-                used.add(name + " "
-                        + new BigDecimal(value.apply(moment))
-                                .round(SHOWN)
-                                .stripTrailingZeros()
-                                .toPlainString());
+                Optional<FormulaMoment> then = before.filter(moment -> name.matches(OF_THE_CLOSE));
+                used.add(name + " " + shown(value.apply(now))
+                        + then.map(moment -> " (the bar before " + shown(value.apply(moment)) + ")")
+                                .orElse(""));
             }
         });
         names.truths().forEach((name, value) -> {
             if (uses(name)) {
-                used.add((value.apply(moment) ? "" : "not ") + name);
+                used.add((value.apply(now) ? "" : "not ") + name);
             }
         });
         return used.isEmpty() ? found : found + " at " + String.join(", ", used);
+    }
+
+    private FormulaMoment moment(Close close) {
+        return new FormulaMoment(rule, close.situation(), close.probabilities(), close.lived());
+    }
+
+    private static String shown(double value) {
+        return new BigDecimal(value).round(SHOWN).stripTrailingZeros().toPlainString();
     }
 
     private boolean uses(String name) {

@@ -36,13 +36,28 @@ final class Hysteresis implements Mechanism {
     }
 
     @Override
-    public Because because(Situation situation, double[] probabilities, Stance before, Stance lived) {
-        boolean was = before.lived() == OUT;
-        boolean is = lived.lived() == OUT;
-        double level = was ? rule.reEnterBelow() : rule.leaveAbove();
-        Side side = was ? Side.OUT : Side.IN;
-        int run = was != is ? rule.confirm() : lived.run();
-        return new Crossing(who, probabilities[regime], level, side, run, rule.confirm());
+    public String sentence(Close close) {
+        double p = close.probabilities()[regime];
+        Side side = close.before().lived() == OUT ? Side.OUT : Side.IN;
+        double level = side == Side.OUT ? rule.reEnterBelow() : rule.leaveAbove();
+        boolean crosses = side.beyond(p, level);
+        boolean changes = crosses && close.lived().run() == 0;
+        String start = who + " " + Figure.beside(p, level) + " ";
+        if (!crosses) {
+            return start + side.within + " " + Figure.level(level) + ", " + side.stays;
+        }
+        if (!changes) {
+            return start + side.stands(p, level) + " for " + close.lived().run() + " of " + rule.confirm() + " closes, "
+                    + side.stays;
+        }
+        boolean moves =
+                close.earlier().isPresent() && !side.beyond(close.earlier().get()[regime], level);
+        return start
+                + (moves ? side.goes(p, level) : side.stands(p, level))
+                + (rule.confirm() == 1 ? "" : " for " + rule.confirm() + " closes running")
+                + close.earlier()
+                        .map(earlier -> "; it was " + Figure.beside(earlier[regime], level) + " the bar before")
+                        .orElse("");
     }
 
     @Override
@@ -52,36 +67,41 @@ final class Hysteresis implements Mechanism {
 
     /** The side that the close before ended on. */
     private enum Side {
-        IN("rose to or above", "is at or above", "lies below", "stays in"),
-        OUT("fell to or below", "is at or below", "lies above", "stays out");
+        IN("rose", "above", "lies below", "stays in") {
+            @Override
+            boolean beyond(double p, double level) {
+                return p >= level;
+            }
+        },
+        OUT("fell", "below", "lies above", "stays out") {
+            @Override
+            boolean beyond(double p, double level) {
+                return p <= level;
+            }
+        };
 
-        private final String crossed;
-        private final String beyond;
+        private final String moved;
+        private final String past;
         private final String within;
         private final String stays;
 
-        Side(String crossed, String beyond, String within, String stays) {
-            this.crossed = crossed;
-            this.beyond = beyond;
+        Side(String moved, String past, String within, String stays) {
+            this.moved = moved;
+            this.past = past;
             this.within = within;
             this.stays = stays;
         }
-    }
 
-    /** {@code run} closes running beyond the level, {@code confirm} of which change the state. */
-    private record Crossing(String who, double p, double level, Side side, int run, int confirm) implements Because {
-        @Override
-        public String sentence() {
-            String figures = Figure.level(level);
-            String start = who + " " + Figure.beside(p, level) + " ";
-            if (run == 0) {
-                return start + side.within + " " + figures + ", " + side.stays;
-            }
-            if (run < confirm) {
-                return start + side.beyond + " " + figures + " for " + run + " of " + confirm + " closes, "
-                        + side.stays;
-            }
-            return start + side.crossed + " " + figures + (confirm == 1 ? "" : " for " + confirm + " closes running");
+        abstract boolean beyond(double p, double level);
+
+        /** It crossed the level at this close. */
+        String goes(double p, double level) {
+            return moved + " " + (p == level ? "to" : past) + " " + Figure.level(level);
+        }
+
+        /** It lies beyond the level. */
+        String stands(double p, double level) {
+            return "is " + (p == level ? "at" : past) + " " + Figure.level(level);
         }
     }
 }

@@ -14,8 +14,8 @@ public interface Mechanism {
      */
     Wish weights(Situation situation, double[] probabilities, int state, Stance lived);
 
-    /** Why {@code lived} followed {@code before}. */
-    Because because(Situation situation, double[] probabilities, Stance before, Stance lived);
+    /** Why the stance after a close followed the one before, as one plain sentence without a full stop. */
+    String sentence(Close close);
 
     /** A state in words. */
     String name(int state);

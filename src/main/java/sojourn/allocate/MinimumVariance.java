@@ -70,9 +70,15 @@ public record MinimumVariance(List<String> among, double invested, Manner manner
         }
 
         @Override
-        public Because because(Situation situation, double[] probabilities, Stance lived) {
-            return () -> "the least forecast variance with " + Figure.written(rule.invested) + " invested: "
-                    + Figure.weights(weights(situation, probabilities, lived), assets, optimum.chosen());
+        public String sentence(Close close) {
+            return "the least forecast variance with " + Figure.written(rule.invested) + " invested: " + mix(close)
+                    + close.closeBefore()
+                            .map(before -> "; the bar before " + mix(before))
+                            .orElse("");
+        }
+
+        private String mix(Close close) {
+            return Figure.weights(weights(close), assets, optimum.chosen());
         }
     }
 }

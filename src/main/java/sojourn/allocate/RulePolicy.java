@@ -1,6 +1,7 @@
 package sojourn.allocate;
 
 import java.util.List;
+import java.util.Optional;
 import sojourn.numeric.Check;
 import sojourn.walk.Reading;
 
@@ -51,29 +52,53 @@ public final class RulePolicy implements Policy {
         if (situation.reading().isEmpty()) {
             return withoutReading(situation, stance);
         }
-        Reading reading = situation.reading().get();
-        double[] now = rule.probability().of(reading);
-        Stance seen = rule.smooth().isEmpty() ? stance : averaging(rule.smooth().get(), now, stance);
-        double[] probabilities =
-                seen.trailing().isEmpty() ? now : seen.trailing().get().probabilities();
+        Because because = new RuleReason(this, situation, stance);
+        double[] now = rule.probability().of(situation.reading().get());
+        Stance seen = averaging(now, stance);
+        double[] probabilities = probabilities(now, seen);
         Stance lived = mechanism.live(probabilities, seen);
-        Because because = mechanism.because(situation, probabilities, stance, lived);
         if (!pacing.decides(situation)) {
             return Decision.none(lived, because);
         }
         int state = pacing.allowedState(lived, situation.bar());
         Wish wish = mechanism.weights(situation, probabilities, state, lived);
-        if (!(wish instanceof Weights wanted)) {
-            return Decision.undefined(lived, ((Wish.Undefined) wish).because());
-        }
-        Decision decision = pacing.decide(situation, lived, state, wanted, explained(because, lived, state, stance));
-        boolean driftAlone = decision.kind() == Decision.Kind.ORDER
-                && stance.wanted().filter(wanted::equals).isPresent();
-        return driftAlone ? decision.explainedBy(decision.because().and("held weights had drifted from it")) : decision;
+        return wish instanceof Weights wanted
+                ? pacing.decide(situation, lived, state, wanted, because)
+                : Decision.undefined(lived, ((Wish.Undefined) wish).because());
     }
 
-    private static Stance averaging(Smoothing smoothing, double[] now, Stance stance) {
-        return stance.averaging(smoothing.after(stance.trailing(), now));
+    /** With this close taken into the average, for a rule that smooths. */
+    private Stance averaging(double[] now, Stance stance) {
+        return rule.smooth().isEmpty()
+                ? stance
+                : stance.averaging(rule.smooth().get().after(stance.trailing(), now));
+    }
+
+    private static double[] probabilities(double[] now, Stance seen) {
+        return seen.trailing().isEmpty() ? now : seen.trailing().get().probabilities();
+    }
+
+    /** What {@link #at} saw of a close that has a reading. */
+    Close close(Situation situation, Stance stance) {
+        Reading reading = situation.reading().orElseThrow();
+        double[] now = rule.probability().of(reading);
+        Stance seen = averaging(now, stance);
+        double[] probabilities = probabilities(now, seen);
+        Optional<double[]> earlier =
+                reading.before().map(before -> probabilities(rule.probability().of(before), stance));
+        return new Close(situation, probabilities, earlier, stance, mechanism.live(probabilities, seen));
+    }
+
+    Rule rule() {
+        return rule;
+    }
+
+    Mechanism mechanism() {
+        return mechanism;
+    }
+
+    Pacing pacing() {
+        return pacing;
     }
 
     /** Before the first decision nothing is decided; afterwards a missing reading means standing aside, in cash. */
@@ -86,18 +111,5 @@ public final class RulePolicy implements Policy {
         return cash.strictlyOutside(0, situation.weights())
                 ? Decision.order(cash, next, STANDS_ASIDE, Decision.Change.SAME)
                 : Decision.keep(cash, next, STANDS_ASIDE, Decision.Change.SAME);
-    }
-
-    /** Adds what the rule's own sentence cannot know: a state kept by stay-at-least, a change that comes after the fact. */
-    private Because explained(Because because, Stance lived, int state, Stance stance) {
-        if (state != lived.lived()) {
-            String kept = mechanism.name(state);
-            return because.and("stay-at-least " + pacing.stayAtLeast() + " bars keeps it at " + kept);
-        }
-        if (stance.undecided()) {
-            return because.and("first decision");
-        }
-        boolean late = !lived.undecided() && state != lived.decided() && lived.lived() == stance.lived();
-        return late ? because.and("first decision since the change to " + mechanism.name(state)) : because;
     }
 }

@@ -27,6 +27,11 @@ public record Situation(Known known, Optional<Reading> reading, List<String> reg
         }
     }
 
+    /** The same close with another reading of the regimes. */
+    Situation reading(Reading other) {
+        return new Situation(known, Optional.of(other), regimes, weights, barsAhead);
+    }
+
     /** Names of the assets, in the order of the weights. */
     public List<String> assets() {
         return known.assets();

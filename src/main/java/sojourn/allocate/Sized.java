@@ -21,10 +21,12 @@ record Sized(Sizing rule, List<String> regimes, Sizer sizer) implements Mechanis
     }
 
     @Override
-    public Because because(Situation situation, double[] probabilities, Stance before, Stance lived) {
+    public String sentence(Close close) {
+        Stance lived = close.lived();
         return waits(lived)
-                ? new Waiting(regimes.get(lived.candidate()), lived.run(), rule.confirm())
-                : sizer.because(situation, probabilities.clone(), lived);
+                ? regimes.get(lived.candidate()) + " is the most likely regime for " + lived.run() + " of "
+                        + rule.confirm() + " closes, the last target stands"
+                : sizer.sentence(close);
     }
 
     @Override
@@ -34,13 +36,5 @@ record Sized(Sizing rule, List<String> regimes, Sizer sizer) implements Mechanis
 
     private boolean waits(Stance lived) {
         return lived.run() < rule.confirm() && !lived.undecided();
-    }
-
-    private record Waiting(String regime, int run, int confirm) implements Because {
-        @Override
-        public String sentence() {
-            return regime + " is the most likely regime for " + run + " of " + confirm
-                    + " closes, the last target stands";
-        }
     }
 }

@@ -100,38 +100,35 @@ public record Table(
         }
 
         @Override
-        public Because because(Situation situation, double[] probabilities, Stance before, Stance lived) {
+        public String sentence(Close close) {
+            Stance lived = close.lived();
             int label = lived.candidate();
-            return new Label(
-                    RuleKeys.prefix(rule),
-                    regimes.get(label),
-                    probabilities[label],
-                    lived.run(),
-                    rule.confirm,
-                    regimes.get(lived.lived()),
-                    label == lived.lived() ? Standing.HELD : Standing.CANDIDATE);
+            String start = RuleKeys.prefix(rule) + regimes.get(label) + " " + Figure.of(close.probabilities()[label])
+                    + " is the most likely regime";
+            if (label != lived.lived()) {
+                return start + " for " + lived.run() + " of " + rule.confirm + " closes, stays with "
+                        + regimes.get(lived.lived());
+            }
+            boolean changes =
+                    close.before().lived() != Stance.NONE && close.before().lived() != label;
+            return changes
+                    ? start + (rule.confirm == 1 ? "" : " for " + rule.confirm + " closes running") + earlier(close)
+                    : start;
+        }
+
+        private String earlier(Close close) {
+            return close.earlier()
+                    .map(earlier -> {
+                        int was = MostLikely.of(earlier);
+                        String it = was == close.lived().candidate() ? "it was" : regimes.get(was) + " was, with";
+                        return "; the bar before " + it + " " + Figure.of(earlier[was]);
+                    })
+                    .orElse("");
         }
 
         @Override
         public String name(int state) {
             return regimes.get(state);
-        }
-    }
-
-    /** Whether the most likely regime is the one whose weights are wanted. */
-    private enum Standing {
-        HELD,
-        CANDIDATE
-    }
-
-    private record Label(String prefix, String who, double p, int run, int confirm, String held, Standing standing)
-            implements Because {
-        @Override
-        public String sentence() {
-            String start = prefix + who + " " + Figure.of(p) + " is the most likely regime";
-            return standing == Standing.HELD
-                    ? start
-                    : start + " for " + run + " of " + confirm + " closes, stays with " + held;
         }
     }
 }

@@ -2,6 +2,7 @@ package sojourn.allocate;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 import sojourn.walk.Forecast;
 
 /** {@link VolatilityTarget} at work. */
@@ -60,23 +61,26 @@ final class VolatilityScale implements Sizer {
     }
 
     @Override
-    public Because because(Situation situation, double[] probabilities, Stance lived) {
-        return () -> sentence(volatilities(situation, probabilities));
-    }
-
-    private String sentence(double[] volatilities) {
+    public String sentence(Close close) {
+        double[] volatilities = volatilities(close.situation(), close.probabilities());
+        Optional<double[]> earlier =
+                close.closeBefore().map(before -> volatilities(before.situation(), before.probabilities()));
         List<String> parts = new ArrayList<>();
         for (int i = 0; i < volatilities.length; i++) {
             if (mix.at(i) != 0) {
-                String who = rule.together() == VolatilityTarget.Together.MIX ? "the mix" : assets.get(i);
-                String part =
-                        Figure.of(PERCENT * volatilities[i]) + " % a year, so " + Figure.of(scale(volatilities[i]))
-                                + " of it" + (scale(volatilities[i]) == rule.atMost() ? ", the most allowed" : "");
-                parts.add(who + " " + part);
+                parts.add(part(i, volatilities[i], earlier));
             }
         }
         return "forecast volatility of "
                 + String.join("; of ", parts.stream().distinct().toList()) + "; aimed at "
                 + Figure.written(rule.percentPerYear()) + " %";
+    }
+
+    private String part(int asset, double volatility, Optional<double[]> earlier) {
+        String who = rule.together() == VolatilityTarget.Together.MIX ? "the mix" : assets.get(asset);
+        String was = earlier.map(before -> " (the bar before " + Figure.of(PERCENT * before[asset]) + " %)")
+                .orElse("");
+        return who + " " + Figure.of(PERCENT * volatility) + " % a year" + was + ", so " + Figure.of(scale(volatility))
+                + " of it" + (scale(volatility) == rule.atMost() ? ", the most allowed" : "");
     }
 }

@@ -17,6 +17,8 @@ import sojourn.regime.Fit;
  * @param events what was noticed, with the regimes' names
  * @param explanation why it did not end at a maximum, with the regimes' names; empty where it did
  * @param candidates the numbers of regimes it was chosen among, itself included
+ * @param withoutIt filtered probability of each of the timeline's regimes at this close by the fit in force before; empty where
+ *     there was none
  */
 public record FitRecord(
         int number,
@@ -27,12 +29,14 @@ public record FitRecord(
         Fit fit,
         List<String> events,
         String explanation,
-        List<CandidateFit> candidates) {
+        List<CandidateFit> candidates,
+        List<Double> withoutIt) {
     /** Copies its lists. */
     public FitRecord {
         regimes = List.copyOf(regimes);
         candidates = List.copyOf(candidates);
         events = List.copyOf(events);
+        withoutIt = List.copyOf(withoutIt);
     }
 
     /** Which state of the fit carries that name; empty where the chosen number of regimes has none of it. */

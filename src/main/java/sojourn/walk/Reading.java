@@ -1,5 +1,6 @@
 package sojourn.walk;
 
+import java.util.Optional;
 import sojourn.numeric.Check;
 import sojourn.regime.WindowMoments;
 
@@ -9,12 +10,22 @@ public final class Reading {
     private final double[] filtered;
     private final double[] transition;
     private final WindowMoments moments;
+    private final Optional<Reading> before;
+    private final Optional<Reading> withoutRefit;
 
-    private Reading(int fit, double[] filtered, double[] transition, WindowMoments moments) {
+    private Reading(
+            int fit,
+            double[] filtered,
+            double[] transition,
+            WindowMoments moments,
+            Optional<Reading> before,
+            Optional<Reading> withoutRefit) {
         this.fit = fit;
         this.filtered = filtered;
         this.transition = transition;
         this.moments = moments;
+        this.before = before;
+        this.withoutRefit = withoutRefit;
     }
 
     /**
@@ -30,12 +41,35 @@ public final class Reading {
         Check.that(
                 transition.length == states * states && moments.states() == states,
                 states + " probabilities, " + transition.length + " transitions, moments of " + moments.states());
-        return new Reading(fit, filtered.clone(), transition.clone(), moments);
+        return new Reading(fit, filtered.clone(), transition.clone(), moments, Optional.empty(), Optional.empty());
     }
 
     /** Shares its arrays, which nobody may modify afterwards. */
     static Reading sharing(int fit, double[] filtered, double[] transition, WindowMoments moments) {
-        return new Reading(fit, filtered, transition, moments);
+        return new Reading(fit, filtered, transition, moments, Optional.empty(), Optional.empty());
+    }
+
+    /** The same, knowing what was read at the close before. */
+    public Reading following(Reading closeBefore) {
+        return new Reading(fit, filtered, transition, moments, Optional.of(closeBefore), withoutRefit);
+    }
+
+    /** The same, of a close at which a fit was accepted: {@code unmoved} is what the fit before it says of this close. */
+    public Reading refitted(Reading unmoved) {
+        return new Reading(fit, filtered, transition, moments, before, Optional.of(unmoved));
+    }
+
+    /** What was read at the close before; empty where nothing was. */
+    public Optional<Reading> before() {
+        return before;
+    }
+
+    /**
+     * At a close at which a fit was accepted, what the fit in force before says of it, parameters frozen: the difference is the
+     * refit's doing. Empty at other closes, and where no fit was in force before.
+     */
+    public Optional<Reading> withoutRefit() {
+        return withoutRefit;
     }
 
     /** The fit in force, counted from 1. */
@@ -100,7 +134,7 @@ public final class Reading {
 
     /** The same with regimes' means moved by {@code part} of the way to the window's overall mean, in [0, 1]. */
     public Reading shrinkingMeans(double part) {
-        return new Reading(fit, filtered, transition, moments.shrinkingMeans(part));
+        return new Reading(fit, filtered, transition, moments.shrinkingMeans(part), before, withoutRefit);
     }
 
     /** As {@link #forecast(int)} if the regimes now had the probabilities {@code from}, one a regime. Not modified. */

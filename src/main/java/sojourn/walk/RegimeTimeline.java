@@ -10,7 +10,6 @@ import java.util.OptionalInt;
 import sojourn.market.Known;
 import sojourn.market.PriceTable;
 import sojourn.numeric.Check;
-import sojourn.regime.WindowMoments;
 
 /**
  * What was known of the regimes at each close of a history: the fits as they were made, and from the first accepted one on the
@@ -45,32 +44,18 @@ public final class RegimeTimeline implements Signal {
 
     /** Made once, because every rule on this timeline asks for all of them. */
     private List<Optional<Reading>> made() {
-        List<double[]> transitions = new ArrayList<>();
-        List<Optional<WindowMoments>> moments = new ArrayList<>();
-        for (FitRecord record : fits) {
-            boolean accepted = record.fit().outcome().accepted();
-            transitions.add(accepted ? ModelArrays.transition(record, regimes) : new double[0]);
-            moments.add(accepted ? Optional.of(ModelArrays.moments(record, regimes)) : Optional.empty());
-        }
-        List<Optional<Reading>> made = new ArrayList<>();
-        for (int row = 0; row < dates.length; row++) {
-            int fit = fitInForce[row];
-            made.add(
-                    fit == 0
-                            ? Optional.empty()
-                            : Optional.of(reading(
-                                    row,
-                                    transitions.get(fit - 1),
-                                    moments.get(fit - 1).orElseThrow())));
-        }
-        return List.copyOf(made);
-    }
-
-    private Reading reading(int row, double[] transition, WindowMoments fitted) {
+        LinkedReadings linked = new LinkedReadings(fits, regimes);
         int states = regimes.size();
-        double[] now = Arrays.copyOfRange(filtered, row * states, (row + 1) * states);
-        WindowMoments moments = zeroMean ? fitted.withMeans(expectedCash[row]) : fitted;
-        return Reading.sharing(fitInForce[row], now, transition, moments);
+        for (int row = 0; row < dates.length; row++) {
+            if (fitInForce[row] == 0) {
+                linked.none();
+            } else {
+                double[] now = Arrays.copyOfRange(filtered, row * states, (row + 1) * states);
+                Optional<Double> mean = zeroMean ? Optional.of(expectedCash[row]) : Optional.empty();
+                linked.add(firstBar + row, fitInForce[row], now, new LinkedReadings.Means(mean));
+            }
+        }
+        return linked.made();
     }
 
     @Override

@@ -2,6 +2,7 @@ package sojourn.walk;
 
 import java.time.LocalDate;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
@@ -111,9 +112,7 @@ public final class Walk {
         }
         if (inForce.isPresent()) {
             FitRecord record = inForce.get();
-            double[] probabilities =
-                    ModelArrays.spread(record, candidate(record).filter().probabilities(), regimes.states());
-            timeline.bar(known, aside ? 0 : record.number(), probabilities, score);
+            timeline.bar(known, aside ? 0 : record.number(), filtered(record), score);
         }
     }
 
@@ -138,7 +137,7 @@ public final class Walk {
                 .withholding(log.withheld(orderAsset));
         List<CandidateFit> made = candidates.fit(cold, runner);
         OptionalInt choice = Candidates.choose(made);
-        FitRecord record = record(known, known.date(log.bar(start)), made, choice);
+        FitRecord record = record(known, known.date(log.bar(start)), made, choice); // before the filters begin afresh
         timeline.fit(record);
         candidates.adopt(made, window);
         if (choice.isPresent()) {
@@ -166,7 +165,17 @@ public final class Walk {
                 told.fit(),
                 events,
                 choice.isPresent() || made.size() == 1 ? explanation(told) : refusals(made),
-                made);
+                made,
+                inForce.filter(record -> !aside).map(this::probabilities).orElse(List.of()));
+    }
+
+    private List<Double> probabilities(FitRecord record) {
+        return Arrays.stream(filtered(record)).boxed().toList();
+    }
+
+    /** Probability of each of the timeline's regimes at the last bar. */
+    private double[] filtered(FitRecord record) {
+        return ModelArrays.spread(record, candidate(record).filter().probabilities(), regimes.states());
     }
 
     /** Where none was accepted, the number of regimes that is in force is shown, or the smallest. */

@@ -65,7 +65,8 @@ class SmoothingTest {
         // half-life 1 averages to 0, 0.5, 0.75, 0.875, 0.4375: at or above 0.7 for the second close running on bar 3
         Played daily = played(policy(rule, Schedule.AT_EVERY_CLOSE), 0, 1, 1, 1, 0);
         assertThat(daily.weight(0)).containsExactly(1, 1, 1, 0, 0);
-        assertThat(daily.because(3)).isEqualTo("trailing stormy 0.88 rose to or above 0.70 for 2 closes running");
+        assertThat(daily.because(3))
+                .isEqualTo("trailing stormy 0.88 is above 0.70 for 2 closes running; it was 0.75 the bar before");
         // Monday is bar 5: the storm of bars 1 to 3 was lived through without a decision, and is averaged out again
         Played weekly = played(policy(rule, Schedule.FIRST_OF_WEEK), 0, 1, 1, 1, 1, 1);
         assertThat(weekly.weight(0)[5]).isZero();

@@ -67,9 +67,11 @@ class SwitchTest {
                 0.1,
                 0.1);
         assertThat(played.weight(0)).containsExactly(1, 1, 1, 1, 0, 0, 0, 0, 1, 1);
-        assertThat(played.because(1)).isEqualTo("stormy 0.80 is at or above 0.70 for 1 of 2 closes, stays in");
-        assertThat(played.because(4)).isEqualTo("stormy 0.90 rose to or above 0.70 for 2 closes running");
-        assertThat(played.because(8)).isEqualTo("stormy 0.10 fell to or below 0.30 for 2 closes running");
+        assertThat(played.because(1)).isEqualTo("stormy 0.80 is above 0.70 for 1 of 2 closes, stays in");
+        assertThat(played.because(4))
+                .isEqualTo("stormy 0.90 is above 0.70 for 2 closes running; it was 0.80 the bar before");
+        assertThat(played.because(8))
+                .isEqualTo("stormy 0.10 is below 0.30 for 2 closes running; it was 0.20 the bar before");
     }
 
     @Test
@@ -77,9 +79,9 @@ class SwitchTest {
         Played played =
                 played(rule(ProbabilityKind.FILTERED, 1, 1), Schedule.AT_EVERY_CLOSE, 1, 0.1, 0.81, 0.5, 0.3, 0.699999);
         assertThat(played.because(0)).isEqualTo("stormy 0.10 lies below 0.70, stays in; first decision");
-        assertThat(played.because(1)).isEqualTo("stormy 0.81 rose to or above 0.70");
+        assertThat(played.because(1)).isEqualTo("stormy 0.81 rose above 0.70; it was 0.10 the bar before");
         assertThat(played.because(2)).isEqualTo("stormy 0.50 lies above 0.30, stays out");
-        assertThat(played.because(3)).isEqualTo("stormy 0.30 fell to or below 0.30");
+        assertThat(played.because(3)).isEqualTo("stormy 0.30 fell to 0.30; it was 0.50 the bar before");
         assertThat(played.because(4)).isEqualTo("stormy 0.699999 lies below 0.70, stays in");
     }
 
@@ -89,7 +91,7 @@ class SwitchTest {
         Played played = played(rule(ProbabilityKind.PREDICTED, 1, 1), Schedule.AT_EVERY_CLOSE, 1, 0.74, 0.8);
         assertThat(played.weight(0)).containsExactly(1, 0);
         assertThat(played.because(0)).isEqualTo("predicted stormy 0.69 lies below 0.70, stays in; first decision");
-        assertThat(played.because(1)).isEqualTo("predicted stormy 0.74 rose to or above 0.70");
+        assertThat(played.because(1)).isEqualTo("predicted stormy 0.74 rose above 0.70; it was 0.69 the bar before");
     }
 
     @Test
@@ -141,7 +143,8 @@ class SwitchTest {
     void aKeptStateIsSaidSo() {
         Played played = played(rule(ProbabilityKind.FILTERED, 1, 1), Schedule.AT_EVERY_CLOSE, 3, 0, 1, 0);
         assertThat(played.because(2))
-                .isEqualTo("stormy 0.00 fell to or below 0.30; stay-at-least 3 bars keeps it at out");
+                .isEqualTo(
+                        "stormy 0.00 fell below 0.30; it was 1.00 the bar before; stay-at-least 3 bars keeps it at out");
     }
 
     @Test

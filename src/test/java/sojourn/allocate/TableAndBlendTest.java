@@ -47,7 +47,8 @@ class TableAndBlendTest {
         assertThat(played.switches()).containsExactly(7);
         assertThat(played.because(3))
                 .isEqualTo("calm 0.80 is the most likely regime for 2 of 3 closes, stays with stormy");
-        assertThat(played.because(7)).isEqualTo("calm 0.80 is the most likely regime");
+        assertThat(played.because(7))
+                .isEqualTo("calm 0.80 is the most likely regime for 3 closes running; the bar before it was 0.80");
     }
 
     @Test
@@ -56,7 +57,8 @@ class TableAndBlendTest {
         Played played = played(rule, 0.4, 0.3, 0.75, 0.25, 0.125, 0.75, 0.875);
         assertThat(played.weight(0)).containsExactly(0.6, 0.7, 0.7, 0.7, 0.875, 0.875, 0.125);
         assertThat(played.switches()).as("a continuous rule switches nothing").isEmpty();
-        assertThat(played.because(1)).isEqualTo("weights averaged by calm 0.70, stormy 0.30");
+        assertThat(played.because(1))
+                .isEqualTo("weights averaged by calm 0.70, stormy 0.30; the bar before by calm 0.60, stormy 0.40");
         assertThat(played.because(2))
                 .isEqualTo("stormy is the most likely regime for 1 of 2 closes, the last target stands");
     }

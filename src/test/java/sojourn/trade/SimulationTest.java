@@ -178,7 +178,8 @@ class SimulationTest {
             }
         }
         assertThat(switches).containsExactly(2, 4);
-        assertThat(track.fills().get(0).because().sentence()).isEqualTo("stormy 0.10 fell to or below 0.30");
+        assertThat(track.fills().get(0).because().sentence())
+                .isEqualTo("stormy 0.10 fell below 0.30; it was 0.90 the bar before");
     }
 
     @Test
