@@ -20,7 +20,7 @@ import sojourn.compare.Progress;
 import sojourn.evidence.RegimeEvidence;
 import sojourn.evidence.RegimeFindings;
 import sojourn.evidence.RegimeTables;
-import sojourn.evidence.Subject;
+import sojourn.evidence.WalkedRegimes;
 import sojourn.market.FillPrices;
 import sojourn.market.Known;
 import sojourn.market.Market;
@@ -120,7 +120,7 @@ class RegimesLookAheadTest {
             STOCKS.write(folder.resolve("stocks.csv"), rows);
             Market market = job.read();
             PriceTable table = market.table();
-            Subject subject = Subject.of(
+            WalkedRegimes subject = WalkedRegimes.of(
                     table,
                     seeing.apply(table, job.strategy().regimes()),
                     job.strategy().refit(),

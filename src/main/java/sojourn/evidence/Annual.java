@@ -15,7 +15,7 @@ import sojourn.inference.WeightedMoments;
  */
 public record Annual(Estimate mean, Estimate meanError, Estimate volatility, Estimate volatilityError) {
     /** Of moments of the subject's returns. */
-    public static Annual of(Subject subject, WeightedMoments moments) {
+    public static Annual of(WalkedRegimes subject, WeightedMoments moments) {
         double periods = subject.barsPerYear();
         if (moments.count() < periods && moments.mean() instanceof Estimate.Value) {
             Estimate none =

@@ -12,7 +12,7 @@ final class CardsJson {
 
     private CardsJson() {}
 
-    static void add(ObjectNode node, Subject subject, List<IdentityCard> cards) {
+    static void add(ObjectNode node, WalkedRegimes subject, List<IdentityCard> cards) {
         Stretch last = subject.stretches().get(subject.stretches().size() - 1);
         node.put("last_fit", last.record().number());
         node.put("fitted_on", last.record().fittedOn().toString());
@@ -29,7 +29,7 @@ final class CardsJson {
         }
     }
 
-    private static void asLived(ObjectNode node, Subject subject, IdentityCard.AsLived lived) {
+    private static void asLived(ObjectNode node, WalkedRegimes subject, IdentityCard.AsLived lived) {
         node.put("mean_probability", lived.meanProbability());
         node.put("share_of_closes_most_likely", lived.mostLikely());
         node.set("stay_bars", EstimateNodes.of(lived.stay()));
@@ -43,7 +43,7 @@ final class CardsJson {
         }
     }
 
-    private static void returns(ObjectNode node, Subject subject, WeightedMoments moments) {
+    private static void returns(ObjectNode node, WalkedRegimes subject, WeightedMoments moments) {
         Annual annual = Annual.of(subject, moments);
         node.put("weight_in_bars", moments.weight());
         node.set("mean_per_bar", EstimateNodes.of(moments.mean(), moments.meanError()));
@@ -52,7 +52,7 @@ final class CardsJson {
         node.set("volatility_per_year", EstimateNodes.of(annual.volatility(), annual.volatilityError()));
     }
 
-    static void add(ObjectNode node, Lineage lineage, Subject subject) {
+    static void add(ObjectNode node, Lineage lineage, WalkedRegimes subject) {
         List<LineageStep> compared = lineage.compared();
         node.put("accepted_fits", lineage.steps().size());
         node.put("compared_with_the_fit_before", compared.size());

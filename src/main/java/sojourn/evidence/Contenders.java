@@ -9,22 +9,22 @@ import java.util.TreeMap;
 
 /** Everybody who forecast, the subject's own gauge first, and what each said; who said too little is not compared, and why is told. */
 final class Contenders {
-    private final Subject subject;
+    private final WalkedRegimes subject;
     private final Map<String, PerBar> secondMoments = new LinkedHashMap<>();
     private final Map<String, PerBar> ofReturn = new LinkedHashMap<>();
     private final Map<String, PerBar> ofObservation = new LinkedHashMap<>();
     private final Map<String, String> absent = new TreeMap<>();
 
-    private Contenders(Subject subject) {
+    private Contenders(WalkedRegimes subject) {
         this.subject = subject;
     }
 
     /** The subject's own gauge, its rivals, and two forecasts of volatility that know no regimes. */
-    static Contenders of(Subject subject, List<Walked> rivals) {
+    static Contenders of(WalkedRegimes subject, List<Rival> rivals) {
         Contenders all = new Contenders(subject);
         all.enter(subject);
         int own = all.forecasts(subject.gauge());
-        for (Walked rival : rivals) {
+        for (Rival rival : rivals) {
             all.enter(rival.subject());
             all.tooLittle(rival, own).ifPresent(why -> all.absent.put(rival.gauge(), why));
         }
@@ -33,7 +33,7 @@ final class Contenders {
         return all;
     }
 
-    private void enter(Subject one) {
+    private void enter(WalkedRegimes one) {
         ReturnForecasts forecasts = ReturnForecasts.of(one);
         secondMoments.put(one.gauge(), forecasts.secondMoment());
         ofReturn.put(one.gauge(), forecasts.logScore());
@@ -45,7 +45,7 @@ final class Contenders {
     }
 
     /** The bars in common would be few, and would say little of the others. */
-    private Optional<String> tooLittle(Walked rival, int own) {
+    private Optional<String> tooLittle(Rival rival, int own) {
         int forecast = forecasts(rival.gauge());
         return rival.nothing()
                 .or(() -> 2 * forecast < own

@@ -7,7 +7,7 @@ import com.fasterxml.jackson.databind.node.ObjectNode;
 final class ContestJson {
     private ContestJson() {}
 
-    static void add(ObjectNode node, Subject subject, ScoreContest contest) {
+    static void add(ObjectNode node, WalkedRegimes subject, ScoreContest contest) {
         window(node, subject, contest.bars(), contest.firstBar(), contest.lastBar());
         ArrayNode rows = node.putArray("gauges");
         for (ScoreContest.Row row : contest.rows()) {
@@ -18,7 +18,7 @@ final class ContestJson {
         }
     }
 
-    static void add(ObjectNode node, Subject subject, ForecastContest contest) {
+    static void add(ObjectNode node, WalkedRegimes subject, ForecastContest contest) {
         window(node, subject, contest.bars(), contest.firstBar(), contest.lastBar());
         node.put("best_by_qlike", contest.best());
         contest.bestAgainstNext().ifPresent(duel -> {
@@ -38,7 +38,7 @@ final class ContestJson {
         }
     }
 
-    private static void window(ObjectNode node, Subject subject, int bars, int first, int last) {
+    private static void window(ObjectNode node, WalkedRegimes subject, int bars, int first, int last) {
         node.put("bars", bars);
         node.put("from", subject.date(first).toString());
         node.put("to", subject.date(last).toString());

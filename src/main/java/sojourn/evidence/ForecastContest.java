@@ -49,7 +49,7 @@ public record ForecastContest(
      *
      * @param forecasts by gauge, the subject's own first
      */
-    static Answer<ForecastContest> of(Subject subject, Map<String, PerBar> forecasts) {
+    static Answer<ForecastContest> of(WalkedRegimes subject, Map<String, PerBar> forecasts) {
         int[] common = CommonBars.of(List.copyOf(forecasts.values()));
         if (common.length == 0) {
             return Answer.none("no bar was forecast by all of " + String.join(", ", forecasts.keySet()));
@@ -81,13 +81,13 @@ public record ForecastContest(
         return Answer.of(new ForecastContest(common.length, common[0], common[common.length - 1], rows, best, next));
     }
 
-    private static Optional<Duel> duel(Subject subject, String gauge, Map<String, double[]> losses) {
+    private static Optional<Duel> duel(WalkedRegimes subject, String gauge, Map<String, double[]> losses) {
         return gauge.equals(subject.gauge())
                 ? Optional.empty()
                 : Optional.of(between(subject, subject.gauge(), gauge, losses));
     }
 
-    private static Duel between(Subject subject, String first, String second, Map<String, double[]> losses) {
+    private static Duel between(WalkedRegimes subject, String first, String second, Map<String, double[]> losses) {
         return Duel.of(first, second, ahead(first, second, losses), Ground.of(subject, first, second));
     }
 

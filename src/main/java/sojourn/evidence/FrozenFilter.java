@@ -32,7 +32,7 @@ final class FrozenFilter {
     }
 
     /** Of a stretch's fit, from its window's start up to, not including, bar {@code end}. */
-    static FrozenFilter of(Subject subject, Stretch stretch, int end) {
+    static FrozenFilter of(WalkedRegimes subject, Stretch stretch, int end) {
         Gauge gauge = stretch.record()
                 .fit()
                 .gauge()

@@ -38,7 +38,7 @@ public enum Ground {
     }
 
     /** Of a test between two of a subject's gauges, named by their words. */
-    static Ground of(Subject subject, String first, String second) {
+    static Ground of(WalkedRegimes subject, String first, String second) {
         String own = subject.gauge();
         if (subject.regimes().fixed().isPresent() && (first.equals(own) || second.equals(own))) {
             return DECLARED;

@@ -17,10 +17,10 @@ import sojourn.regime.WindowMoments;
 final class IdentityCards {
     private static final int LARGEST = 3;
 
-    private final Subject subject;
+    private final WalkedRegimes subject;
     private final int[] known;
 
-    private IdentityCards(Subject subject) {
+    private IdentityCards(WalkedRegimes subject) {
         this.subject = subject;
         this.known = IntStream.range(0, subject.table().size())
                 .filter(subject::known)
@@ -28,7 +28,7 @@ final class IdentityCards {
     }
 
     /** One a regime, in role order; nothing before an accepted fit. */
-    static Answer<List<IdentityCard>> of(Subject subject) {
+    static Answer<List<IdentityCard>> of(WalkedRegimes subject) {
         if (subject.stretches().isEmpty()) {
             return Answer.none("no fit was accepted");
         }

@@ -28,7 +28,7 @@ public final class Influence {
     public record LeftOut(int bar, int fit, int mostLikely, int without, int changed, int until) {}
 
     /** Of every observation while a fit was in force. */
-    static Answer<Influence> of(Subject subject) {
+    static Answer<Influence> of(WalkedRegimes subject) {
         if (subject.stretches().isEmpty()) {
             return Answer.none("no fit was accepted");
         }

@@ -34,7 +34,7 @@ public final class Lineage {
     }
 
     /** Through all accepted fits. */
-    static Answer<Lineage> of(Subject subject) {
+    static Answer<Lineage> of(WalkedRegimes subject) {
         List<LineageStep> steps = new ArrayList<>();
         Optional<Stretch> before = Optional.empty();
         Optional<FrozenFilter> old = Optional.empty();
@@ -62,7 +62,7 @@ public final class Lineage {
     }
 
     private static Optional<LineageStep.Before> compared(
-            Subject subject, Stretch before, FrozenFilter old, Stretch now, FrozenFilter filter) {
+            WalkedRegimes subject, Stretch before, FrozenFilter old, Stretch now, FrozenFilter filter) {
         Optional<Emission> earlier = likeness(subject, before);
         Optional<Emission> later = likeness(subject, now);
         if (old.states() != filter.states() || earlier.isEmpty() || later.isEmpty()) {
@@ -85,7 +85,7 @@ public final class Lineage {
     }
 
     /** What regimes are matched by: their emissions; without any, normals of the asset's moments in the window. */
-    private static Optional<Emission> likeness(Subject subject, Stretch stretch) {
+    private static Optional<Emission> likeness(WalkedRegimes subject, Stretch stretch) {
         Fit fit = stretch.record().fit();
         if (fit.model().isPresent()) {
             return Optional.of(fit.model().get().emission());

@@ -40,7 +40,7 @@ public final class PseudoResiduals {
     }
 
     /** Of all bars that were forecast; nothing for a gauge that forecasts no distribution of its observation. */
-    static Answer<PseudoResiduals> of(Subject subject) {
+    static Answer<PseudoResiduals> of(WalkedRegimes subject) {
         Forecaster forecaster = new Forecaster(subject);
         int[] clipped = new int[1];
         PerBar uniform = PerBar.of(subject.table().size(), bar -> {
@@ -120,10 +120,10 @@ public final class PseudoResiduals {
 
     /** The distribution forecast at each close for the next bar. */
     private static final class Forecaster {
-        private final Subject subject;
+        private final WalkedRegimes subject;
         private final Map<Integer, DistributionFunction> byFit = new HashMap<>();
 
-        Forecaster(Subject subject) {
+        Forecaster(WalkedRegimes subject) {
             this.subject = subject;
             for (Stretch stretch : subject.stretches()) {
                 stretch.record()

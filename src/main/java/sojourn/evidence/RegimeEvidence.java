@@ -21,10 +21,10 @@ public final class RegimeEvidence {
     private RegimeEvidence() {}
 
     /** Walks the rivals over the subject's prices on {@code workers}, then asks. Depends on the subject alone, not on threads. */
-    public static RegimeFindings of(Subject subject, Workers workers, Progress progress) {
+    public static RegimeFindings of(WalkedRegimes subject, Workers workers, Progress progress) {
         List<RegimeSettings> rivals = Rivals.of(subject.regimes());
         progress.begin("other gauges", (long) rivals.size() * subject.table().size());
-        List<Walked> walked = new ArrayList<>();
+        List<Rival> walked = new ArrayList<>();
         try {
             for (RegimeSettings rival : rivals) {
                 walked.add(walked(subject, rival, workers, progress));
@@ -35,7 +35,7 @@ public final class RegimeEvidence {
         return asked(subject, walked);
     }
 
-    private static Walked walked(Subject subject, RegimeSettings rival, Workers workers, Progress progress) {
+    private static Rival walked(WalkedRegimes subject, RegimeSettings rival, Workers workers, Progress progress) {
         StartRunner starts = new StartRunner() {
             @Override
             public <T> List<T> run(List<Supplier<T>> all) {
@@ -44,11 +44,11 @@ public final class RegimeEvidence {
         };
         IntConsumer tell = bar -> progress.advance(1);
         RegimeTimeline timeline = Walk.forward(subject.table(), rival, subject.refit(), starts, tell);
-        return new Walked(Subject.of(subject.table(), rival, subject.refit(), timeline));
+        return new Rival(WalkedRegimes.of(subject.table(), rival, subject.refit(), timeline));
     }
 
     /** What there is to say, the rivals being walked already. */
-    static RegimeFindings asked(Subject subject, List<Walked> rivals) {
+    static RegimeFindings asked(WalkedRegimes subject, List<Rival> rivals) {
         Contenders contenders = Contenders.of(subject, rivals);
         return new RegimeFindings(
                 subject,

@@ -21,7 +21,7 @@ import java.util.TreeMap;
  * @param absent gauges that could not be compared, and why
  */
 public record RegimeFindings(
-        Subject subject,
+        WalkedRegimes subject,
         FitsTold fits,
         Answer<List<IdentityCard>> cards,
         Answer<Lineage> lineage,

@@ -35,7 +35,8 @@ public record RegimeInquiry(Prepared.Ready ready, String comparisonDigest, Regim
         RegimeTimeline timeline = Optional.ofNullable(compared.timelines().get(ready.timelineKey()))
                 .orElseThrow(() -> new IllegalStateException("a comparison without faults walked every timeline"));
         Strategy strategy = file.strategy();
-        Subject subject = Subject.of(ready.market().table(), strategy.regimes(), strategy.refit(), timeline);
+        WalkedRegimes subject =
+                WalkedRegimes.of(ready.market().table(), strategy.regimes(), strategy.refit(), timeline);
         return new RegimeInquiry(ready, compared.digest(), RegimeEvidence.of(subject, workers, progress));
     }
 

@@ -16,7 +16,7 @@ public final class RegimeTables {
 
     /** A row a bar from the first accepted fit on, of what could be said at its close; no later bar has a part in it. */
     public static Table bars(RegimeFindings found) {
-        Subject subject = found.subject();
+        WalkedRegimes subject = found.subject();
         RegimeTimeline timeline = subject.timeline();
         List<String> header = new ArrayList<>(List.of("date", "fit", "most_likely", "most_likely_without"));
         timeline.regimes().forEach(regime -> header.add("probability." + regime));
@@ -54,7 +54,7 @@ public final class RegimeTables {
 
     /** A row a bar that the strategy's own gauge forecast: what each gauge had forecast the close before, and what it lost. */
     public static Table forecasts(RegimeFindings found) {
-        Subject subject = found.subject();
+        WalkedRegimes subject = found.subject();
         List<String> header = new ArrayList<>(List.of("date", "return", "squared_return"));
         found.secondMoments().keySet().forEach(gauge -> header.add("forecast." + gauge));
         found.secondMoments().keySet().forEach(gauge -> header.add("qlike." + gauge));
@@ -121,7 +121,7 @@ public final class RegimeTables {
 
     /** A row a bar without which some close would have had another most likely regime: later bars up to the next fit have a part in it. */
     public static Table influence(RegimeFindings found) {
-        Subject subject = found.subject();
+        WalkedRegimes subject = found.subject();
         Table table = new Table(List.of(
                 "date", "fit", "observation", "pseudo_residual", "most_likely", "without", "closes_changed", "until"));
         List<Influence.LeftOut> bars =

@@ -20,7 +20,7 @@ public final class RegimesJson {
     /** The text of the file. */
     public static String of(RegimeInquiry inquiry) {
         RegimeFindings found = inquiry.findings();
-        Subject subject = found.subject();
+        WalkedRegimes subject = found.subject();
         ObjectNode root = JSON.objectNode();
         root.put("caution", Caution.TEXT);
         root.put("strategy", inquiry.ready().file().strategy().name());
@@ -78,7 +78,7 @@ public final class RegimesJson {
         return node;
     }
 
-    private static void residuals(ObjectNode node, Subject subject, PseudoResiduals residuals) {
+    private static void residuals(ObjectNode node, WalkedRegimes subject, PseudoResiduals residuals) {
         node.put("count", residuals.count());
         node.put("clipped", residuals.clipped());
         node.put("lags", PseudoResiduals.LAGS);
@@ -116,7 +116,7 @@ public final class RegimesJson {
         }
     }
 
-    private static void influence(ObjectNode node, Subject subject, Influence influence) {
+    private static void influence(ObjectNode node, WalkedRegimes subject, Influence influence) {
         List<Influence.LeftOut> decisive = influence.decisive();
         List<String> regimes = subject.timeline().regimes();
         node.put("left_out", influence.bars().size());

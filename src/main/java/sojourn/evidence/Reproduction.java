@@ -82,7 +82,7 @@ public record Reproduction(int fit, int observations, List<Figure> figures) {
     }
 
     /** Of the last accepted fit. */
-    static Answer<Reproduction> of(Subject subject) {
+    static Answer<Reproduction> of(WalkedRegimes subject) {
         if (subject.stretches().isEmpty()) {
             return Answer.none("no fit was accepted");
         }
@@ -95,7 +95,7 @@ public record Reproduction(int fit, int observations, List<Figure> figures) {
         return implied.map(moments -> of(subject, last, model, moments));
     }
 
-    private static Reproduction of(Subject subject, Stretch last, RegimeModel model, ImpliedMoments implied) {
+    private static Reproduction of(WalkedRegimes subject, Stretch last, RegimeModel model, ImpliedMoments implied) {
         PerBar observed = subject.observed();
         double[] window = observed.at(
                 observed.where(bar -> bar >= last.windowStart() && bar <= last.from() && observed.has(bar)));
@@ -113,7 +113,7 @@ public record Reproduction(int fit, int observations, List<Figure> figures) {
         return new Reproduction(last.record().number(), window.length, figures);
     }
 
-    private static List<Shown> drawn(Subject subject, Stretch last, RegimeModel model, int count) {
+    private static List<Shown> drawn(WalkedRegimes subject, Stretch last, RegimeModel model, int count) {
         double[] longRun = LongRun.stationary(model).orElseThrow();
         List<Shown> drawn = new ArrayList<>();
         for (int i = 0; i < DRAWN; i++) {

@@ -16,13 +16,13 @@ record ReturnForecasts(PerBar secondMoment, PerBar logScore) {
     private static final double HALF_LN_TWO_PI = 0.9189385332046727;
 
     /** Of a gauge walked over the subject's prices. */
-    static ReturnForecasts of(Subject subject) {
+    static ReturnForecasts of(WalkedRegimes subject) {
         int bars = subject.table().size();
         return new ReturnForecasts(
                 PerBar.of(bars, bar -> secondMoment(subject, bar)), PerBar.of(bars, bar -> logScore(subject, bar)));
     }
 
-    private static OptionalDouble secondMoment(Subject subject, int bar) {
+    private static OptionalDouble secondMoment(WalkedRegimes subject, int bar) {
         if (bar == 0 || !subject.known(bar - 1)) {
             return OptionalDouble.empty();
         }
@@ -32,7 +32,7 @@ record ReturnForecasts(PerBar secondMoment, PerBar logScore) {
         return square > 0 ? OptionalDouble.of(square) : OptionalDouble.empty();
     }
 
-    private static OptionalDouble logScore(Subject subject, int bar) {
+    private static OptionalDouble logScore(WalkedRegimes subject, int bar) {
         if (bar == 0 || !subject.known(bar - 1)) {
             return OptionalDouble.empty();
         }

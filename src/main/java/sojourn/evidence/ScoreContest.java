@@ -33,7 +33,7 @@ public record ScoreContest(int bars, int firstBar, int lastBar, List<Row> rows) 
      *
      * @param scores by gauge, the subject's own first
      */
-    static Answer<ScoreContest> of(Subject subject, Map<String, PerBar> scores) {
+    static Answer<ScoreContest> of(WalkedRegimes subject, Map<String, PerBar> scores) {
         String own = subject.gauge();
         int[] common = CommonBars.of(List.copyOf(scores.values()));
         if (common.length == 0) {

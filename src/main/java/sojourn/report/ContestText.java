@@ -12,16 +12,16 @@ import sojourn.evidence.ForecastContest;
 import sojourn.evidence.Ground;
 import sojourn.evidence.RegimeFindings;
 import sojourn.evidence.ScoreContest;
-import sojourn.evidence.Subject;
+import sojourn.evidence.WalkedRegimes;
 
 /** How the strategy's own gauge forecasts beside others, for a terminal. */
 final class ContestText {
     private static final double SIGNIFICANT = 0.05;
 
-    private final Subject subject;
+    private final WalkedRegimes subject;
     private final Set<Ground> grounds = new LinkedHashSet<>();
 
-    private ContestText(Subject subject) {
+    private ContestText(WalkedRegimes subject) {
         this.subject = subject;
     }
 

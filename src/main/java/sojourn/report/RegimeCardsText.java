@@ -11,7 +11,7 @@ import sojourn.evidence.IdentityCard;
 import sojourn.evidence.Lineage;
 import sojourn.evidence.LineageStep;
 import sojourn.evidence.Stretch;
-import sojourn.evidence.Subject;
+import sojourn.evidence.WalkedRegimes;
 import sojourn.inference.Estimate;
 import sojourn.inference.WeightedMoments;
 
@@ -19,7 +19,7 @@ import sojourn.inference.WeightedMoments;
 final class RegimeCardsText {
     private RegimeCardsText() {}
 
-    static String of(Subject subject, List<IdentityCard> cards) {
+    static String of(WalkedRegimes subject, List<IdentityCard> cards) {
         Stretch last = subject.stretches().get(subject.stretches().size() - 1);
         Grid fit = new Grid(List.of("Last fit, " + last.record().fittedOn(), "share", "stay", "volatility", "mean"));
         Grid lived =
@@ -59,7 +59,7 @@ final class RegimeCardsText {
         return text.toString();
     }
 
-    private static String largest(Subject subject, IdentityCard card) {
+    private static String largest(WalkedRegimes subject, IdentityCard card) {
         if (card.asLived().largest().isEmpty()) {
             return Lines.wrapped("Never the most likely: " + card.regime() + ".", 2);
         }
@@ -69,12 +69,12 @@ final class RegimeCardsText {
         return Lines.wrapped("Largest bars while " + card.regime() + ": " + bars + ".", 2);
     }
 
-    private static String volatility(Subject subject, WeightedMoments moments) {
+    private static String volatility(WalkedRegimes subject, WeightedMoments moments) {
         Annual annual = Annual.of(subject, moments);
         return withError(annual.volatility(), annual.volatilityError());
     }
 
-    private static String mean(Subject subject, WeightedMoments moments) {
+    private static String mean(WalkedRegimes subject, WeightedMoments moments) {
         Annual annual = Annual.of(subject, moments);
         return withError(annual.mean(), annual.meanError());
     }
@@ -92,7 +92,7 @@ final class RegimeCardsText {
         return Figures.plain(bars, "%.1f");
     }
 
-    static String of(Subject subject, Lineage lineage) {
+    static String of(WalkedRegimes subject, Lineage lineage) {
         List<LineageStep> compared = lineage.compared();
         if (compared.isEmpty()) {
             return Lines.wrapped("There is one accepted fit and nothing to compare it with.", 0);

@@ -8,7 +8,7 @@ import sojourn.evidence.Answer;
 import sojourn.evidence.FitsTold;
 import sojourn.evidence.RegimeFindings;
 import sojourn.evidence.RegimeInquiry;
-import sojourn.evidence.Subject;
+import sojourn.evidence.WalkedRegimes;
 
 /** What was found of a strategy's regimes as a terminal shows it, at most 100 columns wide: the caution first, then question by question. */
 public final class RegimesText {
@@ -42,7 +42,7 @@ public final class RegimesText {
         return text.toString();
     }
 
-    private static String ofWhat(Subject subject) {
+    private static String ofWhat(WalkedRegimes subject) {
         return subject.firstOfSeveral().map(one -> " of the " + one).orElse("");
     }
 
@@ -54,7 +54,7 @@ public final class RegimesText {
 
     private static String headline(RegimeInquiry inquiry) {
         RegimeFindings found = inquiry.findings();
-        Subject subject = found.subject();
+        WalkedRegimes subject = found.subject();
         FitsTold fits = found.fits();
         StringBuilder text = new StringBuilder("Regimes of '")
                 .append(inquiry.ready().file().strategy().name())

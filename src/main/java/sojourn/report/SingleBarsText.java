@@ -3,7 +3,7 @@ package sojourn.report;
 import java.util.List;
 import sojourn.evidence.Influence;
 import sojourn.evidence.PseudoResiduals;
-import sojourn.evidence.Subject;
+import sojourn.evidence.WalkedRegimes;
 
 /** What hangs on single bars, and which bars surprised most, for a terminal. */
 final class SingleBarsText {
@@ -11,7 +11,7 @@ final class SingleBarsText {
 
     private SingleBarsText() {}
 
-    static String of(Subject subject, Influence influence) {
+    static String of(WalkedRegimes subject, Influence influence) {
         List<Influence.LeftOut> decisive = influence.decisive();
         String told = Lines.wrapped(
                 "Of " + influence.bars().size() + " observations, " + influence.atTheirOwnClose()
@@ -40,7 +40,7 @@ final class SingleBarsText {
                         "closes: how many would have had another most likely regime; until: the last of them.", 0);
     }
 
-    static String of(Subject subject, PseudoResiduals residuals) {
+    static String of(WalkedRegimes subject, PseudoResiduals residuals) {
         List<Integer> most = residuals.surprising();
         Grid grid = new Grid(List.of("", "observed", "return", "z", "once in bars"));
         for (int bar : most.subList(0, Math.min(SHOWN, most.size()))) {

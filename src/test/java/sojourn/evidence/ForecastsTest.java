@@ -55,7 +55,7 @@ class ForecastsTest {
 
     @Test
     void whatARegimeGaugeForecastsIsTheMixtureOfItsWindowMoments() {
-        Subject subject = Subjects.walked(Subjects.twoWeathers(2, 700), 500, 100);
+        WalkedRegimes subject = Subjects.walked(Subjects.twoWeathers(2, 700), 500, 100);
         ReturnForecasts forecasts = ReturnForecasts.of(subject);
         int first = subject.timeline().firstBar().orElseThrow();
         assertThat(forecasts.secondMoment().at(first)).isEmpty();
@@ -107,7 +107,7 @@ class ForecastsTest {
 
     @Test
     void aContestIsHeldOnTheBarsThatAllForecast() {
-        Subject subject = Subjects.walked(Subjects.twoWeathers(2, 700), 500, 100);
+        WalkedRegimes subject = Subjects.walked(Subjects.twoWeathers(2, 700), 500, 100);
         Map<String, PerBar> forecasts = new LinkedHashMap<>();
         forecasts.put("hidden-markov", ReturnForecasts.of(subject).secondMoment());
         forecasts.put("late", PerBar.of(700, bar -> bar < 600 ? OptionalDouble.empty() : OptionalDouble.of(1e-4)));
@@ -127,9 +127,9 @@ class ForecastsTest {
     @Test
     void whoForecastLessThanHalfIsNotCompared() {
         GivenPrices prices = Subjects.twoWeathers(2, 700);
-        Subject own = Subjects.walked(prices, 300, 200);
-        Subject late = Subjects.walked(prices, Rivals.of(own.regimes()).get(0), Subjects.expanding(600, 200));
-        Contenders contenders = Contenders.of(own, List.of(new Walked(late)));
+        WalkedRegimes own = Subjects.walked(prices, 300, 200);
+        WalkedRegimes late = Subjects.walked(prices, Rivals.of(own.regimes()).get(0), Subjects.expanding(600, 200));
+        Contenders contenders = Contenders.of(own, List.of(new Rival(late)));
         assertThat(contenders.absent().get(late.gauge())).contains("99 bars of the 399");
         assertThat(contenders.secondMoments()).containsKey(late.gauge());
         ForecastContest contest = Subjects.found(contenders.ofSquaredReturn());
@@ -142,7 +142,7 @@ class ForecastsTest {
     @Test
     void everyTestSaysWhatItStandsOn() {
         GivenPrices prices = Subjects.twoWeathers(2, 700);
-        Subject expanding = Subjects.walked(prices, 500, 100);
+        WalkedRegimes expanding = Subjects.walked(prices, 500, 100);
         assertThat(Ground.of(expanding, "hidden-markov", "mixture")).isEqualTo(Ground.EXPANDING_NESTED);
         assertThat(Ground.of(expanding, "one-regime", "mixture")).isEqualTo(Ground.EXPANDING_NESTED);
         assertThat(Ground.of(expanding, "hidden-markov", RegimeEvidence.EXPONENTIAL))

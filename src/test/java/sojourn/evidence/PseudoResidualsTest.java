@@ -37,7 +37,7 @@ class PseudoResidualsTest {
         for (int t = 0; t < x.length; t++) {
             closes[t + 1] = closes[t] * Math.exp(x[t]);
         }
-        Subject subject =
+        WalkedRegimes subject =
                 Subjects.walked(GivenPrices.closes(closes), declared(worked), Subjects.expanding(1, 1_000_000));
         PseudoResiduals residuals = Subjects.found(PseudoResiduals.of(subject));
         assertThat(residuals.count()).isEqualTo(x.length - 1);

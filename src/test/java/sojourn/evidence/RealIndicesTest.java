@@ -32,7 +32,7 @@ class RealIndicesTest {
 
         ImpliedMoments chain = implied(found.subject());
         ImpliedMoments mixture = Subjects.rivals(found.subject()).stream()
-                .map(Walked::subject)
+                .map(Rival::subject)
                 .filter(rival -> rival.gauge().equals("mixture"))
                 .map(RealIndicesTest::implied)
                 .findFirst()
@@ -58,7 +58,7 @@ class RealIndicesTest {
         return number(Annual.of(found.subject(), card.lastFit().returns()).volatility());
     }
 
-    private static ImpliedMoments implied(Subject subject) {
+    private static ImpliedMoments implied(WalkedRegimes subject) {
         Stretch last = subject.stretches().get(subject.stretches().size() - 1);
         return Subjects.found(ImpliedMoments.of(last.record().fit().model().orElseThrow()));
     }

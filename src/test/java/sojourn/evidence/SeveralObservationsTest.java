@@ -17,7 +17,7 @@ import sojourn.walk.RegimeSettings;
 
 /** A gauge that watches two series, one of them with gaps: everything is asked of it that is asked of one. */
 class SeveralObservationsTest {
-    private static Subject subject;
+    private static WalkedRegimes subject;
     private static RegimeFindings found;
 
     @BeforeAll

@@ -17,7 +17,7 @@ import sojourn.walk.RegimeSettings;
 /** Filters run again: what a bar changes, and what a refit changes, held to plain runs of the filter from the start of each window. */
 class SingleBarsTest {
     private static final double SAME = 1e-11;
-    private static Subject subject;
+    private static WalkedRegimes subject;
 
     @BeforeAll
     static void walk() {
@@ -88,7 +88,7 @@ class SingleBarsTest {
     @Test
     void leavingABarOutAgreesWithRunningEveryGaugeWithoutIt() {
         for (RegimeSettings settings : Rivals.of(subject.regimes())) {
-            Subject gauge = Subjects.walked(Subjects.twoWeathers(11, 900), settings, Subjects.expanding(500, 63));
+            WalkedRegimes gauge = Subjects.walked(Subjects.twoWeathers(11, 900), settings, Subjects.expanding(500, 63));
             Stretch stretch = gauge.stretches().get(gauge.stretches().size() - 2);
             FrozenFilter filter = FrozenFilter.of(gauge, stretch, stretch.end());
             for (int bar = stretch.from(); bar < stretch.end(); bar++) {
@@ -167,8 +167,8 @@ class SingleBarsTest {
 
     @Test
     void oneRegimeHasNothingToDecide() {
-        Subject one = Subjects.rivals(subject).stream()
-                .map(Walked::subject)
+        WalkedRegimes one = Subjects.rivals(subject).stream()
+                .map(Rival::subject)
                 .filter(rival -> rival.gauge().equals("one-regime"))
                 .findFirst()
                 .orElseThrow();

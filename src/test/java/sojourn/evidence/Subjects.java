@@ -71,21 +71,21 @@ final class Subjects {
                 RefitSettings.OnFailure.KEEP_PREVIOUS);
     }
 
-    static Subject walked(GivenPrices prices, RegimeSettings regimes, RefitSettings refit) {
+    static WalkedRegimes walked(GivenPrices prices, RegimeSettings regimes, RefitSettings refit) {
         PriceTable table = prices.table();
-        return Subject.of(
+        return WalkedRegimes.of(
                 table, regimes, refit, Walk.forward(table, regimes, refit, StartRunner.sequential(), bar -> {}));
     }
 
     /** Normal emissions, two regimes. */
-    static Subject walked(GivenPrices prices, int first, int every) {
+    static WalkedRegimes walked(GivenPrices prices, int first, int every) {
         return walked(prices, hiddenMarkov(EmissionFamily.NORMAL), expanding(first, every));
     }
 
     /** The rivals of a subject, walked in this thread. */
-    static List<Walked> rivals(Subject subject) {
+    static List<Rival> rivals(WalkedRegimes subject) {
         return Rivals.of(subject.regimes()).stream()
-                .map(rival -> new Walked(Subject.of(
+                .map(rival -> new Rival(WalkedRegimes.of(
                         subject.table(),
                         rival,
                         subject.refit(),
@@ -93,7 +93,7 @@ final class Subjects {
                 .toList();
     }
 
-    static RegimeFindings findings(Subject subject) {
+    static RegimeFindings findings(WalkedRegimes subject) {
         return RegimeEvidence.asked(subject, rivals(subject));
     }
 

@@ -13,7 +13,7 @@ class WithoutLikelihoodTest {
     @ParameterizedTest
     @ValueSource(strings = {"volatility-threshold", "jump"})
     void whatCanBeAskedIsAnsweredAndTheRestSaysWhyNot(String gauge) {
-        Subject markov = Subjects.walked(Subjects.twoWeathers(23, 1500), 700, 200);
+        WalkedRegimes markov = Subjects.walked(Subjects.twoWeathers(23, 1500), 700, 200);
         RegimeSettings own = Rivals.of(markov.regimes()).stream()
                 .filter(one -> one.model().word().equals(gauge))
                 .findFirst()

@@ -9,7 +9,7 @@ import sojourn.walk.RegimeTimeline;
  *
  * @param subject its settings and what was known by it
  */
-record Walked(Subject subject) {
+record Rival(WalkedRegimes subject) {
     /** Its word. */
     String gauge() {
         return subject.gauge();

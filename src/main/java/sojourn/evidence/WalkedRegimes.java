@@ -15,7 +15,7 @@ import sojourn.walk.RegimeSettings;
 import sojourn.walk.RegimeTimeline;
 
 /** The regimes of one strategy, as they were known at each close, with what was observed and earned: what is questioned here. */
-public final class Subject {
+public final class WalkedRegimes {
     private final PriceTable table;
     private final RegimeSettings regimes;
     private final RefitSettings refit;
@@ -25,7 +25,7 @@ public final class Subject {
     private final PerBar returns;
     private final List<Stretch> stretches;
 
-    private Subject(PriceTable table, RegimeSettings regimes, RefitSettings refit, RegimeTimeline timeline) {
+    private WalkedRegimes(PriceTable table, RegimeSettings regimes, RefitSettings refit, RegimeTimeline timeline) {
         this.table = table;
         this.regimes = regimes;
         this.refit = refit;
@@ -37,8 +37,9 @@ public final class Subject {
     }
 
     /** {@code timeline} is the walk of these settings over these prices. */
-    public static Subject of(PriceTable table, RegimeSettings regimes, RefitSettings refit, RegimeTimeline timeline) {
-        return new Subject(table, regimes, refit, timeline);
+    public static WalkedRegimes of(
+            PriceTable table, RegimeSettings regimes, RefitSettings refit, RegimeTimeline timeline) {
+        return new WalkedRegimes(table, regimes, refit, timeline);
     }
 
     private PerBar seen(Observation one) {
