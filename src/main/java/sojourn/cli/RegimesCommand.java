@@ -31,6 +31,8 @@ import sojourn.strategy.StrategyFile;
             "Example: sojourn regimes strategies/step-aside-in-storms.yaml"
         })
 final class RegimesCommand implements Callable<Integer> {
+    private static final int OUR_BUG = 1;
+
     private final Console console;
 
     @Spec
@@ -64,7 +66,12 @@ final class RegimesCommand implements Callable<Integer> {
                 RegimesWriter.write(options.results(), name, inquiry, options.facts(spec, started));
         console.out().print(options.json() ? RegimesJson.of(inquiry) : RegimesText.of(inquiry));
         options.tell(console, published);
-        return 0;
+        List<RuntimeException> faults = inquiry.findings().faults();
+        if (!faults.isEmpty()) {
+            console.err().println("Faults of the program cost the gauges named above. Please report the lines below.");
+            faults.forEach(fault -> fault.printStackTrace(console.err()));
+        }
+        return faults.isEmpty() ? 0 : OUR_BUG;
     }
 
     private void refuseFolder() {

@@ -10,9 +10,9 @@ import java.util.function.Supplier;
  * @param result empty exactly if there is a fault
  * @param fault what was thrown
  */
-record Attempt<T>(Optional<T> result, Optional<RuntimeException> fault) {
+public record Attempt<T>(Optional<T> result, Optional<RuntimeException> fault) {
     /** Runs {@code work}. Errors of the machine (no memory) are not caught. */
-    static <T> Attempt<T> at(Supplier<T> work) {
+    public static <T> Attempt<T> at(Supplier<T> work) {
         try {
             return new Attempt<>(Optional.of(work.get()), Optional.empty());
         } catch (RuntimeException e) {
@@ -21,7 +21,7 @@ record Attempt<T>(Optional<T> result, Optional<RuntimeException> fault) {
     }
 
     /** The reason of a failed row. */
-    String reason() {
+    public String reason() {
         return "a fault of the program, not of your input: "
                 + fault.map(RuntimeException::toString).orElse("none");
     }

@@ -12,7 +12,7 @@ final class CommonBars {
         return series.get(0).where(bar -> series.stream().allMatch(one -> one.has(bar)));
     }
 
-    static <T> T required(Map<String, T> byName, String name) {
+    static <K, T> T required(Map<K, T> byName, K name) {
         return Optional.ofNullable(byName.get(name))
                 .orElseThrow(() -> new IllegalArgumentException(name + " is not among " + byName.keySet()));
     }

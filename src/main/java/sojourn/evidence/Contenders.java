@@ -1,11 +1,11 @@
 package sojourn.evidence;
 
 import java.util.LinkedHashMap;
-import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.TreeMap;
+import sojourn.compare.Attempt;
 
 /** Everybody who forecast, the subject's own gauge first, and what each said; who said too little is not compared, and why is told. */
 final class Contenders {
@@ -20,17 +20,22 @@ final class Contenders {
     }
 
     /** The subject's own gauge, its rivals, and two forecasts of volatility that know no regimes. */
-    static Contenders of(WalkedRegimes subject, List<Rival> rivals) {
+    static Contenders of(WalkedRegimes subject, Map<String, Attempt<Rival>> rivals) {
         Contenders all = new Contenders(subject);
         all.enter(subject);
         int own = all.forecasts(subject.gauge());
-        for (Rival rival : rivals) {
-            all.enter(rival.subject());
-            all.tooLittle(rival, own).ifPresent(why -> all.absent.put(rival.gauge(), why));
-        }
+        rivals.forEach((gauge, attempt) -> {
+            attempt.result()
+                    .ifPresentOrElse(rival -> all.enter(rival, own), () -> all.absent.put(gauge, attempt.reason()));
+        });
         all.secondMoments.put(RegimeEvidence.EXPONENTIAL, PlainVolatility.exponential(subject.returns()));
         all.secondMoments.put(RegimeEvidence.ROLLING, PlainVolatility.rolling(subject.returns()));
         return all;
+    }
+
+    private void enter(Rival rival, int own) {
+        enter(rival.subject());
+        tooLittle(rival, own).ifPresent(why -> absent.put(rival.gauge(), why));
     }
 
     private void enter(WalkedRegimes one) {

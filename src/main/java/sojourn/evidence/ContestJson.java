@@ -5,6 +5,9 @@ import com.fasterxml.jackson.databind.node.ObjectNode;
 
 /** Contests as JSON. */
 final class ContestJson {
+    private static final String CHOSEN =
+            "the same losses chose the two; the tests take them as named beforehand, so their p-values are too small";
+
     private ContestJson() {}
 
     static void add(ObjectNode node, WalkedRegimes subject, ScoreContest contest) {
@@ -24,6 +27,7 @@ final class ContestJson {
         contest.bestAgainstNext().ifPresent(duel -> {
             ObjectNode next = duel(duel);
             next.put("next", duel.second());
+            next.put("chosen", CHOSEN);
             node.set("best_ahead_of_next", next);
         });
         ArrayNode rows = node.putArray("forecasters");

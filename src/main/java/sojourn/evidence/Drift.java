@@ -45,7 +45,7 @@ public record Drift(Range deviation, Range stay) {
     public static Drift of(Lineage lineage, int k) {
         return new Drift(
                 Range.of(lineage.steps().stream()
-                        .map(step -> OptionalDouble.of(step.regimes().get(k).deviation()))
+                        .map(step -> step.regimes().get(k).deviation())
                         .toList()),
                 Range.of(lineage.steps().stream()
                         .map(step -> step.regimes().get(k).stay())

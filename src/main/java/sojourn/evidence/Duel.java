@@ -21,14 +21,14 @@ public record Duel(
         DieboldMariano robust,
         TestResult conditional,
         Ground ground) {
-    /** {@code ahead}: how much the first is ahead on each bar. Not modified. */
-    static Duel of(String first, String second, double[] ahead, Ground ground) {
+    /** {@code ahead}: how much the first is ahead on each of {@code bars}. Neither is modified. */
+    static Duel of(String first, String second, double[] ahead, int[] bars, Ground ground) {
         return new Duel(
                 first,
                 second,
                 DieboldMariano.of(ahead, 1),
                 DieboldMariano.robust(ahead, 1),
-                GiacominiWhite.of(ahead),
+                GiacominiWhite.of(ahead, bars),
                 ground);
     }
 }

@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.TreeMap;
 import sojourn.regime.Outcome;
 import sojourn.walk.FitRecord;
 import sojourn.walk.RegimeTimeline;
@@ -17,6 +18,8 @@ import sojourn.walk.RegimeTimeline;
  * @param allAgreed of these, those whose starts all ended at the same likelihood
  * @param leastShare least share of starts that agreed with the one that won; 1 if nothing was searched
  * @param rivalled of these, those with a second best maximum less than 2 nats below
+ * @param numbers how many accepted fits have each number of regimes, the smallest first
+ * @param changes how often an accepted fit has another number than the accepted one before
  * @param refused those not accepted, a line each
  */
 public record FitsTold(
@@ -26,6 +29,8 @@ public record FitsTold(
         int allAgreed,
         double leastShare,
         int rivalled,
+        Map<Integer, Integer> numbers,
+        int changes,
         List<String> refused) {
     /** Nats between two maxima below which a window hardly decides: a factor of about 7 in likelihood. Our own mark, no source. */
     public static final double CLOSE = 2;
@@ -33,6 +38,7 @@ public record FitsTold(
     /** Copies its collections, in order. */
     public FitsTold {
         outcomes = java.util.Collections.unmodifiableMap(new LinkedHashMap<>(outcomes));
+        numbers = java.util.Collections.unmodifiableMap(new TreeMap<>(numbers));
         refused = List.copyOf(refused);
     }
 
@@ -63,6 +69,21 @@ public record FitsTold(
                         : 0;
             }
         }
-        return new FitsTold(timeline.fits().size(), outcomes, searched, agreed, least, rivalled, refused);
+        List<Integer> numbers = timeline.fits().stream()
+                .filter(record -> record.fit().outcome().accepted())
+                .map(record -> record.regimes().size())
+                .toList();
+        Map<Integer, Integer> counts = new TreeMap<>();
+        numbers.forEach(number -> counts.merge(number, 1, Integer::sum));
+        return new FitsTold(
+                timeline.fits().size(), outcomes, searched, agreed, least, rivalled, counts, changes(numbers), refused);
+    }
+
+    private static int changes(List<Integer> numbers) {
+        int changes = 0;
+        for (int i = 1; i < numbers.size(); i++) {
+            changes += numbers.get(i).equals(numbers.get(i - 1)) ? 0 : 1;
+        }
+        return changes;
     }
 }

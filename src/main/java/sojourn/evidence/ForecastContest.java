@@ -17,7 +17,8 @@ import sojourn.inference.Moments;
  * @param lastBar the last
  * @param rows the strategy's own first
  * @param best the gauge of the least mean QLIKE
- * @param bestAgainstNext the best against the second best; empty if it is alone
+ * @param bestAgainstNext the best against the second best, which the same losses chose, so that its p-value is too small; empty if it
+ *     is alone
  */
 public record ForecastContest(
         int bars, int firstBar, int lastBar, List<Row> rows, String best, Optional<Duel> bestAgainstNext) {
@@ -70,25 +71,26 @@ public record ForecastContest(
                 mean(qlike, gauge),
                 mean(errors, gauge),
                 Calibration.of(series.at(common), squares),
-                duel(subject, gauge, qlike),
-                duel(subject, gauge, errors))));
+                duel(subject, gauge, qlike, common),
+                duel(subject, gauge, errors, common))));
         List<Row> ranked = new ArrayList<>(rows);
         ranked.sort(Comparator.comparingDouble(Row::qlike)); // stable: ties to the one named first
         String best = ranked.get(0).gauge();
         Optional<Duel> next = ranked.size() < 2
                 ? Optional.empty()
-                : Optional.of(between(subject, best, ranked.get(1).gauge(), qlike));
+                : Optional.of(between(subject, best, ranked.get(1).gauge(), qlike, common));
         return Answer.of(new ForecastContest(common.length, common[0], common[common.length - 1], rows, best, next));
     }
 
-    private static Optional<Duel> duel(WalkedRegimes subject, String gauge, Map<String, double[]> losses) {
+    private static Optional<Duel> duel(WalkedRegimes subject, String gauge, Map<String, double[]> losses, int[] bars) {
         return gauge.equals(subject.gauge())
                 ? Optional.empty()
-                : Optional.of(between(subject, subject.gauge(), gauge, losses));
+                : Optional.of(between(subject, subject.gauge(), gauge, losses, bars));
     }
 
-    private static Duel between(WalkedRegimes subject, String first, String second, Map<String, double[]> losses) {
-        return Duel.of(first, second, ahead(first, second, losses), Ground.of(subject, first, second));
+    private static Duel between(
+            WalkedRegimes subject, String first, String second, Map<String, double[]> losses, int[] bars) {
+        return Duel.of(first, second, ahead(first, second, losses), bars, Ground.of(subject, first, second));
     }
 
     /** How much less the first loses on each bar. */

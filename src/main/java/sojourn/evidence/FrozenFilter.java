@@ -2,6 +2,7 @@ package sojourn.evidence;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.OptionalInt;
 import sojourn.regime.Gauge;
 import sojourn.regime.GaugeFilter;
 import sojourn.regime.Observations;
@@ -9,7 +10,9 @@ import sojourn.regime.RegimeModel;
 
 /** What one fit says at each bar from its window's start on, its parameters frozen; and what it would have said without a bar. */
 final class FrozenFilter {
-    private final int states;
+    /** The gauge's state of each regime of the timeline; empty for one that it has none of, whose probability is 0. */
+    private final List<OptionalInt> states;
+
     /** Whether the probabilities are all that the gauge remembers, so that equal ones stay equal. */
     private final boolean forgetful;
 
@@ -18,8 +21,8 @@ final class FrozenFilter {
     private final int start;
     private final List<GaugeFilter> after;
 
-    private FrozenFilter(Gauge gauge, Observations rows, int start) {
-        this.states = gauge.states();
+    private FrozenFilter(Gauge gauge, List<OptionalInt> states, Observations rows, int start) {
+        this.states = states;
         this.forgetful = gauge instanceof RegimeModel;
         this.nothing = Observations.of(rows.dimension(), new double[rows.dimension()], new boolean[] {true});
         this.rows = rows;
@@ -37,7 +40,8 @@ final class FrozenFilter {
                 .fit()
                 .gauge()
                 .orElseThrow(() -> new IllegalStateException("an accepted fit has a gauge"));
-        return new FrozenFilter(gauge, subject.rows(stretch.windowStart(), end), stretch.windowStart());
+        List<OptionalInt> states = stretch.states(subject.timeline().regimes());
+        return new FrozenFilter(gauge, states, subject.rows(stretch.windowStart(), end), stretch.windowStart());
     }
 
     /** Its first bar. */
@@ -51,12 +55,16 @@ final class FrozenFilter {
     }
 
     int states() {
-        return states;
+        return states.size();
     }
 
     /** Probability of a regime at a bar. */
     double probability(int bar, int k) {
-        return after.get(bar - start + 1).probability(k);
+        return probability(after.get(bar - start + 1), k);
+    }
+
+    private double probability(GaugeFilter filter, int k) {
+        return states.get(k).isPresent() ? filter.probability(states.get(k).getAsInt()) : 0;
     }
 
     /** The most likely regime at a bar; ties to the lower volatility. */
@@ -85,16 +93,16 @@ final class FrozenFilter {
 
     private boolean near(GaugeFilter one, GaugeFilter other) {
         double apart = 0;
-        for (int k = 0; k < states; k++) {
-            apart = Math.max(apart, Math.abs(one.probability(k) - other.probability(k)));
+        for (int k = 0; k < states.size(); k++) {
+            apart = Math.max(apart, Math.abs(probability(one, k) - probability(other, k)));
         }
         return apart < 1e-12;
     }
 
     private int mostLikely(GaugeFilter filter) {
         int best = 0;
-        for (int k = 1; k < states; k++) {
-            best = filter.probability(k) > filter.probability(best) ? k : best;
+        for (int k = 1; k < states.size(); k++) {
+            best = probability(filter, k) > probability(filter, best) ? k : best;
         }
         return best;
     }

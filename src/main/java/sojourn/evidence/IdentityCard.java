@@ -18,7 +18,7 @@ public record IdentityCard(String regime, LastFit lastFit, AsLived asLived) {
      * The last accepted fit's window.
      *
      * @param share of the window's observations, posterior-weighted
-     * @param stay expected bars of a stay; empty where it is never left
+     * @param stay expected bars of a stay; empty where it is never left, or is none of the regimes that the last fit chose
      * @param returns of the asset, a bar, weighted by the probability of the regime given the whole window; of a gauge without a likelihood
      *     as its fit has them, without errors
      */

@@ -5,6 +5,7 @@ import java.util.Arrays;
 import java.util.Comparator;
 import java.util.List;
 import java.util.OptionalDouble;
+import java.util.OptionalInt;
 import java.util.stream.IntStream;
 import sojourn.inference.Estimate;
 import sojourn.inference.WeightedMoments;
@@ -43,17 +44,22 @@ final class IdentityCards {
         return Answer.of(List.copyOf(all));
     }
 
+    /** Of a regime that the last fit's number of regimes has none of, share 0 and nothing else. */
     private IdentityCard.LastFit lastFit(int k) {
         Stretch last = subject.stretches().get(subject.stretches().size() - 1);
         Fit fit = last.record().fit();
+        OptionalInt state = last.record().state(subject.timeline().regimes().get(k));
+        if (state.isEmpty()) {
+            WeightedMoments nothing = WeightedMoments.of(new double[0], new double[0]);
+            return new IdentityCard.LastFit(OptionalDouble.of(0), OptionalDouble.empty(), nothing);
+        }
+        int own = state.getAsInt();
         OptionalDouble stay =
-                fit.gauge().map(gauge -> LongRun.expectedStay(gauge, k)).orElseGet(OptionalDouble::empty);
-        double[] occupancy = fit.occupancy();
-        OptionalDouble share = k < occupancy.length ? OptionalDouble.of(occupancy[k]) : OptionalDouble.empty();
-        return new IdentityCard.LastFit(share, stay, windowReturns(last, k));
+                fit.gauge().map(gauge -> LongRun.expectedStay(gauge, own)).orElseGet(OptionalDouble::empty);
+        return new IdentityCard.LastFit(OptionalDouble.of(fit.occupancy()[own]), stay, windowReturns(last, own));
     }
 
-    /** On bars with an observation. */
+    /** On bars with an observation; {@code k} is the fit's own state. */
     private WeightedMoments windowReturns(Stretch last, int k) {
         Fit fit = last.record().fit();
         if (fit.model().isEmpty()) {

@@ -5,6 +5,7 @@ import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.OptionalInt;
 import sojourn.regime.Emission;
 import sojourn.regime.Fit;
 import sojourn.regime.Gauge;
@@ -16,7 +17,8 @@ import sojourn.regime.WindowMoments;
 /**
  * Whether the regimes are the same from fit to fit. Each accepted fit's regimes are matched to those of the accepted fit before, by least
  * total squared Hellinger distance, which relabels nothing; and both fits are asked for the probabilities of the last 60 bars, each filtered from
- * the start of its own window: where they part, the past has been rewritten.
+ * the start of its own window: where they part, the past has been rewritten. A fit that chose another number of regimes than the one
+ * before is not compared with it.
  */
 public final class Lineage {
     /** Bars before a fit over which the two fits' probabilities are compared. */
@@ -44,19 +46,26 @@ public final class Lineage {
             Optional<LineageStep.Before> compared = before.isPresent() && old.isPresent()
                     ? compared(subject, before.get(), old.get(), stretch, filter)
                     : Optional.empty();
-            steps.add(new LineageStep(stretch.record(), regimes(stretch.record().fit()), compared));
+            steps.add(new LineageStep(stretch.record(), regimes(subject, stretch), compared));
             old = Optional.of(filter);
             before = Optional.of(stretch);
         }
         return steps.isEmpty() ? Answer.none("no fit was accepted") : Answer.of(new Lineage(steps));
     }
 
-    private static List<LineageStep.OneRegime> regimes(Fit fit) {
+    private static List<LineageStep.OneRegime> regimes(WalkedRegimes subject, Stretch stretch) {
+        Fit fit = stretch.record().fit();
         Gauge gauge = fit.gauge().orElseThrow();
         double[] deviations = fit.orderBy();
         List<LineageStep.OneRegime> regimes = new ArrayList<>();
-        for (int k = 0; k < deviations.length; k++) {
-            regimes.add(new LineageStep.OneRegime(deviations[k], LongRun.expectedStay(gauge, k)));
+        for (OptionalInt state : stretch.states(subject.timeline().regimes())) {
+            OptionalDouble none = OptionalDouble.empty();
+            regimes.add(
+                    state.isEmpty()
+                            ? new LineageStep.OneRegime(none, none)
+                            : new LineageStep.OneRegime(
+                                    OptionalDouble.of(deviations[state.getAsInt()]),
+                                    LongRun.expectedStay(gauge, state.getAsInt())));
         }
         return regimes;
     }
@@ -65,7 +74,7 @@ public final class Lineage {
             WalkedRegimes subject, Stretch before, FrozenFilter old, Stretch now, FrozenFilter filter) {
         Optional<Emission> earlier = likeness(subject, before);
         Optional<Emission> later = likeness(subject, now);
-        if (old.states() != filter.states() || earlier.isEmpty() || later.isEmpty()) {
+        if (!before.record().regimes().equals(now.record().regimes()) || earlier.isEmpty() || later.isEmpty()) {
             return Optional.empty();
         }
         Matching matching = Matching.of(earlier.get(), later.get());

@@ -7,6 +7,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.OptionalInt;
 import sojourn.inference.JarqueBera;
 import sojourn.inference.KolmogorovSmirnov;
 import sojourn.inference.LjungBox;
@@ -121,11 +122,13 @@ public final class PseudoResiduals {
     /** The distribution forecast at each close for the next bar. */
     private static final class Forecaster {
         private final WalkedRegimes subject;
+        private final Map<Integer, Stretch> stretches = new HashMap<>();
         private final Map<Integer, DistributionFunction> byFit = new HashMap<>();
 
         Forecaster(WalkedRegimes subject) {
             this.subject = subject;
             for (Stretch stretch : subject.stretches()) {
+                stretches.put(stretch.record().number(), stretch);
                 stretch.record()
                         .fit()
                         .model()
@@ -149,9 +152,13 @@ public final class PseudoResiduals {
             }
             double x = subject.observed().at(bar).orElseThrow();
             double[] predicted = before.predicted(1);
+            List<OptionalInt> states = CommonBars.required(stretches, before.fit())
+                    .states(subject.timeline().regimes());
             double sum = 0;
             for (int k = 0; k < predicted.length; k++) {
-                sum += predicted[k] * function.get().below(k, x);
+                sum += states.get(k).isPresent()
+                        ? predicted[k] * function.get().below(states.get(k).getAsInt(), x)
+                        : 0;
             }
             return OptionalDouble.of(sum);
         }

@@ -1,9 +1,11 @@
 package sojourn.evidence;
 
-import java.util.ArrayList;
+import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Map;
 import java.util.function.IntConsumer;
 import java.util.function.Supplier;
+import sojourn.compare.Attempt;
 import sojourn.compare.Progress;
 import sojourn.compare.Workers;
 import sojourn.regime.StartRunner;
@@ -20,14 +22,21 @@ public final class RegimeEvidence {
 
     private RegimeEvidence() {}
 
-    /** Walks the rivals over the subject's prices on {@code workers}, then asks. Depends on the subject alone, not on threads. */
+    /**
+     * Walks the rivals over the subject's prices on {@code workers}, then asks. Depends on the subject alone, not on threads. A fault
+     * of the program in a rival's walk costs that rival only and is told.
+     */
     public static RegimeFindings of(WalkedRegimes subject, Workers workers, Progress progress) {
-        List<RegimeSettings> rivals = Rivals.of(subject.regimes());
+        return of(subject, Rivals.of(subject.regimes()), workers, progress);
+    }
+
+    /** The same beside those rivals. */
+    static RegimeFindings of(WalkedRegimes subject, List<RegimeSettings> rivals, Workers workers, Progress progress) {
         progress.begin("other gauges", (long) rivals.size() * subject.table().size());
-        List<Rival> walked = new ArrayList<>();
+        Map<String, Attempt<Rival>> walked = new LinkedHashMap<>();
         try {
             for (RegimeSettings rival : rivals) {
-                walked.add(walked(subject, rival, workers, progress));
+                walked.put(rival.model().word(), Attempt.at(() -> walked(subject, rival, workers, progress)));
             }
         } finally {
             progress.end();
@@ -48,8 +57,10 @@ public final class RegimeEvidence {
     }
 
     /** What there is to say, the rivals being walked already. */
-    static RegimeFindings asked(WalkedRegimes subject, List<Rival> rivals) {
+    static RegimeFindings asked(WalkedRegimes subject, Map<String, Attempt<Rival>> rivals) {
         Contenders contenders = Contenders.of(subject, rivals);
+        List<RuntimeException> faults =
+                rivals.values().stream().flatMap(one -> one.fault().stream()).toList();
         return new RegimeFindings(
                 subject,
                 FitsTold.of(subject.timeline()),
@@ -62,6 +73,7 @@ public final class RegimeEvidence {
                 Reproduction.of(subject),
                 Influence.of(subject),
                 contenders.secondMoments(),
-                contenders.absent());
+                contenders.absent(),
+                faults);
     }
 }

@@ -19,6 +19,7 @@ import java.util.TreeMap;
  * @param influence what hangs on single bars
  * @param secondMoments the forecasts themselves, by gauge, also of those that could not be compared
  * @param absent gauges that could not be compared, and why
+ * @param faults of the program, each of which cost one of those
  */
 public record RegimeFindings(
         WalkedRegimes subject,
@@ -32,10 +33,12 @@ public record RegimeFindings(
         Answer<Reproduction> reproduction,
         Answer<Influence> influence,
         Map<String, PerBar> secondMoments,
-        Map<String, String> absent) {
-    /** Copies the maps, in order. */
+        Map<String, String> absent,
+        List<RuntimeException> faults) {
+    /** Copies its collections, in order. */
     public RegimeFindings {
         secondMoments = java.util.Collections.unmodifiableMap(new java.util.LinkedHashMap<>(secondMoments));
+        faults = List.copyOf(faults);
         absent = java.util.Collections.unmodifiableMap(new TreeMap<>(absent));
     }
 }

@@ -8,7 +8,6 @@ import sojourn.compare.Prepared;
 import sojourn.compare.Progress;
 import sojourn.compare.Workers;
 import sojourn.document.InputException;
-import sojourn.document.Problem;
 import sojourn.strategy.Strategy;
 import sojourn.strategy.StrategyFile;
 import sojourn.walk.RegimeTimeline;
@@ -23,7 +22,6 @@ import sojourn.walk.RegimeTimeline;
 public record RegimeInquiry(Prepared.Ready ready, String comparisonDigest, RegimeFindings findings) {
     /** Compares the strategy alone, then questions its timeline. Refuses files that cannot be read. */
     public static RegimeInquiry of(StrategyFile file, Workers workers, Progress progress) {
-        refuseChoice(file);
         Compared compared = new Comparison(workers, progress).run(List.of(file));
         if (!compared.faults().isEmpty()) {
             throw compared.faults().get(0);
@@ -38,17 +36,5 @@ public record RegimeInquiry(Prepared.Ready ready, String comparisonDigest, Regim
         WalkedRegimes subject =
                 WalkedRegimes.of(ready.market().table(), strategy.regimes(), strategy.refit(), timeline);
         return new RegimeInquiry(ready, compared.digest(), RegimeEvidence.of(subject, workers, progress));
-    }
-
-    /** What is said of a regime is said of one number of regimes throughout. */
-    private static void refuseChoice(StrategyFile file) {
-        if (file.strategy().regimes().particulars().choose().isPresent()) {
-            throw new InputException(List.of(new Problem(
-                    file.shownName(),
-                    1,
-                    1,
-                    "the number of regimes is chosen at every fit, and regimes are questioned one number at a time",
-                    "leave 'choose' out and name the regimes of one number in 'states'")));
-        }
     }
 }

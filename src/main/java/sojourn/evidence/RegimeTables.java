@@ -91,7 +91,7 @@ public final class RegimeTables {
             Table.Row row = table.row()
                     .add(Integer.toString(step.record().number()))
                     .add(step.record().fittedOn());
-            addBefore(row, step.before(), regimes);
+            addBefore(row, step, regimes);
             step.regimes().forEach(one -> row.add(one.deviation()));
             step.regimes().forEach(one -> row.add(one.stay()));
             row.add(Integer.toString(step.record().fit().starts()));
@@ -106,17 +106,26 @@ public final class RegimeTables {
         return table;
     }
 
-    private static void addBefore(Table.Row row, Optional<LineageStep.Before> before, List<String> regimes) {
-        if (before.isEmpty()) {
+    private static void addBefore(Table.Row row, LineageStep step, List<String> regimes) {
+        if (step.before().isEmpty()) {
             for (int blank = 0; blank < 3 + 2 * regimes.size(); blank++) {
                 row.blank();
             }
             return;
         }
-        LineageStep.Before one = before.get();
+        LineageStep.Before one = step.before().get();
+        List<String> own = step.record().regimes();
+        List<OptionalInt> states = regimes.stream().map(step.record()::state).toList();
         row.add(Integer.toString(one.fit())).add(one.cost()).add(one.moved());
-        one.ancestor().forEach(k -> row.add(regimes.get(k)));
-        one.distance().forEach(distance -> row.add((double) distance));
+        for (OptionalInt state : states) {
+            row.add(state.isPresent() ? own.get(one.ancestor().get(state.getAsInt())) : "");
+        }
+        for (OptionalInt state : states) {
+            row.add(
+                    state.isPresent()
+                            ? OptionalDouble.of(one.distance().get(state.getAsInt()))
+                            : OptionalDouble.empty());
+        }
     }
 
     /** A row a bar without which some close would have had another most likely regime: later bars up to the next fit have a part in it. */

@@ -73,6 +73,9 @@ public final class RegimesJson {
         node.put("all_starts_agreed", fits.allAgreed());
         node.put("least_share_of_starts_agreeing", fits.leastShare());
         node.put("with_a_second_maximum_within_2_nats", fits.rivalled());
+        ObjectNode numbers = node.putObject("accepted_by_number_of_regimes");
+        fits.numbers().forEach((number, count) -> numbers.put(Integer.toString(number), count));
+        node.put("changes_of_the_number", fits.changes());
         ArrayNode refused = node.putArray("refused");
         fits.refused().forEach(refused::add);
         return node;

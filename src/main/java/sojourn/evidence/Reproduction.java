@@ -5,7 +5,6 @@ import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
-import java.util.function.Function;
 import sojourn.inference.Autocorrelation;
 import sojourn.inference.Estimate;
 import sojourn.inference.Moments;
@@ -128,22 +127,22 @@ public record Reproduction(int fit, int observations, List<Figure> figures) {
     }
 
     private static Figure figure(Property what, int lag, Shown sample, Estimate implied, List<Shown> drawn) {
-        Function<Shown, Estimate> read = shown -> shown.figure(what, lag);
-        double[] values = drawn.stream()
-                .map(read)
+        List<Estimate> all =
+                drawn.stream().map(shown -> shown.figure(what, lag)).toList();
+        Optional<Estimate> none =
+                all.stream().filter(one -> one.number().isEmpty()).findFirst();
+        double[] values = all.stream()
                 .flatMap(one -> one.number().stream().boxed())
                 .mapToDouble(Double::doubleValue)
                 .sorted()
                 .toArray();
-        boolean enough = values.length == DRAWN;
-        Estimate none = Estimate.zeroVariance();
         return new Figure(
                 what,
                 lag,
-                read.apply(sample),
+                sample.figure(what, lag),
                 implied,
-                enough ? Estimate.of(values[OUTER - 1]) : none,
-                enough ? Estimate.of(values[DRAWN - OUTER]) : none);
+                none.orElseGet(() -> Estimate.of(values[OUTER - 1])),
+                none.orElseGet(() -> Estimate.of(values[DRAWN - OUTER])));
     }
 
     /** What one series shows. */

@@ -84,11 +84,15 @@ final class Rivals {
                 Particulars.penalty(PENALTY));
     }
 
-    /** As many regimes as the strategy's own, two if it has but one. */
+    /** As many regimes as the strategy's own, the most that it chooses among, two if it has but one. */
     private static List<String> states(ModelKind kind, RegimeSettings own) {
         if (kind == ModelKind.ONE_REGIME) {
             return List.of("any");
         }
-        return own.states().size() > 1 ? own.states() : TWO;
+        List<String> most = own.particulars()
+                .choose()
+                .map(choice -> choice.regimes().get(choice.regimes().size() - 1))
+                .orElseGet(own::states);
+        return most.size() > 1 ? most : TWO;
     }
 }

@@ -49,7 +49,7 @@ public record ScoreContest(int bars, int firstBar, int lastBar, List<Row> rows) 
                 for (int t = 0; t < ahead.length; t++) {
                     ahead[t] = ownScores[t] - others[t];
                 }
-                duel = Optional.of(Duel.of(own, gauge, ahead, Ground.of(subject, own, gauge)));
+                duel = Optional.of(Duel.of(own, gauge, ahead, common, Ground.of(subject, own, gauge)));
             }
             rows.add(new Row(gauge, sojourn.inference.Moments.of(others).mean(), duel));
         });

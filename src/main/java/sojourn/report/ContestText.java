@@ -131,12 +131,15 @@ final class ContestText {
         StringBuilder text =
                 new StringBuilder("Best by QLIKE: ").append(contest.best()).append('.');
         contest.bestAgainstNext()
-                .ifPresent(duel -> text.append(" It is ahead of ")
-                        .append(duel.second())
-                        .append(" by ")
-                        .append(Figures.plain(duel.robust().mean().number(), "%.4f"))
-                        .append(" a bar")
-                        .append(howSure(duel)));
+                .ifPresent(
+                        duel -> text.append(" It is ahead of ")
+                                .append(duel.second())
+                                .append(" by ")
+                                .append(Figures.plain(duel.robust().mean().number(), "%.4f"))
+                                .append(" a bar")
+                                .append(howSure(duel))
+                                .append(
+                                        " The same losses chose the two; the test takes them as named beforehand, so its p is too small."));
         for (ForecastContest.Row row : contest.rows()) {
             boolean told = contest.bestAgainstNext()
                     .map(Duel::second)

@@ -95,7 +95,7 @@ final class RegimeCardsText {
     static String of(WalkedRegimes subject, Lineage lineage) {
         List<LineageStep> compared = lineage.compared();
         if (compared.isEmpty()) {
-            return Lines.wrapped("There is one accepted fit and nothing to compare it with.", 0);
+            return Lines.wrapped("There are no two accepted fits in a row to compare.", 0);
         }
         long swaps = compared.stream().filter(step -> before(step).swapped()).count();
         long births =

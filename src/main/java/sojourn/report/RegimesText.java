@@ -83,7 +83,7 @@ public final class RegimesText {
         if (subject.regimes().given().isPresent()) {
             text.append(" Its probabilities were computed elsewhere and are not audited for how they were computed.");
         }
-        text.append(starts(fits));
+        text.append(numbers(subject, fits)).append(starts(fits));
         StringBuilder all = new StringBuilder(Lines.wrapped(text.toString(), 0));
         List<String> refused = fits.refused();
         for (String one : refused.subList(0, Math.min(REFUSALS, refused.size()))) {
@@ -100,6 +100,20 @@ public final class RegimesText {
                 .map((Map.Entry<String, Integer> one) -> one.getValue() + " " + one.getKey())
                 .collect(Collectors.joining(", "));
         return all.isEmpty() ? "" : " (" + all + ")";
+    }
+
+    private static String numbers(WalkedRegimes subject, FitsTold fits) {
+        return subject.regimes()
+                .particulars()
+                .choose()
+                .map(choice -> fits.numbers().entrySet().stream()
+                        .map((Map.Entry<Integer, Integer> one) -> one.getKey() + " in " + one.getValue())
+                        .collect(Collectors.joining(
+                                ", ",
+                                " Each fit chose the number of regimes by "
+                                        + choice.by().word() + ": ",
+                                "; it changed " + fits.changes() + (fits.changes() == 1 ? " time." : " times."))))
+                .orElse("");
     }
 
     private static String starts(FitsTold fits) {

@@ -129,7 +129,7 @@ class ForecastsTest {
         GivenPrices prices = Subjects.twoWeathers(2, 700);
         WalkedRegimes own = Subjects.walked(prices, 300, 200);
         WalkedRegimes late = Subjects.walked(prices, Rivals.of(own.regimes()).get(0), Subjects.expanding(600, 200));
-        Contenders contenders = Contenders.of(own, List.of(new Rival(late)));
+        Contenders contenders = Contenders.of(own, Subjects.attempts(List.of(new Rival(late))));
         assertThat(contenders.absent().get(late.gauge())).contains("99 bars of the 399");
         assertThat(contenders.secondMoments()).containsKey(late.gauge());
         ForecastContest contest = Subjects.found(contenders.ofSquaredReturn());

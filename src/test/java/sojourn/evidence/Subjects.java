@@ -1,10 +1,13 @@
 package sojourn.evidence;
 
+import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalInt;
 import sojourn.GivenPrices;
 import sojourn.OpenData;
+import sojourn.compare.Attempt;
 import sojourn.market.PriceTable;
 import sojourn.numeric.RandomStream;
 import sojourn.regime.EmissionFamily;
@@ -93,8 +96,15 @@ final class Subjects {
                 .toList();
     }
 
+    /** As if they had been walked without a fault. */
+    static Map<String, Attempt<Rival>> attempts(List<Rival> rivals) {
+        Map<String, Attempt<Rival>> attempts = new LinkedHashMap<>();
+        rivals.forEach(rival -> attempts.put(rival.gauge(), Attempt.at(() -> rival)));
+        return attempts;
+    }
+
     static RegimeFindings findings(WalkedRegimes subject) {
-        return RegimeEvidence.asked(subject, rivals(subject));
+        return RegimeEvidence.asked(subject, attempts(rivals(subject)));
     }
 
     static <T> T found(Answer<T> answer) {

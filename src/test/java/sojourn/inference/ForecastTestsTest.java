@@ -74,6 +74,30 @@ class ForecastTestsTest {
         assertThat(GiacominiWhite.of(0, 0, 0, 0, 0).pValue()).isEqualTo(Estimate.zeroVariance());
     }
 
+    /** The definition of Giacomini and White (2006), section 3.2, on the pairs of bars that follow each other, written out. */
+    @Test
+    void aDifferenceAcrossAGapTellsNothingOfTheNext() {
+        double[] d = {0.3, -0.1, 0.4, 0.2, -0.5, 0.1, 0.25, -0.2};
+        int[] bars = {3, 4, 5, 9, 10, 11, 20, 21};
+        double[][] pairs = {{0.3, -0.1}, {-0.1, 0.4}, {0.2, -0.5}, {-0.5, 0.1}, {0.25, -0.2}};
+        double[] mean = new double[2];
+        double[] omega = new double[3];
+        for (double[] pair : pairs) {
+            mean[0] += pair[1] / 5;
+            mean[1] += pair[0] * pair[1] / 5;
+            omega[0] += pair[1] * pair[1] / 5;
+            omega[1] += pair[1] * pair[0] * pair[1] / 5;
+            omega[2] += pair[0] * pair[1] * pair[0] * pair[1] / 5;
+        }
+        double determinant = omega[0] * omega[2] - omega[1] * omega[1];
+        double expected = 5
+                * (omega[2] * mean[0] * mean[0] - 2 * omega[1] * mean[0] * mean[1] + omega[0] * mean[1] * mean[1])
+                / determinant;
+        assertThat(number(GiacominiWhite.of(d, bars).statistic())).isCloseTo(expected, within(1e-12));
+        assertThat(GiacominiWhite.of(d, new int[] {1, 3, 5, 7, 9, 11, 12, 14}).statistic())
+                .isEqualTo(Estimate.tooFew(2, 4));
+    }
+
     @Test
     void equalForecastsAreRarelyToldApart() {
         int apart = 0;
