@@ -13,8 +13,8 @@ import sojourn.measure.Scorecard;
  * @param kind what the line stands for
  * @param timeline address of the timeline it rests on; empty for a variant that has none
  * @param parameters whether the regime model was fitted or declared, or its probabilities computed elsewhere
- * @param reason why a variant failed; empty otherwise
- * @param judged the window and the measures; empty for a variant that failed
+ * @param reason why a variant failed or a yardstick is undefined; empty otherwise
+ * @param judged the window and the measures; empty where there is a reason
  */
 public record ComparisonRow(
         String variant, Kind kind, String timeline, Parameters parameters, String reason, Optional<Judged> judged) {
@@ -76,8 +76,8 @@ public record ComparisonRow(
         }
     }
 
-    /** {@code ran}, {@code ruined} or {@code failed}. */
+    /** {@code ran}, {@code ruined}, {@code failed}, or of a yardstick {@code undefined}. */
     public String outcome() {
-        return judged.map(Judged::outcome).orElse("failed");
+        return judged.map(Judged::outcome).orElse(kind == Kind.STRATEGY ? "failed" : "undefined");
     }
 }

@@ -11,6 +11,7 @@ import sojourn.measure.Drawdown;
 import sojourn.measure.Measure;
 import sojourn.measure.Measured;
 import sojourn.measure.RegimeTable;
+import sojourn.measure.Yardstick;
 
 /** {@code measures.json}: every measure of a variant and of its yardsticks, with interval, unit and definition. */
 public final class MeasuresFile {
@@ -27,7 +28,7 @@ public final class MeasuresFile {
      *
      * @param strategy what the variant came to
      * @param yardsticks what each yardstick came to, by column name
-     * @param ruinedBefore yardsticks that had nothing left when the window began, by column name
+     * @param absent why other yardsticks that were asked for are undefined, by column name
      * @param byRegime the variant's returns by regime
      * @param regimes names of the regimes
      * @param parameters whether the regime model was fitted or declared
@@ -36,7 +37,7 @@ public final class MeasuresFile {
     public static String of(
             ComparisonRow.Judged strategy,
             Map<String, ComparisonRow.Judged> yardsticks,
-            List<String> ruinedBefore,
+            Map<String, Measured.Undefined> absent,
             RegimeTable byRegime,
             List<String> regimes,
             ComparisonRow.Parameters parameters,
@@ -56,13 +57,11 @@ public final class MeasuresFile {
         root.set("by_month", periods(strategy.scorecard().calendar().months()));
         ObjectNode against = root.putObject("yardsticks");
         yardsticks.forEach((name, judged) -> against.set(name, measures(judged)));
-        for (String name : ruinedBefore) {
-            against.set(
-                    name, measured(Measured.undefined(Measured.Reason.RUIN, "it was ruined before the window begins")));
-        }
+        absent.forEach((name, none) -> against.set(name, measured(none)));
         root.put("bars_per_year", barsPerYear);
         root.put("symbols", SYMBOLS);
         root.set("definitions", definitions());
+        root.set("yardstick_definitions", yardsticks());
         return JsonText.indented(root);
     }
 
@@ -125,6 +124,14 @@ public final class MeasuresFile {
             node.put("whole", period.coverage() == CalendarTable.Coverage.WHOLE);
         }
         return rows;
+    }
+
+    private static ObjectNode yardsticks() {
+        ObjectNode all = JSON.objectNode();
+        for (Yardstick yardstick : Yardstick.values()) {
+            all.put(yardstick.column(), yardstick.definition());
+        }
+        return all;
     }
 
     private static ObjectNode definitions() {

@@ -85,12 +85,14 @@ public record Compared(
                     Optional.empty()));
         }
         for (Judgement one : ranked) {
-            one.yardsticks().forEach((name, judged) -> rows.add(yardstick(name, one, judged)));
+            one.yardsticks().forEach((name, judged) -> rows.add(yardstick(name, one, "", Optional.of(judged))));
+            one.absent().forEach((name, none) -> rows.add(yardstick(name, one, none.because(), Optional.empty())));
         }
         return List.copyOf(rows);
     }
 
-    private static ComparisonRow yardstick(String name, Judgement owner, ComparisonRow.Judged judged) {
+    private static ComparisonRow yardstick(
+            String name, Judgement owner, String reason, Optional<ComparisonRow.Judged> judged) {
         boolean causal = false;
         for (Yardstick yardstick : Yardstick.values()) {
             causal |= yardstick.column().equals(name) && yardstick.knowledge() == Yardstick.Knowledge.CAUSAL;
@@ -100,8 +102,8 @@ public record Compared(
                 causal ? ComparisonRow.Kind.YARDSTICK : ComparisonRow.Kind.AFTER_THE_FACT,
                 owner.run().timelineKey(),
                 parameters(owner.run()),
-                "",
-                Optional.of(judged));
+                reason,
+                judged);
     }
 
     /** Whether the regime model of a variant was fitted or declared, or its probabilities computed elsewhere. */

@@ -1,14 +1,14 @@
 package sojourn.compare;
 
 import java.time.LocalDate;
-import java.util.ArrayList;
+import java.util.Collections;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Objects;
 import sojourn.archive.ComparisonRow;
-import sojourn.market.FillPrices;
 import sojourn.measure.EvaluatedPath;
+import sojourn.measure.Measured;
 import sojourn.measure.RegimeTable;
 import sojourn.measure.Scorecard;
 import sojourn.measure.Yardstick;
@@ -21,7 +21,7 @@ import sojourn.walk.Reading;
  * @param run the variant
  * @param strategy its measures
  * @param yardsticks the yardsticks' measures, by column name, in the order they are shown
- * @param ruinedBefore column names of yardsticks that had nothing left when the window began, and are not judged
+ * @param absent why other yardsticks that were asked for are not judged, by column name
  * @param afterTheFact tracks of yardsticks that need the whole window, by column name
  * @param byRegime the variant's returns by the regime that was most likely at the close before
  */
@@ -29,9 +29,17 @@ public record Judgement(
         Run.Traded run,
         ComparisonRow.Judged strategy,
         Map<String, ComparisonRow.Judged> yardsticks,
-        List<String> ruinedBefore,
+        Map<String, Measured.Undefined> absent,
         Map<String, Track> afterTheFact,
         RegimeTable byRegime) {
+    private static final Measured.Undefined RUINED_BEFORE =
+            new Measured.Undefined(Measured.Reason.RUIN, "it was ruined before the window begins and had nothing left");
+
+    /** Copies its maps, in order. */
+    public Judgement {
+        yardsticks = Collections.unmodifiableMap(new LinkedHashMap<>(yardsticks));
+        absent = Collections.unmodifiableMap(new LinkedHashMap<>(absent));
+    }
 
     /** What doing nothing came to over the same window. */
     public ComparisonRow.Judged buyAndHold() {
@@ -39,40 +47,32 @@ public record Judgement(
     }
 
     static Judgement of(Run.Traded run, Window window) {
-        EvaluatedPath own = path(run, run.track(), window);
-        EvaluatedPath held = path(run, run.buyAndHold(), window);
-        Map<String, Track> afterTheFact = afterTheFact(run, window);
+        WindowPath paths = new WindowPath(run.ready().market().table(), window);
+        EvaluatedPath own = paths.of(run.track());
+        EvaluatedPath held = paths.of(run.buyAndHold());
+        Alongside<String> afterTheFact =
+                new Yardsticks(run.ready(), run.timeline(), run.track()).afterTheFact(run.buyAndHold(), window);
         Map<String, Track> tracks = new LinkedHashMap<>();
+        Map<String, Measured.Undefined> absent = new LinkedHashMap<>();
         run.causal().forEach((yardstick, track) -> tracks.put(yardstick.column(), track));
-        tracks.putAll(afterTheFact);
+        run.absent().forEach((yardstick, because) -> absent.put(yardstick.column(), because));
+        tracks.putAll(afterTheFact.tracks());
+        absent.putAll(afterTheFact.absent());
         Map<String, ComparisonRow.Judged> yardsticks = new LinkedHashMap<>();
-        List<String> ruinedBefore = new ArrayList<>();
         tracks.forEach((name, track) -> {
             if (window.beginsAlive(track)) {
-                yardsticks.put(name, judged(path(run, track, window), held, track));
+                yardsticks.put(name, judged(paths.of(track), held, track));
             } else {
-                ruinedBefore.add(name);
+                absent.put(name, RUINED_BEFORE);
             }
         });
         return new Judgement(
                 run,
                 judged(own, held, run.track()),
                 yardsticks,
-                List.copyOf(ruinedBefore),
-                afterTheFact,
+                absent,
+                afterTheFact.tracks(),
                 byRegime(run, window, own.returns()));
-    }
-
-    private static Map<String, Track> afterTheFact(Run.Traded run, Window window) {
-        if (!run.file().strategy().judge().against().contains(Yardstick.SAME_EXPOSURE)) {
-            return Map.of();
-        }
-        return new Yardsticks(
-                        run.ready().market().table(),
-                        run.timeline(),
-                        run.file().strategy().trade().terms(),
-                        run.track())
-                .sameExposure(window.base(), window.last());
     }
 
     private static ComparisonRow.Judged judged(EvaluatedPath path, EvaluatedPath held, Track track) {
@@ -83,37 +83,6 @@ public record Judgement(
                 path.bars(),
                 track.ruinedOn().isPresent() ? "ruined" : "ran",
                 Scorecard.of(path, held));
-    }
-
-    private static EvaluatedPath path(Run.Traded run, Track track, Window window) {
-        FillPrices prices = run.ready().market().table().fillPrices();
-        int bars = window.last() - window.base();
-        List<LocalDate> dates = new ArrayList<>(bars + 1);
-        double[] cash = new double[bars];
-        double[] turnover = new double[bars];
-        double[] cost = new double[bars];
-        double[] net = new double[bars];
-        double[] gross = new double[bars];
-        int[] switches = new int[bars];
-        dates.add(prices.axis().date(window.base()));
-        for (int i = 0; i < bars; i++) {
-            int bar = window.base() + 1 + i;
-            dates.add(prices.axis().date(bar));
-            cash[i] = prices.cashReturn(bar);
-            turnover[i] = track.turnover(bar);
-            cost[i] = track.cost(bar);
-            switches[i] = track.switched(bar) ? 1 : 0;
-            for (int asset = 0; asset < track.assets().size(); asset++) {
-                double weight = track.weight(bar - 1, asset);
-                net[i] += weight;
-                gross[i] += Math.abs(weight);
-            }
-        }
-        double[] wealth = track.wealth(window.base(), window.last());
-        return EvaluatedPath.of(dates, wealth, cash, prices.axis().bars().periodsPerYear())
-                .withTrading(turnover, cost)
-                .withExposure(net, gross)
-                .withSwitches(switches);
     }
 
     private static RegimeTable byRegime(Run.Traded run, Window window, double[] returns) {

@@ -80,7 +80,7 @@ public final class ResultWriter {
                 MeasuresFile.of(
                         one.strategy(),
                         one.yardsticks(),
-                        one.ruinedBefore(),
+                        one.absent(),
                         one.byRegime(),
                         run.timeline().regimes(),
                         Compared.parameters(run),

@@ -4,6 +4,7 @@ import java.time.LocalDate;
 import java.util.Map;
 import java.util.Objects;
 import sojourn.archive.PathFile;
+import sojourn.measure.Measured;
 import sojourn.measure.Yardstick;
 import sojourn.strategy.StrategyFile;
 import sojourn.trade.Track;
@@ -24,6 +25,7 @@ public sealed interface Run {
      * @param timeline the regimes as they were known
      * @param track its money
      * @param causal yardsticks that could have been traded
+     * @param absent why others that could have been traded did not run
      * @param path the columns of its path file
      * @param digest of its settings and path
      */
@@ -32,6 +34,7 @@ public sealed interface Run {
             RegimeTimeline timeline,
             Track track,
             Map<Yardstick, Track> causal,
+            Map<Yardstick, Measured.Undefined> absent,
             PathFile path,
             String digest)
             implements Run {

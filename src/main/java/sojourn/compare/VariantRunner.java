@@ -1,10 +1,8 @@
 package sojourn.compare;
 
-import java.util.Map;
 import java.util.Optional;
 import sojourn.archive.PathFile;
 import sojourn.market.PriceTable;
-import sojourn.measure.JudgeSettings;
 import sojourn.measure.Yardstick;
 import sojourn.strategy.Strategy;
 import sojourn.trade.Simulation;
@@ -40,12 +38,10 @@ final class VariantRunner {
                     "the first decision, at " + table.fillPrices().axis().date(track.firstBar())
                             + ", leaves no bar to be judged; give longer price files or fit earlier");
         }
-        JudgeSettings judge = strategy.judge();
-        Map<Yardstick, Track> causal =
-                new Yardsticks(table, timeline, terms, track).causal(judge.buyAndHold(), judge.against());
-        PathFile path = PathFile.of(table.fillPrices().axis(), timeline, track, causal);
+        Alongside<Yardstick> causal = new Yardsticks(ready, timeline, track).causal();
+        PathFile path = PathFile.of(table.fillPrices().axis(), timeline, track, causal.tracks());
         String digest = path.digest(ready.file().settingsByContent(ready.contents()));
-        return new Run.Traded(ready, timeline, track, causal, path, digest);
+        return new Run.Traded(ready, timeline, track, causal.tracks(), causal.absent(), path, digest);
     }
 
     private static Run failed(Prepared.Ready ready, String reason) {

@@ -55,10 +55,9 @@ public final class Warnings {
             warnings.add(one.file().slug() + " failed: " + one.reason());
         }
         for (Judgement one : compared.ranked()) {
-            for (String yardstick : one.ruinedBefore()) {
-                warnings.add(one.run().file().slug() + ": " + yardstick
-                        + " had nothing left when the window began and has no row");
-            }
+            one.absent()
+                    .forEach((yardstick, none) -> warnings.add(one.run().file().slug() + ": its yardstick " + yardstick
+                            + " is undefined: " + none.because()));
         }
         compared.ranked().forEach(one -> addUndecided(one.run(), warnings));
         addWindows(compared, warnings);

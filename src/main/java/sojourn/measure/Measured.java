@@ -57,6 +57,10 @@ public sealed interface Measured {
         RUIN,
         /** No whole calendar month or year lies in the window. */
         NO_WHOLE_PERIOD,
+        /** There is one regime alone, and nothing to tell apart. */
+        ONE_REGIME,
+        /** Nothing ever changes that could have changed at other times. */
+        NO_CHANGE,
         /** The path does not record what the measure is made of. */
         NOT_RECORDED,
         /** The approximation does not hold for moments like these. */

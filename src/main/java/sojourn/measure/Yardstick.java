@@ -18,6 +18,21 @@ public enum Yardstick {
     /** A mix at the running mean of the strategy's weights. */
     SAME_EXPOSURE_SO_FAR(
             "A mix at the mean of the strategy's weights from its first fill to the close in question.",
+            Knowledge.CAUSAL),
+    /** Buy-and-hold scaled to the strategy's volatility. */
+    SAME_VOLATILITY(
+            "What buy-and-hold held, times the strategy's standard deviation of returns over the window by that of buy-and-hold,"
+                    + " renewed at every bar, free of cost and of limits; known only after the fact.",
+            Knowledge.AFTER_THE_FACT),
+    /** The strategy's rule, told its regimes by recent volatility. */
+    VOLATILITY_GATE(
+            "The strategy's own rule, costs and fills, told its regimes by the standard deviation of the last 21 returns of the asset that"
+                    + " orders them, against the quantiles of that inside the fit's window that give each regime the share the fit gave it.",
+            Knowledge.CAUSAL),
+    /** Buy-and-hold's mix scaled to a steady volatility. */
+    VOLATILITY_TARGET(
+            "Buy-and-hold's mix, scaled within the limits so that its standard deviation of the last 21 bars comes to that of all bars so"
+                    + " far, with the strategy's decision bars, band, costs and fills.",
             Knowledge.CAUSAL);
 
     /** Whether a yardstick could have been traded. */

@@ -6,11 +6,11 @@ import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import sojourn.numeric.Check;
+import sojourn.numeric.Quantile;
 
 /**
  * A threshold on recent volatility. Its levels are quantiles of the volatilities of the fit's own window, one a row from the first
- * that has one, interpolated at position 1 + (n - 1) q of the ascending values (type 7 of Hyndman and Fan 1996, American
- * Statistician 50, 361-365). That is all there is to fit: the levels then stand until the next fit.
+ * that has one, as {@link Quantile} has them. That is all there is to fit: the levels then stand until the next fit.
  *
  * @param volatility what is measured
  * @param stormAbove quantile, above 0 and below 1
@@ -46,8 +46,8 @@ public record VolatilityThresholdSettings(RecentVolatility volatility, double st
         if (refusal.isPresent()) {
             return Fit.failed(refusal.get(), Fit.Search.NONE, x.present());
         }
-        VolatilityThreshold.Levels levels =
-                new VolatilityThreshold.Levels(quantile(ascending, stormAbove), quantile(ascending, calmBelow));
+        VolatilityThreshold.Levels levels = new VolatilityThreshold.Levels(
+                Quantile.ofAscending(ascending, stormAbove), Quantile.ofAscending(ascending, calmBelow));
         FitRequest judged = request.from(firstJudged(x));
         if (!PosteriorMoments.possible(judged)) {
             return Fit.failed("no row with a volatility holds the returns of all assets", Fit.Search.NONE, x.present());
@@ -84,13 +84,6 @@ public record VolatilityThresholdSettings(RecentVolatility volatility, double st
             }
         }
         return found.stream().mapToDouble(Double::doubleValue).toArray();
-    }
-
-    private static double quantile(double[] ascending, double level) {
-        double position = (ascending.length - 1) * level;
-        int below = (int) Math.floor(position);
-        int above = StrictMath.min(below + 1, ascending.length - 1);
-        return ascending[below] + (position - below) * (ascending[above] - ascending[below]);
     }
 
     /** The first row that has a volatility; those before it were in no regime that anybody could have told. */

@@ -147,10 +147,13 @@ class FailureRowsTest {
         assertThat(ran.code()).as(ran.err()).isZero();
         WrittenTable table = job.table("levered/comparison.csv");
         assertThat(table.text(table.row("variant", "levered"), "outcome")).isEqualTo("ran");
-        assertThat(table.texts("variant"))
-                .contains("same_exposure of late")
-                .doesNotContain("same_exposure of levered", "same_exposure_so_far of levered");
+        assertThat(table.text(table.row("variant", "same_exposure of late"), "outcome"))
+                .isEqualTo("ran");
         for (String name : List.of("same_exposure", "same_exposure_so_far")) {
+            int row = table.row("variant", name + " of levered");
+            assertThat(table.text(row, "outcome")).isEqualTo("undefined");
+            assertThat(table.text(row, "reason")).contains("ruined before the window begins");
+            assertThat(table.text(row, "sharpe")).isEmpty();
             assertThat(job.json("results/levered/levered/measures.json")
                             .get("yardsticks")
                             .get(name)
