@@ -67,7 +67,9 @@ public final class TimelineFiles {
                 "log_likelihood",
                 "iterations",
                 "starts",
-                "starts_agreeing"));
+                "starts_agreeing",
+                "runner_up_gap",
+                "runner_up_starts"));
         List<FitColumns.Column> numbers = FitColumns.of(timeline, observed);
         numbers.forEach(column -> header.add(column.name()));
         header.add("events");
@@ -91,6 +93,8 @@ public final class TimelineFiles {
         row.add(likelihood ? OptionalDouble.of(fit.logLikelihood()) : OptionalDouble.empty());
         row.add(Integer.toString(fit.iterations())).add(Integer.toString(fit.starts()));
         row.add(Integer.toString(fit.startsAgreeing()));
+        row.add(fit.runnerUp().map(one -> OptionalDouble.of(one.gap())).orElseGet(OptionalDouble::empty));
+        row.add(fit.runnerUp().map(one -> Integer.toString(one.starts())).orElse(""));
         for (FitColumns.Column column : numbers) {
             row.add(column.cell().apply(record));
         }

@@ -69,13 +69,20 @@ public final class Warnings {
     }
 
     private static void addFits(String key, RegimeTimeline timeline, List<String> warnings) {
-
         for (FitRecord record : timeline.fits()) {
             if (!record.fit().outcome().accepted()) {
                 warnings.add("timeline " + key + ": fit " + record.number() + " on " + record.fittedOn() + " was "
                         + record.fit().outcome().word() + " and is not used: "
                         + record.explanation());
             }
+        }
+        if (!timeline.impossible().isEmpty()) {
+            int count = timeline.impossible().size();
+            warnings.add("timeline " + key + ": " + count + (count == 1 ? " observation was" : " observations were")
+                    + " impossible by the fit in force, of density 0 in every regime, the first on "
+                    + timeline.date(timeline.impossible().get(0))
+                    + "; the log score is minus infinity there, its cell empty, and the probabilities are those predicted the"
+                    + " close before");
         }
         FitTally tally = FitTally.of(timeline);
         List<String> doubts = new ArrayList<>();

@@ -53,10 +53,19 @@ final class Contenders {
     private Optional<String> tooLittle(Rival rival, int own) {
         int forecast = forecasts(rival.gauge());
         return rival.nothing()
+                .or(() -> impossible(rival.subject()))
                 .or(() -> 2 * forecast < own
                         ? Optional.of("it forecast " + forecast + " bars of the " + own
                                 + " that the strategy's own gauge did, less than half")
                         : Optional.empty());
+    }
+
+    /** A score of minus infinity would be left out of a mean that it decides. */
+    private static Optional<String> impossible(WalkedRegimes one) {
+        return one.timeline().impossible().stream()
+                .findFirst()
+                .map(bar -> "it held what came on " + one.date(bar)
+                        + " for impossible, density 0 in every regime, so its mean log score is minus infinity");
     }
 
     private int forecasts(String gauge) {
@@ -71,6 +80,10 @@ final class Contenders {
     Answer<ScoreContest> ofObservation() {
         if (speechless()) {
             return Answer.none("no fit was accepted");
+        }
+        Optional<String> impossible = impossible(subject);
+        if (impossible.isPresent()) {
+            return Answer.none(impossible.get());
         }
         return ofObservation.containsKey(subject.gauge())
                 ? ScoreContest.of(subject, compared(ofObservation))

@@ -63,7 +63,7 @@ public record FitsTold(
                 least = Math.min(least, share);
                 rivalled += record.fit()
                                 .runnerUp()
-                                .filter(one -> one.gapNats() < CLOSE)
+                                .filter(one -> record.fit().model().isPresent() && one.gap() < CLOSE)
                                 .isPresent()
                         ? 1
                         : 0;

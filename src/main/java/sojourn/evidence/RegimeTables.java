@@ -99,7 +99,7 @@ public final class RegimeTables {
             row.add(step.record()
                     .fit()
                     .runnerUp()
-                    .map(one -> OptionalDouble.of(one.gapNats()))
+                    .map(one -> OptionalDouble.of(one.gap()))
                     .orElseGet(OptionalDouble::empty));
             row.add(String.join("; ", step.record().events())).end();
         }

@@ -18,4 +18,12 @@ public interface GaugeFilter {
      * row was missing, or the gauge held the observation for impossible.
      */
     OptionalDouble lastLogDensity();
+
+    /**
+     * Whether the last bar's observation was impossible: its density was 0 in every regime that could have been, so that its score is
+     * minus infinity and the probabilities are those predicted before it. Never for a gauge without a likelihood.
+     */
+    default boolean impossible() {
+        return false;
+    }
 }

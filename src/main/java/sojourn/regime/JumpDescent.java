@@ -10,12 +10,17 @@ package sojourn.regime;
  * @param settled whether the path stayed in the end
  */
 record JumpDescent(JumpCentres centres, JumpPath path, int rounds, boolean settled) {
-    private static final int MOST_ROUNDS = 1000;
+    static final int MOST_ROUNDS = 1000;
 
     static JumpDescent from(JumpCentres start, double penalty, Observations x) {
+        return from(start, penalty, x, MOST_ROUNDS);
+    }
+
+    /** With another limit than usual, at least 1. */
+    static JumpDescent from(JumpCentres start, double penalty, Observations x, int mostRounds) {
         JumpCentres centres = start;
         JumpPath path = JumpPath.of(centres, penalty, x);
-        for (int round = 2; round <= MOST_ROUNDS; round++) {
+        for (int round = 2; round <= mostRounds; round++) {
             JumpCentres means = centres.means(x, path.states());
             JumpPath next = JumpPath.of(means, penalty, x);
             if (next.sameAs(path)) {
@@ -24,7 +29,7 @@ record JumpDescent(JumpCentres centres, JumpPath path, int rounds, boolean settl
             centres = means;
             path = next;
         }
-        return new JumpDescent(centres, path, MOST_ROUNDS, false);
+        return new JumpDescent(centres, path, mostRounds, false);
     }
 
     double objective() {

@@ -19,6 +19,9 @@ public record JumpSettings(int states, double penalty, int starts) implements Ga
     /** Objectives that differ by less than this times (1 + objective) are the same. */
     private static final double TIE = 1e-9;
 
+    private static final String UNSETTLED =
+            "the path was still changing after " + JumpDescent.MOST_ROUNDS + " rounds; the regimes are usable";
+
     /** Refuses what cannot be fitted whatever the data. */
     public JumpSettings {
         Check.within(states, 1, FitSettings.MOST_STATES, "states");
@@ -52,13 +55,13 @@ public record JumpSettings(int states, double penalty, int starts) implements Ga
     }
 
     /** The lowest among the starts that left every state enough observations; if there is none, the lowest of all. */
-    private Fit choose(FitRequest request, List<JumpDescent> ends) {
+    Fit choose(FitRequest request, List<JumpDescent> ends) {
         Observations x = request.observations();
         List<JumpDescent> sound = ends.stream().filter(end -> sound(end, x)).toList();
         List<JumpDescent> candidates = sound.isEmpty() ? ends : sound;
         JumpDescent best = lowest(candidates);
         int agreeing = (int) candidates.stream().filter(end -> tied(end, best)).count();
-        Fit.Search search = new Fit.Search(best.rounds(), ends.size(), agreeing, Optional.empty());
+        Fit.Search search = new Fit.Search(best.rounds(), ends.size(), agreeing, runnerUp(sound, best));
         RowWeights weights = RowWeights.path(states, best.path().states());
         Jump unordered = Jump.of(best.centres(), penalty, weights.transitions());
         Optional<JumpCentres> previous = previous(request);
@@ -66,7 +69,22 @@ public record JumpSettings(int states, double penalty, int starts) implements Ga
                 Described.of(unordered, weights, request), previous.map(before -> matching(before, unordered)));
         Jump gauge = unordered.ordered(order);
         Described described = Described.of(gauge, weights.ordered(order), request);
-        return PlainFit.of(described, search, x.dimension(), previous.map(before -> matching(before, gauge)));
+        Optional<Matching> matching = previous.map(before -> matching(before, gauge));
+        return best.settled()
+                ? PlainFit.of(described, search, x.dimension(), matching)
+                : PlainFit.unfinished(described, search, x.dimension(), matching, UNSETTLED);
+    }
+
+    /** The lowest of the sound ends that do not agree with the best. */
+    private static Optional<RunnerUp> runnerUp(List<JumpDescent> sound, JumpDescent best) {
+        List<JumpDescent> higher =
+                sound.stream().filter(end -> !tied(end, best)).toList();
+        if (higher.isEmpty()) {
+            return Optional.empty();
+        }
+        JumpDescent second = lowest(higher);
+        int agreeing = (int) higher.stream().filter(end -> tied(end, second)).count();
+        return Optional.of(new RunnerUp(second.objective() - best.objective(), agreeing));
     }
 
     private Optional<JumpCentres> previous(FitRequest request) {

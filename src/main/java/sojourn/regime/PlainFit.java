@@ -9,6 +9,22 @@ final class PlainFit {
 
     /** Converged, unless a state stands on fewer observations than it needs: then degenerate. */
     static Fit of(Described described, Fit.Search search, int dimension, Optional<Matching> matching) {
+        return ended(Outcome.CONVERGED, "", described, search, dimension, matching);
+    }
+
+    /** Stopped at the limit of its search, because of {@code explanation}, unless degenerate. */
+    static Fit unfinished(
+            Described described, Fit.Search search, int dimension, Optional<Matching> matching, String explanation) {
+        return ended(Outcome.ITERATION_LIMIT, explanation, described, search, dimension, matching);
+    }
+
+    private static Fit ended(
+            Outcome end,
+            String because,
+            Described described,
+            Fit.Search search,
+            int dimension,
+            Optional<Matching> matching) {
         int observations = described.observations();
         double[] occupancy = described.orderBy().occupancy();
         int least = 0;
@@ -19,7 +35,7 @@ final class PlainFit {
         int needed = Soundness.leastCount(dimension);
         boolean sound = count > needed - 0.5; // a whole number but for rounding
         String explanation = sound
-                ? ""
+                ? because
                 : String.format(
                         Locale.ROOT,
                         "{%d} accounts for %.0f of %d observations, fewer than the %d it needs",
@@ -28,7 +44,7 @@ final class PlainFit {
                         observations,
                         needed);
         return Fit.of(
-                sound ? Outcome.CONVERGED : Outcome.DEGENERATE,
+                sound ? end : Outcome.DEGENERATE,
                 explanation,
                 search,
                 observations,

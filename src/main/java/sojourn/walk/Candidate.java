@@ -46,6 +46,11 @@ final class Candidate {
         return filter.map(GaugeFilter::lastLogDensity).orElseGet(OptionalDouble::empty);
     }
 
+    /** Whether it held the last bar's observation for impossible. */
+    boolean impossible() {
+        return filter.map(GaugeFilter::impossible).orElse(false);
+    }
+
     /** Fits it, its last accepted fit being one more start. */
     Fit fit(FitRequest cold, StartRunner runner) {
         return settings.fit(accepted.map(cold::after).orElse(cold), runner);

@@ -26,6 +26,7 @@ public final class RegimeTimeline implements Signal {
     private final double[] logScores;
     private final double[] expectedCash;
     private final boolean zeroMean;
+    private final List<Integer> impossible;
     private final List<Optional<Reading>> readings;
 
     private RegimeTimeline(Builder builder) {
@@ -39,6 +40,7 @@ public final class RegimeTimeline implements Signal {
         this.logScores = Arrays.copyOf(builder.logScores, builder.bars);
         this.expectedCash = Arrays.copyOf(builder.expectedCash, builder.bars);
         this.zeroMean = builder.zeroMean;
+        this.impossible = List.copyOf(builder.impossible);
         this.readings = made();
     }
 
@@ -101,11 +103,20 @@ public final class RegimeTimeline implements Signal {
 
     /**
      * ln of the density that the fit in force before this bar gave to this bar's observation: the out-of-sample score. Empty on
-     * the first bar, on bars without an observation, where no fit was in force and for gauges without a likelihood.
+     * the first bar, on bars without an observation or with an {@link #impossible()} one, where no fit was in force and for gauges
+     * without a likelihood.
      */
     public OptionalDouble logScore(int bar) {
         double score = logScores[bar - firstBar];
         return Double.isNaN(score) ? OptionalDouble.empty() : OptionalDouble.of(score);
+    }
+
+    /**
+     * The bars whose observation the fit in force before them held for impossible, density 0 in every regime: their score is minus
+     * infinity, which no file can hold, and probabilities were left as predicted.
+     */
+    public List<Integer> impossible() {
+        return impossible;
     }
 
     /** The accepted fit that was made last; there must be one. */
@@ -133,6 +144,7 @@ public final class RegimeTimeline implements Signal {
         private final List<String> assets;
         private final boolean zeroMean;
         private final List<FitRecord> fits = new ArrayList<>();
+        private final List<Integer> impossible = new ArrayList<>();
         private int firstBar;
         private int bars;
         private LocalDate[] dates = new LocalDate[64];
@@ -167,6 +179,7 @@ public final class RegimeTimeline implements Signal {
                 return;
             }
             fits.addAll(earlier.fits);
+            impossible.addAll(earlier.impossible);
             for (int bar = earlier.firstBar; bar < earlier.endBar(); bar++) {
                 Known known = table.knownAt(bar);
                 int row = bar - earlier.firstBar;
@@ -185,6 +198,11 @@ public final class RegimeTimeline implements Signal {
 
         void fit(FitRecord record) {
             fits.add(record);
+        }
+
+        /** The observation at the bar that {@code known} ends with was impossible by the fit in force. */
+        void impossible(Known known) {
+            impossible.add(known.bar());
         }
 
         /** {@code fitNumber} 0 where the strategy stands aside; {@code probabilities} is not modified. */

@@ -107,6 +107,9 @@ public final class Walk {
             candidates.step(log.last(), 0);
         }
         OptionalDouble score = aside ? OptionalDouble.empty() : score();
+        if (!aside && inForce.map(this::candidate).map(Candidate::impossible).orElse(false)) {
+            timeline.impossible(known);
+        }
         if (refit.schedule().due(known, log.present(), log.lastPresent(), refit.firstFitAfter())) {
             fit(known);
         }

@@ -235,9 +235,7 @@ class FitterTest {
         }
         below.sort(Comparator.reverseOrder());
         RunnerUp second = fit.runnerUp().orElseThrow();
-        assertThat(second.gapNats())
-                .isCloseTo(highest - below.get(0), within(1e-6))
-                .isGreaterThan(1e-4);
+        assertThat(second.gap()).isCloseTo(highest - below.get(0), within(1e-6)).isGreaterThan(1e-4);
         assertThat(second.starts()).isEqualTo((int)
                 below.stream().filter(l -> l >= below.get(0) - 1e-4).count());
         assertThat(fit.startsAgreeing() + below.size()).isLessThanOrEqualTo(20);

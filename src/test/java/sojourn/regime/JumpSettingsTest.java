@@ -173,6 +173,44 @@ class JumpSettingsTest {
         assertThat(agreeing).isGreaterThan(20);
     }
 
+    /** Against every descent run again one by one. */
+    @Test
+    void theRunnerUpIsTheLowestOfTheDescentsThatEndedHigher() {
+        double[] sizes = sizes(21, 200, 20);
+        Observations x = Observations.univariate(sizes);
+        FitRequest request = request(x, sizes);
+        Fit fit = new JumpSettings(3, 2, 20).fit(request, StartRunner.sequential());
+        double[] scale = {((Jump) fit.gauge().orElseThrow()).centres().scale(0)};
+        double[] objectives = new JumpStarts(3, scale, x)
+                .all(request, 20).stream()
+                        .mapToDouble(start -> JumpDescent.from(start, 2, x).objective())
+                        .sorted()
+                        .toArray();
+        int second = fit.startsAgreeing();
+        assertThat(objectives[second - 1]).isCloseTo(objectives[0], within(ROUNDING));
+        RunnerUp next = fit.runnerUp().orElseThrow();
+        assertThat(next.gap())
+                .isCloseTo(objectives[second] - objectives[0], within(ROUNDING))
+                .isGreaterThan(ROUNDING);
+        assertThat(next.starts()).isEqualTo((int) Arrays.stream(objectives)
+                .filter(one -> Math.abs(one - objectives[second]) < ROUNDING)
+                .count());
+    }
+
+    @Test
+    void aDescentThatDidNotSettleIsUsableAndSaysSo() {
+        double[] sizes = sizes(21, 200, 20);
+        Observations x = Observations.univariate(sizes);
+        FitRequest request = request(x, sizes);
+        JumpCentres start =
+                new JumpStarts(2, new double[] {1}, x).all(request, 2).get(1);
+        JumpDescent broken = JumpDescent.from(start, 2, x, 1);
+        assertThat(broken.settled()).isFalse();
+        Fit fit = new JumpSettings(2, 2, 1).choose(request, List.of(broken));
+        assertThat(fit.outcome()).isEqualTo(Outcome.ITERATION_LIMIT);
+        assertThat(fit.explanation()).contains("still changing").contains("usable");
+    }
+
     private static void assertSame(Fit expected, Fit got) {
         JumpCentres a = ((Jump) expected.gauge().orElseThrow()).centres();
         JumpCentres b = ((Jump) got.gauge().orElseThrow()).centres();

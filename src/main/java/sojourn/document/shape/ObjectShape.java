@@ -52,6 +52,27 @@ public record ObjectShape<T>(String name, Function<Fields, T> build, List<Field<
         return clean ? Optional.of(build.apply(new ReadFields(name, values))) : Optional.empty();
     }
 
+    /**
+     * What the map says without its keys that stand beside a word they do not belong to, so that rules on the whole can be told in
+     * one go with those; empty if anything else is at fault.
+     */
+    Optional<T> withoutMisplaced(Node node) {
+        if (!(node instanceof MapNode map) || !keys().containsAll(map.keys())) {
+            return Optional.empty();
+        }
+        Problems told = new Problems();
+        Map<Field<?>, Object> values = new HashMap<>();
+        for (Field<?> field : fields) {
+            boolean misplaced = !field.belongs(map, told);
+            Optional<?> value = field.value(misplaced ? Optional.empty() : map.get(field.key()), told);
+            if (value.isEmpty()) {
+                return Optional.empty();
+            }
+            values.put(field, value.get());
+        }
+        return Optional.of(build.apply(new ReadFields(name, values)));
+    }
+
     /** Returns the keys that the unknown ones were probably meant to be, which need not be called missing as well. */
     private Set<String> tellUnknownKeys(MapNode map, Problems problems) {
         List<String> missing = new ArrayList<>(keys());

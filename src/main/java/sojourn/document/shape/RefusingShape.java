@@ -16,7 +16,9 @@ public record RefusingShape<T>(Shape<T> source, Function<? super T, List<Refusal
     @Override
     public Optional<T> read(Node node, Problems problems) {
         Optional<T> value = source.read(node, problems);
-        List<Refusal> refusals = value.<List<Refusal>>map(rule).orElse(List.of());
+        Optional<T> judged = value.or(
+                () -> source instanceof ObjectShape<T> object ? object.withoutMisplaced(node) : Optional.empty());
+        List<Refusal> refusals = judged.<List<Refusal>>map(rule).orElse(List.of());
         for (Refusal refusal : refusals) {
             Node at = node instanceof MapNode map ? map.get(refusal.key()).orElse(node) : node;
             problems.add(at, refusal.what(), refusal.remedy());
