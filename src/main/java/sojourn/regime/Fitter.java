@@ -27,8 +27,10 @@ public final class Fitter {
     public static Fit fit(FitSettings settings, FitRequest request, StartRunner runner) {
         Observations x = request.observations();
         WindowSearch search = WindowSearch.of(settings, x);
-        Optional<String> refusal =
-                nothingToDescribe(request).or(() -> tooFew(settings, x)).or(search::refusal);
+        Optional<String> refusal = nothingObserved(x)
+                .or(() -> tooFew(settings, x))
+                .or(search::refusal)
+                .or(() -> nothingToDescribe(request));
         if (refusal.isPresent()) {
             return Fit.failed(refusal.get(), Fit.Search.NONE, x.present());
         }
@@ -66,12 +68,14 @@ public final class Fitter {
 
     /** Why no gauge could be described by the request's window, if so. */
     static Optional<String> nothingToDescribe(FitRequest request) {
-        if (request.observations().present() == 0) {
-            return Optional.of("the window holds no observation");
-        }
-        return PosteriorMoments.possible(request)
-                ? Optional.empty()
-                : Optional.of("no row of the window holds an observation and the returns of all assets");
+        return nothingObserved(request.observations())
+                .or(() -> PosteriorMoments.possible(request)
+                        ? Optional.empty()
+                        : Optional.of("no row of the window holds an observation and the returns of all assets"));
+    }
+
+    private static Optional<String> nothingObserved(Observations x) {
+        return x.present() == 0 ? Optional.of("the window holds no observation") : Optional.empty();
     }
 
     private static Optional<String> tooFew(FitSettings settings, Observations x) {
