@@ -20,17 +20,21 @@ public final class GivenPrices {
     private final double[][] opens;
     private final double[][] closes;
     private final double[] cash;
+    private final Optional<double[][]> volumes;
 
-    private GivenPrices(List<LocalDate> dates, double[][] opens, double[][] closes, double[] cash) {
+    private GivenPrices(
+            List<LocalDate> dates, double[][] opens, double[][] closes, double[] cash, Optional<double[][]> volumes) {
         this.dates = dates;
         this.opens = opens;
         this.closes = closes;
         this.cash = cash;
+        this.volumes = volumes;
     }
 
     /** Closes by asset; opens are the same; cash earns nothing. */
     public static GivenPrices closes(double[]... closes) {
-        return new GivenPrices(weekdays(closes[0].length), closes, closes, new double[closes[0].length]);
+        return new GivenPrices(
+                weekdays(closes[0].length), closes, closes, new double[closes[0].length], Optional.empty());
     }
 
     /** Assets that all stand at 100 on every bar. */
@@ -59,27 +63,47 @@ public final class GivenPrices {
         for (int bar = 1; bar < bars; bar++) {
             cash[bar] = 2e-4 * random.nextDouble();
         }
-        return new GivenPrices(weekdays(bars), opens, closes, cash);
+        return new GivenPrices(weekdays(bars), opens, closes, cash, Optional.empty());
     }
 
     /** The same with other returns of cash. */
     public GivenPrices withCash(double... earned) {
-        return new GivenPrices(dates, opens, closes, earned);
+        return new GivenPrices(dates, opens, closes, earned, volumes);
     }
 
     /** The same with other opens. */
     public GivenPrices withOpens(double[]... by) {
-        return new GivenPrices(dates, by, closes, cash);
+        return new GivenPrices(dates, by, closes, cash, volumes);
+    }
+
+    /** The same with volumes; NaN where there is none. */
+    public GivenPrices withVolumes(double[]... by) {
+        return new GivenPrices(dates, opens, closes, cash, Optional.of(by));
+    }
+
+    /** The same with random volumes of about {@code size} units a bar. */
+    public GivenPrices withRandomVolumes(long seed, double size) {
+        RandomStream random = RandomStream.of(seed, "volumes");
+        double[][] all = new double[closes.length][size()];
+        for (double[] one : all) {
+            Arrays.setAll(one, bar -> size * (0.2 + 1.6 * random.nextDouble()));
+        }
+        return withVolumes(all);
     }
 
     /** The same on other dates. */
     public GivenPrices on(LocalDate... days) {
-        return new GivenPrices(List.of(days), opens, closes, cash);
+        return new GivenPrices(List.of(days), opens, closes, cash, volumes);
     }
 
     /** Only the first bars. */
     public GivenPrices first(int bars) {
-        return new GivenPrices(dates.subList(0, bars), cut(opens, bars), cut(closes, bars), Arrays.copyOf(cash, bars));
+        return new GivenPrices(
+                dates.subList(0, bars),
+                cut(opens, bars),
+                cut(closes, bars),
+                Arrays.copyOf(cash, bars),
+                volumes.map(all -> cut(all, bars)));
     }
 
     /** The date of each bar. */
@@ -102,13 +126,14 @@ public final class GivenPrices {
         List<String> names = new ArrayList<>();
         List<PriceTable.Bars> bars = new ArrayList<>();
         for (int asset = 0; asset < closes.length; asset++) {
+            int index = asset;
             names.add(String.valueOf((char) ('a' + asset)));
             bars.add(new PriceTable.Bars(
                     PriceTable.Column.of(closes[asset]),
                     Optional.of(PriceTable.Column.of(opens[asset])),
                     Optional.empty(),
                     Optional.empty(),
-                    Optional.empty()));
+                    volumes.map(all -> PriceTable.Column.of(all[index]))));
         }
         return PriceTable.of(TimeAxis.of(BarLength.DAILY, dates), names, bars, CashReturns.of(cash, cash));
     }

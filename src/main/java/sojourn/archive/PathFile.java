@@ -122,8 +122,8 @@ public final class PathFile {
     }
 
     private void addMoney(Track track) {
-        addFrom(track, "interest", track::interest);
-        addFrom(track, "borrow", bar -> 0);
+        addFrom(track, "interest", bar -> track.interest(bar) - track.marginInterest(bar));
+        addFrom(track, "borrow", track::borrowFee);
         addFrom(track, "dividend", bar -> 0);
         addFrom(track, "cost", track::cost);
         addFrom(track, "turnover", track::turnover);

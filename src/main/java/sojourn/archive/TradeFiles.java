@@ -25,6 +25,7 @@ public final class TradeFiles {
                 "fixed_fee",
                 "half_spread",
                 "impact",
+                "stamp_duty",
                 "weight_before",
                 "weight_after",
                 "because"));
@@ -36,10 +37,11 @@ public final class TradeFiles {
                     .add(fill.units())
                     .add(fill.price())
                     .add(fill.notional())
-                    .add(fill.commission())
-                    .add(0.0)
-                    .add(fill.halfSpread())
-                    .add(0.0)
+                    .add(fill.charges().commission())
+                    .add(fill.charges().fixedFee())
+                    .add(fill.charges().halfSpread())
+                    .add(fill.charges().impact())
+                    .add(fill.charges().stampDuty())
                     .add(fill.weightBefore())
                     .add(fill.weightAfter())
                     .add(fill.because().sentence())

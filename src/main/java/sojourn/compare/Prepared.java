@@ -17,6 +17,7 @@ import sojourn.market.PriceReader;
 import sojourn.market.PriceTable;
 import sojourn.strategy.Strategy;
 import sojourn.strategy.StrategyFile;
+import sojourn.trade.Needed;
 import sojourn.walk.BarColumn;
 import sojourn.walk.Observation;
 import sojourn.walk.TimelineAddress;
@@ -121,7 +122,7 @@ public sealed interface Prepared {
         }
     }
 
-    /** Columns that an observation needs and its file does not have. */
+    /** Columns that an observation or trading needs and a file does not have. */
     private static List<Problem> lacking(Strategy strategy, PriceTable table) {
         List<Problem> problems = new ArrayList<>();
         for (Observation one : strategy.regimes().observe()) {
@@ -137,6 +138,17 @@ public sealed interface Prepared {
                                 + " cannot be computed without",
                         "name the column under prices (" + column.word() + ": ...), or observe something else"));
             }
+        }
+        for (Needed one : Needed.lacking(strategy.trade(), table, strategy.tradedAssets())) {
+            String csv = Objects.requireNonNull(strategy.prices().get(one.asset()), one.asset())
+                    .layout()
+                    .csv();
+            problems.add(new Problem(
+                    csv,
+                    1,
+                    1,
+                    one.asset() + " has no " + one.column() + " on any bar, and " + one.what() + " needs it",
+                    "name the column under prices (" + one.column() + ": ...), or trade without " + one.what()));
         }
         return problems;
     }

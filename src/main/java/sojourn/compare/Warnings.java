@@ -10,6 +10,7 @@ import java.util.Set;
 import sojourn.market.BarLength;
 import sojourn.market.Finding;
 import sojourn.regime.Outcome;
+import sojourn.trade.Hindrance;
 import sojourn.trade.Undecided;
 import sojourn.walk.FitRecord;
 import sojourn.walk.RegimeTimeline;
@@ -60,6 +61,7 @@ public final class Warnings {
                             + " is undefined: " + none.because()));
         }
         compared.ranked().forEach(one -> addUndecided(one.run(), warnings));
+        compared.ranked().forEach(one -> addHindrances(one.run(), warnings));
         addWindows(compared, warnings);
         return warnings;
     }
@@ -119,6 +121,20 @@ public final class Warnings {
         }
     }
 
+    private static void addHindrances(Run.Traded run, List<String> warnings) {
+        for (Hindrance.Kind kind : Hindrance.Kind.values()) {
+            List<Hindrance> met = run.track().hindrances().stream()
+                    .filter(one -> one.kind() == kind)
+                    .toList();
+            if (!met.isEmpty()) {
+                Hindrance first = met.get(0);
+                warnings.add(run.file().slug() + ": on " + met.size() + " bars an asset " + kind.sentence()
+                        + "; the first was " + run.track().assets().get(first.asset()) + " on "
+                        + run.ready().market().table().fillPrices().axis().date(first.bar()));
+            }
+        }
+    }
+
     private static void addWindows(Compared compared, List<String> warnings) {
         long windows = compared.ranked().stream()
                 .map(one -> one.strategy().from() + " to " + one.strategy().to())
@@ -133,9 +149,11 @@ public final class Warnings {
         for (Judgement one : compared.ranked()) {
             lengths.add(one.run().ready().market().table().barLength());
             cash.add(one.run().ready().cashContent());
-            if (one.run().file().strategy().limits().gross() > 1) {
-                warnings.add(one.run().file().slug()
-                        + " may borrow, and borrowing costs it no more than what cash earns: no spread is modelled");
+            if (one.run().file().strategy().limits().gross() > 1
+                    && one.run().file().strategy().trade().costs().marginPercentPerYear() == 0) {
+                warnings.add(
+                        one.run().file().slug()
+                                + " may borrow, and borrowing costs it no more than what cash earns: no margin-percent-per-year is stated");
             }
         }
         if (lengths.size() > 1) {

@@ -75,7 +75,7 @@ public final class CashRates {
             expectedNext[bar] =
                     dayCount.interest(percentPerYear[inForce[bar]], axis.bars().nominalDays());
         }
-        return CashReturns.of(earned, expectedNext);
+        return CashReturns.of(earned, expectedNext).countedBy(dayCount);
     }
 
     /** SHA-256, in hexadecimal, over dates and raw bits of the rates: the same for the same numbers, however written. */

@@ -7,14 +7,16 @@ package sojourn.market;
 public final class CashReturns {
     private final double[] earned;
     private final double[] expectedNext;
+    private final DayCount dayCount;
 
-    private CashReturns(double[] earned, double[] expectedNext) {
+    private CashReturns(double[] earned, double[] expectedNext, DayCount dayCount) {
         this.earned = earned;
         this.expectedNext = expectedNext;
+        this.dayCount = dayCount;
     }
 
     /**
-     * Copies both. Neither modified.
+     * Copies both. Neither modified. A year of other interest has 365 days; see {@link #countedBy}.
      *
      * @param earned simple return on each bar
      * @param expectedNext simple return over a nominal bar (365.25 / periods per year days) at the rate known at each close
@@ -23,12 +25,17 @@ public final class CashReturns {
         if (earned.length != expectedNext.length) {
             throw new IllegalArgumentException(earned.length + " returns for " + expectedNext.length + " expectations");
         }
-        return new CashReturns(earned.clone(), expectedNext.clone());
+        return new CashReturns(earned.clone(), expectedNext.clone(), DayCount.ACTUAL_365);
+    }
+
+    /** The same, other interest counted by another year. */
+    public CashReturns countedBy(DayCount other) {
+        return new CashReturns(earned, expectedNext, other);
     }
 
     /** Cash that earns nothing, over {@code bars} bars. */
     public static CashReturns none(int bars) {
-        return new CashReturns(new double[bars], new double[bars]);
+        return of(new double[bars], new double[bars]);
     }
 
     int size() {
@@ -41,5 +48,10 @@ public final class CashReturns {
 
     double expectedNext(int bar) {
         return expectedNext[bar];
+    }
+
+    /** How many days a year of interest has. */
+    DayCount dayCount() {
+        return dayCount;
     }
 }

@@ -34,4 +34,12 @@ public final class FillPrices {
     public double cashReturn(int bar) {
         return table.cash().earned(bar);
     }
+
+    /**
+     * Simple interest on one unit of money from the close before to that of {@code bar}, at least 1, by the calendar days between
+     * them and the days of a year that cash counts by.
+     */
+    public double interest(double percentPerYear, int bar) {
+        return table.cash().dayCount().interest(percentPerYear, table.axis().calendarDays(bar - 1, bar));
+    }
 }

@@ -1,10 +1,8 @@
 package sojourn.report;
 
-import java.time.LocalDate;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
-import java.util.Optional;
 import java.util.stream.Collectors;
 import sojourn.archive.Caution;
 import sojourn.compare.Prepared;
@@ -16,16 +14,11 @@ import sojourn.market.Known;
 import sojourn.market.PriceTable;
 import sojourn.measure.Yardstick;
 import sojourn.strategy.Strategy;
-import sojourn.trade.TradeSettings;
 import sojourn.walk.FitPlan;
 
 /** What would be run, in plain English, with everything odd about the files and everything that is left out. */
 public final class PlanText {
     private static final int INDENT = 13;
-    private static final String NOT_MODELLED =
-            "taxes; dividends and splits other than those already in the price columns; market impact, minimum fees, partial fills;"
-                    + " costs that change with volatility; fees for borrowing and lending; currencies; delisting. Trades happen at"
-                    + " closing prices, in fractional units, whatever their size.";
 
     private final StringBuilder text = new StringBuilder();
 
@@ -79,9 +72,9 @@ public final class PlanText {
         FitPlan plan = FitPlan.of(table, strategy.regimes(), strategy.refit());
         line("Fits", GaugeText.fits(strategy.refit(), strategy.regimes(), plan));
         line("Rule", RuleText.of(strategy.rule()));
-        line("Trades", trades(strategy, plan));
+        line("Trades", TradeText.of(strategy, plan));
         line("Judged", judged(strategy));
-        line("Left out", NOT_MODELLED);
+        line("Left out", TradeText.leftOut(strategy));
         List<String> findings = findings(ready);
         for (String finding : findings) {
             line("Finding", finding);
@@ -111,24 +104,6 @@ public final class PlanText {
                             + constant.dayCount().word();
         }
         return "earns the last rate dated at or before the close before, for the calendar days between two bars";
-    }
-
-    private static String trades(Strategy strategy, FitPlan plan) {
-        TradeSettings trade = strategy.trade();
-        Optional<LocalDate> first = plan.fitDates().stream().findFirst();
-        String start = first.map(date -> "decides " + trade.decide().word() + ", at the earliest on " + date
-                        + " (if that fit is accepted); ")
-                .orElse("never decides; ");
-        String fill = trade.delay() == 0
-                ? "fills at the next close"
-                : "fills at the close " + (1 + trade.delay()) + " bars after the decision";
-        String band = trade.noTradeBand() > 0
-                ? "; leaves weights within " + trade.noTradeBand() + " of their targets alone"
-                : "";
-        String stay = trade.stayAtLeast() > 1 ? "; keeps a state for at least " + trade.stayAtLeast() + " bars" : "";
-        return start + fill + band + stay + "; pays " + trade.costs().commissionBps() + " bps commission and "
-                + trade.costs().halfSpreadBps() + " bps half-spread on what is traded; begins with "
-                + (long) trade.capital();
     }
 
     private static String judged(Strategy strategy) {

@@ -125,4 +125,12 @@ public record Strategy(
         }
         return List.copyOf(used);
     }
+
+    /** The assets that the rule or buy-and-hold may trade, in the order of {@code prices}. */
+    public List<String> tradedAssets() {
+        return prices.keySet().stream()
+                .filter(asset ->
+                        rule.namedAssets().contains(asset) || judge.buyAndHold().containsKey(asset))
+                .toList();
+    }
 }

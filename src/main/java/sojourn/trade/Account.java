@@ -1,12 +1,13 @@
 package sojourn.trade;
 
 import java.util.ArrayList;
-import java.util.Arrays;
 import java.util.List;
+import java.util.Optional;
 import java.util.OptionalDouble;
 import sojourn.allocate.Because;
 import sojourn.allocate.Weights;
 import sojourn.market.FillPrices;
+import sojourn.market.Known;
 
 /** Cash and units during one simulation, and what moved on the bar at hand. */
 final class Account {
@@ -14,11 +15,16 @@ final class Account {
 
     private final FillPrices prices;
     private final Costs costs;
+    private final Accruals accruals;
+    private final Tariff tariff;
     private final Rebalance rebalance;
     private final double[] units;
     private final double[] price;
     private final double[] value;
+    private final double[] bought;
     private final List<Fill> fills = new ArrayList<>();
+    private final List<Hindrance> hindrances = new ArrayList<>();
+    private Optional<Quantities> carried = Optional.empty();
     private double cash;
     private double interest;
     private double cost;
@@ -28,19 +34,31 @@ final class Account {
     Account(FillPrices prices, int assets, Terms terms) {
         this.prices = prices;
         this.costs = terms.costs();
+        this.accruals = new Accruals(prices, costs);
         this.cash = terms.capital();
         this.units = new double[assets];
         this.price = new double[assets];
         this.value = new double[assets];
-        double[] rates = new double[assets];
-        Arrays.fill(rates, costs.oneWayRate());
-        this.rebalance = new Rebalance(rates);
+        this.bought = new double[assets];
+        this.tariff = Tariff.of(costs, assets);
+        this.rebalance = new Rebalance(tariff);
     }
 
-    /** Begins a bar: interest on the cash of the close before. */
+    /** The same account with something in it. */
+    Account holding(Quantities quantities, double money) {
+        for (int i = 0; i < units.length; i++) {
+            units[i] = quantities.at(i);
+        }
+        cash = money;
+        return this;
+    }
+
+    /** Begins a bar: interest on the cash of the close before, then what else holding brings and costs. */
     void accrue(int bar) {
-        interest = cash * prices.cashReturn(bar);
+        double before = cash;
+        interest = before * prices.cashReturn(bar);
         cash += interest;
+        cash += accruals.on(bar, before, units);
         cost = 0;
         turnover = 0;
     }
@@ -48,6 +66,7 @@ final class Account {
     /** Begins a bar on which nothing can move any more. */
     void rest() {
         interest = 0;
+        accruals.clear();
         cost = 0;
         turnover = 0;
     }
@@ -65,32 +84,72 @@ final class Account {
     enum Outcome {
         /** The order is done with. */
         FILLED,
-        /** A leg has no price; the order waits. */
+        /** A part was traded; what is left waits as {@link #carried}. */
+        PART,
+        /** A leg cannot be traded; the order waits. */
         BLOCKED,
         /** Nothing would be left after its costs. */
         RUIN
     }
 
-    /** Fills an order as one basket, quantities set at the fill price. */
-    Outcome fill(Order order, int bar, FillRule rule) {
-        double before = cash;
+    /**
+     * Fills an order as one basket.
+     *
+     * @param before what was known at the close before the bar, from which costs that depend on past trading are taken
+     */
+    Outcome fill(Order order, int bar, FillRule rule, Known before) {
+        double wealth = cash;
         for (int i = 0; i < units.length; i++) {
             OptionalDouble quoted = rule.price(prices, i, bar);
-            if (quoted.isEmpty() && (units[i] != 0 || order.target().at(i) != 0)) {
-                return Outcome.BLOCKED;
+            if (involved(order, i)) {
+                Optional<Hindrance.Kind> missing =
+                        quoted.isEmpty() ? Optional.of(Hindrance.Kind.NO_PRICE) : observe(before, i);
+                if (missing.isPresent()) {
+                    hindrances.add(new Hindrance(bar, order.decidedOn(), i, missing.get()));
+                    return Outcome.BLOCKED;
+                }
             }
             price[i] = quoted.orElse(0);
             value[i] = units[i] * price[i];
-            before += value[i];
+            wealth += value[i];
         }
-        if (!(before > 0)) {
+        if (!(wealth > 0)) {
             return Outcome.RUIN;
         }
+        return order.quantities().isPresent()
+                ? exchange(order, bar, wealth, order.quantities().get())
+                : rebalance(order, bar, wealth);
+    }
+
+    private boolean involved(Order order, int asset) {
+        return units[asset] != 0 || order.target().at(asset) != 0;
+    }
+
+    private Optional<Hindrance.Kind> observe(Known before, int asset) {
+        return costs.onlyProportional() ? Optional.empty() : tariff.observe(before, asset);
+    }
+
+    private Outcome rebalance(Order order, int bar, double before) {
         Rebalance.Result result = rebalance.solve(before, value, order.target());
-        if (result == Rebalance.Result.SOLVED) {
-            book(order, bar, before);
+        if (result == Rebalance.Result.RUIN) {
+            return Outcome.RUIN;
         }
-        return result == Rebalance.Result.RUIN ? Outcome.RUIN : Outcome.FILLED;
+        if (result == Rebalance.Result.NOTHING_TO_DO) {
+            return Outcome.FILLED;
+        }
+        for (int i = 0; i < units.length; i++) {
+            if (rebalance.capped(i)) {
+                return exchange(order, bar, before, targeted(order.target()));
+            }
+        }
+        book(order, bar, before);
+        return Outcome.FILLED;
+    }
+
+    /** The units that the solved order comes to. */
+    private Quantities targeted(Weights target) {
+        double after = rebalance.wealthAfter();
+        return Quantities.each(units.length, i -> rebalance.traded(i) ? target.at(i) * after / price[i] : units[i]);
     }
 
     private void book(Order order, int bar, double before) {
@@ -100,7 +159,11 @@ final class Account {
                 after * target.cash(); // exactly 0 at full weight, where a running difference leaves a rounding error
         for (int i = 0; i < units.length; i++) {
             if (rebalance.traded(i)) {
-                book(order, bar, i, before, after);
+                double valueAfter = rebalance.valueAfter(i);
+                double notional = valueAfter - value[i];
+                // a position that is given up is gone to the last unit
+                double changed = valueAfter == 0 ? -units[i] : notional / price[i];
+                book(order, bar, i, changed, notional, before, valueAfter / after);
             } else {
                 left += target.at(i) * after - value[i];
             }
@@ -108,27 +171,59 @@ final class Account {
         cash = left;
     }
 
-    private void book(Order order, int bar, int asset, double before, double after) {
-        double valueAfter = rebalance.valueAfter(asset);
-        double notional = valueAfter - value[asset];
-        // a position that is given up is gone to the last unit
-        double bought = valueAfter == 0 ? -units[asset] : notional / price[asset];
-        double commission = costs.commissionRate() * Math.abs(notional);
-        double halfSpread = costs.halfSpreadRate() * Math.abs(notional);
-        units[asset] += bought;
-        cost += commission + halfSpread;
+    /** Trades towards known quantities, as far as each leg may on one bar; cash takes what it comes to. */
+    private Outcome exchange(Order order, int bar, double before, Quantities wanted) {
+        double after = before;
+        boolean whole = true;
+        for (int i = 0; i < units.length; i++) {
+            double all = wanted.at(i) - units[i];
+            double most = tariff.within(i, all * price[i]);
+            boolean cut = most != all * price[i];
+            bought[i] = cut ? most / price[i] : all;
+            if (Math.abs(bought[i] * price[i]) < Rebalance.TINY * before) {
+                bought[i] = 0;
+            } else {
+                after -= tariff.cost(i, bought[i] * price[i]);
+            }
+            if (cut) {
+                whole = false;
+                hindrances.add(new Hindrance(bar, order.decidedOn(), i, Hindrance.Kind.PARTICIPATION));
+            }
+        }
+        if (!(after > 0)) {
+            return Outcome.RUIN;
+        }
+        book(order, bar, before, after);
+        carried = whole ? Optional.empty() : Optional.of(wanted);
+        return whole ? Outcome.FILLED : Outcome.PART;
+    }
+
+    private void book(Order order, int bar, double before, double after) {
+        for (int i = 0; i < units.length; i++) {
+            if (bought[i] != 0) {
+                double notional = bought[i] * price[i];
+                cash -= notional + tariff.cost(i, notional);
+                book(order, bar, i, bought[i], notional, before, (value[i] + notional) / after);
+            }
+        }
+    }
+
+    private void book(
+            Order order, int bar, int asset, double changed, double notional, double before, double weightAfter) {
+        Charges charges = tariff.charges(asset, notional);
+        units[asset] += changed;
+        cost += charges.total();
         turnover += Math.abs(notional) / 2 / before;
         fills.add(new Fill(
                 order.decidedOn(),
                 bar,
                 asset,
-                bought,
+                changed,
                 price[asset],
                 notional,
-                commission,
-                halfSpread,
+                charges,
                 value[asset] / before,
-                valueAfter / after,
+                weightAfter,
                 order.because()));
     }
 
@@ -140,7 +235,7 @@ final class Account {
                 double close = prices.close(i, bar);
                 double notional = -units[i] * close;
                 double share = wealth > 0 ? -notional / wealth : 0;
-                fills.add(new Fill(bar, bar, i, -units[i], close, notional, 0, 0, share, 0, RUINED));
+                fills.add(new Fill(bar, bar, i, -units[i], close, notional, Charges.NONE, share, 0, RUINED));
                 units[i] = 0;
             }
         }
@@ -153,6 +248,11 @@ final class Account {
         return Weights.each(units.length, i -> units[i] * prices.close(i, bar) / wealth);
     }
 
+    /** What the order that was filled in part is still to come to. */
+    Optional<Quantities> carried() {
+        return carried;
+    }
+
     double cash() {
         return cash;
     }
@@ -161,8 +261,14 @@ final class Account {
         return units[asset];
     }
 
+    /** At the cash rate. */
     double interest() {
         return interest;
+    }
+
+    /** What holding brought and cost. */
+    Accruals accruals() {
+        return accruals;
     }
 
     double cost() {
@@ -180,5 +286,9 @@ final class Account {
 
     List<Fill> fills() {
         return fills;
+    }
+
+    List<Hindrance> hindrances() {
+        return hindrances;
     }
 }

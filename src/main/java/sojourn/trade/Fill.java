@@ -11,8 +11,7 @@ import sojourn.allocate.Because;
  * @param units bought; negative if sold
  * @param price per unit, without costs
  * @param notional traded value, of the sign of the units
- * @param commission money, at least 0
- * @param halfSpread money, at least 0
+ * @param charges what it cost
  * @param weightBefore share of wealth at the fill price before the order
  * @param weightAfter share of wealth at the fill price after the order and its costs
  */
@@ -23,8 +22,7 @@ public record Fill(
         double units,
         double price,
         double notional,
-        double commission,
-        double halfSpread,
+        Charges charges,
         double weightBefore,
         double weightAfter,
         Because because) {}

@@ -11,6 +11,11 @@ public interface FillRule {
     /** The price of an asset for orders filled on {@code bar}; empty if it does not trade then. */
     OptionalDouble price(FillPrices prices, int asset, int bar);
 
+    /** The bar at whose close those costs of orders filled on {@code bar} are known that depend on past trading: the one before. */
+    default int costsKnownOn(int bar) {
+        return Math.max(0, bar - 1);
+    }
+
     /** From the close of the decision to the end of the first whole bar that the position is held for. */
     int barsToFirstReturn();
 }

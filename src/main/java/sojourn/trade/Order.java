@@ -1,5 +1,6 @@
 package sojourn.trade;
 
+import java.util.Optional;
 import sojourn.allocate.Because;
 import sojourn.allocate.Weights;
 
@@ -9,5 +10,16 @@ import sojourn.allocate.Weights;
  * @param decidedOn the bar at whose close it was decided
  * @param dueOn the bar it fills on, which may lie beyond the last bar there is
  * @param target weights after the fill and its costs
+ * @param quantities units to hold after the fill where they are settled before it; otherwise the fill price settles them
  */
-public record Order(int decidedOn, int dueOn, Weights target, Because because) {}
+public record Order(int decidedOn, int dueOn, Weights target, Optional<Quantities> quantities, Because because) {
+    /** An order whose quantities the fill price settles. */
+    public Order(int decidedOn, int dueOn, Weights target, Because because) {
+        this(decidedOn, dueOn, target, Optional.empty(), because);
+    }
+
+    /** The same, to hold these units. */
+    Order toHold(Quantities units) {
+        return new Order(decidedOn, dueOn, target, Optional.of(units), because);
+    }
+}

@@ -3,32 +3,35 @@ package sojourn.trade;
 import sojourn.allocate.Weights;
 
 /**
- * Wealth after an order whose target weights refer to wealth after its own costs: V solves
- * V = V0 - sum_i c_i |w_i V - h_i|, with V0 wealth before, h_i values held, w_i target weights and c_i cost rates. The iteration
- * that puts V into the right-hand side contracts if sum c_i |w_i| < 1; otherwise bisection, on the part right of the largest gap
- * where the right-hand side, less V, falls. Trades below {@value #TINY} of wealth are left out before.
+ * Wealth after an order whose target weights refer to wealth after its own costs: V solves V = V0 - sum_i c_i(w_i V - h_i), with V0
+ * wealth before, h_i values held, w_i target weights and c_i what a trade costs, cut to the part that may happen on one bar. The
+ * iteration that puts V into the right-hand side contracts if the slopes of c_i times |w_i| sum to less than 1; otherwise bisection,
+ * on the part right of the top where the right-hand side, less V, falls. Trades below {@value #TINY} of wealth are left out before.
  */
 final class Rebalance {
     /** Smaller trades, as a part of wealth, do not happen. */
-    private static final double TINY = 1e-9;
+    static final double TINY = 1e-9;
 
     private static final double CONVERGED = 1e-13;
     private static final int ITERATIONS = 100;
     private static final int HALVINGS = 200;
+    private static final int THIRDS = 120;
 
-    private final double[] rates;
+    private final Tariff tariff;
+    private final int assets;
     private final double[] weights;
     private final double[] held;
     private final boolean[] traded;
     private double before;
     private double after;
 
-    /** One cost rate an asset, a fraction of the traded value. Not modified. */
-    Rebalance(double[] rates) {
-        this.rates = rates.clone();
-        this.weights = new double[rates.length];
-        this.held = new double[rates.length];
-        this.traded = new boolean[rates.length];
+    /** At the costs of {@code tariff}, as they stand whenever an order is solved. */
+    Rebalance(Tariff tariff) {
+        this.tariff = tariff;
+        this.assets = tariff.assets();
+        this.weights = new double[assets];
+        this.held = new double[assets];
+        this.traded = new boolean[assets];
     }
 
     /**
@@ -40,7 +43,7 @@ final class Rebalance {
     Result solve(double wealth, double[] values, Weights target) {
         before = wealth;
         Result result = Result.NOTHING_TO_DO;
-        for (int i = 0; i < rates.length; i++) {
+        for (int i = 0; i < assets; i++) {
             weights[i] = target.at(i);
             held[i] = values[i];
             traded[i] = Math.abs(weights[i] * wealth - held[i]) >= TINY * wealth;
@@ -72,7 +75,20 @@ final class Rebalance {
 
     /** Value held after the order. */
     double valueAfter(int asset) {
-        return traded[asset] ? weights[asset] * after : held[asset];
+        if (!traded[asset]) {
+            return held[asset];
+        }
+        return capped(asset) ? held[asset] + tariff.within(asset, wanted(asset, after)) : weights[asset] * after;
+    }
+
+    /** Whether only a part of a trade may happen on this bar. */
+    boolean capped(int asset) {
+        double wanted = wanted(asset, after);
+        return traded[asset] && tariff.within(asset, wanted) != wanted;
+    }
+
+    private double wanted(int asset, double wealth) {
+        return weights[asset] * wealth - held[asset];
     }
 
     private boolean iterate() {
@@ -87,16 +103,20 @@ final class Rebalance {
         return false;
     }
 
-    /** V0 - costs - V is concave in V and at most 0 at V0: its largest root lies right of its top, which is at 0 or a kink. */
+    /** V0 - costs - V is concave in V (but for the cut) and at most 0 at V0: its largest root lies right of its top, which is at 0 or a kink. */
     private Result bisect() {
         double low = 0;
         double best = excess(0);
-        for (int i = 0; i < rates.length; i++) {
+        for (int i = 0; i < assets; i++) {
             double kink = traded[i] && weights[i] != 0 ? held[i] / weights[i] : 0;
             if (kink > 0 && kink < before && excess(kink) > best) {
                 low = kink;
                 best = excess(kink);
             }
+        }
+        if (!(best > 0) && !tariff.onlyProportional()) {
+            low = top();
+            best = excess(low);
         }
         if (!(best > 0)) {
             return Result.RUIN;
@@ -114,15 +134,45 @@ final class Rebalance {
         return Result.SOLVED;
     }
 
+    /** Where a concave excess is greatest, by thirds; its top need not be at a kink where costs curve. */
+    private double top() {
+        double low = 0;
+        double high = before;
+        for (int third = 0; third < THIRDS; third++) {
+            double left = low + (high - low) / 3;
+            double right = high - (high - low) / 3;
+            if (excess(left) < excess(right)) {
+                low = left;
+            } else {
+                high = right;
+            }
+        }
+        return low;
+    }
+
     private double excess(double wealth) {
         return before - costs(wealth) - wealth;
     }
 
     private double costs(double wealth) {
+        return tariff.onlyProportional() ? proportional(wealth) : itemised(wealth);
+    }
+
+    private double proportional(double wealth) {
         double costs = 0;
-        for (int i = 0; i < rates.length; i++) {
+        for (int i = 0; i < assets; i++) {
             if (traded[i]) {
-                costs += rates[i] * Math.abs(weights[i] * wealth - held[i]);
+                costs += tariff.rate(i) * Math.abs(weights[i] * wealth - held[i]);
+            }
+        }
+        return costs;
+    }
+
+    private double itemised(double wealth) {
+        double costs = 0;
+        for (int i = 0; i < assets; i++) {
+            if (traded[i]) {
+                costs += tariff.cost(i, tariff.within(i, wanted(i, wealth)));
             }
         }
         return costs;

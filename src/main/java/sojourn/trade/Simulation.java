@@ -18,8 +18,8 @@ import sojourn.walk.Reading;
 import sojourn.walk.Signal;
 
 /**
- * Runs one policy through the prices, one bar after another. On each bar, in this order: interest on the cash of the close before;
- * fills of orders that are due; the mark at the close; the decision with what is known at that close. Whoever decides is shown the
+ * Runs one policy through the prices, one bar after another. On each bar, in this order: interest on the cash of the close before and what
+ * else holding brings and costs; fills of orders that are due; the mark at the close; the decision with what is known at that close. Whoever decides is shown the
  * weights at the close as if every pending order had filled, and nothing later.
  */
 public final class Simulation {
@@ -74,7 +74,8 @@ public final class Simulation {
     }
 
     private Track track(int start, Decision first) {
-        Track.Rows rows = new Track.Rows(table.size() - start, table.assets().size());
+        Track.Rows rows = new Track.Rows(
+                table.size() - start, table.assets().size(), terms.costs().onHolding());
         take(start, first);
         fillDue(start);
         mark(start);
@@ -88,6 +89,8 @@ public final class Simulation {
                 start,
                 rows,
                 account.fills(),
+                account.accruals().entries(),
+                account.hindrances(),
                 unfilled(),
                 undecided,
                 ruinedOn,
@@ -105,7 +108,7 @@ public final class Simulation {
         Order last = pending.peekLast();
         Decision decision = ask(bar, last == null ? held : last.target());
         take(bar, decision);
-        if (due(bar)) { // never after an honest fill rule
+        if (dueAtOnce(bar)) { // never after an honest fill rule
             fillDue(bar);
             mark(bar);
         }
@@ -148,15 +151,25 @@ public final class Simulation {
                 dropped.add(order);
                 continue;
             }
-            Account.Outcome outcome = account.fill(order, bar, terms.fill());
+            Known before = table.knownAt(terms.fill().costsKnownOn(bar));
+            Account.Outcome outcome = account.fill(order, bar, terms.fill(), before);
             if (outcome == Account.Outcome.RUIN) {
                 dropped.add(order);
                 ruin(bar);
             } else if (outcome == Account.Outcome.BLOCKED) {
                 pending.addFirst(order);
                 return;
+            } else if (outcome == Account.Outcome.PART) {
+                pending.addFirst(order.toHold(account.carried().orElseThrow()));
+                return;
             }
         }
+    }
+
+    private boolean dueAtOnce(int bar) {
+        return !pending.isEmpty()
+                && pending.getLast().decidedOn() == bar
+                && pending.getLast().dueOn() <= bar;
     }
 
     private boolean due(int bar) {
@@ -192,6 +205,7 @@ public final class Simulation {
         rows.cash[row] = account.cash();
         rows.interest[row] = account.interest();
         rows.cost[row] = account.cost();
+        rows.accrued(row, account.accruals());
         rows.turnover[row] = account.turnover();
         rows.switched[row] = change == Decision.Change.SWITCHED;
         Weights decided = target.orElseThrow();

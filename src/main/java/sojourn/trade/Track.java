@@ -16,6 +16,8 @@ public final class Track {
     private final int firstBar;
     private final Rows rows;
     private final List<Fill> fills;
+    private final List<LedgerEntry> accruals;
+    private final List<Hindrance> hindrances;
     private final List<Order> unfilled;
     private final List<Undecided> undecided;
     private final OptionalInt ruinedOn;
@@ -28,6 +30,8 @@ public final class Track {
             int firstBar,
             Rows rows,
             List<Fill> fills,
+            List<LedgerEntry> accruals,
+            List<Hindrance> hindrances,
             List<Order> unfilled,
             List<Undecided> undecided,
             OptionalInt ruinedOn,
@@ -38,6 +42,8 @@ public final class Track {
         this.firstBar = firstBar;
         this.rows = rows;
         this.fills = List.copyOf(fills);
+        this.accruals = List.copyOf(accruals);
+        this.hindrances = List.copyOf(hindrances);
         this.unfilled = List.copyOf(unfilled);
         this.undecided = List.copyOf(undecided);
         this.ruinedOn = ruinedOn;
@@ -132,12 +138,22 @@ public final class Track {
         return rows.targets[cell(bar, asset)];
     }
 
-    /** Interest of this bar, on the cash of the close before; money, negative if paid. */
+    /** Interest of this bar at the cash rate, on the cash of the close before; money, negative if paid. */
     public double interest(int bar) {
         return rows.interest[row(bar)];
     }
 
-    /** Commission and half-spread of this bar's fills, money, at least 0. */
+    /** What negative cash paid this bar above the cash rate, money, at least 0. */
+    public double marginInterest(int bar) {
+        return rows.at(rows.margin, row(bar));
+    }
+
+    /** What was paid this bar for what was held short at the close before, money, at least 0. */
+    public double borrowFee(int bar) {
+        return rows.at(rows.borrowFee, row(bar));
+    }
+
+    /** All charges of this bar's fills, money, at least 0. */
     public double cost(int bar) {
         return rows.cost[row(bar)];
     }
@@ -166,10 +182,15 @@ public final class Track {
 
     /** Every movement of cash, in order; made when asked for. */
     public List<LedgerEntry> ledger() {
-        return Ledger.of(this, writtenOff);
+        return Ledger.of(this, accruals, writtenOff);
     }
 
-    /** Orders that were never filled: due after the last bar, waiting for a price, replaced while waiting, or overtaken by ruin. */
+    /** What kept orders from filling as decided, bar by bar, in order. */
+    public List<Hindrance> hindrances() {
+        return hindrances;
+    }
+
+    /** Orders that were never filled, or not in full: due after the last bar, waiting for a price, replaced while waiting, or overtaken by ruin. */
     public List<Order> unfilled() {
         return unfilled;
     }
@@ -211,8 +232,11 @@ public final class Track {
         final double[] units;
         final double[] weights;
         final double[] targets;
+        final double[] margin;
+        final double[] borrowFee;
 
-        Rows(int bars, int assets) {
+        /** What holding costs has columns only if it can cost anything. */
+        Rows(int bars, int assets, boolean accruing) {
             this.wealth = new double[bars];
             this.cash = new double[bars];
             this.interest = new double[bars];
@@ -222,6 +246,19 @@ public final class Track {
             this.units = new double[bars * assets];
             this.weights = new double[bars * assets];
             this.targets = new double[bars * assets];
+            this.margin = new double[accruing ? bars : 0];
+            this.borrowFee = new double[accruing ? bars : 0];
+        }
+
+        void accrued(int row, Accruals accruals) {
+            if (margin.length > 0) {
+                margin[row] = accruals.margin();
+                borrowFee[row] = accruals.borrowFee();
+            }
+        }
+
+        double at(double[] column, int row) {
+            return column.length == 0 ? 0 : column[row];
         }
 
         int size() {

@@ -36,7 +36,24 @@ class MissingColumnsTest {
                 .isInstanceOf(Prepared.Ready.class);
     }
 
+    @Test
+    void impactOnAFileWithoutVolumesIsRefused() throws IOException {
+        String rule = "trade: {costs: {impact: {coefficient: 1}}}";
+        String rows = "date,open,high,low,close,volume\n2001-01-01,99,101,98,100,\n2001-01-02,100,102,99,101,";
+        Prepared refused = prepared(rows + "\n", rule);
+        assertThat(((Prepared.Unreadable) refused).problems())
+                .extracting(Problem::toString)
+                .containsExactly(
+                        "stocks.csv:1:1: stocks has no volume on any bar, and impact needs it; name the column under"
+                                + " prices (volume: ...), or trade without impact");
+        assertThat(prepared(rows + "5000\n", rule)).isInstanceOf(Prepared.Ready.class);
+    }
+
     private Prepared prepared(String prices) throws IOException {
+        return prepared(prices, "");
+    }
+
+    private Prepared prepared(String prices, String trade) throws IOException {
         Files.writeString(folder.resolve("stocks.csv"), prices);
         Problems problems = new Problems();
         Optional<StrategyFile> file = StrategyReader.parse("""
@@ -46,7 +63,7 @@ class MissingColumnsTest {
                 refit: {first-fit-after: 100, every: 50, seed: 7}
                 allocate: {blend: {weights: {calm: {stocks: 1}, stormy: {stocks: 0}}}}
                 judge: {buy-and-hold: {stocks: 1}}
-                """, folder, "strategy.yaml", problems);
+                """ + trade, folder, "strategy.yaml", problems);
         assertThat(problems.list()).isEmpty();
         return Prepared.of(file.orElseThrow());
     }

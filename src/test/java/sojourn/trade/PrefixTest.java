@@ -4,6 +4,8 @@ import static org.assertj.core.api.Assertions.assertThat;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
+import java.util.OptionalDouble;
 import java.util.function.Function;
 import org.junit.jupiter.api.Test;
 import sojourn.GivenPrices;
@@ -18,23 +20,84 @@ import sojourn.market.PriceTable;
 class PrefixTest {
     private static final long SEED = 77;
     private static final int BARS = 150;
-    private static final GivenPrices PRICES = GivenPrices.random(SEED, BARS, 2);
+    private static final double CAPITAL = 1_000_000;
+    private static final GivenPrices PRICES = GivenPrices.random(SEED, BARS, 2).withRandomVolumes(SEED, 20_000);
+    private static final Costs PLAIN = new Costs(5, 5);
+    private static final Costs BY_PAST_TRADING = new Costs(5, 2)
+            .withSpreadOf(new SpreadOfVolatility(0.1, 5))
+            .withImpact(new Impact(1, 4, 6, Optional.of(10.0)));
 
     @Test
     void cuttingTheFutureChangesNothingBeforeTheCut() {
         for (int delay : new int[] {0, 2}) {
-            assertThat(cutsThatDiffer(table -> Policies.stepAside(table.assets()), delay))
-                    .isEmpty();
-            assertThat(cutsThatDiffer(table -> Policies.mixed(table.assets()), delay))
-                    .isEmpty();
-            assertThat(cutsThatDiffer(table -> Policies.random(SEED, BARS, 2, 1.3), delay))
-                    .isEmpty();
+            for (Costs costs : List.of(PLAIN, BY_PAST_TRADING)) {
+                Terms terms = new Terms(new NextClose(delay), costs, CAPITAL);
+                assertThat(cutsThatDiffer(table -> Policies.stepAside(table.assets()), terms))
+                        .isEmpty();
+                assertThat(cutsThatDiffer(table -> Policies.mixed(table.assets()), terms))
+                        .isEmpty();
+                assertThat(cutsThatDiffer(table -> Policies.random(SEED, BARS, 2, 1.3), terms))
+                        .isEmpty();
+            }
+        }
+    }
+
+    @Test
+    void costsFromLaterTradingAreCaught() {
+        Function<PriceTable, Policy> policy = table -> Policies.random(SEED, BARS, 2, 1.3);
+        Function<PriceTable, Terms> leaky =
+                table -> new Terms(new CostsKnownLate(table.size()), BY_PAST_TRADING, CAPITAL);
+        assertThat(cutsThatDiffer(policy, leaky)).isNotEmpty();
+    }
+
+    /** What a fill costs comes from bars up to the one before: the volume of its own bar, and its close at an open, have no part. */
+    @Test
+    void theVolumeOfTheBarOfAFillHasNoPartInItsCost() {
+        Terms terms = new Terms(new NextClose(0), BY_PAST_TRADING, CAPITAL);
+        Function<PriceTable, Policy> policy = table -> Policies.random(SEED, BARS, 2, 1.3);
+        Track track = run(PRICES, policy, terms);
+        int bar = track.fills().get(track.fills().size() / 2).filledOn();
+        double[][] volumes = new double[2][];
+        PriceTable table = PRICES.table();
+        for (int asset = 0; asset < 2; asset++) {
+            volumes[asset] = new double[BARS];
+            for (int each = 0; each < BARS; each++) {
+                volumes[asset][each] = table.knownAt(each).volume(asset, each).orElseThrow();
+            }
+            volumes[asset][bar] *= 7;
+        }
+        Track other = run(PRICES.withVolumes(volumes), policy, terms);
+        assertThat(facts(other, bar + 1)).isEqualTo(facts(track, bar + 1));
+        assertThat(facts(other, BARS)).isNotEqualTo(facts(track, BARS));
+    }
+
+    /** Takes impact and half-spread from three bars after the fill, as far as there are any. */
+    private record CostsKnownLate(int bars) implements FillRule {
+        @Override
+        public int dueOn(int decidedOn) {
+            return decidedOn + 1;
+        }
+
+        @Override
+        public OptionalDouble price(FillPrices prices, int asset, int bar) {
+            return OptionalDouble.of(prices.close(asset, bar));
+        }
+
+        @Override
+        public int costsKnownOn(int bar) {
+            return Math.min(bar + 3, bars - 1);
+        }
+
+        @Override
+        public int barsToFirstReturn() {
+            return 2;
         }
     }
 
     @Test
     void aPolicyThatLooksOneBarAheadIsCaught() {
-        assertThat(cutsThatDiffer(PrefixTest::peeking, 0)).isNotEmpty();
+        assertThat(cutsThatDiffer(PrefixTest::peeking, new Terms(new NextClose(0), PLAIN, CAPITAL)))
+                .isNotEmpty();
     }
 
     /** All in if the next close is higher, which only someone with the fill prices can know. */
@@ -48,20 +111,30 @@ class PrefixTest {
         };
     }
 
-    private static List<Integer> cutsThatDiffer(Function<PriceTable, Policy> policy, int delay) {
-        Track whole = run(PRICES, policy, delay);
+    private static List<Integer> cutsThatDiffer(Function<PriceTable, Policy> policy, Terms terms) {
+        return cutsThatDiffer(policy, table -> terms);
+    }
+
+    private static List<Integer> cutsThatDiffer(
+            Function<PriceTable, Policy> policy, Function<PriceTable, Terms> terms) {
+        Track whole = run(PRICES, policy, terms.apply(PRICES.table()));
         List<Integer> differing = new ArrayList<>();
         for (int bars = whole.firstBar() + 1; bars < BARS; bars++) {
-            if (!facts(run(PRICES.first(bars), policy, delay), bars).equals(facts(whole, bars))) {
+            if (!facts(
+                            run(
+                                    PRICES.first(bars),
+                                    policy,
+                                    terms.apply(PRICES.first(bars).table())),
+                            bars)
+                    .equals(facts(whole, bars))) {
                 differing.add(bars);
             }
         }
         return differing;
     }
 
-    private static Track run(GivenPrices prices, Function<PriceTable, Policy> policy, int delay) {
+    private static Track run(GivenPrices prices, Function<PriceTable, Policy> policy, Terms terms) {
         PriceTable table = prices.table();
-        Terms terms = new Terms(new NextClose(delay), new Costs(5, 5), 1_000_000);
         return Simulation.run(table, Policies.signal(SEED, BARS), policy.apply(table), terms, 0)
                 .orElseThrow();
     }
@@ -74,6 +147,8 @@ class PrefixTest {
                     track.wealth(bar),
                     track.cash(bar),
                     track.interest(bar),
+                    track.marginInterest(bar),
+                    track.borrowFee(bar),
                     track.cost(bar),
                     track.turnover(bar),
                     track.switched(bar)));
@@ -84,6 +159,7 @@ class PrefixTest {
         track.fills().stream()
                 .filter(fill -> fill.filledOn() < bars)
                 .forEach(fill -> facts.addAll(List.of(fill, fill.because().sentence())));
+        track.hindrances().stream().filter(one -> one.bar() < bars).forEach(facts::add);
         track.ledger().stream().filter(entry -> entry.bar() < bars).forEach(facts::add);
         return facts;
     }

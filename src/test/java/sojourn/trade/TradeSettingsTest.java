@@ -36,6 +36,31 @@ class TradeSettingsTest {
     }
 
     @Test
+    void everyKindOfCostIsRead() {
+        TradeSettings read = read("""
+                costs:
+                  commission-bps: 5
+                  minimum-fee: 2
+                  fixed-fee: 1
+                  half-spread-bps: 2.5
+                  spread-by-volatility: {share: 0.05, bars: 10}
+                  stamp-duty-bps: 50
+                  impact: {coefficient: 0.8, volume-bars: 20, volatility-bars: 60, participation-percent: 10}
+                  borrow-percent-per-year: 1
+                  margin-percent-per-year: 1.5
+                """);
+        assertThat(read.costs())
+                .isEqualTo(new Costs(5, 2.5)
+                        .withFees(2, 1)
+                        .withSpreadOf(new SpreadOfVolatility(0.05, 10))
+                        .withStampDuty(50)
+                        .withImpact(new Impact(0.8, 20, 60, Optional.of(10.0)))
+                        .withFinancing(1, 1.5));
+        assertThat(read("costs: {impact: {}}").costs())
+                .isEqualTo(Costs.none().withImpact(new Impact(1, 21, 21, Optional.empty())));
+    }
+
+    @Test
     void everyImpossibleValueIsReportedAtItsPlace() {
         Problems problems = new Problems();
         assertThat(tryRead("""

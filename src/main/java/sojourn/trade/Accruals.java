@@ -1,0 +1,71 @@
+package sojourn.trade;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.OptionalInt;
+import sojourn.market.FillPrices;
+
+/** What holding brings and costs from one close to the next, besides interest at the cash rate. */
+final class Accruals {
+    private final FillPrices prices;
+    private final Costs costs;
+    private final List<LedgerEntry> entries = new ArrayList<>();
+    private double margin;
+    private double borrowFee;
+
+    Accruals(FillPrices prices, Costs costs) {
+        this.prices = prices;
+        this.costs = costs;
+    }
+
+    /**
+     * Takes one bar in: the margin on negative cash, then the fee on what is held short, both for the calendar days since the close
+     * before and on its values.
+     *
+     * @param cash at the close before
+     * @param units at the close before. Not modified.
+     * @return what cash gains
+     */
+    double on(int bar, double cash, double[] units) {
+        clear();
+        if (!costs.onHolding()) {
+            return 0;
+        }
+        margin = Math.max(0, -cash) * prices.interest(costs.marginPercentPerYear(), bar);
+        add(bar, LedgerKind.MARGIN_INTEREST, OptionalInt.empty(), -margin);
+        double rate = prices.interest(costs.borrowPercentPerYear(), bar);
+        for (int i = 0; i < units.length; i++) {
+            double fee = Math.max(0, -units[i]) * prices.close(i, bar - 1) * rate;
+            add(bar, LedgerKind.BORROW_FEE, OptionalInt.of(i), -fee);
+            borrowFee += fee;
+        }
+        return -margin - borrowFee;
+    }
+
+    /** Takes in a bar on which nothing is held. */
+    void clear() {
+        margin = 0;
+        borrowFee = 0;
+    }
+
+    private void add(int bar, LedgerKind kind, OptionalInt asset, double amount) {
+        if (amount != 0) {
+            entries.add(new LedgerEntry(bar, kind, asset, amount));
+        }
+    }
+
+    /** Paid on negative cash above the cash rate, this bar. */
+    double margin() {
+        return margin;
+    }
+
+    /** Paid for what is held short, this bar. */
+    double borrowFee() {
+        return borrowFee;
+    }
+
+    /** Every movement so far, in order. */
+    List<LedgerEntry> entries() {
+        return entries;
+    }
+}
