@@ -1,5 +1,6 @@
 package sojourn.regime;
 
+import java.util.Optional;
 import java.util.function.Predicate;
 
 /**
@@ -16,6 +17,8 @@ final class Ascent {
     private static final double SUFFICIENT = 1e-4;
 
     private static final int MOST_CUTS = 8;
+    /** Step of a difference of gradients, in standard errors of complete data. */
+    private static final double DIFFERENCE = 1e-3;
     /** Rounding error of a log-likelihood, relative to 1 + |l|. */
     private static final double ROUNDING = 1e-11;
 
@@ -43,6 +46,32 @@ final class Ascent {
         this.gradient = coordinates.gradient(place, start, objective.sums());
         this.curvature = new Curvature(coordinates.information(place, start, objective.sums()));
         this.fresh = true;
+    }
+
+    /**
+     * Learns the curvature where it stands from differences of the gradient, at one evaluation a coordinate: worth it close to the
+     * top, where it does not change on the way. Keeps what it has where that is no curvature of a top.
+     */
+    void observe() {
+        int size = place.length;
+        double[] information = coordinates.information(place, at, objective.sums());
+        double[] matrix = new double[size * size];
+        for (int i = 0; i < size; i++) {
+            double[] there = place.clone();
+            there[i] += DIFFERENCE / Math.sqrt(information[i]);
+            Parameters moved = coordinates.model(there, at);
+            objective.at(moved);
+            double[] slope = coordinates.gradient(there, moved, objective.sums());
+            for (int j = 0; j < size; j++) {
+                double half = 0.5 * (gradient[j] - slope[j]) / (there[i] - place[i]);
+                matrix[i * size + j] += half;
+                matrix[j * size + i] += half;
+            }
+        }
+        objective.at(at);
+        Optional<Curvature> observed = Curvature.of(matrix, size);
+        curvature = observed.orElse(curvature);
+        fresh = observed.isEmpty();
     }
 
     /**
@@ -113,6 +142,12 @@ final class Ascent {
         gradient = coordinates.gradient(place, at, objective.sums());
         curvature = new Curvature(coordinates.information(place, at, objective.sums()));
         fresh = true;
+    }
+
+    /** What is known of the surroundings of where it stands; the objective must have been last evaluated there. */
+    Landmark landmark(Climb.Summit summit) {
+        double[] information = coordinates.information(place, at, objective.sums());
+        return new Landmark(summit, coordinates, place, information, curvature);
     }
 
     /** Where it stands. */

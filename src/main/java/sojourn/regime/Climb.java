@@ -18,7 +18,7 @@ final class Climb {
     static final int MOST_EVALUATIONS = 2000;
 
     /** The fewest EM steps; three and more states have more tops close by. */
-    private static final int PLAIN_STEPS_OF_TWO = 10;
+    private static final int PLAIN_STEPS_OF_TWO = 5;
 
     private static final int PLAIN_STEPS_OF_MANY = 20;
     /** The same from the summit of a window of which this one is little changed. */
@@ -28,6 +28,8 @@ final class Climb {
     private static final double NEAR_OF_TWO = 1;
 
     private static final double NEAR_OF_MANY = 0.1;
+    /** Part of the gain of the step before, of two states, from which on EM's way is a long one along a ridge. */
+    private static final double SLOWING_OF_TWO = 0.5;
 
     /** Relative gain in likelihood that is worth a move to another initial distribution. */
     private static final double CORNER_GAIN = 1e-12;
@@ -44,9 +46,16 @@ final class Climb {
     private final EmissionFamily family;
     private final InitialDistribution initial;
     private final Optional<Landmark> landmark;
-    private final int plainSteps;
+    private final Origin origin;
     private Parameters at;
     private double reached;
+    private Optional<Ascent> last = Optional.empty();
+
+    /** Where a climb starts: the summit of a window of which this one is little changed, or not. */
+    private enum Origin {
+        BEFORE,
+        ANYWHERE
+    }
 
     private Climb(
             Parameters start,
@@ -54,13 +63,13 @@ final class Climb {
             EmissionFamily family,
             InitialDistribution initial,
             Optional<Landmark> landmark,
-            int plainSteps) {
+            Origin origin) {
         this.objective = new Objective(start, window, family, initial);
         this.maximisation = new Maximisation(family, initial);
         this.family = family;
         this.initial = initial;
         this.landmark = landmark;
-        this.plainSteps = plainSteps;
+        this.origin = origin;
         this.at = start.copy();
         this.reached = objective.at(at);
     }
@@ -80,17 +89,18 @@ final class Climb {
             EmissionFamily family,
             InitialDistribution initial,
             Optional<Landmark> landmark) {
-        return new Climb(start, window, family, ofChain(start, initial), landmark, plainSteps(start)).run();
+        return new Climb(start, window, family, ofChain(start, initial), landmark, Origin.ANYWHERE).run();
     }
 
-    /** Climbs from {@code start}, the summit of an earlier window; not modified. */
-    static Summit again(Parameters start, Window window, EmissionFamily family, InitialDistribution initial) {
+    /** Climbs from {@code start}, the summit of an earlier window; not modified. What it learns on the way leads other climbs. */
+    static Landmark again(Parameters start, Window window, EmissionFamily family, InitialDistribution initial) {
         InitialDistribution ofChain = ofChain(start, initial);
-        return new Climb(start, window, family, ofChain, Optional.empty(), PLAIN_STEPS_FROM_BEFORE).run();
-    }
-
-    private static int plainSteps(Parameters start) {
-        return start.states() == 2 ? PLAIN_STEPS_OF_TWO : PLAIN_STEPS_OF_MANY;
+        Climb climb = new Climb(start, window, family, ofChain, Optional.empty(), Origin.BEFORE);
+        Summit summit = climb.run();
+        Ascent last = climb.last
+                .filter(ascent -> ascent.parameters() == summit.parameters())
+                .orElseGet(climb::ascent);
+        return last.landmark(summit);
     }
 
     /** The weights of a mixture are always free. */
@@ -102,15 +112,7 @@ final class Climb {
         if (reached == Double.NEGATIVE_INFINITY) {
             throw new IllegalStateException("a start that makes the window impossible; this is a bug");
         }
-        double near = at.states() == 2 ? NEAR_OF_TWO : NEAR_OF_MANY;
-        double gain = Double.POSITIVE_INFINITY;
-        while (objective.evaluations() < MOST_EVALUATIONS
-                && !near(at, reached)
-                && (gain > near || objective.evaluations() < plainSteps)) {
-            double before = reached;
-            step();
-            gain = reached - before;
-        }
+        approach();
         boolean converged = near(at, reached) || ascend() || near(at, reached) || accelerate();
         if (near(at, reached)) {
             return landmark.orElseThrow().summit(objective.evaluations());
@@ -122,8 +124,31 @@ final class Climb {
         return new Summit(at, reached, least, objective.evaluations(), converged);
     }
 
+    /** Plain EM until it is clear which top it is going for. */
+    private void approach() {
+        double near = at.states() == 2 ? NEAR_OF_TWO : NEAR_OF_MANY;
+        double slowing = at.states() == 2 ? SLOWING_OF_TWO : 1;
+        double before = Double.POSITIVE_INFINITY;
+        double gain = Double.POSITIVE_INFINITY;
+        while (objective.evaluations() < MOST_EVALUATIONS
+                && !near(at, reached)
+                && (objective.evaluations() < plainSteps() || (gain > near && gain < slowing * before))) {
+            double low = reached;
+            step();
+            before = gain;
+            gain = reached - low;
+        }
+    }
+
+    private int plainSteps() {
+        if (origin == Origin.BEFORE) {
+            return PLAIN_STEPS_FROM_BEFORE;
+        }
+        return at.states() == 2 ? PLAIN_STEPS_OF_TWO : PLAIN_STEPS_OF_MANY;
+    }
+
     private boolean near(Parameters p, double logLikelihood) {
-        return landmark.isPresent() && landmark.get().nearTo(p, logLikelihood);
+        return landmark.isPresent() && landmark.get().nearTo(p, logLikelihood, objective.sums());
     }
 
     /** One EM step. */
@@ -149,7 +174,11 @@ final class Climb {
             } else if (corner > 0) {
                 return true;
             }
-            Ascent ascent = new Ascent(objective, family, at, reached, MOST_EVALUATIONS);
+            Ascent ascent = ascent();
+            if (origin == Origin.BEFORE && corner == 0) {
+                ascent.observe();
+            }
+            last = Optional.of(ascent);
             boolean converged = ascent.climb(a -> near(a.parameters(), a.logLikelihood()));
             arrive(ascent.parameters(), ascent.logLikelihood());
             if (!converged) {
@@ -157,6 +186,10 @@ final class Climb {
             }
         }
         return false;
+    }
+
+    private Ascent ascent() {
+        return new Ascent(objective, family, at, reached, MOST_EVALUATIONS);
     }
 
     /**

@@ -1,5 +1,8 @@
 package sojourn.regime;
 
+import java.util.Optional;
+import sojourn.numeric.Cholesky;
+
 /** The inverse of minus the matrix of second derivatives, learnt from gradients (BFGS; Nocedal and Wright 2006, Numerical Optimization, 6.1). */
 final class Curvature {
     private static final double LEAST = 1e-10;
@@ -14,6 +17,24 @@ final class Curvature {
         for (int i = 0; i < size; i++) {
             inverse[i * size + i] = 1 / diagonal[i];
         }
+    }
+
+    private Curvature(int size, double[] inverse) {
+        this.size = size;
+        this.inverse = inverse;
+    }
+
+    /** Of that matrix itself, row-major, not modified; empty where it is not positive definite. */
+    static Optional<Curvature> of(double[] matrix, int size) {
+        return Cholesky.of(matrix, size).map(factor -> {
+            double[] inverse = new double[size * size];
+            for (int i = 0; i < size; i++) {
+                double[] unit = new double[size];
+                unit[i] = 1;
+                System.arraycopy(factor.solve(unit), 0, inverse, i * size, size);
+            }
+            return new Curvature(size, inverse);
+        });
     }
 
     /** The Newton step up that gradient. */

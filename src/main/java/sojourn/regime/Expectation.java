@@ -26,7 +26,10 @@ interface Expectation {
         }
         Supplier<Expectation> any = () -> new ManyStateExpectation(states, window);
         return switch (states) {
-            case 2 -> new InTurn(List.of(() -> new TwoStateExpectation(window), any));
+            case 2 ->
+                window.size() < TwoStateExpectation.LEAST_ROWS
+                        ? any.get()
+                        : new InTurn(List.of(() -> new TwoStateExpectation(window), any));
             case 3 -> new InTurn(List.of(() -> new ThreeStateExpectation(window), any));
             case 4 -> new InTurn(List.of(() -> new FourStateExpectation(window), any));
             default -> any.get();

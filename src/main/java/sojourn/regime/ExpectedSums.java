@@ -34,6 +34,26 @@ final class ExpectedSums {
         logWeights = new double[states];
     }
 
+    /** The same with states in another order: state k of the result is state {@code order[k]} of this. Neither modified. */
+    ExpectedSums ordered(int[] order) {
+        ExpectedSums result = new ExpectedSums(order.length);
+        result.logLikelihood = logLikelihood;
+        for (int k = 0; k < order.length; k++) {
+            int from = order[k];
+            result.initial[k] = initial[from];
+            result.likelihoodFrom[k] = likelihoodFrom[from];
+            result.count[k] = count[from];
+            result.sum[k] = sum[from];
+            result.squares[k] = squares[from];
+            result.weights[k] = weights[from];
+            result.logWeights[k] = logWeights[from];
+            for (int j = 0; j < order.length; j++) {
+                result.transitions[k * order.length + j] = transitions[from * order.length + order[j]];
+            }
+        }
+        return result;
+    }
+
     /** Sets everything to 0. */
     void clear() {
         Arrays.fill(transitions, 0);

@@ -1,5 +1,6 @@
 package sojourn.regime;
 
+import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import sojourn.numeric.Check;
@@ -113,8 +114,13 @@ public final class Fitter {
         Fit.Search search =
                 new Fit.Search(best.evaluations(), ends.size(), agreeing(candidates, best), runnerUp(sound, best));
         Optional<RegimeModel> previous = request.previous().flatMap(Fit::model);
-        int[] order = Roles.order(Described.of(best.model(), request), previous);
+        int[] order = Roles.expected(best.model().emission());
         Described described = Described.of(best.model().ordered(order), request);
+        int[] roles = Roles.order(described, previous);
+        if (!Arrays.equals(roles, Roles.asTheyStand(roles.length))) {
+            order = Order.after(order, roles);
+            described = Described.of(best.model().ordered(order), request);
+        }
         List<String> events = StateEvents.of(described, previous);
         int refused = ends.size() - sound.size();
         if (refused > 0) {

@@ -17,6 +17,16 @@ final class Order {
         return result;
     }
 
+    /** The order that is {@code first} and then {@code second} of what that gave. Neither modified. */
+    static int[] after(int[] first, int[] second) {
+        check(second, first.length);
+        int[] both = new int[first.length];
+        for (int k = 0; k < both.length; k++) {
+            both[k] = first[second[k]];
+        }
+        return both;
+    }
+
     /** The rows of {@code table}, one a state, in that order, a new array. Neither modified. */
     static double[] applyToRows(int[] order, double[] table) {
         int n = order.length;

@@ -63,15 +63,14 @@ final class ScalarSearch implements WindowSearch {
     @Override
     public List<Supplier<SearchEnd>> starts(FitRequest request) {
         Starts starts = new Starts(settings, window);
-        Optional<Climb.Summit> first = starts.fromPrevious(request)
+        Optional<Landmark> first = starts.fromPrevious(request)
                 .map(start -> Climb.again(start, window, settings.emission(), settings.initial()));
-        Optional<Landmark> landmark = first.filter(this::sound)
-                .map(summit -> Landmark.of(summit, window, settings.emission(), settings.initial()));
+        Optional<Landmark> landmark = first.filter(known -> sound(known.summit()));
         List<Supplier<SearchEnd>> searches = new ArrayList<>();
         for (Parameters start : starts.cold(request)) {
             searches.add(() -> end(climb(start, landmark), settings.initial()));
         }
-        first.ifPresent(summit -> searches.add(() -> end(summit, settings.initial())));
+        first.ifPresent(known -> searches.add(() -> end(known.summit(), settings.initial())));
         return searches;
     }
 

@@ -23,10 +23,13 @@ final class Starts {
 
     private final FitSettings settings;
     private final Window window;
+    /** The observations that are there. */
+    private final double[] present;
 
     Starts(FitSettings settings, Window window) {
         this.settings = settings;
         this.window = window;
+        this.present = present(window);
     }
 
     /** All starts of that request, in the order in which ties are decided. */
@@ -78,13 +81,13 @@ final class Starts {
      */
     Parameters sorted() {
         boolean aroundZero = StrictMath.abs(window.center()) <= window.scale();
-        List<Integer> rows = presentRows();
-        double[] smooth = new double[rows.size()];
+        double[] values = present;
+        double[] smooth = new double[values.length];
         double sum = 0;
         for (int i = 0; i < smooth.length; i++) {
-            sum += aroundZero ? StrictMath.abs(value(rows.get(i))) : value(rows.get(i));
+            sum += aroundZero ? StrictMath.abs(values[i]) : values[i];
             if (i >= SMOOTHING) {
-                double left = value(rows.get(i - SMOOTHING));
+                double left = values[i - SMOOTHING];
                 sum -= aroundZero ? StrictMath.abs(left) : left;
             }
             smooth[i] = sum / StrictMath.min(i + 1, SMOOTHING);
@@ -96,25 +99,26 @@ final class Starts {
         for (int k = 0; k < states; k++) {
             double from = k == 0 ? Double.NEGATIVE_INFINITY : ascending[k * ascending.length / states];
             double to = k + 1 == states ? Double.POSITIVE_INFINITY : ascending[(k + 1) * ascending.length / states];
-            List<Integer> group = new ArrayList<>();
+            double[] group = new double[values.length];
+            int size = 0;
             for (int i = 0; i < smooth.length; i++) {
                 if (smooth[i] >= from && smooth[i] < to) {
-                    group.add(rows.get(i));
+                    group[size++] = values[i];
                 }
             }
-            emission(start, k, group.isEmpty() ? rows : group);
+            emission(start, k, size == 0 ? values : group, 0, size == 0 ? values.length : size);
         }
         return start;
     }
 
     /** Each state takes the moments of one randomly placed stretch of the window. */
     private Parameters fromStretches(RandomStream random) {
-        List<Integer> rows = presentRows();
-        int length = StrictMath.max(5, StrictMath.min(SMOOTHING * 3, rows.size() / (2 * settings.states())));
+        int rows = present.length;
+        int length = StrictMath.max(5, StrictMath.min(SMOOTHING * 3, rows / (2 * settings.states())));
         Parameters start = chain(0.8 + 0.19 * random.nextDouble());
         for (int k = 0; k < settings.states(); k++) {
-            int from = random.nextInt(StrictMath.max(1, rows.size() - length + 1));
-            emission(start, k, rows.subList(from, StrictMath.min(rows.size(), from + length)));
+            int from = random.nextInt(StrictMath.max(1, rows - length + 1));
+            emission(start, k, present, from, StrictMath.min(rows, from + length));
         }
         return start;
     }
@@ -125,13 +129,13 @@ final class Starts {
      * only find spikes inside a fat-tailed regime.)
      */
     private Parameters fromLongStretches(RandomStream random) {
-        List<Integer> rows = presentRows();
-        int longest = StrictMath.max(5, rows.size() / settings.states());
+        int rows = present.length;
+        int longest = StrictMath.max(5, rows / settings.states());
         int length = 5 + random.nextInt(StrictMath.max(1, longest - 4));
         Parameters start = chain(1 - 1.0 / StrictMath.max(5, length));
         for (int k = 0; k < settings.states(); k++) {
-            int from = random.nextInt(StrictMath.max(1, rows.size() - length + 1));
-            emission(start, k, rows.subList(from, StrictMath.min(rows.size(), from + length)));
+            int from = random.nextInt(StrictMath.max(1, rows - length + 1));
+            emission(start, k, present, from, StrictMath.min(rows, from + length));
         }
         return start;
     }
@@ -149,10 +153,9 @@ final class Starts {
 
     /** Each state takes one observation as its mean, and a variance between a hundredth and four times the window's. */
     private Parameters fromValues(RandomStream random) {
-        List<Integer> rows = presentRows();
         Parameters start = chain(0.5 + 0.49 * random.nextDouble());
         for (int k = 0; k < settings.states(); k++) {
-            double mean = value(rows.get(random.nextInt(rows.size())));
+            double mean = present[random.nextInt(present.length)];
             double size = StrictMath.exp(StrictMath.log(0.01) + random.nextDouble() * StrictMath.log(400));
             start.set(start.mean(k), settings.emission().estimatesMeans() ? mean : 0);
             start.set(start.variance(k), size);
@@ -208,15 +211,17 @@ final class Starts {
         return start;
     }
 
-    private void emission(Parameters start, int k, List<Integer> rows) {
+    /** Moments of the values from {@code from} on, up to {@code end} excluded. Not modified. */
+    private void emission(Parameters start, int k, double[] values, int from, int end) {
+        int size = end - from;
         double mean = 0;
-        for (int row : rows) {
-            mean += value(row) / rows.size();
+        for (int i = from; i < end; i++) {
+            mean += values[i] / size;
         }
         double center = settings.emission().estimatesMeans() ? mean : 0;
         double square = 0;
-        for (int row : rows) {
-            square += (value(row) - center) * (value(row) - center) / rows.size();
+        for (int i = from; i < end; i++) {
+            square += (values[i] - center) * (values[i] - center) / size;
         }
         start.set(start.mean(k), center);
         start.set(start.variance(k), StrictMath.max(LEAST_VARIANCE, square));
@@ -233,17 +238,13 @@ final class Starts {
         }
     }
 
-    private List<Integer> presentRows() {
-        List<Integer> rows = new ArrayList<>();
-        for (int t = 0; t < window.size(); t++) {
+    private static double[] present(Window window) {
+        double[] values = new double[window.count()];
+        for (int t = 0, next = 0; t < window.size(); t++) {
             if (window.present()[t] > 0) {
-                rows.add(t);
+                values[next++] = window.values()[t];
             }
         }
-        return rows;
-    }
-
-    private double value(int row) {
-        return window.values()[row];
+        return values;
     }
 }

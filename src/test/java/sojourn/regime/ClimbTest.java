@@ -117,7 +117,8 @@ class ClimbTest {
         Window window = Window.of(Observations.univariate(x), EmissionFamily.NORMAL);
         Starts starts = new Starts(settings, window);
         Climb.Summit known = Climb.from(starts.sorted(), window, EmissionFamily.NORMAL);
-        Landmark landmark = Landmark.of(known, window, EmissionFamily.NORMAL, InitialDistribution.FREE);
+        Landmark landmark = Climb.again(known.parameters(), window, EmissionFamily.NORMAL, InitialDistribution.FREE);
+        assertThat(landmark.summit().logLikelihood()).isCloseTo(known.logLikelihood(), within(1e-8));
         int saved = 0;
         for (Parameters start : starts.cold(Fixtures.request(x))) {
             Climb.Summit alone = Climb.from(start, window, EmissionFamily.NORMAL);
@@ -127,12 +128,34 @@ class ClimbTest {
             saved += alone.evaluations() - led.evaluations();
         }
         assertThat(saved).isPositive();
-        Parameters turned = known.parameters().ordered(new int[] {1, 0});
-        assertThat(landmark.nearTo(turned, known.logLikelihood())).isTrue();
-        Parameters moved = known.parameters().copy();
-        moved.set(moved.variance(0), 1.2 * moved.at(moved.variance(0)));
-        assertThat(landmark.nearTo(moved, known.logLikelihood())).isFalse();
-        assertThat(landmark.nearTo(turned, known.logLikelihood() + 1)).isFalse();
+    }
+
+    /** A parabola is believed near its top only, states in any order. */
+    @Test
+    void aPlaceIsNearOnlyIfItsSlopeLeadsToTheSummit() {
+        Window window = Window.of(Observations.univariate(OpenData.column(DAX, "log_return")), EmissionFamily.NORMAL);
+        FitSettings settings = new FitSettings(ModelKind.HIDDEN_MARKOV, 2, EmissionFamily.NORMAL, 1);
+        Climb.Summit known = Climb.from(new Starts(settings, window).sorted(), window, EmissionFamily.NORMAL);
+        Landmark landmark = Climb.again(known.parameters(), window, EmissionFamily.NORMAL, InitialDistribution.FREE);
+        Objective objective =
+                new Objective(known.parameters(), window, EmissionFamily.NORMAL, InitialDistribution.FREE);
+        Parameters summit = landmark.summit().parameters();
+        Parameters turned = summit.ordered(new int[] {1, 0});
+        assertThat(near(landmark, objective, turned, 0)).isTrue();
+        assertThat(near(landmark, objective, summit, 1)).isFalse();
+        assertThat(near(landmark, objective, moved(summit, 1.05), 0)).isTrue();
+        assertThat(near(landmark, objective, moved(summit, 2), 0)).isFalse();
+    }
+
+    private static Parameters moved(Parameters summit, double factor) {
+        Parameters moved = summit.copy();
+        moved.set(moved.variance(0), factor * moved.at(moved.variance(0)));
+        return moved;
+    }
+
+    private static boolean near(Landmark landmark, Objective objective, Parameters p, double higher) {
+        double logLikelihood = objective.at(p) + higher;
+        return landmark.nearTo(p, logLikelihood, objective.sums());
     }
 
     /** Log realised volatility does not lie around zero; sorted by size, two of its five starts agreed on a much lower maximum. */

@@ -105,7 +105,8 @@ class StationaryStartTest {
         Window window = Window.of(x, EmissionFamily.NORMAL_TIED);
         Parameters before = Fixtures.standardised(Fixtures.model(check), window);
         ExpectedSums sums = new ExpectedSums(2);
-        assertThat(new TwoStateExpectation(window).fill(before, sums)).isTrue();
+        assertThat(Expectation.of(ModelKind.HIDDEN_MARKOV, 2, window).fill(before, sums))
+                .isTrue();
         check.assertExpected("loglik_before", sums.logLikelihood - x.size() * StrictMath.log(window.scale()));
         check.assertExpected("occupancy", sums.count);
         RegimeModel after = new Maximisation(EmissionFamily.NORMAL_TIED)
