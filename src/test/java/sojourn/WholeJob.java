@@ -91,6 +91,7 @@ final class WholeJob {
                 strategy.calendar(),
                 strategy.cash(),
                 strategy.usedAssets(),
+                strategy.levels(),
                 strategy.regimes().given());
     }
 

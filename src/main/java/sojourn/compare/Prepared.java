@@ -111,6 +111,7 @@ public sealed interface Prepared {
                     strategy.calendar(),
                     strategy.cash(),
                     strategy.usedAssets(),
+                    strategy.levels(),
                     strategy.regimes().given());
             List<Observation> observed = strategy.regimes().observe();
             List<Problem> lacking = lacking(strategy, market.table());

@@ -53,6 +53,11 @@ public final class Known {
         return table.bars(asset).close().at(known(knownBar));
     }
 
+    /** Close of an asset, or of a series that is none, such as a rate, on a known bar; refuses an unknown name. */
+    public double close(String series, int knownBar) {
+        return table.closes(series).at(known(knownBar));
+    }
+
     /** Closes from the known bar {@code start} to the last known bar, a copy. */
     public double[] closes(int asset, int start) {
         return table.bars(asset).close().range(known(start), bar + 1);

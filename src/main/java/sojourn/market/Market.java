@@ -2,6 +2,9 @@ package sojourn.market;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Set;
+import java.util.SortedMap;
+import java.util.TreeMap;
 
 /**
  * What the market did, and what there is to say about the files that told it.
@@ -23,17 +26,37 @@ public record Market(PriceTable table, List<Finding> findings, List<InputFile> f
      * rates that leave a bar without one.
      */
     public static Market of(List<PriceSeries> series, Calendar calendar, CashRates cash) {
-        if (series.isEmpty()) {
-            throw new IllegalArgumentException("a market needs at least one series");
+        return of(series, Set.of(), calendar, cash);
+    }
+
+    /** The same where the series named in {@code levels} are no assets: they define common bars like the others. */
+    static Market of(List<PriceSeries> series, Set<String> levels, Calendar calendar, CashRates cash) {
+        if (series.stream().allMatch(one -> levels.contains(one.asset()))) {
+            throw new IllegalArgumentException("a market needs at least one asset");
         }
         CommonBars common = CommonBars.of(series, calendar);
         List<Finding> findings = new ArrayList<>();
         for (PriceSeries one : series) {
-            findings.addAll(SeriesFindings.of(one, calendar));
+            findings.addAll(
+                    levels.contains(one.asset())
+                            ? SeriesFindings.ofLevels(one, calendar)
+                            : SeriesFindings.of(one, calendar));
         }
         findings.addAll(common.findings());
-        PriceTable table = PriceTable.of(
-                common.axis(), series.stream().map(PriceSeries::asset).toList(), common.bars(), cash.on(common.axis()));
+        List<String> assets = new ArrayList<>();
+        List<PriceTable.Bars> bars = new ArrayList<>();
+        SortedMap<String, PriceTable.Column> others = new TreeMap<>();
+        for (int i = 0; i < series.size(); i++) {
+            String name = series.get(i).asset();
+            if (levels.contains(name)) {
+                others.put(name, common.bars().get(i).close());
+            } else {
+                assets.add(name);
+                bars.add(common.bars().get(i));
+            }
+        }
+        PriceTable table = PriceTable.of(common.axis(), assets, bars, cash.on(common.axis()))
+                .withLevels(others);
         return new Market(table, findings, List.of());
     }
 }

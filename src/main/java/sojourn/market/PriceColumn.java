@@ -21,6 +21,12 @@ record PriceColumn(String key, OptionalInt index, Bound bound) {
 
     /** What a number must keep to. */
     enum Bound {
+        ANY("") {
+            @Override
+            boolean allows(double number) {
+                return true;
+            }
+        },
         ABOVE_ZERO("is not above 0") {
             @Override
             boolean allows(double number) {

@@ -25,16 +25,17 @@ final class PriceFile {
     private final RangeCheck range = new RangeCheck();
     private final MissingValues missing = new MissingValues("close");
 
-    private PriceFile(CsvTable table, PriceSource source, BarLength rowLength, Faults faults) {
+    private PriceFile(CsvTable table, PriceSource source, SeriesKind kind, BarLength rowLength, Faults faults) {
         this.faults = faults;
         CsvColumns named = new CsvColumns(table, faults);
         int date = named.required("date", source.layout().date(), "date");
         this.close = new PriceColumn(
-                "close", OptionalInt.of(named.required("close", source.close(), "close")), Bound.ABOVE_ZERO);
-        this.open = new PriceColumn("open", named.optional("open", source.open()), Bound.ABOVE_ZERO);
-        this.high = new PriceColumn("high", named.optional("high", source.high()), Bound.ABOVE_ZERO);
-        this.low = new PriceColumn("low", named.optional("low", source.low()), Bound.ABOVE_ZERO);
-        this.volume = new PriceColumn("volume", named.optional("volume", source.volume()), Bound.NOT_BELOW_ZERO);
+                "close", OptionalInt.of(named.required("close", source.close(), "close")), kind.bound());
+        this.open = new PriceColumn("open", kind.read(named.optional("open", source.open())), Bound.ABOVE_ZERO);
+        this.high = new PriceColumn("high", kind.read(named.optional("high", source.high())), Bound.ABOVE_ZERO);
+        this.low = new PriceColumn("low", kind.read(named.optional("low", source.low())), Bound.ABOVE_ZERO);
+        this.volume =
+                new PriceColumn("volume", kind.read(named.optional("volume", source.volume())), Bound.NOT_BELOW_ZERO);
         this.dated = new DatedRows(date, source.layout().dateFormat(), rowLength, faults);
     }
 
@@ -42,12 +43,14 @@ final class PriceFile {
      * The series in {@code text}; empty if there is any fault. Each fault goes to {@code faults}, what is merely odd to
      * {@code findings}.
      *
+     * @param kind prices, or levels, of which closes alone are read
      * @param rowLength the period of one row
      */
     static Optional<PriceSeries> read(
             String asset,
             TextFile text,
             PriceSource source,
+            SeriesKind kind,
             BarLength rowLength,
             Faults faults,
             List<Finding> findings) {
@@ -56,7 +59,7 @@ final class PriceFile {
         if (table.isEmpty()) {
             return Optional.empty();
         }
-        PriceFile file = new PriceFile(table.get(), source, rowLength, faults);
+        PriceFile file = new PriceFile(table.get(), source, kind, rowLength, faults);
         if (!faults.none()) {
             return Optional.empty();
         }

@@ -7,6 +7,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.Set;
 import sojourn.document.Problems;
 
 /** The front door for files: reads every price file and the rates, and puts the prices on one calendar. */
@@ -34,33 +35,45 @@ public final class PriceReader {
      */
     public static Market read(
             Path folder, Map<String, PriceSource> sources, Calendar calendar, CashSource cash, List<String> used) {
-        return read(folder, sources, calendar, cash, used, Optional.empty());
+        return read(folder, sources, calendar, cash, used, Set.of(), Optional.empty());
     }
 
-    /** The same with probabilities of regimes that were computed elsewhere, if there are any. */
+    /**
+     * The same with probabilities of regimes that were computed elsewhere, if there are any.
+     *
+     * @param levels those of {@code used} that are no assets: numbers of any sign, of which only changes are taken
+     */
     public static Market read(
             Path folder,
             Map<String, PriceSource> sources,
             Calendar calendar,
             CashSource cash,
             List<String> used,
+            Set<String> levels,
             Optional<GivenColumns> given) {
         if (used.isEmpty() || !sources.keySet().containsAll(used)) {
             throw new IllegalArgumentException("used assets " + used + " must be some of " + sources.keySet());
         }
-        return new PriceReader(folder, calendar).market(sources, cash, used, given);
+        return new PriceReader(folder, calendar).market(sources, cash, used, levels, given);
     }
 
     private Market market(
-            Map<String, PriceSource> sources, CashSource cash, List<String> used, Optional<GivenColumns> wanted) {
+            Map<String, PriceSource> sources,
+            CashSource cash,
+            List<String> used,
+            Set<String> levels,
+            Optional<GivenColumns> wanted) {
         Map<String, PriceSeries> series = new LinkedHashMap<>();
-        sources.forEach((asset, source) -> prices(asset, source).ifPresent(read -> series.put(asset, read)));
+        sources.forEach((asset, source) -> {
+            SeriesKind kind = levels.contains(asset) ? SeriesKind.LEVELS : SeriesKind.PRICES;
+            prices(asset, source, kind).ifPresent(read -> series.put(asset, read));
+        });
         Optional<CashRates> rates = rates(cash);
         Optional<GivenRows> given = wanted.flatMap(this::given);
         problems.throwIfAny();
         series.keySet().stream().filter(asset -> !used.contains(asset)).forEach(this::notUsed);
         series.keySet().retainAll(used);
-        Market market = Market.of(List.copyOf(series.values()), calendar, rates.orElseThrow());
+        Market market = Market.of(List.copyOf(series.values()), levels, calendar, rates.orElseThrow());
         findings.addAll(market.findings());
         PriceTable table = market.table();
         given.ifPresent(rows -> findings.addAll(rows.findings(table.axis())));
@@ -85,12 +98,12 @@ public final class PriceReader {
         return read;
     }
 
-    private Optional<PriceSeries> prices(String asset, PriceSource source) {
+    private Optional<PriceSeries> prices(String asset, PriceSource source, SeriesKind kind) {
         String name = source.layout().csv();
         Faults faults = new Faults("prices of '" + asset + "'");
         Optional<TextFile> text = TextFile.read(folder, name, faults);
-        Optional<PriceSeries> read =
-                text.flatMap(found -> PriceFile.read(asset, found, source, calendar.rowLength(), faults, findings));
+        Optional<PriceSeries> read = text.flatMap(
+                found -> PriceFile.read(asset, found, source, kind, calendar.rowLength(), faults, findings));
         faults.addTo(problems);
         read.ifPresent(series -> files.add(new InputFile(
                 asset,

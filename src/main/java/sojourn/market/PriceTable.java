@@ -1,8 +1,11 @@
 package sojourn.market;
 
 import java.util.Arrays;
+import java.util.Collections;
 import java.util.List;
 import java.util.Optional;
+import java.util.SortedMap;
+import java.util.TreeMap;
 import java.util.function.UnaryOperator;
 import sojourn.numeric.Check;
 
@@ -16,18 +19,19 @@ public final class PriceTable {
     private final Bars[] bars;
     private final CashReturns cash;
     private final Optional<GivenByBar> given;
+    private final SortedMap<String, Column> levels;
     private final Known[] known;
 
     /**
-     * One asset's bars, a value a bar in each column. Closes are positive and finite everywhere; the other columns are there
-     * or not as a whole, and NaN on a bar means the file had no value there.
+     * One series' bars, a value a bar in each column. Closes are finite everywhere, those of an asset above 0; the other columns are
+     * there or not as a whole, and NaN on a bar means the file had no value there.
      */
     public record Bars(
             Column close, Optional<Column> open, Optional<Column> high, Optional<Column> low, Optional<Column> volume) {
-        /** Refuses columns of different lengths and closes that are not positive and finite. */
+        /** Refuses columns of different lengths and closes that are not finite. */
         public Bars {
             for (int bar = 0; bar < close.size(); bar++) {
-                Check.above(close.at(bar), 0, "close of bar", bar);
+                Check.finite(close.at(bar), "close of bar", bar);
             }
             for (Optional<Column> other : List.of(open, high, low, volume)) {
                 if (other.isPresent() && other.get().size() != close.size()) {
@@ -39,7 +43,16 @@ public final class PriceTable {
 
         /** Closes alone. */
         public static Bars ofCloses(double... closes) {
-            return new Bars(Column.of(closes), Optional.empty(), Optional.empty(), Optional.empty(), Optional.empty());
+            return new Bars(Column.of(closes), Optional.empty(), Optional.empty(), Optional.empty(), Optional.empty())
+                    .prices();
+        }
+
+        /** The same, refused unless every close is above 0. */
+        private Bars prices() {
+            for (int bar = 0; bar < close.size(); bar++) {
+                Check.above(close.at(bar), 0, "close of bar", bar);
+            }
+            return this;
         }
 
         /** Every column converted alike. */
@@ -83,12 +96,19 @@ public final class PriceTable {
         }
     }
 
-    private PriceTable(TimeAxis axis, List<String> assets, Bars[] bars, CashReturns cash, Optional<GivenByBar> given) {
+    private PriceTable(
+            TimeAxis axis,
+            List<String> assets,
+            Bars[] bars,
+            CashReturns cash,
+            Optional<GivenByBar> given,
+            SortedMap<String, Column> levels) {
         this.axis = axis;
         this.assets = assets;
         this.bars = bars;
         this.cash = cash;
         this.given = given;
+        this.levels = Collections.unmodifiableSortedMap(new TreeMap<>(levels));
         this.known = new Known[axis.size()];
         Arrays.setAll(known, bar -> new Known(this, bar));
     }
@@ -99,6 +119,7 @@ public final class PriceTable {
             throw new IllegalArgumentException(assets.size() + " names for " + bars.size() + " series");
         }
         for (Bars one : bars) {
+            one.prices();
             if (one.close().size() != axis.size()) {
                 throw new IllegalArgumentException(
                         "a series of " + one.close().size() + " bars on a calendar of " + axis.size());
@@ -107,13 +128,20 @@ public final class PriceTable {
         if (cash.size() != axis.size()) {
             throw new IllegalArgumentException("cash has " + cash.size() + " bars, the calendar " + axis.size());
         }
-        return new PriceTable(axis, List.copyOf(assets), bars.toArray(Bars[]::new), cash, Optional.empty());
+        return new PriceTable(
+                axis, List.copyOf(assets), bars.toArray(Bars[]::new), cash, Optional.empty(), new TreeMap<>());
     }
 
     /** The same with probabilities of regimes that were computed elsewhere, those in force at each close. */
     PriceTable withGiven(GivenByBar probabilities) {
         Check.within(probabilities.bars(), size(), size(), "bars of the given probabilities");
-        return new PriceTable(axis, assets, bars, cash, Optional.of(probabilities));
+        return new PriceTable(axis, assets, bars, cash, Optional.of(probabilities), levels);
+    }
+
+    /** The same with series that are no assets, of any sign: nobody holds them and no return is taken of them. */
+    PriceTable withLevels(SortedMap<String, Column> named) {
+        named.values().forEach(one -> Check.within(one.size(), size(), size(), "bars of a level"));
+        return new PriceTable(axis, assets, bars, cash, given, named);
     }
 
     /** Number of bars. */
@@ -129,6 +157,11 @@ public final class PriceTable {
     /** Asset names, in the order of the strategy file. */
     public List<String> assets() {
         return assets;
+    }
+
+    /** Names of the series that are no assets, in alphabetical order. */
+    public List<String> levels() {
+        return List.copyOf(levels.keySet());
     }
 
     /** The index of an asset's name; refuses an unknown one. */
@@ -159,6 +192,11 @@ public final class PriceTable {
 
     Bars bars(int asset) {
         return bars[asset];
+    }
+
+    /** The closes of an asset or a level. */
+    Column closes(String name) {
+        return Optional.ofNullable(levels.get(name)).orElseGet(() -> bars[asset(name)].close());
     }
 
     CashReturns cash() {

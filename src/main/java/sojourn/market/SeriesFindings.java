@@ -32,6 +32,13 @@ final class SeriesFindings {
         return List.copyOf(findings.found);
     }
 
+    /** Of levels only gaps and rows that are no days: a rate may stand still for weeks, and leaps are no returns. */
+    static List<Finding> ofLevels(PriceSeries series, Calendar calendar) {
+        SeriesFindings findings = new SeriesFindings(series, calendar);
+        findings.gaps(findings.spacing().orElse(calendar.rowLength()));
+        return List.copyOf(findings.found);
+    }
+
     /** Rows said to be days of which no period holds two are bars already; the length that they have then. */
     private Optional<BarLength> spacing() {
         if ((calendar.rows() == Rows.BARS && calendar.bars() != BarLength.DAILY) || series.size() < 3) {

@@ -8,6 +8,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
+import java.util.TreeSet;
 import sojourn.allocate.Limits;
 import sojourn.allocate.Rule;
 import sojourn.allocate.Rules;
@@ -110,13 +111,10 @@ public record Strategy(
 
     /** The assets that are observed, held or compared with, in the order of {@code prices}; they define the common bars. */
     public List<String> usedAssets() {
-        Set<String> named = new LinkedHashSet<>();
+        Set<String> named = assetsWithReturns();
         for (Observation observation : regimes.observe()) {
             named.add(observation.asset());
         }
-        named.add(regimes.orderedBy());
-        named.addAll(rule.namedAssets());
-        named.addAll(judge.buyAndHold().keySet());
         List<String> used = new ArrayList<>();
         for (String asset : prices.keySet()) {
             if (named.contains(asset)) {
@@ -132,5 +130,25 @@ public record Strategy(
                 .filter(asset ->
                         rule.namedAssets().contains(asset) || judge.buyAndHold().containsKey(asset))
                 .toList();
+    }
+
+    /** Used series of which nobody takes a return, such as rates: they are no assets, and may be at or below 0. */
+    public Set<String> levels() {
+        Set<String> levels = new TreeSet<>(usedAssets());
+        levels.removeAll(assetsWithReturns());
+        return levels;
+    }
+
+    private Set<String> assetsWithReturns() {
+        Set<String> named = new LinkedHashSet<>();
+        for (Observation observation : regimes.observe()) {
+            if (observation.takesReturns()) {
+                named.add(observation.asset());
+            }
+        }
+        named.add(regimes.orderedBy());
+        named.addAll(rule.namedAssets());
+        named.addAll(judge.buyAndHold().keySet());
+        return named;
     }
 }

@@ -6,7 +6,7 @@ import sojourn.market.Known;
 
 /**
  * close_t - close_{t-1}, in the unit of the series: for what is quoted in points rather than as a price, like rates and spreads;
- * none on the first bar.
+ * none on the first bar. A series that nothing else uses may be at or below 0.
  *
  * @param asset the series' name
  */
@@ -24,8 +24,12 @@ public record Change(String asset) implements Observation {
         if (t == 0) {
             return OptionalDouble.empty();
         }
-        int index = known.assets().indexOf(asset);
-        return OptionalDouble.of(known.close(index, t) - known.close(index, t - 1));
+        return OptionalDouble.of(known.close(asset, t) - known.close(asset, t - 1));
+    }
+
+    @Override
+    public boolean takesReturns() {
+        return false;
     }
 
     @Override

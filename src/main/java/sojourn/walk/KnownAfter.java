@@ -56,6 +56,11 @@ public record KnownAfter(Observation observation, int bars) implements Observati
     }
 
     @Override
+    public boolean takesReturns() {
+        return observation.takesReturns();
+    }
+
+    @Override
     public int barsLate() {
         return bars + observation.barsLate();
     }

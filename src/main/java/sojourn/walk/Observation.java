@@ -48,6 +48,11 @@ public interface Observation {
         return true;
     }
 
+    /** Whether its series must be prices, above 0; other series may be levels of any sign, as long as nobody takes a return of them. */
+    default boolean takesReturns() {
+        return true;
+    }
+
     /** How many bars late it is known; its asset is as late as the earliest of the observations of it. */
     default int barsLate() {
         return 0;
@@ -61,6 +66,9 @@ public interface Observation {
     /** What it reads and no bar of the table has, so that it would be missing throughout. */
     default List<BarColumn> lacking(PriceTable table) {
         List<BarColumn> lacking = new ArrayList<>(reads());
+        if (lacking.isEmpty()) {
+            return lacking;
+        }
         int index = table.asset(asset());
         Known all = table.knownAt(table.size() - 1);
         for (int bar = 0; bar < table.size() && !lacking.isEmpty(); bar++) {

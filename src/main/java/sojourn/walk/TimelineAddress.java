@@ -35,7 +35,8 @@ public final class TimelineAddress {
         int beside = observed.stream()
                 .mapToInt(one -> one.reads().size() + (one.fromPrices() ? 0 : 1))
                 .sum();
-        ByteBuffer row = ByteBuffer.allocate(Long.BYTES * (2 + table.assets().size() + beside));
+        ByteBuffer row = ByteBuffer.allocate(
+                Long.BYTES * (2 + table.assets().size() + table.levels().size() + beside));
         for (int bar = 0; bar <= lastBar; bar++) {
             Known known = table.knownAt(bar);
             row.clear();
@@ -43,11 +44,14 @@ public final class TimelineAddress {
             for (int asset = 0; asset < table.assets().size(); asset++) {
                 row.putLong(Double.doubleToLongBits(known.close(asset, bar)));
             }
+            for (String level : table.levels()) {
+                row.putLong(Double.doubleToLongBits(known.close(level, bar)));
+            }
             for (Observation one : observed) {
-                int asset = table.asset(one.asset());
                 one.reads()
-                        .forEach(column -> row.putLong(Double.doubleToLongBits(
-                                column.of(known, asset, known.bar()).orElse(Double.NaN))));
+                        .forEach(column -> row.putLong(
+                                Double.doubleToLongBits(column.of(known, table.asset(one.asset()), known.bar())
+                                        .orElse(Double.NaN))));
                 if (!one.fromPrices()) {
                     row.putLong(Double.doubleToLongBits(one.at(known).orElse(Double.NaN)));
                 }

@@ -9,6 +9,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.Set;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 
@@ -169,6 +170,7 @@ class GivenFileTest {
                 Calendar.DAILY,
                 CashSource.NOTHING,
                 List.of("stocks"),
+                Set.of(),
                 Optional.of(columns));
     }
 

@@ -62,7 +62,14 @@ class PrefixTest {
     private static PriceSeries read(List<String> lines) {
         TextFile text = new TextFile("stocks.csv", String.join("\n", lines), "");
         Faults faults = new Faults("prices of 'stocks'");
-        return PriceFile.read("stocks", text, PriceSource.of("stocks.csv"), BarLength.DAILY, faults, new ArrayList<>())
+        return PriceFile.read(
+                        "stocks",
+                        text,
+                        PriceSource.of("stocks.csv"),
+                        SeriesKind.PRICES,
+                        BarLength.DAILY,
+                        faults,
+                        new ArrayList<>())
                 .orElseThrow();
     }
 
