@@ -41,6 +41,7 @@ public final class Warnings {
                 if (one.file().strategy().regimes().given().isPresent()) {
                     told(shared, COMPUTED_ELSEWHERE, one);
                 }
+                one.file().strategy().neverHolds().ifPresent(why -> told(shared, why, one));
                 if (one.file().strategy().hypothesis().isEmpty()) {
                     told(
                             shared,

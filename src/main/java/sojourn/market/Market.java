@@ -32,7 +32,7 @@ public record Market(PriceTable table, List<Finding> findings, List<InputFile> f
     /** The same where the series named in {@code levels} are no assets: they define common bars like the others. */
     static Market of(List<PriceSeries> series, Set<String> levels, Calendar calendar, CashRates cash) {
         if (series.stream().allMatch(one -> levels.contains(one.asset()))) {
-            throw new IllegalArgumentException("a market needs at least one asset");
+            throw new IllegalArgumentException("a market needs at least one series");
         }
         CommonBars common = CommonBars.of(series, calendar);
         List<Finding> findings = new ArrayList<>();

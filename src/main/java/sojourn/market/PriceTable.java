@@ -41,18 +41,19 @@ public final class PriceTable {
             }
         }
 
-        /** Closes alone. */
+        /** Closes alone, those of an asset. */
         public static Bars ofCloses(double... closes) {
-            return new Bars(Column.of(closes), Optional.empty(), Optional.empty(), Optional.empty(), Optional.empty())
-                    .prices();
+            for (int bar = 0; bar < closes.length; bar++) {
+                Check.above(closes[bar], 0, "close of bar", bar);
+            }
+            return new Bars(Column.of(closes), Optional.empty(), Optional.empty(), Optional.empty(), Optional.empty());
         }
 
-        /** The same, refused unless every close is above 0. */
-        private Bars prices() {
+        /** Refuses closes that are not those of an asset. */
+        private void refuseLevels() {
             for (int bar = 0; bar < close.size(); bar++) {
                 Check.above(close.at(bar), 0, "close of bar", bar);
             }
-            return this;
         }
 
         /** Every column converted alike. */
@@ -119,7 +120,7 @@ public final class PriceTable {
             throw new IllegalArgumentException(assets.size() + " names for " + bars.size() + " series");
         }
         for (Bars one : bars) {
-            one.prices();
+            one.refuseLevels();
             if (one.close().size() != axis.size()) {
                 throw new IllegalArgumentException(
                         "a series of " + one.close().size() + " bars on a calendar of " + axis.size());

@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import java.util.stream.Collectors;
+import java.util.stream.Stream;
 import sojourn.archive.Caution;
 import sojourn.compare.Prepared;
 import sojourn.document.Problem;
@@ -63,7 +64,9 @@ public final class PlanText {
         line(
                 "Bars",
                 table.size() + " common " + table.barLength().word() + " bars of "
-                        + String.join(", ", table.assets()) + ", " + last.date(0) + " to " + last.date() + "; "
+                        + Stream.concat(table.assets().stream(), table.levels().stream())
+                                .collect(Collectors.joining(", "))
+                        + ", " + last.date(0) + " to " + last.date() + "; "
                         + (int) table.barLength().periodsPerYear() + " count as a year");
         line("Watches", GaugeText.watches(strategy.regimes()));
         strategy.regimes()
@@ -92,6 +95,7 @@ public final class PlanText {
         for (Finding finding : ready.market().findings()) {
             found.add(finding.toString());
         }
+        ready.file().strategy().neverHolds().ifPresent(found::add);
         found.addAll(GaugeText.findings(ready.file().strategy().regimes()));
         return found;
     }

@@ -10,6 +10,7 @@ import java.util.Optional;
 import java.util.Set;
 import java.util.TreeSet;
 import sojourn.allocate.Limits;
+import sojourn.allocate.MeanVariance;
 import sojourn.allocate.Rule;
 import sojourn.allocate.Rules;
 import sojourn.document.Field;
@@ -19,6 +20,7 @@ import sojourn.market.Calendar;
 import sojourn.market.CashSource;
 import sojourn.market.PriceSource;
 import sojourn.measure.JudgeSettings;
+import sojourn.regime.EmissionFamily;
 import sojourn.trade.TradeSettings;
 import sojourn.walk.Observation;
 import sojourn.walk.RefitSettings;
@@ -137,6 +139,15 @@ public record Strategy(
         Set<String> levels = new TreeSet<>(usedAssets());
         levels.removeAll(assetsWithReturns());
         return levels;
+    }
+
+    /** Why the rule can never hold anything, a sentence; empty where it can. */
+    public Optional<String> neverHolds() {
+        return rule instanceof MeanVariance && regimes.emission().equals(EmissionFamily.NORMAL_ZERO_MEAN)
+                ? Optional.of("the rule will hold nothing: mean-variance weighs expected returns over cash, and with"
+                        + " normal-zero-mean every regime's mean is taken to be what cash earns; set emission: normal, or choose"
+                        + " another rule")
+                : Optional.empty();
     }
 
     private Set<String> assetsWithReturns() {
