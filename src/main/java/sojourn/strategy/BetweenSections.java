@@ -19,6 +19,7 @@ import sojourn.market.PriceSource;
 import sojourn.walk.Observation;
 import sojourn.walk.RefitSettings;
 import sojourn.walk.RegimeSettings;
+import sojourn.walk.StateNames;
 
 /**
  * Faults that only show when two sections are held side by side: a name that another section should declare, weights beyond the
@@ -37,7 +38,7 @@ final class BetweenSections {
         this.document = document;
         this.assets = sound("/prices", PriceSource.SECTION).map(prices -> List.copyOf(prices.keySet()));
         this.regimes = sound("/regimes", RegimeSettings.SHAPE);
-        this.states = sound("/regimes/states", RegimeSettings.STATE_NAMES);
+        this.states = sound("/regimes/states", StateNames.SHAPE);
         this.rule = sound("/allocate", Rules.SHAPE);
         this.limits =
                 document.at("/limits").isEmpty() ? Optional.of(Limits.longOnly()) : sound("/limits", Limits.SHAPE);

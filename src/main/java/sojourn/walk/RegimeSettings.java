@@ -47,18 +47,9 @@ public record RegimeSettings(
         Optional<String> orderBy,
         Optional<FixedParameters> fixed,
         Particulars particulars) {
-    private static final int MOST_STATES = 6;
-
     /** Reads the list {@code observe}. */
     public static final Shape<List<Observation>> OBSERVATIONS =
             Shapes.list(Observation.shape(), 1, FitSettings.MOST_SERIES).refuse(RegimeSettings::observedTwice);
-
-    /** Reads the list {@code states}. */
-    public static final Shape<List<String>> STATE_NAMES = Shapes.list(
-                    Shapes.textLike("[a-z][a-z0-9_]*", "a name of lower-case letters, digits and underscores"),
-                    1,
-                    MOST_STATES)
-            .refuse(RegimeSettings::namedTwice);
 
     private static final Field<ModelKind> MODEL =
             Field.defaulted("model", Shapes.word(models()), "hidden-markov", "the kind of regime model");
@@ -67,7 +58,7 @@ public record RegimeSettings(
             OBSERVATIONS,
             "what the model sees at each close, e.g. log-return of an asset; up to six series, seen together");
     private static final Field<List<String>> STATES =
-            Field.required("states", STATE_NAMES, "names of the regimes, from lowest to highest volatility");
+            Field.required("states", StateNames.SHAPE, "names of the regimes, from lowest to highest volatility");
     private static final Field<Double> DEGREES_OF_FREEDOM =
             Field.required("degrees-of-freedom", FixedParameters.TAILS, "of every regime, fixed instead of estimated");
     private static final Field<Double> STUDENT_T = Field.required(
@@ -123,7 +114,7 @@ public record RegimeSettings(
             "probabilities computed elsewhere, in place of a model; marked so on every output, for how they were computed is not"
                     + " audited");
     private static final Field<List<String>> GIVEN_STATES = Field.required(
-            "states", STATE_NAMES, "names of the regimes, which are columns of the file of probabilities");
+            "states", StateNames.SHAPE, "names of the regimes, which are columns of the file of probabilities");
     private static final Field<String> GIVEN_ORDER_BY = Field.required(
             "order-by",
             Shapes.text(),
@@ -259,15 +250,6 @@ public record RegimeSettings(
                 .findFirst()
                 .map(one -> new Refusal(
                         "", one.inWords() + " is observed twice, and twice the same is no more", "leave one out"));
-    }
-
-    private static Optional<Refusal> namedTwice(List<String> states) {
-        Set<String> seen = new HashSet<>();
-        return states.stream()
-                .filter(name -> !seen.add(name))
-                .findFirst()
-                .map(name ->
-                        new Refusal("", "two regimes have the name '" + name + "'", "give each a name of its own"));
     }
 
     private static OptionalDouble number(Optional<Double> written) {

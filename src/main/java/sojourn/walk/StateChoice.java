@@ -45,7 +45,7 @@ public record StateChoice(List<List<String>> regimes, By by) {
                     + " so far of each number's own forecasts, one bar ahead");
     private static final Field<List<List<String>>> STATES = Field.required(
             "states",
-            Shapes.list(RegimeSettings.STATE_NAMES, 2, FitSettings.MOST_STATES).refuse(StateChoice::asMany),
+            Shapes.list(StateNames.SHAPE, 2, FitSettings.MOST_STATES).refuse(StateChoice::asMany),
             "the numbers of regimes to choose among, each as the list of its regimes' names out of the 'states' above, e.g."
                     + " [[all], [calm, stormy]]");
 
