@@ -4,7 +4,6 @@ import com.fasterxml.jackson.databind.node.ArrayNode;
 import com.fasterxml.jackson.databind.node.JsonNodeFactory;
 import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.util.List;
-import java.util.Map;
 import sojourn.document.JsonText;
 import sojourn.measure.CalendarTable;
 import sojourn.measure.Drawdown;
@@ -23,45 +22,40 @@ public final class MeasuresFile {
 
     private MeasuresFile() {}
 
-    /**
-     * The text of the file.
-     *
-     * @param strategy what the variant came to
-     * @param yardsticks what each yardstick came to, by column name
-     * @param absent why other yardsticks that were asked for are undefined, by column name
-     * @param byRegime the variant's returns by regime
-     * @param regimes names of the regimes
-     * @param parameters whether the regime model was fitted or declared
-     * @param barsPerYear as declared by the length of the bars
-     */
-    public static String of(
-            ComparisonRow.Judged strategy,
-            Map<String, ComparisonRow.Judged> yardsticks,
-            Map<String, Measured.Undefined> absent,
-            RegimeTable byRegime,
-            List<String> regimes,
-            ComparisonRow.Parameters parameters,
-            double barsPerYear) {
+    private static final String PARTS =
+            "Parts of the difference to buy-and-hold that add up to it, bar by bar: exposure (M - g'), what the strategy's mean weights held"
+                    + " through every bar would have gained less buy-and-hold's price gains; timing (g - M), its own price gains less"
+                    + " that; cash, its interest less buy-and-hold's; costs, buy-and-hold's less its own. Fractions of wealth at the close"
+                    + " before, linked by (ln(1 + r) - ln(1 + r')) / (r - r') and scaled to the difference.";
+
+    /** The text of the file. */
+    public static String of(VariantMeasures all) {
         ObjectNode root = JSON.objectNode();
         root.put("caution", Caution.TEXT);
+        ComparisonRow.Judged strategy = all.strategy();
         ObjectNode window = root.putObject("window");
         window.put("from", strategy.from().toString());
         window.put("to", strategy.to().toString());
         window.put("bars", strategy.bars());
         root.put("outcome", strategy.outcome());
-        root.put("parameters", parameters.word());
+        root.put("parameters", all.parameters().word());
         root.set("strategy", measures(strategy));
         root.set("worst_drawdown", drawdown(strategy.scorecard().drawdown()));
-        root.set("by_regime", byRegime(byRegime, regimes));
+        ObjectNode difference = root.putObject("difference_to_buy_and_hold");
+        difference.set("growth_per_year", DifferenceJson.of(all.differencePerYear()));
+        difference.set("total_return", DifferenceJson.of(all.differenceOverTheWindow()));
+        all.randomSwitches().ifPresent(switches -> root.set("random_switcher", DifferenceJson.of(switches)));
+        root.set("by_regime", byRegime(all.byRegime(), all.regimes()));
         root.set("by_year", periods(strategy.scorecard().calendar().years()));
         root.set("by_month", periods(strategy.scorecard().calendar().months()));
         ObjectNode against = root.putObject("yardsticks");
-        yardsticks.forEach((name, judged) -> against.set(name, measures(judged)));
-        absent.forEach((name, none) -> against.set(name, measured(none)));
-        root.put("bars_per_year", barsPerYear);
+        all.yardsticks().forEach((name, judged) -> against.set(name, measures(judged)));
+        all.absent().forEach((name, none) -> against.set(name, measured(none)));
+        root.put("bars_per_year", all.barsPerYear());
         root.put("symbols", SYMBOLS);
         root.set("definitions", definitions());
         root.set("yardstick_definitions", yardsticks());
+        root.put("difference_definition", PARTS);
         return JsonText.indented(root);
     }
 

@@ -37,6 +37,15 @@ record Alongside<K>(Map<K, Track> tracks, Map<K, Measured.Undefined> absent) {
         return new Alongside<>(more, absent);
     }
 
+    /** And others. */
+    Alongside<K> and(Alongside<K> others) {
+        Map<K, Track> more = new LinkedHashMap<>(tracks);
+        Map<K, Measured.Undefined> fewer = new LinkedHashMap<>(absent);
+        more.putAll(others.tracks());
+        fewer.putAll(others.absent());
+        return new Alongside<>(more, fewer);
+    }
+
     /** And one that did not. */
     Alongside<K> without(K key, Measured.Undefined because) {
         Map<K, Measured.Undefined> more = new LinkedHashMap<>(absent);

@@ -7,6 +7,7 @@ import java.nio.file.Path;
 import java.util.OptionalDouble;
 import sojourn.archive.Caution;
 import sojourn.archive.ComparisonRow;
+import sojourn.archive.DifferenceJson;
 import sojourn.document.JsonText;
 import sojourn.measure.Measure;
 import sojourn.measure.Unit;
@@ -32,6 +33,13 @@ public final class ComparisonJson {
             node.put("outcome", row.outcome());
             node.put("reason", row.reason());
             row.judged().ifPresent(judged -> add(node, judged));
+        }
+        ObjectNode differences = root.putObject("differences_to_buy_and_hold");
+        ObjectNode switchers = root.putObject("random_switchers");
+        for (Judgement one : compared.ranked()) {
+            String name = one.run().file().slug();
+            differences.set(name, DifferenceJson.of(one.difference().perYear()));
+            one.randomSwitches().ifPresent(switches -> switchers.set(name, DifferenceJson.of(switches)));
         }
         return JsonText.indented(root);
     }

@@ -6,9 +6,15 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Objects;
+import java.util.Optional;
 import sojourn.archive.ComparisonRow;
+import sojourn.market.FillPrices;
+import sojourn.market.PriceTable;
+import sojourn.measure.Attribution;
 import sojourn.measure.EvaluatedPath;
+import sojourn.measure.GrowthDifference;
 import sojourn.measure.Measured;
+import sojourn.measure.RandomSwitches;
 import sojourn.measure.RegimeTable;
 import sojourn.measure.Scorecard;
 import sojourn.measure.Yardstick;
@@ -23,6 +29,8 @@ import sojourn.walk.Reading;
  * @param yardsticks the yardsticks' measures, by column name, in the order they are shown
  * @param absent why other yardsticks that were asked for are not judged, by column name
  * @param afterTheFact tracks of yardsticks that need the whole window, by column name
+ * @param randomSwitches where it falls among random switchers, if that was asked for and can be told
+ * @param difference where its difference to buy-and-hold comes from
  * @param byRegime the variant's returns by the regime that was most likely at the close before
  */
 public record Judgement(
@@ -31,6 +39,8 @@ public record Judgement(
         Map<String, ComparisonRow.Judged> yardsticks,
         Map<String, Measured.Undefined> absent,
         Map<String, Track> afterTheFact,
+        Optional<RandomSwitches> randomSwitches,
+        Difference difference,
         RegimeTable byRegime) {
     private static final Measured.Undefined RUINED_BEFORE =
             new Measured.Undefined(Measured.Reason.RUIN, "it was ruined before the window begins and had nothing left");
@@ -47,11 +57,14 @@ public record Judgement(
     }
 
     static Judgement of(Run.Traded run, Window window) {
-        WindowPath paths = new WindowPath(run.ready().market().table(), window);
+        PriceTable table = run.ready().market().table();
+        WindowPath paths = new WindowPath(table, window);
         EvaluatedPath own = paths.of(run.track());
         EvaluatedPath held = paths.of(run.buyAndHold());
+        Yardsticks runner = new Yardsticks(run.ready(), run.timeline(), run.track());
+        RandomDraws drawn = runner.randomDraws(window, paths, own, held);
         Alongside<String> afterTheFact =
-                new Yardsticks(run.ready(), run.timeline(), run.track()).afterTheFact(run.buyAndHold(), window);
+                runner.afterTheFact(run.buyAndHold(), window).and(drawn.beside());
         Map<String, Track> tracks = new LinkedHashMap<>();
         Map<String, Measured.Undefined> absent = new LinkedHashMap<>();
         run.causal().forEach((yardstick, track) -> tracks.put(yardstick.column(), track));
@@ -72,7 +85,23 @@ public record Judgement(
                 yardsticks,
                 absent,
                 afterTheFact.tracks(),
+                drawn.switches(),
+                Difference.of(run.track(), run.buyAndHold(), table.fillPrices(), window),
                 byRegime(run, window, own.returns()));
+    }
+
+    /**
+     * The difference to buy-and-hold in parts.
+     *
+     * @param overTheWindow of total returns
+     * @param perYear of growth per year
+     */
+    public record Difference(Attribution overTheWindow, Attribution perYear) {
+        private static Difference of(Track own, Track held, FillPrices prices, Window window) {
+            return new Difference(
+                    GrowthDifference.overTheWindow(own, held, prices, window.base(), window.last()),
+                    GrowthDifference.perYear(own, held, prices, window.base(), window.last()));
+        }
     }
 
     private static ComparisonRow.Judged judged(EvaluatedPath path, EvaluatedPath held, Track track) {

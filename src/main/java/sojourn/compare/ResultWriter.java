@@ -11,6 +11,7 @@ import sojourn.archive.ResultFolder;
 import sojourn.archive.RunFacts;
 import sojourn.archive.TimelineFiles;
 import sojourn.archive.TradeFiles;
+import sojourn.archive.VariantMeasures;
 import sojourn.document.YamlText;
 import sojourn.market.TimeAxis;
 import sojourn.walk.Observation;
@@ -77,13 +78,16 @@ public final class ResultWriter {
         }
         folder.write(
                 base + "measures.json",
-                MeasuresFile.of(
+                MeasuresFile.of(new VariantMeasures(
                         one.strategy(),
                         one.yardsticks(),
                         one.absent(),
+                        one.randomSwitches(),
+                        one.difference().overTheWindow(),
+                        one.difference().perYear(),
                         one.byRegime(),
                         run.timeline().regimes(),
                         Compared.parameters(run),
-                        axis.bars().periodsPerYear()));
+                        axis.bars().periodsPerYear())));
     }
 }

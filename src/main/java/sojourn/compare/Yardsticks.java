@@ -7,6 +7,7 @@ import sojourn.allocate.Pacing;
 import sojourn.allocate.Policy;
 import sojourn.allocate.Weights;
 import sojourn.market.PriceTable;
+import sojourn.measure.EvaluatedPath;
 import sojourn.measure.Measured;
 import sojourn.measure.SameVolatility;
 import sojourn.measure.Yardstick;
@@ -77,6 +78,16 @@ final class Yardsticks {
             beside = sameVolatility(beside, buyAndHold, window);
         }
         return beside;
+    }
+
+    /** What the strategy did at random times, if that is asked for; {@code own} and {@code held} over the window. */
+    RandomDraws randomDraws(Window window, WindowPath paths, EvaluatedPath own, EvaluatedPath held) {
+        if (!asked(Yardstick.RANDOM_SWITCHER)) {
+            return RandomDraws.none();
+        }
+        Decided decided = new Decided(table, timeline, file.trade(), strategy, window);
+        RandomSwitcher switcher = RandomSwitcher.of(file, table.assets(), decided, strategy);
+        return RandomDraws.of(switcher, policy -> started(policy, terms), paths, own, held);
     }
 
     private boolean asked(Yardstick yardstick) {

@@ -4,6 +4,7 @@ import java.util.Arrays;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Optional;
+import java.util.function.Supplier;
 import java.util.function.ToDoubleFunction;
 import sojourn.inference.Moments;
 import sojourn.numeric.CompensatedSum;
@@ -18,12 +19,12 @@ final class PathFacts {
     private final double[] returns;
     private final Moments moments;
     private final Drawdown drawdown;
-    private final CalendarTable calendar;
+    private final Supplier<CalendarTable> calendar;
     private final Measured growthPerYear;
     private final Measured buyAndHoldGrowthPerYear;
     private final Measured sharpe;
 
-    PathFacts(EvaluatedPath path, EvaluatedPath buyAndHold, Drawdown drawdown, CalendarTable calendar) {
+    PathFacts(EvaluatedPath path, EvaluatedPath buyAndHold, Drawdown drawdown, Supplier<CalendarTable> calendar) {
         this.path = path;
         wealth = path.wealth();
         returns = path.returns();
@@ -44,7 +45,7 @@ final class PathFacts {
     }
 
     CalendarTable calendar() {
-        return calendar;
+        return calendar.get();
     }
 
     Measured totalReturn() {

@@ -2,8 +2,10 @@ package sojourn.measure;
 
 import java.util.Collections;
 import java.util.EnumMap;
+import java.util.List;
 import java.util.Map;
 import java.util.Objects;
+import java.util.function.Supplier;
 import sojourn.numeric.Check;
 
 /**
@@ -25,33 +27,52 @@ public final class Scorecard {
 
     /** The measures of a path held against buy-and-hold over the same dates; other dates are refused. */
     public static Scorecard of(EvaluatedPath path, EvaluatedPath buyAndHold) {
+        Drawdown drawdown = Drawdown.of(path);
+        CalendarTable calendar = CalendarTable.of(path);
+        List<Measure> all = List.of(Measure.values());
+        return new Scorecard(measured(all, path, buyAndHold, drawdown, () -> calendar), drawdown, calendar);
+    }
+
+    /** A few of the same measures, for paths that are many. */
+    public static Map<Measure, Measured> some(List<Measure> wanted, EvaluatedPath path, EvaluatedPath buyAndHold) {
+        return measured(wanted, path, buyAndHold, Drawdown.of(path), () -> CalendarTable.of(path));
+    }
+
+    private static Map<Measure, Measured> measured(
+            List<Measure> wanted,
+            EvaluatedPath path,
+            EvaluatedPath buyAndHold,
+            Drawdown drawdown,
+            Supplier<CalendarTable> calendar) {
         Check.that(
                 path.dates().equals(buyAndHold.dates()),
                 "the path and buy-and-hold do not share their dates: " + span(path) + " and " + span(buyAndHold));
-        Drawdown drawdown = Drawdown.of(path);
-        CalendarTable calendar = CalendarTable.of(path);
         Map<Measure, Measured> measures = new EnumMap<>(Measure.class);
         if (path.bars() == 0) {
-            for (Measure measure : Measure.values()) {
-                measures.put(measure, Measured.tooFew(0, 1));
-            }
+            wanted.forEach(measure -> measures.put(measure, Measured.tooFew(0, 1)));
         } else {
             PathFacts facts = new PathFacts(path, buyAndHold, drawdown, calendar);
-            for (Measure measure : Measure.values()) {
-                measures.put(measure, measured(measure, path, facts));
-            }
+            wanted.forEach(measure -> measures.put(measure, measured(measure, path, facts)));
         }
-        return new Scorecard(measures, drawdown, calendar);
+        return measures;
     }
 
     private static Measured measured(Measure measure, EvaluatedPath path, PathFacts facts) {
-        if (measure.unit().annualised() && path.calendarDays() < DAYS_OF_A_YEAR) {
-            return Measured.undefined(
-                    Measured.Reason.UNDER_ONE_YEAR,
-                    "the window spans " + path.calendarDays() + " calendar days, and nothing is annualised under "
-                            + DAYS_OF_A_YEAR);
+        if (measure.unit().annualised() && isUnderOneYear(path.calendarDays())) {
+            return underOneYear(path.calendarDays());
         }
         return measure.of(facts);
+    }
+
+    static boolean isUnderOneYear(long calendarDays) {
+        return calendarDays < DAYS_OF_A_YEAR;
+    }
+
+    static Measured.Undefined underOneYear(long calendarDays) {
+        return new Measured.Undefined(
+                Measured.Reason.UNDER_ONE_YEAR,
+                "the window spans " + calendarDays + " calendar days, and nothing is annualised under "
+                        + DAYS_OF_A_YEAR);
     }
 
     /** What one measure came to. */

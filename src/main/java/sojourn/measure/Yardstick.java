@@ -33,7 +33,13 @@ public enum Yardstick {
     VOLATILITY_TARGET(
             "Buy-and-hold's mix, scaled within the limits so that its standard deviation of the last 21 bars comes to that of all bars so"
                     + " far, with the strategy's decision bars, band, costs and fills.",
-            Knowledge.CAUSAL);
+            Knowledge.CAUSAL),
+    /** The strategy's changes at random times. */
+    RANDOM_SWITCHER(
+            "999 draws that do what the strategy did at other times, at its costs and fills: of a switch, complete spells in and complete"
+                    + " spells out are each put in a random order and take turns, the first and the last spell stay; of any other rule,"
+                    + " the decisions are moved round by a random number of places. Known only after the fact.",
+            Knowledge.AFTER_THE_FACT);
 
     /** Whether a yardstick could have been traded. */
     public enum Knowledge {

@@ -15,7 +15,6 @@ import sojourn.compare.Compared;
 import sojourn.compare.Judgement;
 import sojourn.compare.Run;
 import sojourn.measure.Measure;
-import sojourn.measure.Yardstick;
 
 /** A comparison as a terminal shows it, at most 100 columns wide: caution, risk and return, what it took, failures. */
 public final class ComparisonText {
@@ -30,9 +29,8 @@ public final class ComparisonText {
             text.append(headline(compared)).append('\n');
             text.append(riskAndReturn(compared)).append('\n');
             text.append(whatItTook(compared)).append('\n');
-            if (compared.ranked().stream().anyMatch(one -> one.yardsticks().size() > 1)) {
-                text.append(againstSameExposure(compared)).append('\n');
-            }
+            text.append(DifferenceText.of(compared)).append('\n');
+            text.append(YardstickText.of(compared));
             text.append(marked(compared));
         }
         if (compared.ranked().size() == 1) {
@@ -154,37 +152,7 @@ public final class ComparisonText {
                         0);
     }
 
-    private static String againstSameExposure(Compared compared) {
-        Grid grid = new Grid(
-                List.of("Growth and Sharpe beside", "growth", "same exp.", "so far", "Sharpe", "same exp.", "so far"));
-        for (Judgement one : compared.ranked()) {
-            Judged own = one.strategy();
-            grid.add(List.of(
-                    "  " + named(one),
-                    Figures.percent(own.get(Measure.GROWTH_PER_YEAR)),
-                    of(one, Yardstick.SAME_EXPOSURE, Measure.GROWTH_PER_YEAR),
-                    of(one, Yardstick.SAME_EXPOSURE_SO_FAR, Measure.GROWTH_PER_YEAR),
-                    Figures.ratio(own.get(Measure.SHARPE)),
-                    of(one, Yardstick.SAME_EXPOSURE, Measure.SHARPE),
-                    of(one, Yardstick.SAME_EXPOSURE_SO_FAR, Measure.SHARPE)));
-        }
-        return grid.text()
-                + Lines.wrapped(
-                        "same exp.: a constant mix at the strategy's average weights, same costs, known only after the fact; so far:"
-                                + " at its mean weights up to each close. A claim of timing must beat these, not only buy-and-hold.",
-                        0);
-    }
-
-    private static String of(Judgement one, Yardstick yardstick, Measure measure) {
-        Map<String, Judged> yardsticks = one.yardsticks();
-        Judged judged = yardsticks.get(yardstick.column());
-        if (judged == null) {
-            return Figures.NONE;
-        }
-        return measure == Measure.SHARPE ? Figures.ratio(judged.get(measure)) : Figures.percent(judged.get(measure));
-    }
-
-    private static String named(Judgement one) {
+    static String named(Judgement one) {
         return one.run().file().slug() + mark(one);
     }
 
