@@ -25,7 +25,7 @@ final class DifferenceText {
                 + Lines.wrapped(
                         "vs hold is the sum of: exposure, what the strategy's average weights held all the time would have gained less"
                                 + " buy-and-hold's gains; timing, what it gained by holding more or less than that average when it did;"
-                                + " cash, its interest less buy-and-hold's; costs, what its trades cost more.",
+                                + " cash, its interest less buy-and-hold's; costs, what trading and borrowing cost it more.",
                         0);
     }
 }

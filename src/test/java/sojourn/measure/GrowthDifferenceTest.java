@@ -89,6 +89,28 @@ class GrowthDifferenceTest {
         assertThat(sum(yearly)).isCloseTo(perYear, within(EXACT));
     }
 
+    @Test
+    void everyKindOfCostIsAPartOfItsOwn() {
+        PriceTable table = GivenPrices.random(31, 500, 2).table();
+        Costs all = COSTS.withFees(0, 25).withStampDuty(10).withFinancing(2, 1.5);
+        Track own = run(table, random(31), all);
+        Track held = run(table, new HoldFromStart(Weights.of(0.6, 0.4)), all);
+        Attribution parts = GrowthDifference.overTheWindow(own, held, table.fillPrices(), BASE, 499);
+        assertThat(parts.costs())
+                .containsOnlyKeys(
+                        LedgerKind.MARGIN_INTEREST,
+                        LedgerKind.BORROW_FEE,
+                        LedgerKind.COMMISSION,
+                        LedgerKind.FIXED_FEE,
+                        LedgerKind.HALF_SPREAD,
+                        LedgerKind.STAMP_DUTY);
+        assertThat(parts.costs().values())
+                .allSatisfy(paid -> assertThat(paid.number().orElseThrow()).isNegative());
+        assertThat(sum(parts)).isCloseTo(parts.difference().number().orElseThrow(), within(EXACT));
+        assertThat(parts.difference().number().orElseThrow())
+                .isCloseTo(own.wealth(499) / own.wealth(BASE) - held.wealth(499) / held.wealth(BASE), within(EXACT));
+    }
+
     private static double cost(Attribution parts, LedgerKind kind) {
         return Optional.ofNullable(parts.costs().get(kind))
                 .orElseThrow()
