@@ -51,9 +51,20 @@ class ArchitectureTest {
         table.put("archive", stored);
         table.put("compare", compared);
         table.put("evidence", questioned);
-        table.put("report", and(questioned, "evidence"));
+        table.put("latest", and(questioned, "evidence"));
+        table.put("report", and(questioned, "evidence", "latest"));
         table.put(
-                "cli", List.of("document", "market", "world", "strategy", "archive", "compare", "evidence", "report"));
+                "cli",
+                List.of(
+                        "document",
+                        "market",
+                        "world",
+                        "strategy",
+                        "archive",
+                        "compare",
+                        "evidence",
+                        "latest",
+                        "report"));
         return table;
     }
 

@@ -62,6 +62,10 @@ final class Hysteresis implements Mechanism {
 
     @Override
     public String name(int state) {
+        return inWords(state);
+    }
+
+    static String inWords(int state) {
         return state == OUT ? "out" : "in";
     }
 

@@ -37,6 +37,11 @@ public sealed interface Rule permits Switch, Table, Blend, Sizing {
     /** Whether it has states. */
     Motion motion();
 
+    /** A state in words, for a rule that has states. */
+    default String state(int state, List<String> regimes) {
+        return regimes.get(state);
+    }
+
     /** Every set of weights written in the rule, by its JSON pointer from {@code allocate}: "/switch/in". In the order written. */
     Map<String, Map<String, Double>> statedWeights();
 

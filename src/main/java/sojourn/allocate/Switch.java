@@ -119,6 +119,11 @@ public record Switch(
     }
 
     @Override
+    public String state(int state, List<String> regimes) {
+        return Hysteresis.inWords(state);
+    }
+
+    @Override
     public Map<String, Map<String, Double>> statedWeights() {
         Map<String, Map<String, Double>> stated = new LinkedHashMap<>();
         stated.put("/switch/in", in);

@@ -43,6 +43,8 @@ public final class Shell {
         line.addSubcommand(new CompareCommand(console));
         line.addSubcommand(new CheckCommand(console));
         line.addSubcommand(new RegimesCommand(console));
+        line.addSubcommand(new LatestCommand(console));
+        line.addSubcommand(new TraceCommand(console));
         line.addSubcommand(new SchemaCommand(console));
         line.addSubcommand(new InventCommand(console));
         line.setOut(out);

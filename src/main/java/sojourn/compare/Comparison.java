@@ -10,6 +10,7 @@ import java.util.OptionalInt;
 import java.util.function.IntConsumer;
 import sojourn.document.InputException;
 import sojourn.document.Problem;
+import sojourn.market.PriceTable;
 import sojourn.market.TimeAxis;
 import sojourn.measure.Measure;
 import sojourn.regime.StartRunner;
@@ -130,14 +131,31 @@ public final class Comparison {
         }
     }
 
+    /**
+     * The timeline of one strategy over {@code table}, its own or a part of it; the starts of each fit are shared out among as many
+     * threads as there are workers.
+     */
+    public RegimeTimeline timeline(Prepared.Ready ready, PriceTable table) {
+        progress.begin("walking 1 timeline", table.size());
+        try (ThreadedStarts starts = new ThreadedStarts(workers.threads())) {
+            return walk(ready, table, starts);
+        } finally {
+            progress.end();
+        }
+    }
+
     private RegimeTimeline walk(Prepared.Ready ready, StartRunner starts) {
+        return walk(ready, ready.market().table(), starts);
+    }
+
+    private RegimeTimeline walk(Prepared.Ready ready, PriceTable table, StartRunner starts) {
         IntConsumer tell = bar -> {
             if ((bar + 1) % PROGRESS_EVERY_BARS == 0) {
                 progress.advance(PROGRESS_EVERY_BARS);
             }
         };
         return Walk.forward(
-                ready.market().table(),
+                table,
                 ready.file().strategy().regimes(),
                 ready.file().strategy().refit(),
                 starts,

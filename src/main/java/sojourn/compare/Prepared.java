@@ -35,7 +35,7 @@ public sealed interface Prepared {
      */
     record Ready(StrategyFile file, Market market, String timelineKey) implements Prepared {
         /** What the strategy decides by. */
-        RulePolicy policy() {
+        public RulePolicy policy() {
             Strategy strategy = file.strategy();
             return RulePolicy.of(
                     strategy.rule(),
@@ -48,7 +48,7 @@ public sealed interface Prepared {
         }
 
         /** Digest of what was read, by asset and {@code cash}. */
-        Map<String, String> contents() {
+        public Map<String, String> contents() {
             Map<String, String> contents = new LinkedHashMap<>();
             for (InputFile input : market.files()) {
                 contents.put(input.role(), input.contentDigest());

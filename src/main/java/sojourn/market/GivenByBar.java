@@ -1,5 +1,6 @@
 package sojourn.market;
 
+import java.util.Arrays;
 import java.util.OptionalDouble;
 import sojourn.numeric.Check;
 
@@ -18,6 +19,16 @@ final class GivenByBar {
     /** {@code byBar} is bars × states, row-major, and counts from {@code firstBar} on. Copied; not modified. */
     static GivenByBar of(int states, int firstBar, double[] byBar) {
         return new GivenByBar(states, firstBar, byBar.clone());
+    }
+
+    /** Over so many bars: cut, or the last row in force going on. */
+    GivenByBar over(int bars) {
+        double[] other = Arrays.copyOf(byBar, bars * states);
+        for (int cell = byBar.length; cell < other.length; cell++) {
+            other[cell] = other[cell - states];
+        }
+        int last = bars() - 1;
+        return new GivenByBar(states, last < firstBar ? bars : firstBar, other);
     }
 
     int bars() {

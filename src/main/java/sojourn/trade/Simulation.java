@@ -92,6 +92,7 @@ public final class Simulation {
                 account.accruals().entries(),
                 account.hindrances(),
                 unfilled(),
+                ruinedOn.isPresent() ? List.of() : List.copyOf(pending),
                 undecided,
                 ruinedOn,
                 account.writtenOff(),

@@ -19,6 +19,7 @@ public final class Track {
     private final List<LedgerEntry> accruals;
     private final List<Hindrance> hindrances;
     private final List<Order> unfilled;
+    private final List<Order> waiting;
     private final List<Undecided> undecided;
     private final OptionalInt ruinedOn;
     private final double writtenOff;
@@ -33,6 +34,7 @@ public final class Track {
             List<LedgerEntry> accruals,
             List<Hindrance> hindrances,
             List<Order> unfilled,
+            List<Order> waiting,
             List<Undecided> undecided,
             OptionalInt ruinedOn,
             double writtenOff,
@@ -45,6 +47,7 @@ public final class Track {
         this.accruals = List.copyOf(accruals);
         this.hindrances = List.copyOf(hindrances);
         this.unfilled = List.copyOf(unfilled);
+        this.waiting = List.copyOf(waiting);
         this.undecided = List.copyOf(undecided);
         this.ruinedOn = ruinedOn;
         this.writtenOff = writtenOff;
@@ -193,6 +196,11 @@ public final class Track {
     /** Orders that were never filled, or not in full: due after the last bar, waiting for a price, replaced while waiting, or overtaken by ruin. */
     public List<Order> unfilled() {
         return unfilled;
+    }
+
+    /** Orders that still wait after the last bar, the oldest first: some of the unfilled ones, none after ruin. */
+    public List<Order> waiting() {
+        return waiting;
     }
 
     /** Closes at which a decision was due and there were no weights, also before the first decision; in order. */
