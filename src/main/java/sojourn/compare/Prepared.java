@@ -48,7 +48,7 @@ public sealed interface Prepared {
         }
 
         /** Digest of what was read, by asset and {@code cash}. */
-        public Map<String, String> contents() {
+        Map<String, String> contents() {
             Map<String, String> contents = new LinkedHashMap<>();
             for (InputFile input : market.files()) {
                 contents.put(input.role(), input.contentDigest());

@@ -76,6 +76,9 @@ final class TippingText {
         };
         return "Assumed: the next bar is of " + next.date() + "," + others
                 + " prices run straight from the last close to the next (so high and low are those two), and cash earns what"
-                + " it earns now." + refit;
+                + " it earns now." + refit
+                + (latest.holdings().isPresent()
+                        ? " Weights are those that the simulation holds, not those of your holdings."
+                        : "");
     }
 }
