@@ -21,20 +21,37 @@ public final class GivenPrices {
     private final double[][] closes;
     private final double[] cash;
     private final Optional<double[][]> volumes;
+    private final Optional<double[][]> dividends;
+    private final Optional<double[][]> splits;
 
     private GivenPrices(
-            List<LocalDate> dates, double[][] opens, double[][] closes, double[] cash, Optional<double[][]> volumes) {
+            List<LocalDate> dates,
+            double[][] opens,
+            double[][] closes,
+            double[] cash,
+            Optional<double[][]> volumes,
+            Optional<double[][]> dividends,
+            Optional<double[][]> splits) {
         this.dates = dates;
         this.opens = opens;
         this.closes = closes;
         this.cash = cash;
         this.volumes = volumes;
+        this.dividends = dividends;
+        this.splits = splits;
+    }
+
+    private GivenPrices(List<LocalDate> dates, double[][] opens, double[][] closes, double[] cash) {
+        this(dates, opens, closes, cash, Optional.empty(), Optional.empty(), Optional.empty());
+    }
+
+    private GivenPrices with(double[][] otherOpens, double[] earned, Optional<double[][]> otherVolumes) {
+        return new GivenPrices(dates, otherOpens, closes, earned, otherVolumes, dividends, splits);
     }
 
     /** Closes by asset; opens are the same; cash earns nothing. */
     public static GivenPrices closes(double[]... closes) {
-        return new GivenPrices(
-                weekdays(closes[0].length), closes, closes, new double[closes[0].length], Optional.empty());
+        return new GivenPrices(weekdays(closes[0].length), closes, closes, new double[closes[0].length]);
     }
 
     /** Assets that all stand at 100 on every bar. */
@@ -63,22 +80,41 @@ public final class GivenPrices {
         for (int bar = 1; bar < bars; bar++) {
             cash[bar] = 2e-4 * random.nextDouble();
         }
-        return new GivenPrices(weekdays(bars), opens, closes, cash, Optional.empty());
+        return new GivenPrices(weekdays(bars), opens, closes, cash);
     }
 
     /** The same with other returns of cash. */
     public GivenPrices withCash(double... earned) {
-        return new GivenPrices(dates, opens, closes, earned, volumes);
+        return with(opens, earned, volumes);
     }
 
     /** The same with other opens. */
     public GivenPrices withOpens(double[]... by) {
-        return new GivenPrices(dates, by, closes, cash, volumes);
+        return with(by, cash, volumes);
     }
 
     /** The same with volumes; NaN where there is none. */
     public GivenPrices withVolumes(double[]... by) {
-        return new GivenPrices(dates, opens, closes, cash, Optional.of(by));
+        return with(opens, cash, Optional.of(by));
+    }
+
+    /** The same prices with what they gave to holders besides: money a unit, and new units for one old. */
+    public GivenPrices giving(double[][] money, double[][] ratios) {
+        return new GivenPrices(dates, opens, closes, cash, volumes, Optional.of(money), Optional.of(ratios));
+    }
+
+    /** The same with random dividends and splits on about one bar in ten; prices fall by neither. */
+    public GivenPrices givingAtRandom(long seed) {
+        RandomStream random = RandomStream.of(seed, "given to holders");
+        double[][] money = new double[closes.length][size()];
+        double[][] ratios = new double[closes.length][size()];
+        for (int asset = 0; asset < closes.length; asset++) {
+            for (int bar = 0; bar < size(); bar++) {
+                money[asset][bar] = random.nextInt(10) == 0 ? 0.02 * closes[asset][bar] * random.nextDouble() : 0;
+                ratios[asset][bar] = random.nextInt(10) == 0 ? 0.5 + random.nextDouble() : 1;
+            }
+        }
+        return giving(money, ratios);
     }
 
     /** The same with random volumes of about {@code size} units a bar. */
@@ -93,7 +129,7 @@ public final class GivenPrices {
 
     /** The same on other dates. */
     public GivenPrices on(LocalDate... days) {
-        return new GivenPrices(List.of(days), opens, closes, cash, volumes);
+        return new GivenPrices(List.of(days), opens, closes, cash, volumes, dividends, splits);
     }
 
     /** Only the first bars. */
@@ -103,7 +139,9 @@ public final class GivenPrices {
                 cut(opens, bars),
                 cut(closes, bars),
                 Arrays.copyOf(cash, bars),
-                volumes.map(all -> cut(all, bars)));
+                volumes.map(all -> cut(all, bars)),
+                dividends.map(all -> cut(all, bars)),
+                splits.map(all -> cut(all, bars)));
     }
 
     /** The date of each bar. */
@@ -133,7 +171,9 @@ public final class GivenPrices {
                     Optional.of(PriceTable.Column.of(opens[asset])),
                     Optional.empty(),
                     Optional.empty(),
-                    volumes.map(all -> PriceTable.Column.of(all[index]))));
+                    volumes.map(all -> PriceTable.Column.of(all[index])),
+                    dividends.map(all -> PriceTable.Column.of(all[index])),
+                    splits.map(all -> PriceTable.Column.of(all[index]))));
         }
         return PriceTable.of(TimeAxis.of(BarLength.DAILY, dates), names, bars, CashReturns.of(cash, cash));
     }

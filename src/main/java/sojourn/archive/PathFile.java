@@ -124,7 +124,7 @@ public final class PathFile {
     private void addMoney(Track track) {
         addFrom(track, "interest", bar -> track.interest(bar) - track.marginInterest(bar));
         addFrom(track, "borrow", track::borrowFee);
-        addFrom(track, "dividend", bar -> 0);
+        addFrom(track, "dividend", track::dividend);
         addFrom(track, "cost", track::cost);
         addFrom(track, "turnover", track::turnover);
         addFrom(track, "wealth", track::wealth);

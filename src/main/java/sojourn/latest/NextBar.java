@@ -111,10 +111,6 @@ public final class NextBar {
     }
 
     private PriceTable table(List<Double> returns) {
-        List<Double> closes = new ArrayList<>();
-        for (int asset = 0; asset < returns.size(); asset++) {
-            closes.add(standing.known().close(asset, standing.bar()) * (1 + returns.get(asset)));
-        }
-        return AnotherEnd.longer(standing.table(), date, closes);
+        return AnotherEnd.longer(standing.table(), date, returns);
     }
 }

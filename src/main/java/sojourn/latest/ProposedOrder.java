@@ -19,17 +19,19 @@ import sojourn.trade.Order;
  * An order in units and money, as it would fill at the last closes.
  *
  * @param order weights, and the bars of its decision and its fill
- * @param basket the legs and their estimated costs
+ * @param basket the legs, their estimated costs and what is in their way; empty if nothing would be left after its costs
  */
-public record ProposedOrder(Order order, Basket basket) {
+public record ProposedOrder(Order order, Optional<Basket> basket) {
     /** The simulation's orders that wait, one after the other, from what it holds; the one decided at this close is the last. */
     static List<ProposedOrder> simulated(Standing standing) {
         List<ProposedOrder> proposed = new ArrayList<>();
         Optional<Holdings> held = standing.track().map(track -> Holdings.of(track, standing.bar()));
         for (Order order : standing.pending()) {
-            Basket basket = Basket.of(standing.table(), held.orElseThrow(), order, standing.terms());
-            held = Optional.of(basket.after());
-            proposed.add(new ProposedOrder(order, basket));
+            ProposedOrder next = of(held.orElseThrow(), order, standing);
+            held = next.basket().isPresent()
+                    ? held.map(one -> one.after(next.basket().get()))
+                    : held;
+            proposed.add(next);
         }
         return proposed;
     }
@@ -43,7 +45,19 @@ public record ProposedOrder(Order order, Basket basket) {
         Weights target = decision.get().target().orElseThrow();
         int due = standing.terms().fill().dueOn(standing.bar());
         Order order = new Order(standing.bar(), due, target, decision.get().because());
-        return Optional.of(new ProposedOrder(order, Basket.of(standing.table(), holdings, order, standing.terms())));
+        return Optional.of(of(holdings, order, standing));
+    }
+
+    private static ProposedOrder of(Holdings holdings, Order order, Standing standing) {
+        return new ProposedOrder(
+                order,
+                Basket.of(
+                        standing.table(),
+                        standing.bar(),
+                        holdings.quantities(),
+                        holdings.cash(),
+                        order,
+                        standing.terms()));
     }
 
     /** What is decided at this close if these are held; empty if nobody is asked any more. */

@@ -4,12 +4,14 @@ import com.fasterxml.jackson.databind.node.ArrayNode;
 import com.fasterxml.jackson.databind.node.JsonNodeFactory;
 import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.util.List;
+import java.util.Optional;
 import sojourn.allocate.Decision;
 import sojourn.allocate.Weights;
 import sojourn.archive.Digest;
 import sojourn.archive.RecordParts;
 import sojourn.document.JsonText;
 import sojourn.market.AssetName;
+import sojourn.trade.Basket;
 import sojourn.trade.Fill;
 import sojourn.trade.Holdings;
 
@@ -84,8 +86,12 @@ public final class SealContent {
                 latest.standing().known().date(proposed.order().decidedOn()).toString());
         node.put("bars_to_fill", proposed.order().dueOn() - latest.standing().bar());
         node.set("target", weights(proposed.order().target(), assets));
+        Optional<Basket> basket = proposed.basket();
+        if (basket.isEmpty()) {
+            return node.put("undefined", "nothing would be left after its costs");
+        }
         ArrayNode legs = node.putArray("legs");
-        for (Fill leg : proposed.basket().legs()) {
+        for (Fill leg : basket.get().legs()) {
             ObjectNode one = legs.addObject();
             one.put("asset", assets.get(leg.asset()));
             one.put("units", leg.units());
@@ -93,7 +99,12 @@ public final class SealContent {
             one.put("notional", leg.notional());
             one.put("estimated_cost", leg.charges().total());
         }
-        node.put("estimated_cost", proposed.basket().cost());
+        ArrayNode hindrances = node.putArray("hindrances");
+        basket.get()
+                .hindrances()
+                .forEach(one -> hindrances.add(
+                        assets.get(one.asset()) + " " + one.kind().sentence()));
+        node.put("estimated_cost", basket.get().cost());
         return node;
     }
 }

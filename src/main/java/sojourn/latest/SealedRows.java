@@ -68,6 +68,9 @@ record SealedRows(List<String> columns, Map<String, String> byDate) {
             sources.add(new Source(name + ".low", known -> known.low(asset, known.bar())));
             sources.add(new Source(name + ".volume", known -> known.volume(asset, known.bar())));
         }
+        for (String level : table.levels()) {
+            sources.add(new Source(level + ".close", known -> OptionalDouble.of(known.close(level, known.bar()))));
+        }
         sources.add(new Source("cash.rate_a_bar", known -> OptionalDouble.of(known.expectedCashReturn())));
         for (int k = 0; k < regimes.size(); k++) {
             int regime = k;

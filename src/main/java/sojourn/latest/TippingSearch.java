@@ -40,18 +40,24 @@ final class TippingSearch {
         Map<String, Answer<TippingReturns>> answers = new LinkedHashMap<>();
         Optional<String> obstacle = obstacle(standing);
         for (String asset : observed(standing)) {
+            Optional<String> level = standing.table().levels().contains(asset)
+                    ? Optional.of("of it changes are observed, not returns; in those of others it stays where it is")
+                    : Optional.empty();
             answers.put(
-                    asset, obstacle.<Answer<TippingReturns>>map(Answer::none).orElseGet(() -> {
-                        Reading reading = standing.reading().orElseThrow();
-                        Weights wanted = standing.asked()
-                                .orElseThrow()
-                                .decision()
-                                .next()
-                                .wanted()
-                                .orElseThrow();
-                        return Answer.of(new TippingSearch(standing, NextBar.of(standing, reading), wanted)
-                                .of(asset, reading, workers));
-                    }));
+                    asset,
+                    obstacle.or(() -> level)
+                            .<Answer<TippingReturns>>map(Answer::none)
+                            .orElseGet(() -> {
+                                Reading reading = standing.reading().orElseThrow();
+                                Weights wanted = standing.asked()
+                                        .orElseThrow()
+                                        .decision()
+                                        .next()
+                                        .wanted()
+                                        .orElseThrow();
+                                return Answer.of(new TippingSearch(standing, NextBar.of(standing, reading), wanted)
+                                        .of(asset, reading, workers));
+                            }));
         }
         return Collections.unmodifiableMap(answers);
     }

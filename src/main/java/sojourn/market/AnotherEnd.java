@@ -5,6 +5,9 @@ import java.time.LocalDate;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.SortedMap;
+import java.util.TreeMap;
+import java.util.function.UnaryOperator;
 import sojourn.market.PriceTable.Bars;
 import sojourn.market.PriceTable.Column;
 import sojourn.numeric.Check;
@@ -28,18 +31,19 @@ public final class AnotherEnd {
         }
         List<Bars> columns = new ArrayList<>();
         for (int asset = 0; asset < table.assets().size(); asset++) {
-            columns.add(table.bars(asset).each(column -> column.at(kept)));
+            columns.add(table.quoted(asset).each(column -> column.at(kept)));
         }
-        return of(table, dates, columns, CashReturns.of(earned, expected));
+        return of(table, dates, columns, CashReturns.of(earned, expected), level -> level.at(kept));
     }
 
     /**
-     * One bar more, on {@code date}: each asset runs straight from its last close to its entry of {@code closes}, so the open is the
-     * last close and high and low are the two; no volume. Cash goes on at the rate in force, and so do given probabilities.
+     * One bar more, on {@code date}: each asset runs straight from its last close to the one that its simple return leads to, so the
+     * open is the last close and high and low are the two; no volume, dividend or split. Cash goes on at the rate in force, levels
+     * stay where they are, and so do given probabilities.
      *
-     * @param closes above 0, one an asset
+     * @param simpleReturns above -1, one an asset
      */
-    public static PriceTable longer(PriceTable table, LocalDate date, List<Double> closes) {
+    public static PriceTable longer(PriceTable table, LocalDate date, List<Double> simpleReturns) {
         int bars = table.size();
         List<LocalDate> dates = new ArrayList<>();
         double[] earned = new double[bars + 1];
@@ -55,9 +59,10 @@ public final class AnotherEnd {
         earned[bars] = expected[bars] / table.barLength().nominalDays() * axis.calendarDays(bars - 1, bars);
         List<Bars> columns = new ArrayList<>();
         for (int asset = 0; asset < table.assets().size(); asset++) {
-            columns.add(straight(table.bars(asset), closes.get(asset)));
+            Bars quoted = table.quoted(asset);
+            columns.add(straight(quoted, quoted.close().at(bars - 1) * (1 + simpleReturns.get(asset))));
         }
-        return of(table, dates, columns, CashReturns.of(earned, expected));
+        return of(table, dates, columns, CashReturns.of(earned, expected), level -> and(level, level.at(bars - 1)));
     }
 
     /** The date that an invented bar after the last one gets: the next weekday, the same day a week on or a month on. */
@@ -83,7 +88,9 @@ public final class AnotherEnd {
                 bars.open().map(column -> and(column, last)),
                 bars.high().map(column -> and(column, Math.max(last, close))),
                 bars.low().map(column -> and(column, Math.min(last, close))),
-                bars.volume().map(column -> and(column, Double.NaN)));
+                bars.volume().map(column -> and(column, Double.NaN)),
+                bars.dividend().map(column -> and(column, 0)),
+                bars.split().map(column -> and(column, 1)));
     }
 
     private static Column and(Column column, double value) {
@@ -95,12 +102,20 @@ public final class AnotherEnd {
         return Column.of(longer);
     }
 
-    private static PriceTable of(PriceTable table, List<LocalDate> dates, List<Bars> columns, CashReturns cash) {
+    private static PriceTable of(
+            PriceTable table,
+            List<LocalDate> dates,
+            List<Bars> columns,
+            CashReturns cash,
+            UnaryOperator<Column> level) {
+        SortedMap<String, Column> levels = new TreeMap<>();
+        table.levels().forEach(name -> levels.put(name, level.apply(table.closes(name))));
         PriceTable other = PriceTable.of(
-                TimeAxis.of(table.barLength(), dates),
-                table.assets(),
-                columns,
-                cash.countedBy(table.cash().dayCount()));
+                        TimeAxis.of(table.barLength(), dates),
+                        table.assets(),
+                        columns,
+                        cash.countedBy(table.cash().dayCount()))
+                .withLevels(levels);
         Optional<GivenByBar> given = table.given();
         return given.isEmpty() ? other : other.withGiven(given.get().over(dates.size()));
     }

@@ -35,7 +35,7 @@ record CommonBars(TimeAxis axis, List<Bars> bars, List<Finding> findings) {
         List<Bars> daily = new ArrayList<>();
         for (PriceSeries one : series) {
             int[] rows = one.rowsOf(days);
-            daily.add(one.bars().each(column -> column.at(rows)));
+            daily.add(Distributions.at(one.bars(), rows));
         }
         if (calendar.rowLength() == calendar.bars()) {
             return new CommonBars(TimeAxis.of(calendar.bars(), days), daily, findings);

@@ -17,12 +17,12 @@ public final class FillPrices {
 
     /** Close of a bar. */
     public double close(int asset, int bar) {
-        return table.bars(asset).close().at(bar);
+        return table.quoted(asset).close().at(bar);
     }
 
     /** Open of a bar; empty where the file has none. */
     public OptionalDouble open(int asset, int bar) {
-        return table.bars(asset)
+        return table.quoted(asset)
                 .open()
                 .map(column -> column.at(bar))
                 .filter(value -> !value.isNaN())
@@ -41,5 +41,25 @@ public final class FillPrices {
      */
     public double interest(double percentPerYear, int bar) {
         return table.cash().dayCount().interest(percentPerYear, table.axis().calendarDays(bar - 1, bar));
+    }
+
+    /** Money that a unit held at the close before is paid on a bar, after that bar's split. */
+    public double dividend(int asset, int bar) {
+        return table.quoted(asset).dividendOn(bar);
+    }
+
+    /** Units that one unit held at the close before becomes on a bar. */
+    public double split(int asset, int bar) {
+        return table.quoted(asset).splitOn(bar);
+    }
+
+    /** Whether any asset has a column of dividends or splits. */
+    public boolean distributes() {
+        for (int asset = 0; asset < table.assets().size(); asset++) {
+            if (table.quoted(asset).distributes()) {
+                return true;
+            }
+        }
+        return false;
     }
 }

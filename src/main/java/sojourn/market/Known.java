@@ -7,7 +7,8 @@ import java.util.OptionalDouble;
 
 /**
  * What was known after the close of one bar: dates, prices and cash returns of that bar and of every bar before it. No method
- * returns anything later; asking for a later bar is refused.
+ * returns anything later; asking for a later bar is refused. Where a price file has dividends or splits, they are put back into its
+ * prices and volumes, bar by bar, so that returns are what a holder earned; the prices themselves are then not those quoted.
  */
 public final class Known {
     private final PriceTable table;
@@ -50,7 +51,7 @@ public final class Known {
 
     /** Close of a known bar. */
     public double close(int asset, int knownBar) {
-        return table.bars(asset).close().at(known(knownBar));
+        return table.reinvested(asset).close().at(known(knownBar));
     }
 
     /** Close of an asset, or of a series that is none, such as a rate, on a known bar; refuses an unknown name. */
@@ -60,27 +61,27 @@ public final class Known {
 
     /** Closes from the known bar {@code start} to the last known bar, a copy. */
     public double[] closes(int asset, int start) {
-        return table.bars(asset).close().range(known(start), bar + 1);
+        return table.reinvested(asset).close().range(known(start), bar + 1);
     }
 
     /** Open of a known bar; empty where the file has none. */
     public OptionalDouble open(int asset, int knownBar) {
-        return optional(table.bars(asset).open(), knownBar);
+        return optional(table.reinvested(asset).open(), knownBar);
     }
 
     /** High of a known bar; empty where the file has none. */
     public OptionalDouble high(int asset, int knownBar) {
-        return optional(table.bars(asset).high(), knownBar);
+        return optional(table.reinvested(asset).high(), knownBar);
     }
 
     /** Low of a known bar; empty where the file has none. */
     public OptionalDouble low(int asset, int knownBar) {
-        return optional(table.bars(asset).low(), knownBar);
+        return optional(table.reinvested(asset).low(), knownBar);
     }
 
     /** Volume of a known bar; empty where the file has none. */
     public OptionalDouble volume(int asset, int knownBar) {
-        return optional(table.bars(asset).volume(), knownBar);
+        return optional(table.reinvested(asset).volume(), knownBar);
     }
 
     /** What cash earned on a known bar, simple. */

@@ -36,14 +36,22 @@ final class PeriodBars {
         return days.subList(ends.isEmpty() ? 0 : ends.get(ends.size() - 1), days.size());
     }
 
-    /** One asset's bars, from its values on each day. */
+    /**
+     * One asset's bars, from its values on each day. Prices before a split within the period are in the units after it; a dividend
+     * within it goes to who held at the close of the period before, also where an order fills at the period's open.
+     */
     Bars of(Bars daily) {
-        return new Bars(
-                last(daily.close()),
-                daily.open().map(this::first),
-                daily.high().map(column -> over(column, Math::max)),
-                daily.low().map(column -> over(column, Math::min)),
-                daily.volume().map(column -> over(column, Double::sum)));
+        int[] lastRows = ends.stream().mapToInt(end -> end - 1).toArray();
+        Bars even = Distributions.inUnitsOfTheEnd(daily, lastRows);
+        Bars joined = new Bars(
+                last(even.close()),
+                even.open().map(this::first),
+                even.high().map(column -> over(column, Math::max)),
+                even.low().map(column -> over(column, Math::min)),
+                even.volume().map(column -> over(column, Double::sum)));
+        return daily.distributes()
+                ? joined.giving(Distributions.dividends(daily, lastRows), Distributions.splits(daily, lastRows))
+                : joined;
     }
 
     private Column last(Column daily) {

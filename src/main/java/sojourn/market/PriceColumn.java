@@ -9,7 +9,7 @@ import sojourn.market.Faults.Kind;
 /**
  * One column of a price file, by the key that the strategy file knows it by.
  *
- * @param key open, high, low, close or volume
+ * @param key open, high, low, close, volume, dividend or split
  * @param index where the file has it, if it has it
  * @param bound what its numbers must keep to
  */

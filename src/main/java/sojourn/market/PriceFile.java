@@ -7,6 +7,7 @@ import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.OptionalInt;
 import java.util.function.ToDoubleFunction;
+import java.util.stream.Stream;
 import sojourn.market.CsvTable.Row;
 import sojourn.market.PriceColumn.Bound;
 import sojourn.market.PriceTable.Bars;
@@ -20,6 +21,8 @@ final class PriceFile {
     private final PriceColumn high;
     private final PriceColumn low;
     private final PriceColumn volume;
+    private final PriceColumn dividend;
+    private final PriceColumn split;
     private final DatedRows dated;
     private final List<PriceRow> rows = new ArrayList<>();
     private final RangeCheck range = new RangeCheck();
@@ -36,7 +39,16 @@ final class PriceFile {
         this.low = new PriceColumn("low", kind.read(named.optional("low", source.low())), Bound.ABOVE_ZERO);
         this.volume =
                 new PriceColumn("volume", kind.read(named.optional("volume", source.volume())), Bound.NOT_BELOW_ZERO);
+        this.dividend = new PriceColumn(
+                "dividend", kind.read(onlyIfStated(named, "dividend", source.dividend())), Bound.NOT_BELOW_ZERO);
+        this.split =
+                new PriceColumn("split", kind.read(onlyIfStated(named, "split", source.split())), Bound.ABOVE_ZERO);
         this.dated = new DatedRows(date, source.layout().dateFormat(), rowLength, faults);
+    }
+
+    /** Prices that are adjusted already may stand beside a column of that name. */
+    private static OptionalInt onlyIfStated(CsvColumns named, String key, Optional<String> stated) {
+        return stated.isPresent() ? named.optional(key, stated) : OptionalInt.empty();
     }
 
     /**
@@ -80,28 +92,41 @@ final class PriceFile {
         }
         if (close.text(row).isEmpty()) {
             missing.add(date.get(), row.line());
+            refuseLost(row, dividend);
+            refuseLost(row, split);
             return;
         }
-        OptionalDouble closed = close.read(row, faults);
-        OptionalDouble opened = open.read(row, faults);
-        OptionalDouble highest = high.read(row, faults);
-        OptionalDouble lowest = low.read(row, faults);
-        OptionalDouble traded = volume.read(row, faults);
-        if (closed.isPresent()
-                && opened.isPresent()
-                && highest.isPresent()
-                && lowest.isPresent()
-                && traded.isPresent()) {
+        List<OptionalDouble> read = Stream.of(close, open, high, low, volume, dividend, split)
+                .map(column -> column.read(row, faults))
+                .toList();
+        if (read.stream().allMatch(OptionalDouble::isPresent)) {
+            double[] cells =
+                    read.stream().mapToDouble(OptionalDouble::getAsDouble).toArray();
             keep(
                     row,
                     new PriceRow(
                             date.get(),
                             row.line(),
-                            closed.getAsDouble(),
-                            opened.getAsDouble(),
-                            highest.getAsDouble(),
-                            lowest.getAsDouble(),
-                            traded.getAsDouble()));
+                            cells[0],
+                            cells[1],
+                            cells[2],
+                            cells[3],
+                            cells[4],
+                            Double.isNaN(cells[5]) ? 0 : cells[5],
+                            Double.isNaN(cells[6]) ? 1 : cells[6]));
+        }
+    }
+
+    /** What was given on a day without a close would be lost. */
+    private void refuseLost(Row row, PriceColumn given) {
+        if (!given.text(row).isEmpty()) {
+            String remedy = "write it on the next day that has a close";
+            int column = given.index().orElseThrow();
+            faults.add(
+                    row.problem(
+                            column, given.key() + " " + given.text(row) + " stands on a day without a close", remedy),
+                    new Faults.Kind("lost", column),
+                    remedy);
         }
     }
 
@@ -123,7 +148,9 @@ final class PriceFile {
                 column(open, PriceRow::open),
                 column(high, PriceRow::high),
                 column(low, PriceRow::low),
-                column(volume, PriceRow::volume));
+                column(volume, PriceRow::volume),
+                column(dividend, PriceRow::dividend),
+                column(split, PriceRow::split));
         return PriceSeries.inFile(
                 asset,
                 rows.stream().map(PriceRow::date).toList(),

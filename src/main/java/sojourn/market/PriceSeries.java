@@ -111,9 +111,15 @@ public final class PriceSeries {
         ByteBuffer days = ByteBuffer.allocate(size() * Long.BYTES);
         dates.forEach(date -> days.putLong(date.toEpochDay()));
         digest.add("dates", days.array());
-        List<String> names = List.of("close", "open", "high", "low", "volume");
-        List<Optional<Column>> columns =
-                List.of(Optional.of(bars.close()), bars.open(), bars.high(), bars.low(), bars.volume());
+        List<String> names = List.of("close", "open", "high", "low", "volume", "dividend", "split");
+        List<Optional<Column>> columns = List.of(
+                Optional.of(bars.close()),
+                bars.open(),
+                bars.high(),
+                bars.low(),
+                bars.volume(),
+                bars.dividend(),
+                bars.split());
         for (int i = 0; i < names.size(); i++) {
             if (columns.get(i).isPresent()) {
                 digest.add(names.get(i), bits(columns.get(i).get()));

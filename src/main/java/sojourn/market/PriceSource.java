@@ -16,6 +16,8 @@ import sojourn.document.Shapes;
  * @param high name of the column of highs, if stated
  * @param low name of the column of lows, if stated
  * @param volume name of the column of volumes, if stated
+ * @param dividend name of the column of dividends of unadjusted prices, if there is one
+ * @param split name of the column of splits of unadjusted prices, if there is one
  */
 public record PriceSource(
         CsvLayout layout,
@@ -23,7 +25,9 @@ public record PriceSource(
         Optional<String> open,
         Optional<String> high,
         Optional<String> low,
-        Optional<String> volume) {
+        Optional<String> volume,
+        Optional<String> dividend,
+        Optional<String> split) {
     private static final Field<String> CSV =
             Field.required("csv", Shapes.text(), "path of the price file, from the folder of the strategy file");
     private static final Field<String> CLOSE =
@@ -32,12 +36,29 @@ public record PriceSource(
     private static final Field<Optional<String>> HIGH = column("high", "highs");
     private static final Field<Optional<String>> LOW = column("low", "lows");
     private static final Field<Optional<String>> VOLUME = column("volume", "volumes");
+    private static final Field<Optional<String>> DIVIDEND = Field.maybe(
+            "dividend",
+            Shapes.text(),
+            "name of the column of dividends, money a unit on the ex-date, of prices that are not adjusted for them; read only if"
+                    + " named");
+    private static final Field<Optional<String>> SPLIT = Field.maybe(
+            "split",
+            Shapes.text(),
+            "name of the column of splits, new units for one old unit on the ex-date, of prices that are not adjusted for them; read"
+                    + " only if named");
 
     /** One asset's entry. */
     public static final Shape<PriceSource> SHAPE = Shapes.object(
             "price file",
             f -> new PriceSource(
-                    CsvLayout.from(f.get(CSV), f), f.get(CLOSE), f.get(OPEN), f.get(HIGH), f.get(LOW), f.get(VOLUME)),
+                    CsvLayout.from(f.get(CSV), f),
+                    f.get(CLOSE),
+                    f.get(OPEN),
+                    f.get(HIGH),
+                    f.get(LOW),
+                    f.get(VOLUME),
+                    f.get(DIVIDEND),
+                    f.get(SPLIT)),
             CSV,
             CsvLayout.DATE,
             CLOSE,
@@ -45,6 +66,8 @@ public record PriceSource(
             HIGH,
             LOW,
             VOLUME,
+            DIVIDEND,
+            SPLIT,
             CsvLayout.DATE_FORMAT,
             CsvLayout.SEPARATOR);
 
@@ -56,6 +79,17 @@ public record PriceSource(
                 key, Shapes.text(), "name of the column of " + what + "; if not given, " + key + " if the file has it");
     }
 
+    /** Columns of prices that need no dividends and splits beside them. */
+    public PriceSource(
+            CsvLayout layout,
+            String close,
+            Optional<String> open,
+            Optional<String> high,
+            Optional<String> low,
+            Optional<String> volume) {
+        this(layout, close, open, high, low, volume, Optional.empty(), Optional.empty());
+    }
+
     /** Default columns of the file at {@code csv}. */
     public static PriceSource of(String csv) {
         return new PriceSource(
@@ -65,11 +99,11 @@ public record PriceSource(
     /** The same columns of another file. */
     public PriceSource withCsv(String csv) {
         CsvLayout other = new CsvLayout(csv, layout.date(), layout.dateFormat(), layout.separator());
-        return new PriceSource(other, close, open, high, low, volume);
+        return new PriceSource(other, close, open, high, low, volume, dividend, split);
     }
 
     /** The same file with its closes in another column. */
     public PriceSource withClose(String column) {
-        return new PriceSource(layout, column, open, high, low, volume);
+        return new PriceSource(layout, column, open, high, low, volume, dividend, split);
     }
 }

@@ -17,6 +17,7 @@ public final class PriceTable {
     private final TimeAxis axis;
     private final List<String> assets;
     private final Bars[] bars;
+    private final Bars[] reinvested;
     private final CashReturns cash;
     private final Optional<GivenByBar> given;
     private final SortedMap<String, Column> levels;
@@ -25,20 +26,39 @@ public final class PriceTable {
     /**
      * One series' bars, a value a bar in each column. Closes are finite everywhere, those of an asset above 0; the other columns are
      * there or not as a whole, and NaN on a bar means the file had no value there.
+     *
+     * @param dividend money a unit held at the close before is paid, after the bar's split; 0 on most bars
+     * @param split units that one unit becomes before the bar's trading; 1 on most bars
      */
     public record Bars(
-            Column close, Optional<Column> open, Optional<Column> high, Optional<Column> low, Optional<Column> volume) {
+            Column close,
+            Optional<Column> open,
+            Optional<Column> high,
+            Optional<Column> low,
+            Optional<Column> volume,
+            Optional<Column> dividend,
+            Optional<Column> split) {
         /** Refuses columns of different lengths and closes that are not finite. */
         public Bars {
             for (int bar = 0; bar < close.size(); bar++) {
                 Check.finite(close.at(bar), "close of bar", bar);
             }
-            for (Optional<Column> other : List.of(open, high, low, volume)) {
+            for (Optional<Column> other : List.of(open, high, low, volume, dividend, split)) {
                 if (other.isPresent() && other.get().size() != close.size()) {
                     throw new IllegalArgumentException(
                             "a column of " + other.get().size() + " bars beside one of " + close.size());
                 }
             }
+        }
+
+        /** Prices that need no dividends and splits beside them. */
+        public Bars(
+                Column close,
+                Optional<Column> open,
+                Optional<Column> high,
+                Optional<Column> low,
+                Optional<Column> volume) {
+            this(close, open, high, low, volume, Optional.empty(), Optional.empty());
         }
 
         /** Closes alone, those of an asset. */
@@ -59,7 +79,31 @@ public final class PriceTable {
         /** Every column converted alike. */
         Bars each(UnaryOperator<Column> change) {
             return new Bars(
-                    change.apply(close), open.map(change), high.map(change), low.map(change), volume.map(change));
+                    change.apply(close),
+                    open.map(change),
+                    high.map(change),
+                    low.map(change),
+                    volume.map(change),
+                    dividend.map(change),
+                    split.map(change));
+        }
+
+        /** The same with these dividends and splits. */
+        public Bars giving(Column dividends, Column splits) {
+            return new Bars(close, open, high, low, volume, Optional.of(dividends), Optional.of(splits));
+        }
+
+        /** Whether there is a column of dividends or of splits. */
+        boolean distributes() {
+            return dividend.isPresent() || split.isPresent();
+        }
+
+        double dividendOn(int bar) {
+            return dividend.isPresent() ? dividend.get().at(bar) : 0;
+        }
+
+        double splitOn(int bar) {
+            return split.isPresent() ? split.get().at(bar) : 1;
         }
     }
 
@@ -107,6 +151,7 @@ public final class PriceTable {
         this.axis = axis;
         this.assets = assets;
         this.bars = bars;
+        this.reinvested = Arrays.stream(bars).map(Distributions::reinvested).toArray(Bars[]::new);
         this.cash = cash;
         this.given = given;
         this.levels = Collections.unmodifiableSortedMap(new TreeMap<>(levels));
@@ -191,13 +236,19 @@ public final class PriceTable {
         return axis;
     }
 
-    Bars bars(int asset) {
+    /** As quoted: what is traded and marked. */
+    Bars quoted(int asset) {
         return bars[asset];
     }
 
-    /** The closes of an asset or a level. */
+    /** The closes of an asset, dividends and splits put back, or of a level. */
     Column closes(String name) {
-        return Optional.ofNullable(levels.get(name)).orElseGet(() -> bars[asset(name)].close());
+        return Optional.ofNullable(levels.get(name)).orElseGet(() -> reinvested[asset(name)].close());
+    }
+
+    /** Dividends and splits put back into the prices: what is observed. The same as quoted where there are none. */
+    Bars reinvested(int asset) {
+        return reinvested[asset];
     }
 
     CashReturns cash() {

@@ -1,5 +1,7 @@
 package sojourn.market;
 
+import java.text.DecimalFormat;
+import java.text.DecimalFormatSymbols;
 import java.time.temporal.ChronoUnit;
 import java.util.ArrayList;
 import java.util.List;
@@ -14,6 +16,10 @@ final class SeriesFindings {
 
     private static final int FROZEN_ROWS = 10;
     private static final double LEAP = 0.40;
+    /** New units for one old one that splits have in practice; each also the other way round. Common practice, no source. */
+    private static final double[] RATIOS = {1.5, 2, 3, 4, 5, 8, 10, 15, 20, 25, 50, 100};
+    /** How far the price of a day of split may move besides, relative. */
+    private static final double BESIDES = 0.03;
 
     private final PriceSeries series;
     private final Calendar calendar;
@@ -29,6 +35,7 @@ final class SeriesFindings {
         findings.gaps(findings.spacing().orElse(calendar.rowLength()));
         findings.frozen();
         findings.leaps();
+        findings.splits();
         return List.copyOf(findings.found);
     }
 
@@ -152,8 +159,58 @@ final class SeriesFindings {
         }
     }
 
+    private void splits() {
+        int first = -1;
+        int count = 0;
+        for (int row = 1; row < series.size(); row++) {
+            if (splitLike(units(row)) > 0 && !undone(row, row - 1) && !undone(row, row + 1)) {
+                first = first < 0 ? row : first;
+                count++;
+            }
+        }
+        if (count > 0) {
+            String ratio = inWords(splitLike(units(first)));
+            add(
+                    series.line(first),
+                    counted(count, "move") + " of " + series.asset()
+                            + " like a split that is not recorded, the first on " + moved(first) + ", near " + ratio
+                            + " new units for one old",
+                    "adjust the prices, or record it in a column: split: … under prices");
+        }
+    }
+
+    private static String inWords(double ratio) {
+        DecimalFormat plain = new DecimalFormat("0.#", DecimalFormatSymbols.getInstance(Locale.ROOT));
+        return ratio > 1
+                ? plain.format(ratio) + " new units for one old"
+                : "one new unit for " + plain.format(1 / ratio) + " old";
+    }
+
+    /** Whether a neighbouring move takes a row's move back: a mistyped price, and no split. */
+    private boolean undone(int row, int neighbour) {
+        return neighbour > 0 && neighbour < series.size() && Math.abs(units(row) * units(neighbour) - 1) <= 2 * BESIDES;
+    }
+
+    /** New units for one old one that would explain a row's move. */
+    private double units(int row) {
+        return 1 / (1 + change(row));
+    }
+
+    /** The usual ratio that is near {@code units} new for one old; 0 if none is. */
+    private static double splitLike(double units) {
+        for (double ratio : RATIOS) {
+            for (double either : new double[] {ratio, 1 / ratio}) {
+                if (Math.abs(units / either - 1) <= BESIDES) {
+                    return either;
+                }
+            }
+        }
+        return 0;
+    }
+
+    /** From one row to the next, in the units of the one before. */
     private double change(int row) {
-        return series.close(row) / series.close(row - 1) - 1;
+        return series.close(row) * series.bars().splitOn(row) / series.close(row - 1) - 1;
     }
 
     private String moved(int row) {

@@ -6,6 +6,7 @@ import sojourn.latest.Latest;
 import sojourn.latest.ProposedOrder;
 import sojourn.trade.Basket;
 import sojourn.trade.Fill;
+import sojourn.trade.Hindrance;
 import sojourn.trade.Holdings;
 
 /** Which orders a decision means, in units at the last closes. */
@@ -60,14 +61,22 @@ final class OrdersText {
                 : "Pending, decided on "
                         + latest.standing().known().date(one.order().decidedOn());
         String head = when + ", fills at " + LatestText.bars(Math.max(1, ahead)) + ":\n";
-        if (one.basket().outcome() == Basket.Outcome.DOES_NOT_FILL) {
-            return head + "  it could not fill at these prices.\n";
+        if (one.basket().isEmpty()) {
+            return head + "  it could not fill: nothing would be left after its costs.\n";
         }
-        if (one.basket().legs().isEmpty()) {
+        Basket basket = one.basket().get();
+        if (basket.legs().isEmpty() && basket.hindrances().isEmpty()) {
             return head + "  nothing to trade, what is held is what is wanted.\n";
         }
+        return head + legs(latest, basket) + hindrances(latest, basket);
+    }
+
+    private static String legs(Latest latest, Basket basket) {
+        if (basket.legs().isEmpty()) {
+            return "";
+        }
         Grid grid = new Grid(List.of("  asset", "units", "at", "value", "weight before", "weight after"));
-        for (Fill leg : one.basket().legs()) {
+        for (Fill leg : basket.legs()) {
             grid.add(List.of(
                     "  " + latest.standing().table().assets().get(leg.asset()),
                     Amounts.units(leg.units()),
@@ -76,9 +85,18 @@ final class OrdersText {
                     Amounts.percent(leg.weightBefore(), 2),
                     Amounts.percent(leg.weightAfter(), 2)));
         }
-        String part =
-                one.basket().outcome() == Basket.Outcome.FILLS_IN_PART ? "  only this part may fill on one bar\n" : "";
-        return head + grid.text() + part + "  estimated costs "
-                + Amounts.money(one.basket().cost()) + "\n";
+        return grid.text() + "  estimated costs " + Amounts.money(basket.cost()) + "\n";
+    }
+
+    private static String hindrances(Latest latest, Basket basket) {
+        StringBuilder text = new StringBuilder();
+        for (Hindrance one : basket.hindrances()) {
+            text.append("  if it filled at this close: ")
+                    .append(latest.standing().table().assets().get(one.asset()))
+                    .append(' ')
+                    .append(one.kind().sentence())
+                    .append('\n');
+        }
+        return text.toString();
     }
 }

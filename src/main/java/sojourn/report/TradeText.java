@@ -4,9 +4,13 @@ import java.time.LocalDate;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.stream.Collectors;
 import sojourn.strategy.Strategy;
 import sojourn.trade.Costs;
+import sojourn.trade.FillTime;
 import sojourn.trade.Impact;
+import sojourn.trade.Lots;
+import sojourn.trade.SizeAt;
 import sojourn.trade.TradeSettings;
 import sojourn.walk.FitPlan;
 
@@ -21,15 +25,32 @@ final class TradeText {
         String start = first.map(date -> "decides " + trade.decide().word() + ", at the earliest on " + date
                         + " (if that fit is accepted); ")
                 .orElse("never decides; ");
-        String fill = trade.delay() == 0
-                ? "fills at the next close"
-                : "fills at the close " + (1 + trade.delay()) + " bars after the decision";
+        String price = trade.fill() == FillTime.NEXT_OPEN ? "open" : "close";
+        String fill = (trade.delay() == 0
+                        ? "fills at the next " + price
+                        : "fills at the " + price + " " + (1 + trade.delay()) + " bars after the decision")
+                + (trade.sizeAt() == SizeAt.DECISION
+                        ? ", in quantities settled at the closes of the decision"
+                        : ", in quantities settled at the fill's own prices (an approximation)")
+                + lots(trade.lots());
         String band = trade.noTradeBand() > 0
                 ? "; leaves weights within " + trade.noTradeBand() + " of their targets alone"
                 : "";
         String stay = trade.stayAtLeast() > 1 ? "; keeps a state for at least " + trade.stayAtLeast() + " bars" : "";
         return start + fill + band + stay + "; pays " + costs(trade.costs()) + "; begins with "
                 + (long) trade.capital();
+    }
+
+    private static String lots(Lots lots) {
+        if (lots.equals(Lots.FRACTIONS)) {
+            return "";
+        }
+        return lots.named().isEmpty()
+                ? ", in whole lots of " + lots.every()
+                : ", in whole lots of "
+                        + lots.named().entrySet().stream()
+                                .map(one -> one.getValue() + " " + one.getKey())
+                                .collect(Collectors.joining(" and "));
     }
 
     private static String costs(Costs costs) {
@@ -70,7 +91,12 @@ final class TradeText {
         Costs costs = strategy.trade().costs();
         List<String> left = new ArrayList<>();
         left.add("taxes other than stamp duty");
-        left.add("dividends and splits other than those already in the price columns");
+        leftOut(
+                left,
+                strategy.prices().values().stream()
+                        .noneMatch(source ->
+                                source.dividend().isPresent() || source.split().isPresent()),
+                "dividends and splits other than those already in the price columns");
         leftOut(left, costs.impact().isEmpty(), "market impact and what an order's size does to how much of it fills");
         leftOut(left, costs.spreadOfVolatility().isEmpty(), "half-spreads that widen with volatility");
         leftOut(left, costs.minimumFee() == 0 && costs.fixedFee() == 0, "minimum and fixed fees");
@@ -78,7 +104,10 @@ final class TradeText {
         leftOut(left, costs.marginPercentPerYear() == 0, "margins on borrowed cash");
         left.add("currencies");
         left.add("delisting");
-        return String.join("; ", left) + ". Trades happen at closing prices, in fractional units.";
+        boolean opens = strategy.trade().fill() == FillTime.NEXT_OPEN;
+        boolean fractions = strategy.trade().lots().equals(Lots.FRACTIONS);
+        return String.join("; ", left) + ". Trades happen at " + (opens ? "opening" : "closing") + " prices"
+                + (fractions ? ", in fractional units." : ".");
     }
 
     private static void leftOut(List<String> left, boolean isLeft, String what) {

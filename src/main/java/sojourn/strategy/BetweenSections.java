@@ -51,6 +51,7 @@ final class BetweenSections {
         sections.windowSize(problems);
         sections.rule(problems);
         sections.yardstick(problems);
+        sections.lots(problems);
     }
 
     private void observedAssets(Problems problems) {
@@ -104,6 +105,13 @@ final class BetweenSections {
         Optional<Node> held = document.at("/judge/buy-and-hold");
         if (assets.isPresent() && held.isPresent() && held.get() instanceof MapNode weights) {
             add("/judge", Misfit.inWeights("/buy-and-hold", weights.keys(), assets.get()), problems);
+        }
+    }
+
+    private void lots(Problems problems) {
+        Optional<Node> lots = document.at("/trade/lots");
+        if (assets.isPresent() && lots.isPresent() && lots.get() instanceof MapNode named) {
+            add("/trade", Misfit.inWeights("/lots", named.keys(), assets.get()), problems);
         }
     }
 

@@ -1,6 +1,7 @@
 package sojourn.trade;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
@@ -8,6 +9,7 @@ import sojourn.allocate.Because;
 import sojourn.allocate.Weights;
 import sojourn.market.FillPrices;
 import sojourn.market.Known;
+import sojourn.market.PriceTable;
 
 /** Cash and units during one simulation, and what moved on the bar at hand. */
 final class Account {
@@ -22,6 +24,8 @@ final class Account {
     private final double[] price;
     private final double[] value;
     private final double[] bought;
+    private final double[] lots;
+    private final boolean whole;
     private final List<Fill> fills = new ArrayList<>();
     private final List<Hindrance> hindrances = new ArrayList<>();
     private Optional<Quantities> carried = Optional.empty();
@@ -31,8 +35,9 @@ final class Account {
     private double turnover;
     private double writtenOff;
 
-    Account(FillPrices prices, int assets, Terms terms) {
-        this.prices = prices;
+    Account(PriceTable table, Terms terms) {
+        int assets = table.assets().size();
+        this.prices = table.fillPrices();
         this.costs = terms.costs();
         this.accruals = new Accruals(prices, costs);
         this.cash = terms.capital();
@@ -42,6 +47,8 @@ final class Account {
         this.bought = new double[assets];
         this.tariff = Tariff.of(costs, assets);
         this.rebalance = new Rebalance(tariff);
+        this.lots = terms.lots().of(table.assets());
+        this.whole = Arrays.stream(lots).anyMatch(lot -> lot > 0);
     }
 
     /** The same account with something in it. */
@@ -137,19 +144,36 @@ final class Account {
         if (result == Rebalance.Result.NOTHING_TO_DO) {
             return Outcome.FILLED;
         }
-        for (int i = 0; i < units.length; i++) {
-            if (rebalance.capped(i)) {
-                return exchange(order, bar, before, targeted(order.target()));
-            }
+        if (whole || anyCapped()) {
+            return exchange(order, bar, before, targeted(order, bar));
         }
         book(order, bar, before);
         return Outcome.FILLED;
     }
 
-    /** The units that the solved order comes to. */
-    private Quantities targeted(Weights target) {
+    private boolean anyCapped() {
+        for (int i = 0; i < units.length; i++) {
+            if (rebalance.capped(i)) {
+                return true;
+            }
+        }
+        return false;
+    }
+
+    /** The units that the solved order comes to, in whole lots. */
+    private Quantities targeted(Order order, int bar) {
         double after = rebalance.wealthAfter();
-        return Quantities.each(units.length, i -> rebalance.traded(i) ? target.at(i) * after / price[i] : units[i]);
+        double[] wanted = units.clone();
+        for (int i = 0; i < wanted.length; i++) {
+            if (rebalance.traded(i)) {
+                double exact = order.target().at(i) * after / price[i];
+                wanted[i] = Lots.whole(lots[i], exact);
+                if (wanted[i] == 0 && exact != 0) {
+                    hindrances.add(new Hindrance(bar, order.decidedOn(), i, Hindrance.Kind.LOT));
+                }
+            }
+        }
+        return Quantities.of(wanted);
     }
 
     private void book(Order order, int bar, double before) {
@@ -174,19 +198,19 @@ final class Account {
     /** Trades towards known quantities, as far as each leg may on one bar; cash takes what it comes to. */
     private Outcome exchange(Order order, int bar, double before, Quantities wanted) {
         double after = before;
-        boolean whole = true;
+        boolean done = true;
         for (int i = 0; i < units.length; i++) {
             double all = wanted.at(i) - units[i];
             double most = tariff.within(i, all * price[i]);
             boolean cut = most != all * price[i];
-            bought[i] = cut ? most / price[i] : all;
+            bought[i] = cut ? Lots.whole(lots[i], most / price[i]) : all;
             if (Math.abs(bought[i] * price[i]) < Rebalance.TINY * before) {
                 bought[i] = 0;
             } else {
                 after -= tariff.cost(i, bought[i] * price[i]);
             }
             if (cut) {
-                whole = false;
+                done = false;
                 hindrances.add(new Hindrance(bar, order.decidedOn(), i, Hindrance.Kind.PARTICIPATION));
             }
         }
@@ -194,8 +218,8 @@ final class Account {
             return Outcome.RUIN;
         }
         book(order, bar, before, after);
-        carried = whole ? Optional.empty() : Optional.of(wanted);
-        return whole ? Outcome.FILLED : Outcome.PART;
+        carried = done ? Optional.empty() : Optional.of(wanted);
+        return done ? Outcome.FILLED : Outcome.PART;
     }
 
     private void book(Order order, int bar, double before, double after) {
@@ -259,6 +283,10 @@ final class Account {
 
     double units(int asset) {
         return units[asset];
+    }
+
+    Quantities units() {
+        return Quantities.of(units);
     }
 
     /** At the cash rate. */

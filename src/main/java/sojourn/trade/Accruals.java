@@ -9,28 +9,43 @@ import sojourn.market.FillPrices;
 final class Accruals {
     private final FillPrices prices;
     private final Costs costs;
+    private final boolean distributes;
     private final List<LedgerEntry> entries = new ArrayList<>();
     private double margin;
     private double borrowFee;
+    private double dividend;
 
     Accruals(FillPrices prices, Costs costs) {
         this.prices = prices;
         this.costs = costs;
+        this.distributes = prices.distributes();
+    }
+
+    /** Whether there can be anything. */
+    boolean any() {
+        return distributes || costs.onHolding();
     }
 
     /**
      * Takes one bar in: the margin on negative cash, then the fee on what is held short, both for the calendar days since the close
-     * before and on its values.
+     * before and on its values; then the bar's splits; then its dividends, which shorts pay.
      *
      * @param cash at the close before
-     * @param units at the close before. Not modified.
+     * @param units at the close before. Modified: splits.
      * @return what cash gains
      */
     double on(int bar, double cash, double[] units) {
         clear();
-        if (!costs.onHolding()) {
-            return 0;
+        if (costs.onHolding()) {
+            finance(bar, cash, units);
         }
+        if (distributes) {
+            distribute(bar, units);
+        }
+        return dividend - margin - borrowFee;
+    }
+
+    private void finance(int bar, double cash, double[] units) {
         margin = Math.max(0, -cash) * prices.interest(costs.marginPercentPerYear(), bar);
         add(bar, LedgerKind.MARGIN_INTEREST, OptionalInt.empty(), -margin);
         double rate = prices.interest(costs.borrowPercentPerYear(), bar);
@@ -39,13 +54,22 @@ final class Accruals {
             add(bar, LedgerKind.BORROW_FEE, OptionalInt.of(i), -fee);
             borrowFee += fee;
         }
-        return -margin - borrowFee;
+    }
+
+    private void distribute(int bar, double[] units) {
+        for (int i = 0; i < units.length; i++) {
+            units[i] *= prices.split(i, bar);
+            double paid = units[i] * prices.dividend(i, bar);
+            add(bar, LedgerKind.DIVIDEND, OptionalInt.of(i), paid);
+            dividend += paid;
+        }
     }
 
     /** Takes in a bar on which nothing is held. */
     void clear() {
         margin = 0;
         borrowFee = 0;
+        dividend = 0;
     }
 
     private void add(int bar, LedgerKind kind, OptionalInt asset, double amount) {
@@ -62,6 +86,11 @@ final class Accruals {
     /** Paid for what is held short, this bar. */
     double borrowFee() {
         return borrowFee;
+    }
+
+    /** Received for what is held, paid for what is held short, this bar. */
+    double dividend() {
+        return dividend;
     }
 
     /** Every movement so far, in order. */

@@ -1,56 +1,80 @@
 package sojourn.trade;
 
-import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
+import sojourn.allocate.Because;
+import sojourn.allocate.Weights;
 import sojourn.market.PriceTable;
 
 /**
- * An order put into units and money as if it filled at the last close there is, by the same account that fills it in a simulation:
- * an estimate, for it will fill later at other prices.
- *
- * @param legs what is bought and sold
- * @param cost of all legs, money
- * @param after what would be held afterwards
- * @param outcome what came of it
+ * What it would take to come from given holdings to target weights at the closes of one bar, with every cost estimated from what was
+ * known at that close: the same sums as a fill in the simulation. An estimate, because an order fills later and at other prices.
  */
-public record Basket(List<Fill> legs, double cost, Holdings after, Outcome outcome) {
-    /** Whether the order could fill. */
-    public enum Outcome {
-        /** It can; without a leg if what is held is what is wanted. */
-        FILLS,
-        /** It can in part on one bar; the rest waits for later ones. */
-        FILLS_IN_PART,
-        /** It cannot for now, for a leg has no price, or nothing would be left after its costs. */
-        DOES_NOT_FILL
-    }
+public final class Basket {
+    private static final Because ESTIMATED = Because.of("an estimate at the last closes");
 
-    /** Copies the list. */
-    public Basket {
-        legs = List.copyOf(legs);
+    private final List<Fill> legs;
+    private final List<Hindrance> hindrances;
+    private final Quantities wanted;
+    private final double cash;
+
+    private Basket(List<Fill> legs, List<Hindrance> hindrances, Quantities wanted, double cash) {
+        this.legs = List.copyOf(legs);
+        this.hindrances = List.copyOf(hindrances);
+        this.wanted = wanted;
+        this.cash = cash;
     }
 
     /**
-     * {@code order} from {@code holdings}, whose wealth must be above 0, at the last close of {@code table}; costs that depend on past
-     * trading take what is known at that close.
+     * The basket at the closes of {@code bar}; empty if nothing would be left after its costs.
+     *
+     * @param held units of each asset of the table
+     * @param cash money held; negative if owed
+     * @param terms of which costs and lots count
      */
-    public static Basket of(PriceTable table, Holdings holdings, Order order, Terms terms) {
-        int bar = table.size() - 1;
-        int assets = table.assets().size();
-        Account account = new Account(table.fillPrices(), assets, terms)
-                .holding(Quantities.each(assets, holdings.units()::get), holdings.cash());
-        Account.Outcome outcome = account.fill(order, bar, new NextClose(0), table.knownAt(bar));
-        List<Double> units = new ArrayList<>();
-        for (int asset = 0; asset < assets; asset++) {
-            units.add(account.units(asset));
-        }
-        return new Basket(account.fills(), account.cost(), new Holdings(units, account.cash()), told(outcome));
+    public static Optional<Basket> at(
+            PriceTable table, int bar, Quantities held, double cash, Weights target, Terms terms) {
+        return of(table, bar, held, cash, new Order(bar, bar, target, ESTIMATED), terms);
     }
 
-    private static Outcome told(Account.Outcome outcome) {
-        return switch (outcome) {
-            case FILLED -> Outcome.FILLS;
-            case PART -> Outcome.FILLS_IN_PART;
-            case BLOCKED, RUIN -> Outcome.DOES_NOT_FILL;
-        };
+    /** The same for an order as it waits: what its quantities were settled at, or what of it is left, counts. */
+    public static Optional<Basket> of(
+            PriceTable table, int bar, Quantities held, double cash, Order order, Terms terms) {
+        Account account = new Account(table, terms).holding(held, cash);
+        Account.Outcome outcome = account.fill(order, bar, new NextClose(0), table.knownAt(bar));
+        if (outcome == Account.Outcome.RUIN) {
+            return Optional.empty();
+        }
+        Quantities after = outcome == Account.Outcome.PART ? account.carried().orElseThrow() : account.units();
+        return Optional.of(new Basket(account.fills(), account.hindrances(), after, account.cash()));
+    }
+
+    /** What would be traded on the first bar, leg by leg, with what it costs; no leg where nothing needs to be traded. */
+    public List<Fill> legs() {
+        return legs;
+    }
+
+    /** What would be in the way; if it blocks the basket, there are no legs. */
+    public List<Hindrance> hindrances() {
+        return hindrances;
+    }
+
+    /** Units in the end, also of legs that take more than one bar. */
+    public Quantities wanted() {
+        return wanted;
+    }
+
+    /** Cash after the legs and their costs. */
+    public double cash() {
+        return cash;
+    }
+
+    /** What all legs cost, money. */
+    public double cost() {
+        double cost = 0;
+        for (Fill leg : legs) {
+            cost += leg.charges().total();
+        }
+        return cost;
     }
 }

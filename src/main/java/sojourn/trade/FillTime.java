@@ -12,6 +12,13 @@ public enum FillTime {
         public FillRule delayed(int bars) {
             return new NextClose(bars);
         }
+    },
+    /** At the open of the bar after the decision. */
+    NEXT_OPEN("next-open") {
+        @Override
+        public FillRule delayed(int bars) {
+            return new NextOpen(bars);
+        }
     };
 
     /** Reads the word of the strategy file. */

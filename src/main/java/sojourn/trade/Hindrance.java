@@ -8,10 +8,15 @@ package sojourn.trade;
  * @param asset index in the price table of the first asset that was in the way
  */
 public record Hindrance(int bar, int decidedOn, int asset, Kind kind) {
+    /** Whether the whole order waits for it. */
+    public boolean waits() {
+        return kind == Kind.NO_PRICE || kind == Kind.NO_VOLUME || kind == Kind.NO_VOLATILITY;
+    }
+
     /** What was in the way. */
     public enum Kind {
-        /** The asset had no price to fill at: the whole order waits. */
-        NO_PRICE("had no price to fill at, so the order waited"),
+        /** The asset had no price to trade at: the whole order waits. */
+        NO_PRICE("had no price to trade at, so the order waited"),
         /** Nothing was known to have traded lately, so what an order would lose by its size is unknown: the whole order waits. */
         NO_VOLUME("had no trailing volume to take market impact from, so the order waited"),
         /** Too few returns were known for a trailing volatility: the whole order waits. */

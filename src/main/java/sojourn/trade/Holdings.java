@@ -29,6 +29,20 @@ public record Holdings(List<Double> units, double cash) {
         return new Holdings(units, track.cash(bar));
     }
 
+    /** What is held once {@code basket} has traded what it may on one bar. */
+    public Holdings after(Basket basket) {
+        List<Double> changed = new ArrayList<>(units);
+        for (Fill leg : basket.legs()) {
+            changed.set(leg.asset(), changed.get(leg.asset()) + leg.units());
+        }
+        return new Holdings(changed, basket.cash());
+    }
+
+    /** The units alone. */
+    public Quantities quantities() {
+        return Quantities.each(units.size(), units::get);
+    }
+
     /** What they are worth at the close of a bar. */
     public double wealth(FillPrices prices, int bar) {
         double wealth = cash;

@@ -10,6 +10,8 @@ public enum LedgerKind {
     MARGIN_INTEREST("margin-interest"),
     /** Paid for borrowing what is held short. */
     BORROW_FEE("borrow-fee"),
+    /** Paid by an asset to its holders, and by those who are short of it. */
+    DIVIDEND("dividend"),
     /** The value of units bought (negative) or sold (positive), without costs. */
     TRADE("trade"),
     /** Paid to whoever trades for us. */

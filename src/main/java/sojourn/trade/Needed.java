@@ -23,6 +23,9 @@ public record Needed(String asset, String column, String what) {
     public static List<Needed> lacking(TradeSettings settings, PriceTable table, List<String> traded) {
         List<Needed> lacking = new ArrayList<>();
         for (String asset : traded) {
+            if (settings.fill() == FillTime.NEXT_OPEN && never(table, asset, Known::open)) {
+                lacking.add(new Needed(asset, "open", "fill: next-open"));
+            }
             if (settings.costs().impact().isPresent() && never(table, asset, Known::volume)) {
                 lacking.add(new Needed(asset, "volume", "impact"));
             }

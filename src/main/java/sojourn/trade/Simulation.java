@@ -11,6 +11,7 @@ import sojourn.allocate.Policy;
 import sojourn.allocate.Situation;
 import sojourn.allocate.Stance;
 import sojourn.allocate.Weights;
+import sojourn.market.FillPrices;
 import sojourn.market.Known;
 import sojourn.market.PriceTable;
 import sojourn.numeric.Check;
@@ -29,6 +30,7 @@ public final class Simulation {
     private final Terms terms;
     private final List<String> regimes;
     private final Account account;
+    private final boolean distributes;
     private final Deque<Order> pending = new ArrayDeque<>();
     private final List<Order> dropped = new ArrayList<>();
     private final List<Undecided> undecided = new ArrayList<>();
@@ -44,7 +46,8 @@ public final class Simulation {
         this.policy = policy;
         this.terms = terms;
         this.regimes = List.copyOf(signal.regimes());
-        this.account = new Account(table.fillPrices(), table.assets().size(), terms);
+        this.account = new Account(table, terms);
+        this.distributes = table.fillPrices().distributes();
         this.held = Weights.none(table.assets().size());
     }
 
@@ -75,7 +78,7 @@ public final class Simulation {
 
     private Track track(int start, Decision first) {
         Track.Rows rows = new Track.Rows(
-                table.size() - start, table.assets().size(), terms.costs().onHolding());
+                table.size() - start, table.assets().size(), account.accruals().any());
         take(start, first);
         fillDue(start);
         mark(start);
@@ -101,6 +104,9 @@ public final class Simulation {
 
     private Decision.Change step(int bar) {
         account.accrue(bar);
+        if (distributes) {
+            splitPending(bar);
+        }
         fillDue(bar);
         mark(bar);
         if (ruinedOn.isPresent()) {
@@ -140,7 +146,44 @@ public final class Simulation {
         }
         if (decision.kind() == Decision.Kind.ORDER) {
             Weights ordered = decision.target().orElseThrow();
-            pending.add(new Order(bar, terms.fill().dueOn(bar), ordered, decision.because()));
+            Order order = new Order(bar, terms.fill().dueOn(bar), ordered, decision.because());
+            pending.add(terms.sizeAt() == SizeAt.DECISION ? order.toHold(sized(bar, ordered)) : order);
+        }
+    }
+
+    /**
+     * The units that target weights come to at the closes of the decision, with wealth less estimated costs, as if pending orders had
+     * filled; without the costs where they cannot be estimated.
+     */
+    private Quantities sized(int bar, Weights ordered) {
+        FillPrices prices = table.fillPrices();
+        Quantities expected = pending.isEmpty()
+                ? account.units()
+                : pending.getLast().quantities().orElseThrow();
+        double worth = account.wealth(bar);
+        double cash = worth;
+        for (int i = 0; i < expected.size(); i++) {
+            cash -= expected.at(i) * prices.close(i, bar);
+        }
+        Optional<Basket> basket = Basket.at(table, bar, expected, cash, ordered, terms);
+        if (basket.isPresent() && basket.get().hindrances().stream().noneMatch(Hindrance::waits)) {
+            basket.get().hindrances().stream()
+                    .filter(one -> one.kind() == Hindrance.Kind.LOT)
+                    .forEach(account.hindrances()::add);
+            return basket.get().wanted();
+        }
+        double[] lots = terms.lots().of(table.assets());
+        return Quantities.each(lots.length, i -> Lots.whole(lots[i], ordered.at(i) * worth / prices.close(i, bar)));
+    }
+
+    /** Units that are settled already become those after the bar's splits. */
+    private void splitPending(int bar) {
+        FillPrices prices = table.fillPrices();
+        for (int waiting = pending.size(); waiting > 0; waiting--) {
+            Order order = pending.removeFirst();
+            pending.add(order.quantities()
+                    .map(units -> order.toHold(Quantities.each(units.size(), i -> units.at(i) * prices.split(i, bar))))
+                    .orElse(order));
         }
     }
 

@@ -156,6 +156,11 @@ public final class Track {
         return rows.at(rows.borrowFee, row(bar));
     }
 
+    /** Dividends of this bar on what was held at the close before, money; negative if paid by shorts. */
+    public double dividend(int bar) {
+        return rows.at(rows.dividend, row(bar));
+    }
+
     /** All charges of this bar's fills, money, at least 0. */
     public double cost(int bar) {
         return rows.cost[row(bar)];
@@ -242,8 +247,9 @@ public final class Track {
         final double[] targets;
         final double[] margin;
         final double[] borrowFee;
+        final double[] dividend;
 
-        /** What holding costs has columns only if it can cost anything. */
+        /** What holding brings and costs besides interest has columns only if there can be any. */
         Rows(int bars, int assets, boolean accruing) {
             this.wealth = new double[bars];
             this.cash = new double[bars];
@@ -256,12 +262,14 @@ public final class Track {
             this.targets = new double[bars * assets];
             this.margin = new double[accruing ? bars : 0];
             this.borrowFee = new double[accruing ? bars : 0];
+            this.dividend = new double[accruing ? bars : 0];
         }
 
         void accrued(int row, Accruals accruals) {
             if (margin.length > 0) {
                 margin[row] = accruals.margin();
                 borrowFee[row] = accruals.borrowFee();
+                dividend[row] = accruals.dividend();
             }
         }
 

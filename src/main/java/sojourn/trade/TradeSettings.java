@@ -1,5 +1,6 @@
 package sojourn.trade;
 
+import java.util.Optional;
 import sojourn.allocate.Schedule;
 import sojourn.document.Field;
 import sojourn.document.Shape;
@@ -11,7 +12,15 @@ import sojourn.numeric.Check;
  * rest are the {@link #terms}.
  */
 public record TradeSettings(
-        Schedule decide, FillTime fill, int delay, double noTradeBand, int stayAtLeast, Costs costs, double capital) {
+        Schedule decide,
+        FillTime fill,
+        int delay,
+        double noTradeBand,
+        int stayAtLeast,
+        Costs costs,
+        double capital,
+        SizeAt sizeAt,
+        Lots lots) {
     private static final int LONGEST_DELAY = 250;
     private static final int LONGEST_STAY = 10_000;
     private static final double MOST_CAPITAL = 1e15;
@@ -25,7 +34,7 @@ public record TradeSettings(
             "fill",
             FillTime.SHAPE,
             FillTime.NEXT_CLOSE.word(),
-            "when an order fills: at the close of the bar after the decision");
+            "when an order fills: at the close or at the open of the bar after the decision");
     private static final Field<Integer> DELAY = Field.defaulted(
             "delay", Shapes.integer().atLeast(0).atMost(LONGEST_DELAY), "0", "further bars until an order fills");
     private static final Field<Double> NO_TRADE_BAND = Field.defaulted(
@@ -46,6 +55,16 @@ public record TradeSettings(
             "1000000",
             "wealth to begin with, in the currency of the prices");
 
+    private static final Field<Optional<SizeAt>> SIZE_AT = Field.maybe(
+            "size-at",
+            SizeAt.SHAPE,
+            "the prices that settle an order's quantities: those of its fill (fill, if left out), an approximation, or the closes of the"
+                    + " decision");
+    private static final Field<Optional<Lots>> LOTS = Field.maybe(
+            "lots",
+            Lots.SHAPE,
+            "units that come together, one number for every asset or one for each named; any fraction if left out");
+
     /** Reads the section {@code trade}. */
     public static final Shape<TradeSettings> SHAPE = Shapes.object(
             "trade",
@@ -56,14 +75,18 @@ public record TradeSettings(
                     f.get(NO_TRADE_BAND),
                     f.get(STAY_AT_LEAST),
                     f.get(COSTS),
-                    f.get(CAPITAL)),
+                    f.get(CAPITAL),
+                    f.get(SIZE_AT).orElse(SizeAt.FILL),
+                    f.get(LOTS).orElse(Lots.FRACTIONS)),
             DECIDE,
             FILL,
             DELAY,
             NO_TRADE_BAND,
             STAY_AT_LEAST,
             COSTS,
-            CAPITAL);
+            CAPITAL,
+            SIZE_AT,
+            LOTS);
 
     /** Refuses numbers out of range. */
     public TradeSettings {
@@ -73,8 +96,20 @@ public record TradeSettings(
         Check.above(capital, 0, "capital");
     }
 
+    /** Quantities settled at the fill, in fractions of a unit. */
+    public TradeSettings(
+            Schedule decide,
+            FillTime fill,
+            int delay,
+            double noTradeBand,
+            int stayAtLeast,
+            Costs costs,
+            double capital) {
+        this(decide, fill, delay, noTradeBand, stayAtLeast, costs, capital, SizeAt.FILL, Lots.FRACTIONS);
+    }
+
     /** What the simulation needs to know. */
     public Terms terms() {
-        return new Terms(fill.delayed(delay), costs, capital);
+        return new Terms(fill.delayed(delay), costs, capital, sizeAt, lots);
     }
 }

@@ -49,6 +49,16 @@ class MissingColumnsTest {
         assertThat(prepared(rows + "5000\n", rule)).isInstanceOf(Prepared.Ready.class);
     }
 
+    @Test
+    void fillingAtOpensOfAFileWithoutThemIsRefused() throws IOException {
+        String rows = "date,open,high,low,close\n2001-01-01,,101,98,100\n2001-01-02,,102,99,101\n";
+        assertThat(((Prepared.Unreadable) prepared(rows, "trade: {fill: next-open}")).problems())
+                .extracting(Problem::toString)
+                .contains(
+                        "stocks.csv:1:1: stocks has no open on any bar, and fill: next-open needs it; name the column under"
+                                + " prices (open: ...), or trade without fill: next-open");
+    }
+
     private Prepared prepared(String prices) throws IOException {
         return prepared(prices, "");
     }
