@@ -4,6 +4,7 @@ import static org.assertj.core.api.Assertions.assertThat;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.function.Function;
@@ -21,7 +22,9 @@ class PrefixTest {
     private static final long SEED = 77;
     private static final int BARS = 150;
     private static final double CAPITAL = 1_000_000;
-    private static final GivenPrices PRICES = GivenPrices.random(SEED, BARS, 2).withRandomVolumes(SEED, 20_000);
+    private static final GivenPrices ADJUSTED =
+            GivenPrices.random(SEED, BARS, 2).withRandomVolumes(SEED, 20_000);
+    private static final GivenPrices PRICES = ADJUSTED.givingAtRandom(SEED);
     private static final Costs PLAIN = new Costs(5, 5);
     private static final Costs BY_PAST_TRADING = new Costs(5, 2)
             .withSpreadOf(new SpreadOfVolatility(0.1, 5))
@@ -31,15 +34,23 @@ class PrefixTest {
     void cuttingTheFutureChangesNothingBeforeTheCut() {
         for (int delay : new int[] {0, 2}) {
             for (Costs costs : List.of(PLAIN, BY_PAST_TRADING)) {
-                Terms terms = new Terms(new NextClose(delay), costs, CAPITAL);
-                assertThat(cutsThatDiffer(table -> Policies.stepAside(table.assets()), terms))
-                        .isEmpty();
-                assertThat(cutsThatDiffer(table -> Policies.mixed(table.assets()), terms))
-                        .isEmpty();
-                assertThat(cutsThatDiffer(table -> Policies.random(SEED, BARS, 2, 1.3), terms))
-                        .isEmpty();
+                for (FillTime fill : FillTime.values()) {
+                    for (SizeAt size : SizeAt.values()) {
+                        Lots lots = size == SizeAt.FILL ? Lots.FRACTIONS : new Lots(10, Map.of());
+                        sameUpToEveryCut(new Terms(fill.delayed(delay), costs, CAPITAL, size, lots));
+                    }
+                }
             }
         }
+    }
+
+    private static void sameUpToEveryCut(Terms terms) {
+        assertThat(cutsThatDiffer(table -> Policies.stepAside(table.assets()), terms))
+                .isEmpty();
+        assertThat(cutsThatDiffer(table -> Policies.mixed(table.assets()), terms))
+                .isEmpty();
+        assertThat(cutsThatDiffer(table -> Policies.random(SEED, BARS, 2, 1.3), terms))
+                .isEmpty();
     }
 
     @Test
@@ -55,10 +66,10 @@ class PrefixTest {
     void theVolumeOfTheBarOfAFillHasNoPartInItsCost() {
         Terms terms = new Terms(new NextClose(0), BY_PAST_TRADING, CAPITAL);
         Function<PriceTable, Policy> policy = table -> Policies.random(SEED, BARS, 2, 1.3);
-        Track track = run(PRICES, policy, terms);
+        Track track = run(ADJUSTED, policy, terms);
         int bar = track.fills().get(track.fills().size() / 2).filledOn();
         double[][] volumes = new double[2][];
-        PriceTable table = PRICES.table();
+        PriceTable table = ADJUSTED.table();
         for (int asset = 0; asset < 2; asset++) {
             volumes[asset] = new double[BARS];
             for (int each = 0; each < BARS; each++) {
@@ -66,7 +77,7 @@ class PrefixTest {
             }
             volumes[asset][bar] *= 7;
         }
-        Track other = run(PRICES.withVolumes(volumes), policy, terms);
+        Track other = run(ADJUSTED.withVolumes(volumes), policy, terms);
         assertThat(facts(other, bar + 1)).isEqualTo(facts(track, bar + 1));
         assertThat(facts(other, BARS)).isNotEqualTo(facts(track, BARS));
     }
@@ -149,6 +160,7 @@ class PrefixTest {
                     track.interest(bar),
                     track.marginInterest(bar),
                     track.borrowFee(bar),
+                    track.dividend(bar),
                     track.cost(bar),
                     track.turnover(bar),
                     track.switched(bar)));

@@ -3,6 +3,7 @@ package sojourn.trade;
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.within;
 
+import java.util.Map;
 import java.util.Optional;
 import org.junit.jupiter.api.Test;
 import sojourn.allocate.Schedule;
@@ -33,6 +34,16 @@ class TradeSettingsTest {
         assertThat(read("{}"))
                 .isEqualTo(new TradeSettings(
                         Schedule.AT_EVERY_CLOSE, FillTime.NEXT_CLOSE, 0, 0, 1, Costs.none(), 1_000_000));
+    }
+
+    @Test
+    void fillsSizesAndLotsAreRead() {
+        TradeSettings read = read("{fill: next-open, delay: 1, size-at: decision, lots: {stocks: 10}}");
+        assertThat(read.terms())
+                .isEqualTo(new Terms(
+                        new NextOpen(1), Costs.none(), 1_000_000, SizeAt.DECISION, new Lots(0, Map.of("stocks", 10))));
+        assertThat(read("lots: 5").lots()).isEqualTo(new Lots(5, Map.of()));
+        assertThat(read("{}").lots()).isEqualTo(Lots.FRACTIONS);
     }
 
     @Test
