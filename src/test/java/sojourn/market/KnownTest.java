@@ -21,7 +21,7 @@ class KnownTest {
             .table();
     private static final int NOW = 12;
 
-    /** Every public method that takes a bar; the bar is its last argument, what stands before it is an asset. */
+    /** Every public method that takes a bar; the bar is its last argument, what stands before it is an asset, or a series by its name. */
     static Stream<Method> methodsThatTakeABar() {
         return Arrays.stream(Known.class.getDeclaredMethods())
                 .filter(method -> Modifier.isPublic(method.getModifiers()))
@@ -32,7 +32,17 @@ class KnownTest {
     void theMethodsThatTakeABarAreThese() {
         assertThat(methodsThatTakeABar().map(Method::getName))
                 .containsExactlyInAnyOrder(
-                        "at", "date", "close", "closes", "open", "high", "low", "volume", "cashReturn", "given");
+                        "at",
+                        "date",
+                        "close",
+                        "close",
+                        "closes",
+                        "open",
+                        "high",
+                        "low",
+                        "volume",
+                        "cashReturn",
+                        "given");
     }
 
     @ParameterizedTest
@@ -78,6 +88,9 @@ class KnownTest {
     private static Object[] arguments(Method method, int bar) {
         Object[] arguments = new Object[method.getParameterCount()];
         Arrays.fill(arguments, 0);
+        if (method.getParameterTypes()[0] == String.class) {
+            arguments[0] = "stocks";
+        }
         arguments[arguments.length - 1] = bar;
         return arguments;
     }

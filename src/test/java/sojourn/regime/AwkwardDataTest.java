@@ -101,6 +101,7 @@ class AwkwardDataTest {
     @Test
     void noRowWithAllReturnsFails() {
         double[] x = new double[50];
+        Arrays.setAll(x, t -> 0.01 * (t % 7 - 3));
         boolean[] missing = new boolean[50];
         Arrays.fill(missing, true);
         FitRequest request = FitRequest.of(
