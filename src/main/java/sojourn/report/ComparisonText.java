@@ -18,6 +18,7 @@ import sojourn.measure.Measure;
 
 /** A comparison as a terminal shows it, at most 100 columns wide: caution, risk and return, what it took, failures. */
 public final class ComparisonText {
+    private static final int FEW = 10;
 
     private ComparisonText() {}
 
@@ -29,8 +30,9 @@ public final class ComparisonText {
             text.append(headline(compared)).append('\n');
             text.append(riskAndReturn(compared)).append('\n');
             text.append(whatItTook(compared)).append('\n');
-            text.append(DifferenceText.of(compared)).append('\n');
-            text.append(YardstickText.of(compared));
+            text.append(DifferenceText.of(few(compared))).append('\n');
+            text.append(YardstickText.of(few(compared)));
+            text.append(others(compared));
             text.append(marked(compared));
         }
         if (compared.ranked().size() == 1) {
@@ -40,6 +42,21 @@ public final class ComparisonText {
             text.append(Lines.wrapped("FAILED " + one.file().slug() + ": " + one.reason(), 2));
         }
         return text.toString();
+    }
+
+    /** Those that stand in more than the first tables: the first of the ranking. */
+    private static List<Judgement> few(Compared compared) {
+        return compared.ranked().subList(0, Math.min(FEW, compared.ranked().size()));
+    }
+
+    private static String others(Compared compared) {
+        return compared.ranked().size() <= FEW
+                ? ""
+                : Lines.wrapped(
+                                "From 'Against buy-and-hold' on, the tables show the first " + FEW
+                                        + " of the ranking; comparison.csv has the yardsticks of all.",
+                                0)
+                        + '\n';
     }
 
     private static String headline(Compared compared) {

@@ -1,7 +1,6 @@
 package sojourn.report;
 
 import java.util.List;
-import sojourn.compare.Compared;
 import sojourn.compare.Judgement;
 import sojourn.measure.Attribution;
 
@@ -9,9 +8,9 @@ import sojourn.measure.Attribution;
 final class DifferenceText {
     private DifferenceText() {}
 
-    static String of(Compared compared) {
+    static String of(List<Judgement> shown) {
         Grid grid = new Grid(List.of("Against buy-and-hold, a year", "vs hold", "exposure", "timing", "cash", "costs"));
-        for (Judgement one : compared.ranked()) {
+        for (Judgement one : shown) {
             Attribution parts = one.difference().perYear();
             grid.add(List.of(
                     "  " + ComparisonText.named(one),

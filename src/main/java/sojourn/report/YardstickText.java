@@ -8,7 +8,6 @@ import java.util.Optional;
 import java.util.function.Function;
 import java.util.stream.Collectors;
 import sojourn.archive.ComparisonRow.Judged;
-import sojourn.compare.Compared;
 import sojourn.compare.Judgement;
 import sojourn.measure.Luck;
 import sojourn.measure.Measure;
@@ -16,7 +15,7 @@ import sojourn.measure.Measured;
 import sojourn.measure.RandomSwitches;
 import sojourn.measure.Yardstick;
 
-/** Growth and Sharpe ratio of each variant beside its yardsticks, those that any variant asked for. */
+/** Growth and Sharpe ratio of each variant beside its yardsticks, those that any of the variants asked for. */
 final class YardstickText {
     private static final int BOTH_IN_ONE_GRID = 2;
 
@@ -48,16 +47,16 @@ final class YardstickText {
     }
 
     /** Empty if no variant asked for any but buy-and-hold. */
-    static String of(Compared compared) {
+    static String of(List<Judgement> shown) {
         List<Yardstick> asked = COLUMNS.keySet().stream()
-                .filter(one -> compared.ranked().stream().anyMatch(judged -> asks(judged, one)))
+                .filter(one -> shown.stream().anyMatch(judged -> asks(judged, one)))
                 .toList();
         StringBuilder text = new StringBuilder();
         if (!asked.isEmpty()) {
-            text.append(beside(compared, asked)).append('\n');
+            text.append(beside(shown, asked)).append('\n');
         }
-        if (compared.ranked().stream().anyMatch(one -> asks(one, Yardstick.RANDOM_SWITCHER))) {
-            text.append(amongRandomSwitchers(compared)).append('\n');
+        if (shown.stream().anyMatch(one -> asks(one, Yardstick.RANDOM_SWITCHER))) {
+            text.append(amongRandomSwitchers(shown)).append('\n');
         }
         return text.toString();
     }
@@ -66,12 +65,12 @@ final class YardstickText {
         return one.run().file().strategy().judge().against().contains(yardstick);
     }
 
-    private static String beside(Compared compared, List<Yardstick> asked) {
+    private static String beside(List<Judgement> shown, List<Yardstick> asked) {
         String grids = asked.size() <= BOTH_IN_ONE_GRID
-                ? grid(compared, asked, "Growth and Sharpe beside", List.of(Measure.GROWTH_PER_YEAR, Measure.SHARPE))
-                : grid(compared, asked, "Growth beside", List.of(Measure.GROWTH_PER_YEAR))
+                ? grid(shown, asked, "Growth and Sharpe beside", List.of(Measure.GROWTH_PER_YEAR, Measure.SHARPE))
+                : grid(shown, asked, "Growth beside", List.of(Measure.GROWTH_PER_YEAR))
                         + '\n'
-                        + grid(compared, asked, "Sharpe beside", List.of(Measure.SHARPE));
+                        + grid(shown, asked, "Sharpe beside", List.of(Measure.SHARPE));
         String meanings = asked.stream()
                 .map(YardstickText::column)
                 .map(column -> column.heading() + ": " + column.meaning())
@@ -83,14 +82,14 @@ final class YardstickText {
                         0);
     }
 
-    private static String grid(Compared compared, List<Yardstick> asked, String title, List<Measure> measures) {
+    private static String grid(List<Judgement> shown, List<Yardstick> asked, String title, List<Measure> measures) {
         List<String> headings = new ArrayList<>(List.of(title));
         for (Measure measure : measures) {
             headings.add(measure == Measure.SHARPE ? "Sharpe" : "growth");
             asked.forEach(one -> headings.add(column(one).heading()));
         }
         Grid grid = new Grid(headings);
-        for (Judgement one : compared.ranked()) {
+        for (Judgement one : shown) {
             List<String> cells = new ArrayList<>(List.of("  " + ComparisonText.named(one)));
             for (Measure measure : measures) {
                 cells.add(figure(measure, one.strategy().get(measure)));
@@ -105,7 +104,11 @@ final class YardstickText {
         return Optional.ofNullable(COLUMNS.get(yardstick)).orElseThrow();
     }
 
+    /** Empty if the variant does not ask for the yardstick. */
     private static String of(Judgement one, Yardstick yardstick, Measure measure) {
+        if (!asks(one, yardstick)) {
+            return "";
+        }
         Judged judged = one.yardsticks().get(yardstick.column());
         return judged == null ? Figures.NONE : figure(measure, judged.get(measure));
     }
@@ -114,10 +117,13 @@ final class YardstickText {
         return measure == Measure.SHARPE ? Figures.ratio(measured) : Figures.percent(measured);
     }
 
-    private static String amongRandomSwitchers(Compared compared) {
+    private static String amongRandomSwitchers(List<Judgement> shown) {
         Grid grid = new Grid(
                 List.of("Among random switchers", "growth", "5 %", "95 %", "beats", "Sharpe", "5 %", "95 %", "beats"));
-        for (Judgement one : compared.ranked()) {
+        for (Judgement one : shown) {
+            if (!asks(one, Yardstick.RANDOM_SWITCHER)) {
+                continue;
+            }
             List<String> cells = new ArrayList<>(List.of("  " + ComparisonText.named(one)));
             for (Measure measure : List.of(Measure.GROWTH_PER_YEAR, Measure.SHARPE)) {
                 Optional<Luck> luck =
