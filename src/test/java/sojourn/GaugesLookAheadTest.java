@@ -41,6 +41,9 @@ class GaugesLookAheadTest {
     private static final String JUMP =
             "model: jump, states: [calm, stormy], observe: [{absolute-return: stocks}], penalty: 8";
 
+    private static final String PRIOR =
+            "observe: [{log-return: stocks}], states: [calm, stormy], prior: {stay: 20, variance: window}";
+
     private static final String BY_BIC = choosing("bic");
     private static final String BY_PREDICTION = choosing("predictive");
 
@@ -57,7 +60,7 @@ class GaugesLookAheadTest {
     private Path folder;
 
     @ParameterizedTest
-    @ValueSource(strings = {ROLLING, WEIGHTED, JUMP})
+    @ValueSource(strings = {ROLLING, WEIGHTED, JUMP, PRIOR})
     void everyGaugeSaysTheSameOfEveryBarUpToTheCut(String regimes) {
         WholeJob job = job(regimes);
         PrefixCheck check = check(job);
@@ -67,7 +70,7 @@ class GaugesLookAheadTest {
     }
 
     @ParameterizedTest
-    @ValueSource(strings = {ROLLING, WEIGHTED, JUMP})
+    @ValueSource(strings = {ROLLING, WEIGHTED, JUMP, PRIOR})
     void aGaugeWithTheParametersOfTheFullSampleIsCaught(String regimes) {
         WholeJob honest = job(regimes);
         Observation observation = honest.strategy().regimes().observe().get(0);

@@ -7,11 +7,12 @@ import java.util.Optional;
  * twenty and a tenth of a nat, so that it is clear which top it is going for; the initial distribution of a chain moved to its best corner; then {@link Ascent}. Where that finds no way up,
  * EM goes on, sped up by SQUAREM, scheme S3 (Varadhan and Roland 2008, Scand. J. Statistics 35, 335-353): an extrapolated point is kept
  * only if it is at least as likely as the plain step before it; otherwise the stride is halved, in the end to the plain second step.
- * A climb that comes near a {@link Landmark} ends there.
+ * A climb that comes near a {@link Landmark} ends there. With a prior it is the log-likelihood plus the log density of the prior that is
+ * climbed, by EM and SQUAREM alone.
  *
  * <p>SQUAREM stops when the way still to go, the last EM step times the stride, is below 1e-9 in the largest parameter of the
  * standardised series, or when that times the gain of the last step is below 1e-9 nats; every search after 2000 evaluations. No step
- * of any kind lowers the log-likelihood l by more than 1e-9 (1 + |l|).
+ * of any kind lowers what is climbed, l, by more than 1e-9 (1 + |l|).
  */
 final class Climb {
     /** The most evaluations of the likelihood. */
@@ -46,6 +47,7 @@ final class Climb {
     private final EmissionFamily family;
     private final InitialDistribution initial;
     private final Optional<Landmark> landmark;
+    private final Optional<PriorDensity> prior;
     private final Origin origin;
     private Parameters at;
     private double reached;
@@ -63,19 +65,35 @@ final class Climb {
             EmissionFamily family,
             InitialDistribution initial,
             Optional<Landmark> landmark,
+            Optional<PriorDensity> prior,
             Origin origin) {
-        this.objective = new Objective(start, window, family, initial);
-        this.maximisation = new Maximisation(family, initial);
+        this.objective = new Objective(start, window, family, initial, prior);
+        this.maximisation = new Maximisation(family, initial, prior);
         this.family = family;
         this.initial = initial;
         this.landmark = landmark;
+        this.prior = prior;
         this.origin = origin;
         this.at = start.copy();
         this.reached = objective.at(at);
     }
 
-    /** Where one start ended. {@code leastCount} is the smallest expected number of rows of a state. */
-    record Summit(Parameters parameters, double logLikelihood, double leastCount, int evaluations, boolean converged) {}
+    /**
+     * Where one start ended. {@code leastCount} is the smallest expected number of rows of a state; {@code objective} is what was climbed,
+     * without a prior the log-likelihood.
+     */
+    record Summit(
+            Parameters parameters,
+            double logLikelihood,
+            double objective,
+            double leastCount,
+            int evaluations,
+            boolean converged) {
+        /** Without a prior. */
+        Summit(Parameters parameters, double logLikelihood, double leastCount, int evaluations, boolean converged) {
+            this(parameters, logLikelihood, logLikelihood, leastCount, evaluations, converged);
+        }
+    }
 
     /** Climbs from {@code start}, which is not modified, with a free initial distribution. */
     static Summit from(Parameters start, Window window, EmissionFamily family) {
@@ -89,13 +107,20 @@ final class Climb {
             EmissionFamily family,
             InitialDistribution initial,
             Optional<Landmark> landmark) {
-        return new Climb(start, window, family, ofChain(start, initial), landmark, Origin.ANYWHERE).run();
+        InitialDistribution ofChain = ofChain(start, initial);
+        return new Climb(start, window, family, ofChain, landmark, Optional.empty(), Origin.ANYWHERE).run();
+    }
+
+    /** Climbs the posterior of a chain with normal emissions from {@code start}, which is not modified. */
+    static Summit under(
+            PriorDensity prior, Parameters start, Window window, EmissionFamily family, InitialDistribution initial) {
+        return new Climb(start, window, family, initial, Optional.empty(), Optional.of(prior), Origin.ANYWHERE).run();
     }
 
     /** Climbs from {@code start}, the summit of an earlier window; not modified. What it learns on the way leads other climbs. */
     static Landmark again(Parameters start, Window window, EmissionFamily family, InitialDistribution initial) {
         InitialDistribution ofChain = ofChain(start, initial);
-        Climb climb = new Climb(start, window, family, ofChain, Optional.empty(), Origin.BEFORE);
+        Climb climb = new Climb(start, window, family, ofChain, Optional.empty(), Optional.empty(), Origin.BEFORE);
         Summit summit = climb.run();
         Ascent last = climb.last
                 .filter(ascent -> ascent.parameters() == summit.parameters())
@@ -121,7 +146,8 @@ final class Climb {
         for (double count : objective.sums().count) {
             least = StrictMath.min(least, count);
         }
-        return new Summit(at, reached, least, objective.evaluations(), converged);
+        double logLikelihood = prior.isPresent() ? objective.sums().logLikelihood : reached;
+        return new Summit(at, logLikelihood, reached, least, objective.evaluations(), converged);
     }
 
     /** Plain EM until it is clear which top it is going for. */
@@ -160,14 +186,17 @@ final class Climb {
     private void arrive(Parameters next, double logLikelihood) {
         if (!(logLikelihood >= reached - FALL_TOLERANCE * (1 + StrictMath.abs(reached)))) {
             throw new IllegalStateException(
-                    "a step lowered the log-likelihood from " + reached + " to " + logLikelihood + "; this is a bug");
+                    "a step lowered the objective from " + reached + " to " + logLikelihood + "; this is a bug");
         }
         at = next;
         reached = logLikelihood;
     }
 
-    /** To the top by {@link Ascent}, from one corner after the other while another one is better. */
+    /** To the top by {@link Ascent}, from one corner after the other while another one is better; not with a prior. */
     private boolean ascend() {
+        if (prior.isPresent()) {
+            return false;
+        }
         for (int corner = 0; corner < MOST_CORNERS; corner++) {
             if (cornerBeats()) {
                 corner();

@@ -89,6 +89,11 @@ public record EmissionFamily(Form form, OptionalDouble fixedDegreesOfFreedom) {
         return form == Form.NORMAL || form == Form.NORMAL_DIAGONAL;
     }
 
+    /** Whether there can be a prior on its variances: it has one of each regime, and nothing else of scale. */
+    public boolean takesPrior() {
+        return form == Form.NORMAL || form == Form.NORMAL_ZERO_MEAN;
+    }
+
     /** Number of free parameters of that many regimes of one series. */
     int parameterCount(int states) {
         return parameterCount(states, 1);

@@ -1,5 +1,6 @@
 package sojourn.regime;
 
+import java.util.Optional;
 import sojourn.numeric.Check;
 
 /**
@@ -10,8 +11,16 @@ import sojourn.numeric.Check;
  * @param emission the family of the observations
  * @param initial where a chain starts; of no concern to other kinds
  * @param starts how often the search starts, at least 1: one deterministic start, the others random
+ * @param prior what is believed beforehand, of a chain of several regimes seen through one series with normal emissions; a single
+ *     regime has no use for it and is fitted without
  */
-public record FitSettings(ModelKind kind, int states, EmissionFamily emission, InitialDistribution initial, int starts)
+public record FitSettings(
+        ModelKind kind,
+        int states,
+        EmissionFamily emission,
+        InitialDistribution initial,
+        int starts,
+        Optional<Prior> prior)
         implements GaugeSettings {
     /** The most series that a model may see. */
     public static final int MOST_SERIES = 6;
@@ -24,6 +33,14 @@ public record FitSettings(ModelKind kind, int states, EmissionFamily emission, I
         Check.within(starts, 1, Integer.MAX_VALUE, "starts");
         Check.that(kind.hasLikelihood(), kind.word() + " has no likelihood");
         Check.that(kind != ModelKind.ONE_REGIME || states == 1, "a one-regime model with " + states + " states");
+        Check.that(
+                prior.isEmpty() || (kind == ModelKind.HIDDEN_MARKOV && emission.takesPrior()),
+                "a prior for " + kind.word() + " with " + emission.word() + " emissions");
+    }
+
+    /** The same without a prior. */
+    public FitSettings(ModelKind kind, int states, EmissionFamily emission, InitialDistribution initial, int starts) {
+        this(kind, states, emission, initial, starts, Optional.empty());
     }
 
     /** The same with a free initial distribution. */

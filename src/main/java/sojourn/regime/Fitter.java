@@ -6,7 +6,7 @@ import java.util.Optional;
 import sojourn.numeric.Check;
 
 /**
- * Fits a regime model to a window by maximum likelihood: EM from several starts, each to convergence, the best kept. What it
+ * Fits a regime model to a window by maximum likelihood, or with a prior to the mode of the posterior: EM from several starts, each to convergence, the best kept. What it
  * returns depends on the request alone, not on threads or time.
  */
 public final class Fitter {
@@ -21,7 +21,7 @@ public final class Fitter {
     }
 
     /**
-     * Fits, the starts being run by {@code runner}. Among starts without a degenerate state the most likely wins; only if every
+     * Fits, the starts being run by {@code runner}. Among starts without a degenerate state the one with the highest objective wins; only if every
      * start is degenerate is the fit. Data that cannot be fitted give a failed fit with its reason, never an exception; an EM step
      * that lowers the likelihood is a bug and throws {@code IllegalStateException}.
      */
@@ -131,22 +131,22 @@ public final class Fitter {
 
     private static int agreeing(List<SearchEnd> ends, SearchEnd with) {
         return (int) ends.stream()
-                .filter(end -> StrictMath.abs(end.logLikelihood() - with.logLikelihood()) <= AGREEMENT)
+                .filter(end -> StrictMath.abs(end.objective() - with.objective()) <= AGREEMENT)
                 .count();
     }
 
     /** The best of the sound ends that do not agree with the best. */
     private static Optional<RunnerUp> runnerUp(List<SearchEnd> sound, SearchEnd best) {
         List<SearchEnd> lower = sound.stream()
-                .filter(end -> end.logLikelihood() < best.logLikelihood() - AGREEMENT)
+                .filter(end -> end.objective() < best.objective() - AGREEMENT)
                 .toList();
         return lower.isEmpty()
                 ? Optional.empty()
-                : Optional.of(runnerUp(lower, SearchEnd.best(lower), best.logLikelihood()));
+                : Optional.of(runnerUp(lower, SearchEnd.best(lower), best.objective()));
     }
 
     private static RunnerUp runnerUp(List<SearchEnd> lower, SearchEnd second, double highest) {
-        return new RunnerUp(highest - second.logLikelihood(), agreeing(lower, second));
+        return new RunnerUp(highest - second.objective(), agreeing(lower, second));
     }
 
     private static Fit ended(
@@ -165,7 +165,7 @@ public final class Fitter {
         } else {
             outcome = Outcome.ITERATION_LIMIT;
             explanation =
-                    "the likelihood was still rising after " + end.evaluations() + " evaluations; the model is usable";
+                    "the search had not come to rest after " + end.evaluations() + " evaluations; the model is usable";
         }
         return Fit.of(outcome, explanation, search, described.observations(), described, events);
     }

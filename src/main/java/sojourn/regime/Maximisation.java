@@ -1,9 +1,11 @@
 package sojourn.regime;
 
+import java.util.Optional;
+
 /**
  * The maximisation step of EM: the parameters that the expected sums make most likely (Rabiner 1989, Proc. IEEE 77, III.C), with
  * a floor under the variances, relative to the window's own variance, that keeps a state from closing in on a single value.
- * A state without weight keeps its parameters.
+ * With a prior, the parameters that the sums and the prior together make most likely. A state without weight keeps its parameters.
  */
 final class Maximisation {
     /** Floor of a state's variance as a fraction of the window's variance. */
@@ -11,6 +13,7 @@ final class Maximisation {
 
     private final EmissionFamily family;
     private final InitialDistribution initial;
+    private final Optional<PriorDensity> prior;
 
     /** For a free initial distribution. */
     Maximisation(EmissionFamily family) {
@@ -18,12 +21,19 @@ final class Maximisation {
     }
 
     Maximisation(EmissionFamily family, InitialDistribution initial) {
+        this(family, initial, Optional.empty());
+    }
+
+    /** With a prior: for a chain with normal emissions, each state with a variance of its own. */
+    Maximisation(EmissionFamily family, InitialDistribution initial, Optional<PriorDensity> prior) {
         this.family = family;
         this.initial = initial;
+        this.prior = prior;
     }
 
     /** The next parameters. Neither argument is modified. */
-    Parameters next(Parameters old, ExpectedSums sums) {
+    Parameters next(Parameters old, ExpectedSums expected) {
+        ExpectedSums sums = prior.isPresent() ? prior.get().added(expected) : expected;
         Parameters next = old.copy();
         int states = old.states();
         double total = 0;
@@ -58,7 +68,9 @@ final class Maximisation {
         double mean = family.estimatesMeans() ? sums.sum[k] / n : 0;
         double square = sums.squares[k] / n - mean * mean;
         next.set(next.mean(k), mean);
-        next.set(next.variance(k), Math.max(FLOOR, square));
+        next.set(
+                next.variance(k),
+                Math.max(FLOOR, prior.isPresent() ? prior.get().variance(n, square) : square));
     }
 
     /** Mean sum(g u z) / sum(g u), squared scale sum(g u (z - mean)^2) / sum(g) (Peel and McLachlan 2000, eqs. 29 and 30). */

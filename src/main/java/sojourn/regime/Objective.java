@@ -1,22 +1,38 @@
 package sojourn.regime;
 
-/** What a search climbs: the log-likelihood of the standardised window, with the expected sums beside it. Belongs to one start. */
+import java.util.Optional;
+
+/**
+ * What a search climbs: the log-likelihood of the standardised window, plus the log density of the prior where there is one, with the
+ * expected sums beside it. Belongs to one start.
+ */
 final class Objective {
     private final Expectation fast;
     private final Expectation plain;
     private final InitialDistribution initial;
+    private final Optional<PriorDensity> prior;
     private final ExpectedSums sums;
     private int evaluations;
 
     Objective(Parameters like, Window window, EmissionFamily family, InitialDistribution initial) {
+        this(like, window, family, initial, Optional.empty());
+    }
+
+    Objective(
+            Parameters like,
+            Window window,
+            EmissionFamily family,
+            InitialDistribution initial,
+            Optional<PriorDensity> prior) {
         this.fast = Expectation.of(like.kind(), like.states(), window, family);
         this.plain = new PlainExpectation(window, family);
         this.initial = initial;
+        this.prior = prior;
         this.sums = new ExpectedSums(like.states());
     }
 
     /**
-     * Fills the sums at those parameters and returns their log-likelihood; minus infinity where they have none. A chain that starts in
+     * Fills the sums at those parameters and returns the objective there; minus infinity where they have none. A chain that starts in
      * its long run is put there: {@code parameters} is modified.
      */
     double at(Parameters parameters) {
@@ -27,7 +43,7 @@ final class Objective {
         if (!fast.fill(parameters, sums) && !plain.fill(parameters, sums)) {
             return Double.NEGATIVE_INFINITY;
         }
-        return sums.logLikelihood;
+        return prior.isPresent() ? sums.logLikelihood + prior.get().logAt(parameters) : sums.logLikelihood;
     }
 
     /** What is expected at the parameters that were last evaluated; overwritten by the next evaluation. */

@@ -4,7 +4,7 @@ package sojourn.regime;
 public enum Outcome {
     /** At a maximum of the likelihood. */
     CONVERGED("converged"),
-    /** Usable, but the likelihood was still rising at the last iteration allowed. */
+    /** Usable, but the search had not come to rest at the last iteration allowed. */
     ITERATION_LIMIT("iteration-limit"),
     /** A state closed in on a handful of observations: its parameters mean nothing. */
     DEGENERATE("degenerate"),

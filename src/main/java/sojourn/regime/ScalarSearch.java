@@ -63,6 +63,21 @@ final class ScalarSearch implements WindowSearch {
     @Override
     public List<Supplier<SearchEnd>> starts(FitRequest request) {
         Starts starts = new Starts(settings, window);
+        return settings.prior()
+                .map(prior -> under(prior.density(settings.states()), starts.all(request)))
+                .orElseGet(() -> likeliest(starts, request));
+    }
+
+    private List<Supplier<SearchEnd>> under(PriorDensity prior, List<Parameters> starts) {
+        List<Supplier<SearchEnd>> searches = new ArrayList<>();
+        for (Parameters start : starts) {
+            searches.add(() -> end(
+                    Climb.under(prior, start, window, settings.emission(), settings.initial()), settings.initial()));
+        }
+        return searches;
+    }
+
+    private List<Supplier<SearchEnd>> likeliest(Starts starts, FitRequest request) {
         Optional<Landmark> first = starts.fromPrevious(request)
                 .map(start -> Climb.again(start, window, settings.emission(), settings.initial()));
         Optional<Landmark> landmark = first.filter(known -> sound(known.summit()));
@@ -93,6 +108,7 @@ final class ScalarSearch implements WindowSearch {
         return new SearchEnd(
                 p.toModel(window, settings.emission(), initial),
                 summit.logLikelihood(),
+                summit.objective(),
                 summit.leastCount(),
                 squeezed,
                 summit.evaluations(),

@@ -130,6 +130,7 @@ final class VectorSearch implements WindowSearch {
         return new SearchEnd(
                 summit.parameters().toModel(window, settings.emission(), initial),
                 summit.logLikelihood(),
+                summit.logLikelihood(),
                 summit.leastCount(),
                 summit.squeezed(),
                 summit.evaluations(),

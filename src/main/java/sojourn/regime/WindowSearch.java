@@ -5,7 +5,7 @@ import java.util.Optional;
 import java.util.function.Supplier;
 import sojourn.numeric.Check;
 
-/** The search for the likeliest model of one window, whatever its observations look like. */
+/** The search for the best model of one window, whatever its observations look like. */
 interface WindowSearch {
     /** Why there is nothing to search; empty where there is. Asked before anything else. */
     Optional<String> refusal();
@@ -21,6 +21,7 @@ interface WindowSearch {
         if (x.dimension() == 1) {
             return new ScalarSearch(settings, x);
         }
+        Check.that(settings.prior().isEmpty(), "a prior for " + x.dimension() + " series");
         Check.that(
                 settings.emission().multivariate(),
                 settings.emission().word() + " emissions for " + x.dimension() + " series");

@@ -1,5 +1,6 @@
 package sojourn.report;
 
+import java.math.BigDecimal;
 import java.time.LocalDate;
 import java.util.ArrayList;
 import java.util.List;
@@ -9,6 +10,7 @@ import java.util.stream.Collectors;
 import sojourn.market.GivenColumns;
 import sojourn.market.PriceTable;
 import sojourn.regime.ModelKind;
+import sojourn.regime.Prior;
 import sojourn.regime.RecentVolatility;
 import sojourn.regime.VolatilityThresholdSettings;
 import sojourn.walk.FitPlan;
@@ -68,7 +70,16 @@ final class GaugeText {
         OptionalDouble penalty = regimes.particulars().penalty();
         return penalty.isPresent()
                 ? "each change of regime costs " + penalty.getAsDouble() + " squared deviations"
-                : regimes.emission().word() + degrees(regimes) + " emissions";
+                : regimes.emission().word() + degrees(regimes) + " emissions"
+                        + regimes.particulars().prior().map(GaugeText::believed).orElse("");
+    }
+
+    private static String believed(Prior prior) {
+        String stays = BigDecimal.valueOf(prior.stay()).stripTrailingZeros().toPlainString() + " stays in each regime";
+        return prior.variance() == Prior.Spread.WINDOW
+                ? ", taken to have been seen beforehand: " + stays
+                        + " and about five observations at the window's scale"
+                : ", taken to have been seen beforehand: " + stays;
     }
 
     /** What should be known before such regimes are relied on. */
@@ -138,7 +149,7 @@ final class GaugeText {
         }
         String from = " from " + refit.starts() + " starts and the fit before (seed " + refit.seed() + "), ";
         String what = regimes.model().hasLikelihood()
-                ? "maximum likelihood" + from
+                ? (regimes.particulars().prior().isPresent() ? "mode of the posterior" : "maximum likelihood") + from
                 : regimes.model() == ModelKind.JUMP ? "centres and path of least cost" + from : "quantiles taken ";
         return what + dates.size() + " times from " + dates.get(0) + " to " + dates.get(dates.size() - 1) + ", "
                 + every(refit.schedule()) + ", " + window(refit) + "; parameters are frozen in between";

@@ -26,6 +26,7 @@ final class RegimeFaults {
         faults.addAll(faultsOfInitial());
         given.fixed().ifPresent(declared -> faults.addAll(faultsOf(declared)));
         given.particulars().choose().ifPresent(choice -> faults.addAll(faultsOf(choice)));
+        given.particulars().prior().ifPresent(prior -> faults.addAll(PriorKeys.faults(prior, given)));
         return faults;
     }
 

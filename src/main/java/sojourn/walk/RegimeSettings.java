@@ -24,6 +24,7 @@ import sojourn.regime.GivenProbabilitiesSettings;
 import sojourn.regime.InitialDistribution;
 import sojourn.regime.JumpSettings;
 import sojourn.regime.ModelKind;
+import sojourn.regime.Prior;
 import sojourn.regime.VolatilityThresholdSettings;
 
 /**
@@ -108,6 +109,13 @@ public record RegimeSettings(
                     "lets each fit choose the number of regimes; 'states' then names the regimes of all numbers")
             .onlyWith(MODEL, List.of(ModelKind.HIDDEN_MARKOV.word(), ModelKind.MIXTURE.word()));
 
+    private static final Field<Optional<Prior>> PRIOR = Field.maybe(
+                    "prior",
+                    PriorKeys.SHAPE,
+                    "what is believed before a window is seen, so that a fit is the mode of the posterior instead of the likeliest:"
+                            + " that regimes stay, and that no regime's variance is next to nothing")
+            .onlyWith(MODEL, List.of(ModelKind.HIDDEN_MARKOV.word()));
+
     private static final Field<GivenSource> GIVEN = Field.required(
             "given",
             GivenSource.SHAPE,
@@ -137,7 +145,12 @@ public record RegimeSettings(
                             f.get(INITIAL),
                             f.get(ORDER_BY),
                             f.get(PARAMETERS),
-                            new Particulars(f.get(THRESHOLD), number(f.get(PENALTY)), f.get(CHOOSE), Optional.empty())),
+                            new Particulars(
+                                    f.get(THRESHOLD),
+                                    number(f.get(PENALTY)),
+                                    f.get(CHOOSE),
+                                    Optional.empty(),
+                                    f.get(PRIOR))),
                     MODEL,
                     OBSERVE,
                     STATES,
@@ -147,7 +160,8 @@ public record RegimeSettings(
                     PARAMETERS,
                     THRESHOLD,
                     PENALTY,
-                    CHOOSE)
+                    CHOOSE,
+                    PRIOR)
             .refuseEach(RegimeFaults::of);
 
     /** The section's shape: probabilities that are given, or a model that is fitted. */
@@ -235,7 +249,8 @@ public record RegimeSettings(
 
     /** A model with a likelihood and so many regimes. */
     FitSettings likelihood(int count, int starts) {
-        return new FitSettings(model, count, emission, initial.orElse(InitialDistribution.FREE), starts);
+        return new FitSettings(
+                model, count, emission, initial.orElse(InitialDistribution.FREE), starts, particulars.prior());
     }
 
     /** The asset whose returns order the regimes. */

@@ -243,7 +243,7 @@ class AwkwardDataTest {
                         Observations.of(2, x, new boolean[4000]), order, Companions.of(1, order), 1, Fixtures.DATE));
         assertThat(fit.outcome()).isEqualTo(Outcome.ITERATION_LIMIT);
         assertThat(fit.outcome().accepted()).isTrue();
-        assertThat(fit.explanation()).contains("still rising").contains(Integer.toString(fit.iterations()));
+        assertThat(fit.explanation()).contains("not come to rest").contains(Integer.toString(fit.iterations()));
     }
 
     private static void assertFinite(Fit fit) {

@@ -7,6 +7,7 @@ import java.util.Optional;
 import org.junit.jupiter.api.Test;
 import sojourn.regime.EmissionFamily;
 import sojourn.regime.ModelKind;
+import sojourn.regime.Prior;
 import sojourn.regime.RecentVolatility;
 import sojourn.regime.VolatilityThresholdSettings;
 import sojourn.walk.AbsoluteReturn;
@@ -52,6 +53,20 @@ class GaugeTextTest {
                 .contains("observe absolute-return");
         assertThat(GaugeText.findings(settings(ModelKind.HIDDEN_MARKOV, RETURN, Particulars.NONE)))
                 .isEmpty();
+    }
+
+    @Test
+    void aPriorIsToldWithWhatItCountsAsSeen() {
+        RegimeSettings held =
+                settings(ModelKind.HIDDEN_MARKOV, RETURN, Particulars.prior(new Prior(12.5, Prior.Spread.WINDOW)));
+        assertThat(GaugeText.watches(held))
+                .contains(
+                        "normal emissions, taken to have been seen beforehand: 12.5 stays in each regime and about five");
+        RegimeSettings free =
+                settings(ModelKind.HIDDEN_MARKOV, RETURN, Particulars.prior(new Prior(10, Prior.Spread.NONE)));
+        assertThat(GaugeText.watches(free))
+                .contains("beforehand: 10 stays in each regime;")
+                .doesNotContain("five");
     }
 
     @Test
