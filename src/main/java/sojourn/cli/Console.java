@@ -9,4 +9,11 @@ import java.io.PrintWriter;
  * @param err messages and progress
  * @param terminal whether somebody is watching
  */
-record Console(PrintWriter out, PrintWriter err, Terminal terminal) {}
+record Console(PrintWriter out, PrintWriter err, Terminal terminal) {
+    /** Messages and progress. What was written to {@link #out} before is out before them, wherever the two are led. */
+    @Override
+    public PrintWriter err() {
+        out.flush();
+        return err;
+    }
+}

@@ -8,6 +8,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.Set;
 import sojourn.market.BarLength;
+import sojourn.market.CashSource;
 import sojourn.market.Finding;
 import sojourn.regime.Outcome;
 import sojourn.trade.Hindrance;
@@ -40,6 +41,12 @@ public final class Warnings {
                 }
                 if (one.file().strategy().regimes().given().isPresent()) {
                     told(shared, COMPUTED_ELSEWHERE, one);
+                }
+                if (one.file().strategy().cash() instanceof CashSource.Constant cash && cash.percentPerYear() == 0) {
+                    told(
+                            shared,
+                            "cash earns nothing, and ratios are taken over zero; say under 'cash' what it earned",
+                            one);
                 }
                 one.file().strategy().neverHolds().ifPresent(why -> told(shared, why, one));
                 if (one.file().strategy().hypothesis().isEmpty()) {

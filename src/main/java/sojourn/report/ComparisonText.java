@@ -19,6 +19,7 @@ import sojourn.measure.Measure;
 /** A comparison as a terminal shows it, at most 100 columns wide: caution, risk and return, what it took, failures. */
 public final class ComparisonText {
     private static final int FEW = 10;
+    private static final int NAMED = 3;
 
     private ComparisonText() {}
 
@@ -61,8 +62,12 @@ public final class ComparisonText {
 
     private static String headline(Compared compared) {
         int variants = compared.ranked().size();
+        String failed = compared.failed().isEmpty()
+                ? ""
+                : " (and " + compared.failed().size() + " that failed, told at the end)";
         return Lines.wrapped(
-                variants + (variants == 1 ? " variant" : " variants") + " over " + window(compared) + ", ranked by "
+                variants + (variants == 1 ? " variant" : " variants") + failed + " over " + window(compared)
+                        + ", ranked by "
                         + compared.rankBy().key().replace('_', ' ')
                         + " as declared; risk first. The interval is 95 %, robust to serial correlation; it does not know how"
                         + " many variants were tried." + latest(compared),
@@ -83,8 +88,10 @@ public final class ComparisonText {
         if (holding.isEmpty() || holding.size() == compared.ranked().size()) {
             return "";
         }
-        return " The window begins when the last variant first trades (" + String.join(", ", holding)
-                + "); the first did on " + firsts.first() + ". Set judge: window to choose it.";
+        int named = Math.min(NAMED, holding.size());
+        String more = holding.size() > named ? " and " + (holding.size() - named) + " more" : "";
+        return " The window begins when the last variant first trades (" + String.join(", ", holding.subList(0, named))
+                + more + "); the first did on " + firsts.first() + ". Set judge: window to choose it.";
     }
 
     private static String window(Compared compared) {
@@ -164,7 +171,8 @@ public final class ComparisonText {
         }
         return grid.text()
                 + Lines.wrapped(
-                        "exposure: average net weight of all assets but cash; turnover: half of all bought and sold, in units of"
+                        "exposure: average net weight of all assets but cash; switches: changes of the rule's state or most likely regime, 0"
+                                + " for rules that have neither; turnover: half of all bought and sold, in units of"
                                 + " wealth; before costs: growth of the same holdings, every trade free.",
                         0);
     }
