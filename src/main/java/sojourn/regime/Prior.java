@@ -13,9 +13,6 @@ import sojourn.numeric.Check;
  * @param variance what is believed of the variances
  */
 public record Prior(double stay, Spread variance) {
-    /** Stays that count as seen where nothing is said. Our own choice, no source. */
-    public static final double DEFAULT_STAY = 10;
-
     private static final double SHAPE = 1.5;
     private static final double FLAT = -1;
 

@@ -15,7 +15,7 @@ final class PriorKeys {
     private static final Field<Double> STAY = Field.defaulted(
             "stay",
             Shapes.number().atLeast(0).atMost(1_000_000),
-            "10",
+            "10", // our own choice, no source
             "stays in each regime, from one bar to the next, that count as seen before the window");
     private static final Field<Prior.Spread> VARIANCE = Field.defaulted(
             "variance",

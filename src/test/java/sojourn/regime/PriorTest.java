@@ -16,7 +16,7 @@ import sojourn.numeric.RandomStream;
 
 /** The mode of the posterior: one worked step, no step down, the limits in which it must be the plain fit, and what it is for. */
 class PriorTest {
-    private static final Prior USUAL = new Prior(Prior.DEFAULT_STAY, Prior.Spread.WINDOW);
+    private static final Prior USUAL = new Prior(10, Prior.Spread.WINDOW);
     private static final Prior FLAT = new Prior(0, Prior.Spread.NONE);
 
     /** One step of expectation and maximisation by an independent implementation (plain numpy). */
