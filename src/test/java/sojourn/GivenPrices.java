@@ -88,6 +88,11 @@ public final class GivenPrices {
         return with(opens, earned, volumes);
     }
 
+    /** The same with other closes. */
+    public GivenPrices withCloses(double[]... by) {
+        return new GivenPrices(dates, opens, by, cash, volumes, dividends, splits);
+    }
+
     /** The same with other opens. */
     public GivenPrices withOpens(double[]... by) {
         return with(by, cash, volumes);

@@ -53,6 +53,14 @@ public final class FillPrices {
         return table.quoted(asset).splitOn(bar);
     }
 
+    /**
+     * What who holds an asset through a bar, at least 1, gains on it, simple: split × (close + dividend) / close before - 1. Without
+     * a split and a dividend that is close / close before - 1.
+     */
+    public double holdersReturn(int asset, int bar) {
+        return split(asset, bar) * (close(asset, bar) + dividend(asset, bar)) / close(asset, bar - 1) - 1;
+    }
+
     /** Whether any asset has a column of dividends or splits. */
     public boolean distributes() {
         for (int asset = 0; asset < table.assets().size(); asset++) {

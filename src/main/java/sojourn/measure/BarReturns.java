@@ -7,8 +7,8 @@ import sojourn.trade.LedgerKind;
 import sojourn.trade.Track;
 
 /**
- * The returns of a track on some bars and what they are made of, as fractions of the wealth at the close before: r = g + i - k, price
- * gains, interest and costs. Interest and costs are what the ledger says; gains are the rest.
+ * The returns of a track on some bars and what they are made of, as fractions of the wealth at the close before: r = g + i - k, what
+ * assets gained with their dividends, interest and costs. Interest and costs are what the ledger says; gains are the rest.
  */
 final class BarReturns {
     private final double[] total;
@@ -31,8 +31,11 @@ final class BarReturns {
             case CAPITAL, TRADE, RUIN -> {
                 // what is bought and sold changes hands at its price, and is neither gain nor cost
             }
+            case DIVIDEND -> {
+                // what an asset pays is a part of what it gained, so it stays in the rest
+            }
             case INTEREST -> interest[i] += entry.amount() / before;
-            default ->
+            case MARGIN_INTEREST, BORROW_FEE, COMMISSION, FIXED_FEE, HALF_SPREAD, STAMP_DUTY, IMPACT ->
                 costs.computeIfAbsent(entry.kind(), unused -> new double[total.length])[i] -= entry.amount() / before;
         }
     }
@@ -51,7 +54,7 @@ final class BarReturns {
         return paid == null ? 0 : paid[i];
     }
 
-    /** Price gains, before any cost. */
+    /** Gains on prices and dividends, before any cost. */
     double gain(int i) {
         double gain = total[i] - interest[i];
         for (double[] paid : costs.values()) {

@@ -10,9 +10,9 @@ import sojourn.trade.Track;
 
 /**
  * The difference of log growth between a strategy and buy-and-hold over a window, in parts. On each bar, as fractions of the wealth
- * at the close before, let g be the strategy's price gains, i its interest, k its costs, so that its return is r = g + i - k; the
+ * at the close before, let g be the strategy's gains on prices, splits and dividends included, i its interest, k its costs, so that its return is r = g + i - k; the
  * same with a prime for buy-and-hold. With m_a the mean over the window's bars of the strategy's weight of asset a at their start,
- * R_a the asset's return and M = sum_a m_a R_a, exactly
+ * R_a what a holder of the asset gains and M = sum_a m_a R_a, exactly
  *
  * <pre>r - r' = (M - g') + (g - M) + (i - i') - (k - k'): exposure, timing, cash, costs.</pre>
  *
@@ -86,7 +86,7 @@ public final class GrowthDifference {
     private static double moved(double[] weights, FillPrices prices, int bar) {
         double moved = 0;
         for (int asset = 0; asset < weights.length; asset++) {
-            moved += weights[asset] * (prices.close(asset, bar) / prices.close(asset, bar - 1) - 1);
+            moved += weights[asset] * prices.holdersReturn(asset, bar);
         }
         return moved;
     }

@@ -22,8 +22,8 @@ final class DifferenceText {
         }
         return grid.text()
                 + Lines.wrapped(
-                        "vs hold is the sum of: exposure, what the strategy's average weights held all the time would have gained less"
-                                + " buy-and-hold's gains; timing, what it gained by holding more or less than that average when it did;"
+                        "vs hold is the sum of: exposure, what the strategy's average weights held all the time would have gained, with"
+                                + " dividends, less buy-and-hold's gains; timing, what it gained by holding more or less than that average when it did;"
                                 + " cash, its interest less buy-and-hold's; costs, what trading and borrowing cost it more.",
                         0);
     }

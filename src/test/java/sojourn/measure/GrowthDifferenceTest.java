@@ -4,6 +4,7 @@ import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.within;
 
 import java.time.LocalDate;
+import java.util.Arrays;
 import java.util.Optional;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
@@ -109,6 +110,83 @@ class GrowthDifferenceTest {
         assertThat(sum(parts)).isCloseTo(parts.difference().number().orElseThrow(), within(EXACT));
         assertThat(parts.difference().number().orElseThrow())
                 .isCloseTo(own.wealth(499) / own.wealth(BASE) - held.wealth(499) / held.wealth(BASE), within(EXACT));
+    }
+
+    /** Splits change nothing for a holder, so files that are adjusted for them and files that are not tell the same parts. */
+    @ParameterizedTest
+    @ValueSource(longs = {41, 42, 43})
+    void splitsChangeNoPart(long seed) {
+        GivenPrices adjusted = GivenPrices.random(seed, 500, 1);
+        double[] ratios = new double[500];
+        Arrays.fill(ratios, 1);
+        ratios[200] = 2;
+        ratios[350] = 0.1;
+        double[] closes = new double[500];
+        double units = 1;
+        for (int bar = 0; bar < 500; bar++) {
+            units *= ratios[bar];
+            closes[bar] = adjusted.close(0, bar) / units;
+        }
+        Attribution one = inOut(adjusted, seed, COSTS);
+        Attribution other = inOut(
+                adjusted.withCloses(closes).giving(new double[][] {new double[500]}, new double[][] {ratios}),
+                seed,
+                COSTS);
+        assertAlike(other, one);
+        assertThat(other.costs()).containsOnlyKeys(LedgerKind.COMMISSION, LedgerKind.HALF_SPREAD);
+    }
+
+    /**
+     * Who reinvests a dividend at its close earns the total return. Full weight or none, renewed at every close without cost, is that
+     * to the last bit but rounding: the parts must be those of the total-return series, with nothing under costs.
+     */
+    @ParameterizedTest
+    @ValueSource(longs = {51, 52, 53})
+    void dividendsAreGainsAndNoCosts(long seed) {
+        GivenPrices quoted = GivenPrices.random(seed, 500, 1).withCash(new double[500]);
+        double[] money = new double[500];
+        double[] none = new double[500];
+        double[] total = new double[500];
+        Arrays.fill(none, 1);
+        total[0] = quoted.close(0, 0);
+        for (int bar = 1; bar < 500; bar++) {
+            money[bar] = bar % 63 == 5 ? 0.03 * quoted.close(0, bar) : 0;
+            total[bar] = total[bar - 1] * (quoted.close(0, bar) + money[bar]) / quoted.close(0, bar - 1);
+        }
+        Attribution one = inOut(quoted.withCloses(total), seed, Costs.none());
+        Attribution other = inOut(quoted.giving(new double[][] {money}, new double[][] {none}), seed, Costs.none());
+        assertThat(other.costs()).isEmpty();
+        assertAlike(other, one);
+        assertThat(other.timing().number().orElseThrow()).isNotCloseTo(0, within(1e-4));
+    }
+
+    /** In or out at random, renewed at every close. */
+    private static Attribution inOut(GivenPrices prices, long seed, Costs costs) {
+        PriceTable table = prices.table();
+        Policy inOrOut = (situation, stance) -> Decision.order(
+                Weights.of(RandomStream.of(seed, "in", Integer.toString(situation.bar() / 20))
+                        .nextInt(2)),
+                stance,
+                Because.of("a test says so"),
+                Decision.Change.SAME);
+        Policy all = always(1);
+        int last = table.size() - 1;
+        return GrowthDifference.overTheWindow(
+                run(table, inOrOut, costs), run(table, all, costs), table.fillPrices(), BASE, last);
+    }
+
+    private static void assertAlike(Attribution other, Attribution one) {
+        double rounding = 1e-9; // sums of 500 bars, each wealth rounded on another way
+        assertThat(sum(other)).isCloseTo(other.difference().number().orElseThrow(), within(EXACT));
+        assertThat(number(other.difference())).isCloseTo(number(one.difference()), within(rounding));
+        assertThat(number(other.exposure())).isCloseTo(number(one.exposure()), within(rounding));
+        assertThat(number(other.timing())).isCloseTo(number(one.timing()), within(rounding));
+        assertThat(number(other.cash())).isCloseTo(number(one.cash()), within(rounding));
+        assertThat(number(other.allCosts())).isCloseTo(number(one.allCosts()), within(rounding));
+    }
+
+    private static double number(Measured part) {
+        return part.number().orElseThrow();
     }
 
     private static double cost(Attribution parts, LedgerKind kind) {
