@@ -123,7 +123,7 @@ public sealed interface Prepared {
         }
     }
 
-    /** Columns that an observation or trading needs and a file does not have. */
+    /** Columns that an observation or trading needs and a file does not have, or has on another scale than its closes. */
     private static List<Problem> lacking(Strategy strategy, PriceTable table) {
         List<Problem> problems = new ArrayList<>();
         for (Observation one : strategy.regimes().observe()) {
@@ -151,6 +151,7 @@ public sealed interface Prepared {
                     one.asset() + " has no " + one.column() + " on any bar, and " + one.what() + " needs it",
                     "name the column under prices (" + one.column() + ": ...), or trade without " + one.what()));
         }
+        problems.addAll(OpensBesideCloses.problems(strategy, table));
         return problems;
     }
 }

@@ -28,10 +28,12 @@ public record PriceSource(
         Optional<String> volume,
         Optional<String> dividend,
         Optional<String> split) {
+    private static final String CLOSE_COLUMN = "close";
+
     private static final Field<String> CSV =
             Field.required("csv", Shapes.text(), "path of the price file, from the folder of the strategy file");
     private static final Field<String> CLOSE =
-            Field.defaulted("close", Shapes.text(), "close", "name of the column of closes");
+            Field.defaulted("close", Shapes.text(), CLOSE_COLUMN, "name of the column of closes");
     private static final Field<Optional<String>> OPEN = column("open", "opens");
     private static final Field<Optional<String>> HIGH = column("high", "highs");
     private static final Field<Optional<String>> LOW = column("low", "lows");
@@ -90,10 +92,20 @@ public record PriceSource(
         this(layout, close, open, high, low, volume, Optional.empty(), Optional.empty());
     }
 
+    /** Whether closes are said to be in a column of another name while opens are taken from wherever they usually stand. */
+    public boolean onlyCloseNamed() {
+        return !close.equals(CLOSE_COLUMN) && open.isEmpty();
+    }
+
     /** Default columns of the file at {@code csv}. */
     public static PriceSource of(String csv) {
         return new PriceSource(
-                CsvLayout.of(csv), "close", Optional.empty(), Optional.empty(), Optional.empty(), Optional.empty());
+                CsvLayout.of(csv),
+                CLOSE_COLUMN,
+                Optional.empty(),
+                Optional.empty(),
+                Optional.empty(),
+                Optional.empty());
     }
 
     /** The same columns of another file. */

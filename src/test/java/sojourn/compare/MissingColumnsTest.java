@@ -59,21 +59,57 @@ class MissingColumnsTest {
                                 + " prices (open: ...), or trade without fill: next-open");
     }
 
+    @Test
+    void opensThatMayBelongToOtherClosesAreRefused() throws IOException {
+        String rows =
+                "date,open,high,low,close,total,first\n2001-01-01,99,101,98,100,50,49\n2001-01-02,100,102,99,101,51,50\n";
+        String open = "trade: {fill: next-open}";
+        assertThat(((Prepared.Unreadable) prepared(rows, open, "close: total")).problems())
+                .extracting(Problem::toString)
+                .containsExactly(
+                        "stocks.csv:1:1: closes of stocks are read from total, its opens from a column that is not named, and"
+                                + " log-garman-klass-volatility needs both on one scale; name the column of opens that belong to"
+                                + " these closes under prices (open: ...), or observe something else",
+                        "stocks.csv:1:1: closes of stocks are read from total, its opens from a column that is not named, and"
+                                + " fill: next-open needs both on one scale; name the column of opens that belong to these closes"
+                                + " under prices (open: ...), or trade without fill: next-open");
+        assertThat(prepared(rows, open, "close: total, open: first")).isInstanceOf(Prepared.Ready.class);
+        assertThat(prepared(rows, open, "open: open")).isInstanceOf(Prepared.Ready.class);
+    }
+
+    /** Opens of 100 beside closes of 50 and 51, by hand: twice the close before, whatever the columns are called. */
+    @Test
+    void opensFarFromTheClosesBeforeAreRefused() throws IOException {
+        String rows = "date,open,high,low,close,total\n2001-01-01,99,101,98,100,50\n2001-01-02,100,102,99,101,51\n";
+        assertThat(((Prepared.Unreadable) prepared(rows, "trade: {fill: next-open}", "close: total, open: open"))
+                        .problems())
+                .extracting(Problem::toString)
+                .anyMatch(
+                        text -> text.startsWith(
+                                "stocks.csv:1:1: opens of stocks lie 100.0 % from the close before on the"
+                                        + " median bar, while closes move 2.0 %: they are on different scales, and fill: next-open needs both"));
+    }
+
     private Prepared prepared(String prices) throws IOException {
         return prepared(prices, "");
     }
 
     private Prepared prepared(String prices, String trade) throws IOException {
+        return prepared(prices, trade, "close: close");
+    }
+
+    private Prepared prepared(String prices, String trade, String columns) throws IOException {
         Files.writeString(folder.resolve("stocks.csv"), prices);
         Problems problems = new Problems();
-        Optional<StrategyFile> file = StrategyReader.parse("""
+        Optional<StrategyFile> file =
+                StrategyReader.parse("""
                 strategy: Storms by the range
-                prices: {stocks: {csv: stocks.csv}}
+                prices: {stocks: {csv: stocks.csv, COLUMNS}}
                 regimes: {observe: [{log-garman-klass-volatility: stocks}], states: [calm, stormy]}
                 refit: {first-fit-after: 100, every: 50, seed: 7}
                 allocate: {blend: {weights: {calm: {stocks: 1}, stormy: {stocks: 0}}}}
                 judge: {buy-and-hold: {stocks: 1}}
-                """ + trade, folder, "strategy.yaml", problems);
+                """.replace("COLUMNS", columns) + trade, folder, "strategy.yaml", problems);
         assertThat(problems.list()).isEmpty();
         return Prepared.of(file.orElseThrow());
     }
