@@ -173,8 +173,7 @@ final class SeriesFindings {
             add(
                     series.line(first),
                     counted(count, "move") + " of " + series.asset()
-                            + " like a split that is not recorded, the first on " + moved(first) + ", near " + ratio
-                            + " new units for one old",
+                            + " like a split that is not recorded, the first on " + moved(first) + ", near " + ratio,
                     "adjust the prices, or record it in a column: split: … under prices");
         }
     }

@@ -76,9 +76,9 @@ class DistributionsTest {
         String rows = "date,close,paid,ratio\n2020-01-02,10,,\n2020-01-03,5.05,,RATIO\n2020-01-06,5,,\n";
         Market silent = Fixture.market(folder, rows.replace("RATIO", ""), paying(), Calendar.DAILY);
         assertThat(silent.findings().stream().map(Finding::toString))
-                .anyMatch(text ->
-                        text.startsWith("prices.csv:3: 1 move of stocks like a split that is not recorded, the first on"
-                                + " 2020-01-03 (-49.5 %), near 2 new units for one old"));
+                .contains(
+                        "prices.csv:3: 1 move of stocks like a split that is not recorded, the first on 2020-01-03 (-49.5 %),"
+                                + " near 2 new units for one old; adjust the prices, or record it in a column: split: … under prices");
         Market recorded = Fixture.market(folder, rows.replace("RATIO", "2"), paying(), Calendar.DAILY);
         assertThat(recorded.findings()).isEmpty();
     }
