@@ -11,7 +11,9 @@ import sojourn.market.BarLength;
 import sojourn.market.CashSource;
 import sojourn.market.Finding;
 import sojourn.regime.Outcome;
+import sojourn.trade.Costs;
 import sojourn.trade.Hindrance;
+import sojourn.trade.Track;
 import sojourn.trade.Undecided;
 import sojourn.walk.FitRecord;
 import sojourn.walk.RegimeTimeline;
@@ -25,6 +27,9 @@ public final class Warnings {
     private static final String COMPUTED_ELSEWHERE =
             "its probabilities were computed elsewhere and are not audited for how they were computed: if that looked at this"
                     + " period, or the file says that they became known earlier than they did, the result has seen its own future";
+
+    /** Cash below 0 by less than this part of wealth is a rounding error. */
+    private static final double ROUNDING = 1e-9;
 
     private Warnings() {}
 
@@ -143,6 +148,35 @@ public final class Warnings {
         }
     }
 
+    /** Whether money or assets were borrowed for nothing, as the track shows it. */
+    private static void addFreeBorrowing(Run.Traded run, List<String> warnings) {
+        Track track = run.track();
+        Costs costs = run.file().strategy().trade().costs();
+        int owing = 0;
+        int shorting = 0;
+        for (int bar = track.firstBar(); bar <= track.lastBar(); bar++) {
+            owing += track.cash(bar) < -ROUNDING * track.wealth(bar) ? 1 : 0;
+            shorting += isShort(track, bar) ? 1 : 0;
+        }
+        if (owing > 0 && costs.marginPercentPerYear() == 0) {
+            warnings.add(run.file().slug() + " owed cash on " + owing + (owing == 1 ? " bar" : " bars")
+                    + ", and owing costs it no more than what cash earns: no margin-percent-per-year is stated");
+        }
+        if (shorting > 0 && costs.borrowPercentPerYear() == 0) {
+            warnings.add(run.file().slug() + " was short on " + shorting + (shorting == 1 ? " bar" : " bars")
+                    + ", and borrowing what it sold costs it nothing: no borrow-percent-per-year is stated");
+        }
+    }
+
+    private static boolean isShort(Track track, int bar) {
+        for (int asset = 0; asset < track.assets().size(); asset++) {
+            if (track.units(bar, asset) < 0) {
+                return true;
+            }
+        }
+        return false;
+    }
+
     private static void addWindows(Compared compared, List<String> warnings) {
         long windows = compared.ranked().stream()
                 .map(one -> one.strategy().from() + " to " + one.strategy().to())
@@ -157,12 +191,7 @@ public final class Warnings {
         for (Judgement one : compared.ranked()) {
             lengths.add(one.run().ready().market().table().barLength());
             cash.add(one.run().ready().cashContent());
-            if (one.run().file().strategy().limits().gross() > 1
-                    && one.run().file().strategy().trade().costs().marginPercentPerYear() == 0) {
-                warnings.add(
-                        one.run().file().slug()
-                                + " may borrow, and borrowing costs it no more than what cash earns: no margin-percent-per-year is stated");
-            }
+            addFreeBorrowing(one.run(), warnings);
         }
         if (lengths.size() > 1) {
             warnings.add(
