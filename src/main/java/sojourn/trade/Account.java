@@ -95,6 +95,8 @@ final class Account {
         PART,
         /** A leg cannot be traded; the order waits. */
         BLOCKED,
+        /** Wealth is gone at the prices of the fill; the order waits, and the close decides whether it is ruin. */
+        WORTHLESS,
         /** Nothing would be left after its costs. */
         RUIN
     }
@@ -116,20 +118,37 @@ final class Account {
                     return Outcome.BLOCKED;
                 }
             }
-            price[i] = quoted.orElse(0);
+            price[i] = quoted.isPresent() ? quoted.getAsDouble() : lastPrice(i, bar);
             value[i] = units[i] * price[i];
             wealth += value[i];
         }
         if (!(wealth > 0)) {
-            return Outcome.RUIN;
+            hindrances.add(new Hindrance(bar, order.decidedOn(), firstOf(order), Hindrance.Kind.NO_WEALTH));
+            return Outcome.WORTHLESS;
         }
         return order.quantities().isPresent()
                 ? exchange(order, bar, wealth, order.quantities().get())
                 : rebalance(order, bar, wealth);
     }
 
+    /** Whether a leg may have to be traded: where quantities are settled, only if they are not those that are held. */
     private boolean involved(Order order, int asset) {
-        return units[asset] != 0 || order.target().at(asset) != 0;
+        return order.quantities().isPresent()
+                ? order.quantities().get().at(asset) != units[asset]
+                : units[asset] != 0 || order.target().at(asset) != 0;
+    }
+
+    private int firstOf(Order order) {
+        int asset = 0;
+        while (asset < units.length - 1 && !involved(order, asset)) {
+            asset++;
+        }
+        return asset;
+    }
+
+    /** What an asset that is not traded now is marked at: its close before, in the units after the bar's split. */
+    private double lastPrice(int asset, int bar) {
+        return bar == 0 ? prices.close(asset, 0) : prices.close(asset, bar - 1) / prices.split(asset, bar);
     }
 
     private Optional<Hindrance.Kind> observe(Known before, int asset) {
@@ -211,7 +230,9 @@ final class Account {
             }
             if (cut) {
                 done = false;
-                hindrances.add(new Hindrance(bar, order.decidedOn(), i, Hindrance.Kind.PARTICIPATION));
+                Hindrance.Kind kind =
+                        bought[i] == 0 ? Hindrance.Kind.LOT_BEYOND_PARTICIPATION : Hindrance.Kind.PARTICIPATION;
+                hindrances.add(new Hindrance(bar, order.decidedOn(), i, kind));
             }
         }
         if (!(after > 0)) {

@@ -26,7 +26,7 @@ public final class Basket {
     }
 
     /**
-     * The basket at the closes of {@code bar}; empty if nothing would be left after its costs.
+     * The basket at the closes of {@code bar}; empty if nothing would be left after its costs, or is left before.
      *
      * @param held units of each asset of the table
      * @param cash money held; negative if owed
@@ -42,7 +42,7 @@ public final class Basket {
             PriceTable table, int bar, Quantities held, double cash, Order order, Terms terms) {
         Account account = new Account(table, terms).holding(held, cash);
         Account.Outcome outcome = account.fill(order, bar, new NextClose(0), table.knownAt(bar));
-        if (outcome == Account.Outcome.RUIN) {
+        if (outcome == Account.Outcome.RUIN || outcome == Account.Outcome.WORTHLESS) {
             return Optional.empty();
         }
         Quantities after = outcome == Account.Outcome.PART ? account.carried().orElseThrow() : account.units();

@@ -10,7 +10,10 @@ package sojourn.trade;
 public record Hindrance(int bar, int decidedOn, int asset, Kind kind) {
     /** Whether the whole order waits for it. */
     public boolean waits() {
-        return kind == Kind.NO_PRICE || kind == Kind.NO_VOLUME || kind == Kind.NO_VOLATILITY;
+        return switch (kind) {
+            case NO_PRICE, NO_VOLUME, NO_VOLATILITY, NO_WEALTH -> true;
+            case PARTICIPATION, LOT, LOT_BEYOND_PARTICIPATION -> false;
+        };
     }
 
     /** What was in the way. */
@@ -24,7 +27,12 @@ public record Hindrance(int bar, int decidedOn, int asset, Kind kind) {
         /** The most that may be traded on one bar was traded; the rest is carried to the next bar. */
         PARTICIPATION("was traded up to the participation allowed, and the rest was carried to the next bar"),
         /** One lot is worth more than what was to be held: nothing is. */
-        LOT("was not bought, because one lot is worth more than what was to be held");
+        LOT("was not bought, because one lot is worth more than what was to be held"),
+        /** One lot is worth more than may be traded on one bar: the leg waits for a bar on which more is. */
+        LOT_BEYOND_PARTICIPATION(
+                "was not traded, because one lot is more than the participation allowed on one bar; it waits for a bar that allows it"),
+        /** Nothing is left at the prices of the fill: the whole order waits, and the close decides whether it is ruin. */
+        NO_WEALTH("could not be traded, because wealth was gone at the prices of the fill, so the order waited");
 
         private final String sentence;
 

@@ -200,7 +200,7 @@ public final class Simulation {
             if (outcome == Account.Outcome.RUIN) {
                 dropped.add(order);
                 ruin(bar);
-            } else if (outcome == Account.Outcome.BLOCKED) {
+            } else if (outcome == Account.Outcome.BLOCKED || outcome == Account.Outcome.WORTHLESS) {
                 pending.addFirst(order);
                 return;
             } else if (outcome == Account.Outcome.PART) {

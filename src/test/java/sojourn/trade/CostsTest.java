@@ -101,6 +101,28 @@ class CostsTest {
         assertThat(track.units(11, 0)).isEqualTo(450);
     }
 
+    /** A tenth of 100 000 a bar is 100 units, and one lot 150: nothing may be traded until bar 6, when twice as much was traded on bars 4 and 5. */
+    @Test
+    void aLotThatIsMoreThanOneBarAllowsWaitsForABarThatAllowsIt() {
+        double[] volumes = new double[12];
+        Arrays.fill(volumes, 0, 4, 1_000);
+        Arrays.fill(volumes, 4, 12, 2_000);
+        Costs costs = Costs.none().withImpact(new Impact(0, 2, 2, Optional.of(10.0)));
+        Track track = Simulation.run(
+                        GivenPrices.flat(12, 1).withVolumes(volumes).table(),
+                        GivenProbabilities.stormy(new double[12]),
+                        Policies.at(Map.of(2, Weights.of(0.02))),
+                        new Terms(new NextClose(0), costs, CAPITAL, SizeAt.FILL, new Lots(150, Map.of())),
+                        0)
+                .orElseThrow();
+        assertThat(track.hindrances())
+                .containsExactly(
+                        new Hindrance(3, 2, 0, Hindrance.Kind.LOT_BEYOND_PARTICIPATION),
+                        new Hindrance(4, 2, 0, Hindrance.Kind.LOT_BEYOND_PARTICIPATION));
+        assertThat(track.fills()).extracting(Fill::filledOn).containsExactly(5);
+        assertThat(track.fills()).extracting(Fill::units).containsExactly(150.0);
+    }
+
     @Test
     void aCarriedRestGivesWayToTheNextOrderDueAndIsListed() {
         double[] volumes = new double[12];

@@ -128,6 +128,35 @@ class FillRulesTest {
         assertThat(track.hindrances()).containsExactly(new Hindrance(2, 1, 0, Hindrance.Kind.NO_PRICE));
     }
 
+    /** Where quantities are settled, a leg that stays as it is needs no price; what it is worth is its close before. */
+    @Test
+    void aLegThatIsNotTradedNeedsNoPrice() {
+        double[] missing = {100, 100, Double.NaN, 100, 100};
+        double[] there = {100, 100, 100, 100, 100};
+        GivenPrices prices = GivenPrices.flat(5, 2).withOpens(missing, there);
+        Terms terms = new Terms(new NextOpen(0), Costs.none(), 1_000, SizeAt.DECISION, new Lots(0, Map.of("a", 1_000)));
+        Track track = Simulation.run(
+                        prices.table(),
+                        GivenProbabilities.stormy(new double[prices.size()]),
+                        Policies.at(Map.of(1, Weights.of(0.3, 0.3))),
+                        terms,
+                        0)
+                .orElseThrow();
+        assertThat(track.fills()).extracting(Fill::filledOn).containsExactly(2);
+        assertThat(track.units(2, 1)).isEqualTo(3);
+        Track held = Simulation.run(
+                        GivenPrices.flat(5, 2)
+                                .withOpens(new double[] {100, 100, 100, Double.NaN, 100}, there)
+                                .table(),
+                        GivenProbabilities.stormy(new double[prices.size()]),
+                        Policies.at(Map.of(1, Weights.of(0.5, 0), 2, Weights.of(0.5, 0.5))),
+                        new Terms(new NextOpen(0), Costs.none(), 1_000, SizeAt.DECISION, Lots.FRACTIONS),
+                        0)
+                .orElseThrow();
+        assertThat(held.fills()).extracting(Fill::filledOn).containsExactly(2, 3);
+        assertThat(held.turnover(3)).as("500 of 1000, half of it").isEqualTo(0.25);
+    }
+
     @Test
     void quantitiesSettledAtTheDecisionAreThoseOfItsCloseWhateverTheFillCosts() {
         GivenPrices prices = GivenPrices.closes(new double[] {100, 125, 80, 80, 80});

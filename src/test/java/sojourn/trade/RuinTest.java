@@ -63,6 +63,25 @@ class RuinTest {
         assertThat(cash).isCloseTo(0, within(1e-9));
     }
 
+    /** Twice 100 bought at the open of bar 1; the open of bar 3 at 40 leaves -200, the close at 90 leaves 800: no ruin. */
+    @Test
+    void anOpenAtWhichWealthIsGoneIsNoRuinIfTheCloseHasSome() {
+        GivenPrices prices = GivenPrices.closes(new double[] {100, 100, 100, 90, 90, 90})
+                .withOpens(new double[] {100, 100, 100, 40, 90, 90});
+        Track track = Simulation.run(
+                        prices.table(),
+                        GivenProbabilities.stormy(new double[6]),
+                        Policies.at(Map.of(0, Weights.of(2), 2, Weights.of(0))),
+                        new Terms(new NextOpen(0), Costs.none(), CAPITAL),
+                        0)
+                .orElseThrow();
+        assertThat(track.ruinedOn()).isEmpty();
+        assertThat(track.wealth(3)).isEqualTo(800);
+        assertThat(track.hindrances()).containsExactly(new Hindrance(3, 2, 0, Hindrance.Kind.NO_WEALTH));
+        assertThat(track.fills()).extracting(Fill::filledOn).containsExactly(1, 4);
+        assertThat(track.wealth(5)).isEqualTo(800);
+    }
+
     @Test
     void theRuinBarKeepsTheBooksToo() {
         double[] closes = {100, 100, 90, 60, 200};
