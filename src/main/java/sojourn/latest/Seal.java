@@ -28,7 +28,7 @@ public final class Seal {
     public static ResultFolder.Published put(SealShelf shelf, Latest latest, String sealedAt) {
         SealChain chain = SealChain.of(shelf.all());
         int last = chain.size() - 1;
-        List<String> faults = chain.faults(last);
+        List<String> faults = chain.faults();
         if (!faults.isEmpty()) {
             throw new InputException(new Problem(
                     shelf.path(chain.name(last)).toString(),

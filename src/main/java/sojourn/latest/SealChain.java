@@ -1,10 +1,13 @@
 package sojourn.latest;
 
+import com.fasterxml.jackson.core.JsonProcessingException;
+import com.fasterxml.jackson.core.StreamReadFeature;
+import com.fasterxml.jackson.databind.DeserializationFeature;
 import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.ObjectMapper;
+import com.fasterxml.jackson.databind.json.JsonMapper;
 import com.fasterxml.jackson.databind.node.JsonNodeFactory;
 import com.fasterxml.jackson.databind.node.ObjectNode;
-import java.io.IOException;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -26,24 +29,58 @@ final class SealChain {
 
     private final List<Link> links = new ArrayList<>();
 
-    /** A seal and whether it can be read. */
-    private record Link(String name, Optional<ObjectNode> tree) {}
+    /** A key that stands twice is refused, for a reader may show one value while another is hashed. */
+    private static final ObjectMapper STRICT = JsonMapper.builder()
+            .enable(StreamReadFeature.STRICT_DUPLICATE_DETECTION)
+            .enable(DeserializationFeature.FAIL_ON_TRAILING_TOKENS)
+            .build();
+
+    /**
+     * A seal as it was read.
+     *
+     * @param tree empty if it cannot be read
+     * @param fault why it cannot, empty if it can
+     */
+    private record Link(String name, Optional<ObjectNode> tree, String fault) {}
 
     private SealChain() {}
 
     static SealChain of(List<Stored> stored) {
         SealChain chain = new SealChain();
-        stored.forEach(one -> chain.links.add(new Link(one.name(), parsed(one.text()))));
+        stored.forEach(one -> chain.links.add(link(one)));
         return chain;
     }
 
-    private static Optional<ObjectNode> parsed(String text) {
+    private static Link link(Stored stored) {
         try {
-            JsonNode tree = new ObjectMapper().readTree(text);
-            return tree instanceof ObjectNode object && tree.has(HASH) ? Optional.of(object) : Optional.empty();
-        } catch (IOException e) {
-            return Optional.empty(); // told as a fault of the chain by whoever asks for it
+            JsonNode tree = STRICT.readTree(stored.text());
+            return tree instanceof ObjectNode object && tree.has(HASH)
+                    ? new Link(stored.name(), Optional.of(object), "")
+                    : new Link(stored.name(), Optional.empty(), "it has no key '" + HASH + "'");
+        } catch (JsonProcessingException e) {
+            String where =
+                    e.getLocation() == null ? "" : "line " + e.getLocation().getLineNr() + ": ";
+            return new Link(stored.name(), Optional.empty(), where + e.getOriginalMessage());
         }
+    }
+
+    /** Why a seal cannot be read; empty if it can. */
+    String unreadable(int place) {
+        return links.get(place).fault();
+    }
+
+    /** The seal after {@code place}, if that one names it by the hash it has; empty if there is none or it names another. */
+    Optional<String> vouching(int place) {
+        int next = place + 1;
+        boolean vouches = next < size()
+                && seal(next)
+                        .map(one -> fitting(one) && link(next, one).isEmpty())
+                        .orElse(false);
+        return vouches ? Optional.of(name(next)) : Optional.empty();
+    }
+
+    private static boolean fitting(ObjectNode seal) {
+        return hash(seal).equals(seal.path(HASH).asText());
     }
 
     int size() {
@@ -71,16 +108,21 @@ final class SealChain {
         return Digest.of(JsonText.bytes(rest));
     }
 
+    /** What is wrong with any of the seals, the oldest first. */
+    List<String> faults() {
+        return faults(size() - 1);
+    }
+
     /** What is wrong with the seals up to {@code place}, the oldest first. */
     List<String> faults(int place) {
         List<String> faults = new ArrayList<>();
         for (int i = 0; i <= place; i++) {
             Optional<ObjectNode> seal = seal(i);
             if (seal.isEmpty()) {
-                faults.add(name(i) + " cannot be read as a seal");
+                faults.add(name(i) + " cannot be read as a seal (" + unreadable(i) + ")");
                 continue;
             }
-            if (!hash(seal.get()).equals(seal.get().path(HASH).asText())) {
+            if (!fitting(seal.get())) {
                 faults.add(name(i) + " is not what was sealed: its hash does not fit its content");
             }
             faults.addAll(link(i, seal.get()));

@@ -22,12 +22,14 @@ import sojourn.document.Problem;
 import sojourn.market.PriceTable;
 
 /**
- * Whether a seal still holds: its chain is whole, and the files of now, cut at its date, give the same decision.
+ * Whether a seal still holds: its chain is whole, also after it, and the files of now, cut at its date, give the same decision.
  *
  * @param seal name of its file
  * @param asOf the date it was sealed for
  * @param sealedAt when it was sealed
- * @param chain what is wrong with the chain of seals up to it
+ * @param sha256 the hash it carries, to be held against one that was kept elsewhere
+ * @param vouchedBy the seal after it, which names it by this hash; empty if it is the last or that one names another
+ * @param chain what is wrong with the seals that stand with it, before it and after it
  * @param rows what has changed in the rows it stands on; empty if the chain is broken, so that they cannot be put together
  * @param differences what the files of now say otherwise
  */
@@ -35,6 +37,8 @@ public record SealVerdict(
         String seal,
         String asOf,
         String sealedAt,
+        String sha256,
+        Optional<String> vouchedBy,
         List<String> chain,
         Optional<List<RowChange>> rows,
         List<Difference> differences) {
@@ -77,8 +81,8 @@ public record SealVerdict(
         String name =
                 Objects.requireNonNull(file.getFileName(), "a file has a name").toString();
         int place = chain.place(name);
-        ObjectNode seal =
-                (place < 0 ? Optional.<ObjectNode>empty() : chain.seal(place)).orElseThrow(() -> noSeal(file));
+        ObjectNode seal = (place < 0 ? Optional.<ObjectNode>empty() : chain.seal(place))
+                .orElseThrow(() -> noSeal(file, place < 0 ? "" : chain.unreadable(place)));
         JsonNode content = seal.path(Seal.CONTENT);
         LocalDate asOf = date(file, content.path("as_of").asText());
         PriceTable table = ready.market().table();
@@ -99,7 +103,9 @@ public record SealVerdict(
                 name,
                 asOf.toString(),
                 seal.path("sealed_at").asText(),
-                chain.faults(place),
+                seal.path(SealChain.HASH).asText(),
+                chain.vouching(place),
+                chain.faults(),
                 chain.rows(place).map(then -> changes(then, rows)),
                 differences);
     }
@@ -171,16 +177,16 @@ public record SealVerdict(
         try {
             return LocalDate.parse(text);
         } catch (DateTimeParseException e) {
-            throw noSeal(file);
+            throw noSeal(file, "its as_of is no date");
         }
     }
 
-    private static InputException noSeal(Path file) {
+    private static InputException noSeal(Path file, String why) {
         return new InputException(new Problem(
                 file.toString(),
                 0,
                 0,
-                "this is no seal",
+                "this is no seal" + (why.isEmpty() ? "" : ": " + why),
                 "name a .json file that --seal wrote, in the folder it was written to"));
     }
 }

@@ -22,6 +22,7 @@ public final class SealText {
                 verdict.seal() + ", sealed at " + verdict.sealedAt() + " for the close of " + verdict.asOf() + ": "
                         + (verdict.holds() ? "it holds. The same inputs give the same decision." : "it does not hold."),
                 0));
+        text.append(Lines.after("  Hash      ", verdict.sha256() + ", " + vouched(verdict), 12));
         verdict.chain().forEach(fault -> text.append(Lines.after("  Chain     ", fault + ".", 12)));
         if (verdict.rows().isEmpty()) {
             text.append(Lines.after(
@@ -59,6 +60,13 @@ public final class SealText {
         return text.toString();
     }
 
+    private static String vouched(SealVerdict verdict) {
+        return verdict.vouchedBy()
+                .map(next -> "which " + next + " names as that of the seal before it.")
+                .orElse(
+                        "and no later seal vouches for it: compare it with a note of the hash that was kept elsewhere.");
+    }
+
     private static String shown(String value) {
         return value.isEmpty() ? "nothing" : value;
     }
@@ -69,6 +77,8 @@ public final class SealText {
         root.put("seal", verdict.seal());
         root.put("as_of", verdict.asOf());
         root.put("sealed_at", verdict.sealedAt());
+        root.put("sha256", verdict.sha256());
+        verdict.vouchedBy().ifPresent(next -> root.put("vouched_by", next));
         root.put("holds", verdict.holds());
         verdict.chain().forEach(root.putArray("chain_faults")::add);
         Optional<List<RowChange>> rows = verdict.rows();

@@ -3,16 +3,22 @@ package sojourn.job;
 import static org.assertj.core.api.Assertions.assertThat;
 
 import com.fasterxml.jackson.databind.JsonNode;
+import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.io.IOException;
+import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.security.MessageDigest;
+import java.security.NoSuchAlgorithmException;
 import java.time.LocalDate;
 import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.HexFormat;
 import java.util.List;
 import org.junit.jupiter.api.BeforeEach;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
+import sojourn.document.JsonText;
 
 /** Seals: written, chained, verified, and found broken. */
 class SealTest {
@@ -177,5 +183,73 @@ class SealTest {
         assertThat(verify("note.json").code()).isEqualTo(2);
         assertThat(verify("note.json").err()).contains("this is no seal");
         assertThat(verify("absent.json").err()).contains("there is no such file");
+    }
+
+    @Test
+    void aLaterSealVouchesForAnEarlierOneAndTheLastHasNone() {
+        String first = seal();
+        String alone = flat(verify(first));
+        String hash = folder.json("results/seals/rule/" + first).get("sha256").asText();
+        assertThat(alone).contains("Hash " + hash + ", and no later seal vouches for it");
+        rows(420);
+        String second = seal();
+        assertThat(flat(verify(first)))
+                .contains("Hash " + hash + ", which " + second + " names as that of the seal before it.");
+        assertThat(flat(verify(second))).contains("no later seal vouches for it");
+        JsonNode told = JobFolder.parsed(verify(first, "--json").out());
+        assertThat(told.get("sha256").asText()).isEqualTo(hash);
+        assertThat(told.get("vouched_by").asText()).isEqualTo(second);
+    }
+
+    /** What a forger would do: change the hour and give the seal the hash that then fits. */
+    @Test
+    void aSealThatWasBackdatedWithAFittingHashIsGivenAwayByTheNext() {
+        String first = seal();
+        rows(420);
+        String second = seal();
+        ObjectNode forged = (ObjectNode) folder.json("results/seals/rule/" + first);
+        forged.put("sealed_at", "2001-01-01T00:00:00Z");
+        forged.remove("sha256");
+        forged.put("sha256", sha256(JsonText.compact(forged)));
+        folder.with("results/seals/rule/" + first, JsonText.indented(forged));
+        JobFolder.Ran ran = verify(first);
+        assertThat(ran.code()).isEqualTo(3);
+        assertThat(flat(ran))
+                .contains("it does not hold")
+                .contains(second + " names " + first + " with another hash than it has now")
+                .contains("no later seal vouches for it")
+                .doesNotContain("is not what was sealed");
+        assertThat(JobFolder.parsed(verify(first, "--json").out()).has("vouched_by"))
+                .isFalse();
+    }
+
+    @Test
+    void aKeyThatStandsTwiceIsNoSeal() {
+        String first = seal();
+        rows(420);
+        String second = seal();
+        String text = folder.text("results/seals/rule/" + first);
+        folder.with(
+                "results/seals/rule/" + first, text.replace("  \"number\": 1,", "  \"number\": 7,\n  \"number\": 1,"));
+        assertThat(verify(first).code()).isEqualTo(2);
+        assertThat(verify(first).err())
+                .contains("this is no seal: line ")
+                .contains("Duplicate")
+                .contains("'number'");
+        assertThat(verify(second).code()).isEqualTo(3);
+        assertThat(flat(verify(second))).contains(first + " cannot be read as a seal (line");
+    }
+
+    private static String flat(JobFolder.Ran ran) {
+        return ran.out().replaceAll("\\s+", " ");
+    }
+
+    private static String sha256(String text) {
+        try {
+            byte[] hash = MessageDigest.getInstance("SHA-256").digest(text.getBytes(StandardCharsets.UTF_8));
+            return HexFormat.of().formatHex(hash);
+        } catch (NoSuchAlgorithmException e) {
+            throw new IllegalStateException(e);
+        }
     }
 }
