@@ -2,6 +2,7 @@ package sojourn.latest;
 
 import java.util.ArrayList;
 import java.util.List;
+import sojourn.market.QuotedBar;
 import sojourn.walk.Forecast;
 import sojourn.walk.Reading;
 
@@ -9,7 +10,7 @@ import sojourn.walk.Reading;
  * What the next bar of one asset is expected to bring, regimes mixed by their predicted probabilities. Simple returns of one bar,
  * not annualised.
  *
- * @param close the last close
+ * @param close the last close, as quoted
  * @param mean expected return
  * @param volatility standard deviation of the return
  */
@@ -20,7 +21,7 @@ public record AssetOutlook(String asset, double close, double mean, double volat
         List<AssetOutlook> all = new ArrayList<>();
         List<String> assets = standing.table().assets();
         for (int asset = 0; asset < assets.size(); asset++) {
-            double close = standing.known().close(asset, standing.bar());
+            double close = QuotedBar.of(standing.table(), asset, standing.bar()).close();
             all.add(new AssetOutlook(assets.get(asset), close, next.mean(asset), next.volatility(asset)));
         }
         return all;

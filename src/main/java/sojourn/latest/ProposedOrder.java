@@ -48,6 +48,11 @@ public record ProposedOrder(Order order, Optional<Basket> basket) {
         return Optional.of(of(holdings, order, standing));
     }
 
+    /** How many bars after the last close it fills if nothing is in its way: at least 1, also for one that should have filled before. */
+    public int barsToFill(Standing standing) {
+        return Math.max(1, order.dueOn() - standing.bar());
+    }
+
     private static ProposedOrder of(Holdings holdings, Order order, Standing standing) {
         return new ProposedOrder(
                 order,

@@ -84,7 +84,7 @@ public final class SealContent {
         node.put(
                 "decided_on",
                 latest.standing().known().date(proposed.order().decidedOn()).toString());
-        node.put("bars_to_fill", proposed.order().dueOn() - latest.standing().bar());
+        node.put("bars_to_fill", proposed.barsToFill(latest.standing()));
         node.set("target", weights(proposed.order().target(), assets));
         Optional<Basket> basket = proposed.basket();
         if (basket.isEmpty()) {

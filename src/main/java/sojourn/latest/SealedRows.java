@@ -14,10 +14,12 @@ import java.util.stream.IntStream;
 import sojourn.archive.Digest;
 import sojourn.market.Known;
 import sojourn.market.PriceTable;
+import sojourn.market.QuotedBar;
 import sojourn.numeric.ShortestDecimal;
 
 /**
- * All that a decision could see of the market, as text: a row a common bar, numbers as the shortest decimals that read back to the
+ * All that a decision could see of the market, as text: a row a common bar, prices as quoted with dividends and splits beside
+ * them, numbers as the shortest decimals that read back to the
  * same double, empty where there is none.
  *
  * @param columns names, the date left out
@@ -62,11 +64,15 @@ record SealedRows(List<String> columns, Map<String, String> byDate) {
         for (int i = 0; i < table.assets().size(); i++) {
             int asset = i;
             String name = table.assets().get(i);
-            sources.add(new Source(name + ".close", known -> OptionalDouble.of(known.close(asset, known.bar()))));
-            sources.add(new Source(name + ".open", known -> known.open(asset, known.bar())));
-            sources.add(new Source(name + ".high", known -> known.high(asset, known.bar())));
-            sources.add(new Source(name + ".low", known -> known.low(asset, known.bar())));
-            sources.add(new Source(name + ".volume", known -> known.volume(asset, known.bar())));
+            Function<Known, QuotedBar> bar = known -> QuotedBar.of(table, asset, known.bar());
+            sources.add(
+                    new Source(name + ".close", bar.andThen(QuotedBar::close).andThen(OptionalDouble::of)));
+            sources.add(new Source(name + ".open", bar.andThen(QuotedBar::open)));
+            sources.add(new Source(name + ".high", bar.andThen(QuotedBar::high)));
+            sources.add(new Source(name + ".low", bar.andThen(QuotedBar::low)));
+            sources.add(new Source(name + ".volume", bar.andThen(QuotedBar::volume)));
+            sources.add(new Source(name + ".dividend", bar.andThen(QuotedBar::dividend)));
+            sources.add(new Source(name + ".split", bar.andThen(QuotedBar::split)));
         }
         for (String level : table.levels()) {
             sources.add(new Source(level + ".close", known -> OptionalDouble.of(known.close(level, known.bar()))));

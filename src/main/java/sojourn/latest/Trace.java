@@ -18,6 +18,7 @@ import sojourn.market.AnotherEnd;
 import sojourn.market.PriceTable;
 import sojourn.strategy.Strategy;
 import sojourn.trade.Fill;
+import sojourn.trade.LedgerEntry;
 import sojourn.trade.Track;
 import sojourn.walk.FitRecord;
 import sojourn.walk.Observation;
@@ -75,6 +76,13 @@ public record Trace(
     /** The traced close. */
     public Standing standing() {
         return latest.standing();
+    }
+
+    /** Every movement of cash on this bar, in order; none before the first decision. */
+    public List<LedgerEntry> ledger() {
+        return standing().track().map(Track::ledger).orElse(List.of()).stream()
+                .filter(entry -> entry.bar() == standing().bar())
+                .toList();
     }
 
     private static List<Fill> fills(Optional<Track> track) {

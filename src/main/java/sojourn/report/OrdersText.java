@@ -54,13 +54,12 @@ final class OrdersText {
     }
 
     private static String order(Latest latest, ProposedOrder one) {
-        int ahead = one.order().dueOn() - latest.standing().bar();
         boolean now = one.order().decidedOn() == latest.standing().bar();
         String when = now
                 ? "Decided at this close"
                 : "Pending, decided on "
                         + latest.standing().known().date(one.order().decidedOn());
-        String head = when + ", fills at " + LatestText.bars(Math.max(1, ahead)) + ":\n";
+        String head = when + ", fills at " + LatestText.bars(one.barsToFill(latest.standing())) + ":\n";
         if (one.basket().isEmpty()) {
             return head + "  it could not fill: nothing would be left after its costs.\n";
         }

@@ -11,7 +11,9 @@ import sojourn.latest.FilterStep;
 import sojourn.latest.SealContent;
 import sojourn.latest.Standing;
 import sojourn.latest.Trace;
+import sojourn.market.QuotedBar;
 import sojourn.trade.Fill;
+import sojourn.trade.LedgerEntry;
 import sojourn.trade.Track;
 import sojourn.walk.Observation;
 
@@ -27,6 +29,7 @@ public final class TraceJson {
         root.put("strategy", standing.strategy().name());
         root.put("date", standing.asOf().toString());
         root.put("bar", standing.bar() + 1);
+        root.set("prices", prices(standing));
         trace.step()
                 .ifPresent(step -> root.set(
                         "filter", filter(step, standing.strategy().regimes().observe())));
@@ -42,7 +45,40 @@ public final class TraceJson {
         root.set("filled_here", fills(trace.filledHere(), trace));
         root.set("filled_later", fills(trace.filledLater(), trace));
         standing.track().ifPresent(track -> root.set("money", money(track, standing.bar())));
+        root.set("ledger", ledger(trace));
         return JsonText.indented(root);
+    }
+
+    /** As quoted, with the simple return of a holder where there is a bar before. */
+    private static ObjectNode prices(Standing standing) {
+        ObjectNode node = JsonNodeFactory.instance.objectNode();
+        for (int asset = 0; asset < standing.table().assets().size(); asset++) {
+            ObjectNode one = node.putObject(standing.table().assets().get(asset));
+            QuotedBar now = QuotedBar.of(standing.table(), asset, standing.bar());
+            one.put("close", now.close());
+            now.dividend().ifPresent(money -> one.put("dividend", money));
+            now.split().ifPresent(ratio -> one.put("split", ratio));
+            if (standing.bar() > 0) {
+                double before = QuotedBar.of(standing.table(), asset, standing.bar() - 1)
+                        .close();
+                one.put("close_before", before);
+                one.put("return", now.simpleReturn(before));
+            }
+        }
+        return node;
+    }
+
+    private static ArrayNode ledger(Trace trace) {
+        ArrayNode all = JsonNodeFactory.instance.arrayNode();
+        for (LedgerEntry entry : trace.ledger()) {
+            ObjectNode node = all.addObject();
+            node.put("kind", entry.kind().word());
+            entry.asset()
+                    .ifPresent(asset ->
+                            node.put("asset", trace.standing().table().assets().get(asset)));
+            node.put("amount", entry.amount());
+        }
+        return all;
     }
 
     private static ObjectNode filter(FilterStep step, List<Observation> observe) {
@@ -111,6 +147,9 @@ public final class TraceJson {
     private static ObjectNode money(Track track, int bar) {
         ObjectNode node = JsonNodeFactory.instance.objectNode();
         node.put("wealth", track.wealth(bar));
+        if (bar > track.firstBar()) {
+            node.put("cash_before", track.cash(bar - 1));
+        }
         node.put("cash", track.cash(bar));
         node.put("interest", track.interest(bar));
         return node.put("cost", track.cost(bar));

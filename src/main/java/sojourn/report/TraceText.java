@@ -3,7 +3,6 @@ package sojourn.report;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
-import java.util.Optional;
 import java.util.OptionalDouble;
 import sojourn.allocate.Rule;
 import sojourn.allocate.Stance;
@@ -14,10 +13,8 @@ import sojourn.latest.FilterStep;
 import sojourn.latest.Standing;
 import sojourn.latest.Trace;
 import sojourn.latest.WeightWords;
+import sojourn.market.QuotedBar;
 import sojourn.numeric.ShortestDecimal;
-import sojourn.trade.Charges;
-import sojourn.trade.Fill;
-import sojourn.trade.Track;
 import sojourn.walk.Forecast;
 import sojourn.walk.Observation;
 
@@ -42,8 +39,7 @@ public final class TraceText {
         all.probability();
         all.parameters();
         all.decision();
-        all.trades();
-        return all.text.toString();
+        return all.text + TraceMoneyText.of(trace);
     }
 
     private void headline() {
@@ -66,12 +62,24 @@ public final class TraceText {
         }
         List<String> assets = standing.table().assets();
         for (int asset = 0; asset < assets.size() && standing.bar() > 0; asset++) {
-            line(
-                    assets.get(asset) + " close",
-                    full(standing.known().close(asset, standing.bar())) + ", the bar before "
-                            + full(standing.known().close(asset, standing.bar() - 1)));
+            line(assets.get(asset) + " close", closes(asset));
         }
         text.append('\n');
+    }
+
+    /** As quoted; where the file has dividends or splits, also these and the return that is taken of all of them. */
+    private String closes(int asset) {
+        QuotedBar now = QuotedBar.of(standing.table(), asset, standing.bar());
+        double before =
+                QuotedBar.of(standing.table(), asset, standing.bar() - 1).close();
+        StringBuilder words = new StringBuilder(full(now.close()) + ", the bar before " + full(before));
+        now.dividend().ifPresent(money -> words.append(", dividend ").append(full(money)));
+        now.split().ifPresent(ratio -> words.append(", split ").append(full(ratio)));
+        if (now.dividend().isPresent() || now.split().isPresent()) {
+            words.append("; return ").append(full(now.simpleReturn(before)));
+            words.append(" = split × (close + dividend) / close before − 1");
+        }
+        return words.toString();
     }
 
     private void probability() {
@@ -163,7 +171,7 @@ public final class TraceText {
         text.append('\n');
     }
 
-    private static String exact(Weights weights, List<String> assets) {
+    static String exact(Weights weights, List<String> assets) {
         List<String> parts = new ArrayList<>();
         for (int asset = 0; asset < assets.size(); asset++) {
             parts.add(assets.get(asset) + " " + full(weights.at(asset)));
@@ -201,59 +209,17 @@ public final class TraceText {
                         .state(state, standing.strategy().regimes().states());
     }
 
-    private void trades() {
-        text.append("What was ordered, and what came of it?\n");
-        trace.filledHere().forEach(fill -> line("filled here", told(fill)));
-        boolean ordered = standing.pending().stream().anyMatch(order -> order.decidedOn() == standing.bar());
-        if (!ordered) {
-            line("order", "none decided at this close");
-        } else if (trace.filledLater().isEmpty()) {
-            line("order", "not filled as far as the files go");
-        }
-        trace.filledLater().forEach(fill -> line("order", told(fill)));
-        Optional<Track> track = standing.track();
-        track.ifPresent(money -> line(
-                "money",
-                "wealth " + full(money.wealth(standing.bar())) + ", cash " + full(money.cash(standing.bar()))
-                        + ", interest of this bar " + full(money.interest(standing.bar())) + ", costs of this bar "
-                        + full(money.cost(standing.bar()))));
-    }
-
-    private String told(Fill fill) {
-        List<String> assets = standing.table().assets();
-        return "decided on " + date(fill.decidedOn()) + ", filled on " + date(fill.filledOn()) + ": "
-                + Amounts.units(fill.units()) + " " + assets.get(fill.asset()) + " at " + full(fill.price())
-                + ", value "
-                + full(fill.notional()) + ", " + charges(fill.charges()) + ", weight " + full(fill.weightBefore())
-                + " to " + full(fill.weightAfter());
-    }
-
-    /** Commission and half-spread always, the others where there are any. */
-    private static String charges(Charges charges) {
-        List<String> parts = new ArrayList<>(
-                List.of("commission " + full(charges.commission()), "half-spread " + full(charges.halfSpread())));
-        if (charges.fixedFee() > 0) {
-            parts.add("fixed fee " + full(charges.fixedFee()));
-        }
-        if (charges.stampDuty() > 0) {
-            parts.add("stamp duty " + full(charges.stampDuty()));
-        }
-        if (charges.impact() > 0) {
-            parts.add("impact " + full(charges.impact()));
-        }
-        return String.join(", ", parts);
-    }
-
-    private String date(int bar) {
-        return trace.ready().market().table().knownAt(bar).date().toString();
-    }
-
-    private static String full(double value) {
+    static String full(double value) {
         return ShortestDecimal.of(value);
     }
 
     private void line(String label, String content) {
+        text.append(entry(label, content));
+    }
+
+    /** A line of a label and what stands under it, wrapped beside it. */
+    static String entry(String label, String content) {
         String head = "  " + label + " ".repeat(Math.max(1, INDENT - 2 - label.length()));
-        text.append(Lines.after(head, content, INDENT));
+        return Lines.after(head, content, INDENT);
     }
 }
