@@ -45,6 +45,29 @@ final class Figure {
         return weights(weights, assets, IntStream.range(0, assets.size()).toArray());
     }
 
+    /** Where {@code held} is not {@code target}, with as many decimals as tell them apart: "stocks 0.999, not 1.000". */
+    static String apart(Weights held, Weights target, List<String> assets) {
+        List<String> parts = new ArrayList<>();
+        for (int asset = 0; asset < assets.size(); asset++) {
+            BigDecimal is = new BigDecimal(held.at(asset));
+            BigDecimal wanted = new BigDecimal(target.at(asset));
+            int decimals = DECIMALS;
+            while (rounded(is, decimals).compareTo(rounded(wanted, decimals)) == 0
+                    && decimals < Math.max(is.scale(), wanted.scale())) {
+                decimals++;
+            }
+            if (is.compareTo(wanted) != 0) {
+                parts.add(assets.get(asset) + " " + rounded(is, decimals).toPlainString() + ", not "
+                        + rounded(wanted, decimals).toPlainString());
+            }
+        }
+        return String.join("; ", parts);
+    }
+
+    private static BigDecimal rounded(BigDecimal value, int decimals) {
+        return value.setScale(decimals, RoundingMode.HALF_EVEN);
+    }
+
     /** {@code value} with enough decimals to stand on the same side of {@code level} as it does in truth. */
     static String beside(double value, double level) {
         BigDecimal exact = new BigDecimal(value);

@@ -11,6 +11,7 @@ import sojourn.document.Quoted;
 /** Puts the faults of one expression into words. */
 final class FormulaFaults {
     private static final Pattern NAME = Pattern.compile("[A-Za-z_][A-Za-z0-9_]*(?:\\s*\\.\\s*[A-Za-z_][A-Za-z0-9_]*)*");
+    private static final Pattern OPERATOR = Pattern.compile("[%&|^~=<>!*/+-]+");
     private static final Pattern CALLED = Pattern.compile("[A-Za-z_][A-Za-z0-9_]*\\s*$");
     private static final Pattern UNEXPECTED = Pattern.compile(
             "(?:(?:mismatched|extraneous) input '|token recognition error at: '|no viable alternative at input ')(.*?)'(?: expecting.*)?",
@@ -87,6 +88,13 @@ final class FormulaFaults {
             return unknown(start, "function ", named ? called.group().strip() : "(", FormulaFunctions.names());
         }
         Matcher name = NAME.matcher(expression).region(from, expression.length());
+        Matcher operator = OPERATOR.matcher(expression).region(from, expression.length());
+        if (operator.lookingAt()) {
+            return new FormulaFault(
+                    at,
+                    "formulas know no operator " + Quoted.of(operator.group()),
+                    "known: + - * / < <= > >= == != && || ! and truth ? number : number");
+        }
         String found = name.lookingAt() ? name.group().replaceAll("\\s", "") : expression.substring(from);
         List<String> known = new ArrayList<>(names.numbers().keySet());
         known.addAll(names.truths().keySet());

@@ -37,11 +37,16 @@ record RuleReason(RulePolicy policy, Situation situation, Stance stance) impleme
     private String drifted(Decision decision) {
         boolean driftAlone = decision.kind() == Decision.Kind.ORDER
                 && decision.next().wanted().equals(stance.wanted());
-        String why = policy.rule().stepToward() < 1 ? "a further step toward it" : "held weights had drifted from it";
-        return driftAlone ? "; " + why : "";
+        if (!driftAlone) {
+            return "";
+        }
+        return policy.rule().stepToward() < 1
+                ? "; a further step toward it"
+                : "; what is held is away from it: "
+                        + Figure.apart(situation.weights(), decision.target().orElseThrow(), situation.assets());
     }
 
-    /** Of an order at a close with a refit: whether it is the refit's doing. */
+    /** Of an order at a close with a refit: what there would be without it. Nothing is said of the market, which moved as well. */
     private String refitted(Decision decision) {
         Optional<Reading> unmoved = situation.reading().flatMap(Reading::withoutRefit);
         boolean moved = decision.kind() == Decision.Kind.ORDER && !stance.undecided();
@@ -54,15 +59,16 @@ record RuleReason(RulePolicy policy, Situation situation, Stance stance) impleme
         boolean sameState = without.next().decided() == decision.next().decided();
         String told = policy.mechanism().sentence(policy.close(unmoved, stance).alone());
         if (states ? !sameState : without.kind() != Decision.Kind.ORDER) {
-            return "; the refit at this close moved it, not the market: without the refit "
+            return "; the refit at this close made the difference: without it "
                     + (states ? told : "there would be no order");
         }
         if (states) {
             return decision.change() == Decision.Change.SWITCHED
-                    ? "; the refit at this close did not move it: without the refit " + told
+                    ? "; the refit at this close made no difference: without it " + told
                     : "";
         }
-        return without.target().equals(decision.target())
+        // said only where the figures differ as they are printed
+        return without.target().isEmpty() || mix(without).equals(mix(decision))
                 ? ""
                 : "; without the refit at this close it would be " + mix(without);
     }

@@ -134,6 +134,7 @@ class FormulaTest {
             quoteCharacter = '`',
             value = {
                 "1 - probability.strmy ; 4 ; formulas know no name 'probability.strmy' ; did you mean 'probability.stormy'?",
+                "bars_in_regime % 2 == 1 ? 1 : 0 ; 15 ; formulas know no operator '%' ; known: + - * / <",
                 "1 + foo(2) ; 4 ; formulas know no function 'foo' ; known: min, max, abs, sqrt, exp, log",
                 "1 - ; 3 ; the formula ends too early ; finish it",
                 "1 2 ; 2 ; the formula cannot go on with '2' ; write an operator",

@@ -44,17 +44,15 @@ class RefitReasonTest {
     @Test
     void aSwitchThatOnlyTheRefitMadeSaysSo() {
         assertThat(played(stepAside(), 0.42).because(1))
-                .isEqualTo(
-                        "stormy 0.90 rose above 0.70; it was 0.20 the bar before; the refit at this close moved it, not"
-                                + " the market: without the refit stormy 0.42 lies below 0.70, stays in");
+                .isEqualTo("stormy 0.90 rose above 0.70; it was 0.20 the bar before; the refit at this close made the"
+                        + " difference: without it stormy 0.42 lies below 0.70, stays in");
     }
 
     @Test
     void aSwitchThatTheMarketMadeSaysSo() {
         assertThat(played(stepAside(), 0.75).because(1))
-                .isEqualTo(
-                        "stormy 0.90 rose above 0.70; it was 0.20 the bar before; the refit at this close did not move"
-                                + " it: without the refit stormy 0.75 is above 0.70");
+                .isEqualTo("stormy 0.90 rose above 0.70; it was 0.20 the bar before; the refit at this close made no"
+                        + " difference: without it stormy 0.75 is above 0.70");
     }
 
     @Test
@@ -69,7 +67,7 @@ class RefitReasonTest {
                         .because(1))
                 .isEqualTo(
                         "stormy 0.90 is the most likely regime; the bar before calm was, with 0.80; the refit at this"
-                                + " close moved it, not the market: without the refit calm 0.60 is the most likely regime");
+                                + " close made the difference: without it calm 0.60 is the most likely regime");
     }
 
     @Test
@@ -80,8 +78,15 @@ class RefitReasonTest {
                         "weights averaged by calm 0.10, stormy 0.90; the bar before by calm 0.80, stormy 0.20; without"
                                 + " the refit at this close it would be a 0.60");
         assertThat(played(blend, 0.2).because(1))
-                .endsWith(
-                        "; the refit at this close moved it, not the market: without the refit there would be no order");
+                .endsWith("; the refit at this close made the difference: without it there would be no order");
+    }
+
+    /** 0.1 with the refit, 0.0996 without it: the same two decimals. */
+    @Test
+    void aContinuousRuleIsSilentWhereThePrintedFiguresAreTheSame() {
+        Blend blend = new Blend(ALL_OR_NOTHING, ProbabilityKind.FILTERED, 1, 1);
+        assertThat(played(blend, 0.9004).because(1)).doesNotContain("refit");
+        assertThat(played(blend, 0.89).because(1)).endsWith("; without the refit at this close it would be a 0.11");
     }
 
     private static Rule stepAside() {
