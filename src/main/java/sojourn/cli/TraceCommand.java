@@ -41,7 +41,12 @@ final class TraceCommand implements Callable<Integer> {
     @SuppressWarnings("NullAway.Init") // set by the command line library
     private Path given;
 
-    @Option(names = "--date", paramLabel = "DATE", required = true, description = "The date of a bar, as 2010-03-09.")
+    @Option(
+            names = "--date",
+            paramLabel = "DATE",
+            required = true,
+            converter = IsoDate.class,
+            description = "The date of a bar, as 2010-03-09.")
     @SuppressWarnings("NullAway.Init") // set by the command line library
     private LocalDate date;
 

@@ -9,6 +9,7 @@ import java.util.Optional;
 import java.util.OptionalDouble;
 import sojourn.document.InputException;
 import sojourn.document.Nearest;
+import sojourn.document.Problem;
 import sojourn.document.Problems;
 import sojourn.document.Quoted;
 import sojourn.market.CsvTable.Row;
@@ -37,7 +38,16 @@ public final class HoldingsFile {
      */
     public static Map<String, Double> read(Path file, List<String> assets) {
         Faults faults = new Faults("holdings");
-        Optional<TextFile> text = TextFile.read(Path.of(""), file.toString(), faults);
+        Optional<TextFile> text = TextFile.readFromHere(file, faults);
+        if (text.isPresent() && text.get().text().isBlank()) {
+            faults.add(new Problem(
+                    file.toString(),
+                    0,
+                    0,
+                    "the file is empty",
+                    "give a header line 'asset,units' and a row for each asset that is held, and for cash"));
+            text = Optional.empty();
+        }
         Optional<CsvTable> table =
                 text.flatMap(found -> CsvTable.of(found.file(), found.text(), Optional.empty(), faults));
         Map<String, Double> holdings = new LinkedHashMap<>();
@@ -56,6 +66,12 @@ public final class HoldingsFile {
         return Collections.unmodifiableMap(holdings);
     }
 
+    private static String remedy(String text) {
+        return Decimal.meant(text) == Decimal.Meant.UNKNOWN
+                ? "write a number such as 12.5, or 0 where nothing is held"
+                : Decimal.remedy(text);
+    }
+
     private void take(Row row) {
         String name = row.cell(asset);
         String text = row.cell(units);
@@ -69,7 +85,7 @@ public final class HoldingsFile {
         } else if (read.containsKey(name)) {
             faults.add(row.problem(asset, Quoted.of(name) + " stands twice", "keep one row for each asset"));
         } else if (number.isEmpty() || Double.isInfinite(number.getAsDouble())) {
-            faults.add(row.problem(units, "units '" + text + "' is not a number", Decimal.remedy(text)));
+            faults.add(row.problem(units, "units '" + text + "' is not a number", remedy(text)));
         } else {
             read.put(name, number.getAsDouble());
         }

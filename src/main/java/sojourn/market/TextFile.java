@@ -25,9 +25,22 @@ record TextFile(String file, String text, String sha256) {
 
     /** Reads {@code file}, found from the folder {@code base}; empty, and one fault, if that cannot be done. */
     static Optional<TextFile> read(Path base, String file, Faults faults) {
+        return read(base, file, "a path is taken from the folder of the strategy file", faults);
+    }
+
+    /** The same of a file that the command line names. */
+    static Optional<TextFile> readFromHere(Path file, Faults faults) {
+        return read(
+                Path.of("").toAbsolutePath(),
+                file.toString(),
+                "a path on the command line is taken from the folder that the command runs in",
+                faults);
+    }
+
+    private static Optional<TextFile> read(Path base, String file, String from, Faults faults) {
         try {
             Path path = base.resolve(file);
-            Optional<Problem> obstacle = obstacle(file, path);
+            Optional<Problem> obstacle = obstacle(file, path, from);
             if (obstacle.isPresent()) {
                 faults.add(obstacle.get());
                 return Optional.empty();
@@ -46,14 +59,10 @@ record TextFile(String file, String text, String sha256) {
         return Optional.empty();
     }
 
-    private static Optional<Problem> obstacle(String file, Path path) throws IOException {
+    private static Optional<Problem> obstacle(String file, Path path, String from) throws IOException {
         if (!Files.exists(path)) {
             return Optional.of(new Problem(
-                    file,
-                    0,
-                    0,
-                    "there is no such file",
-                    "it was sought as " + path.normalize() + ": a path is taken from the folder of the strategy file"));
+                    file, 0, 0, "there is no such file", "it was sought as " + path.normalize() + ": " + from));
         }
         if (Files.isDirectory(path)) {
             return Optional.of(new Problem(file, 0, 0, "this is a folder, not a file", "name a file in it"));

@@ -8,6 +8,7 @@ import sojourn.trade.Basket;
 import sojourn.trade.Fill;
 import sojourn.trade.Hindrance;
 import sojourn.trade.Holdings;
+import sojourn.trade.SizeAt;
 
 /** Which orders a decision means, in units at the last closes. */
 final class OrdersText {
@@ -24,7 +25,11 @@ final class OrdersText {
             text.append(order(latest, one));
         }
         text.append(Lines.wrapped(
-                "Estimated at the last closes: quantities and costs are settled at the prices of the fill.", 0));
+                latest.standing().strategy().trade().terms().sizeAt() == SizeAt.DECISION
+                        ? "Quantities are settled at the close of the decision; values and costs are estimated at the last"
+                                + " closes and settled at the prices of the fill."
+                        : "Estimated at the last closes: quantities and costs are settled at the prices of the fill.",
+                0));
         return text.toString();
     }
 

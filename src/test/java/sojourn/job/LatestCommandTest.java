@@ -160,7 +160,59 @@ class LatestCommandTest {
         JobFolder.Ran absent =
                 latest("declared.yaml", "--holdings", folder.path("absent.csv").toString());
         assertThat(absent.code()).isEqualTo(2);
-        assertThat(absent.err()).contains("there is no such file");
+        assertThat(absent.err())
+                .contains("there is no such file")
+                .contains("taken from the folder that the command runs in")
+                .doesNotContain("strategy file");
+        folder.with("mine.csv", "asset,units\nstocks,\n");
+        assertThat(latest("declared.yaml", "--holdings", folder.path("mine.csv").toString())
+                        .err())
+                .contains("mine.csv:2:8: units '' is not a number")
+                .contains("write a number such as 12.5, or 0 where nothing is held");
+        folder.with("mine.csv", "");
+        assertThat(latest("declared.yaml", "--holdings", folder.path("mine.csv").toString())
+                        .err())
+                .contains("mine.csv: the file is empty")
+                .contains("give a header line 'asset,units' and a row for each asset that is held");
+    }
+
+    /** An order of a thousandth of what can be traded on one bar goes on for many bars, and the next part is due at the next one. */
+    @Test
+    void anOrderThatGoesOnFillsAtTheNextBar() {
+        StringBuilder thin = new StringBuilder("date,close,volume\n");
+        PRICES.lines().skip(1).forEach(line -> thin.append(line).append(",100\n"));
+        folder.with("stocks.csv", thin.toString());
+        folder.with(
+                "thin.yaml",
+                StrategyText.named("Thin")
+                        .with("regimes", DECLARED)
+                        .with("trade", "{no-trade-band: 0.9, costs: {impact: {participation-percent: 5}}}"));
+        JsonNode orders = json("thin.yaml").at("/decision/orders");
+        assertThat(orders).isNotEmpty();
+        assertThat(orders.get(0).get("decided_on").asText()).isLessThan("2011-05-06");
+        orders.forEach(one -> assertThat(one.get("bars_to_fill").asInt()).isEqualTo(1));
+        JobFolder.Ran traced =
+                JobFolder.shell("trace", folder.path("thin.yaml").toString(), "--date", "2011-05-06", "--quiet");
+        assertThat(traced.out().replaceAll("\\s+", " "))
+                .contains("still waits decided on ")
+                .contains(" and goes on");
+    }
+
+    @Test
+    void quantitiesSettledAtTheDecisionAreSaidToBe() {
+        folder.with("mine.csv", "asset,units\nstocks,10\ncash,5000\n");
+        folder.with(
+                "decided.yaml",
+                StrategyText.named("Decided").with("regimes", DECLARED).with("trade", "{size-at: decision}"));
+        String holdings = folder.path("mine.csv").toString();
+        String text = latest("decided.yaml", "--holdings", holdings).out().replaceAll("\\s+", " ");
+        assertThat(text)
+                .contains("Quantities are settled at the close of the decision")
+                .doesNotContain("quantities and costs are settled at the prices of the fill")
+                .contains("what is held is away from it: stocks ")
+                .doesNotContain("drifted");
+        assertThat(latest("declared.yaml", "--holdings", holdings).out().replaceAll("\\s+", " "))
+                .contains("quantities and costs are settled at the prices of the fill");
     }
 
     @Test

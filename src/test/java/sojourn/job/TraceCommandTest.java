@@ -126,6 +126,11 @@ class TraceCommandTest {
         assertThat(weekend.err())
                 .contains("2010-12-25 is no bar that all files have")
                 .contains("nearest: 2010-12-24 and 2010-12-27");
+        assertThat(trace("foo").code()).isEqualTo(2);
+        assertThat(trace("foo").err())
+                .contains("--date")
+                .contains("'foo' is no date of the calendar; write dates as yyyy-mm-dd, e.g. 2010-03-09")
+                .doesNotContain("Exception");
         assertThat(trace("2009-01-02").err())
                 .contains("lies before the first bar")
                 .contains("nearest: 2010-01-04");
