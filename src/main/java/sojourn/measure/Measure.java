@@ -95,7 +95,8 @@ public enum Measure {
             "Cost of trading",
             Unit.FRACTION_PER_YEAR,
             Direction.LOWER,
-            "All costs of trading as a fraction of mean wealth per calendar year, sum of costs / mean(W_0..W_n) / years.",
+            "All costs of trading as a fraction of mean wealth per calendar year, sum of costs / mean(W_0..W_n) / years; borrow fee and"
+                    + " margin interest are costs of holding and left out, though growth is after them.",
             PathFacts::costPerYear),
     /** Average exposure. */
     AVERAGE_EXPOSURE(
@@ -130,7 +131,7 @@ public enum Measure {
             "Growth before costs",
             Unit.FRACTION_PER_YEAR,
             Direction.HIGHER,
-            "What growth per year would have been had the same fractions been held and every trade been free: the product of (W_i + cost_i) / W_{i-1},"
+            "What growth per year would have been had the same fractions been held and every trade been free, borrow fee and margin interest paid all the same: the product of (W_i + cost_i) / W_{i-1},"
                     + " raised to 365.25 / calendar days, less 1.",
             PathFacts::growthBeforeCosts),
     /** Ulcer index. */

@@ -173,7 +173,9 @@ public final class ComparisonText {
                 + Lines.wrapped(
                         "exposure: average net weight of all assets but cash; switches: changes of the rule's state or most likely regime, 0"
                                 + " for rules that have neither; turnover: half of all bought and sold, in units of"
-                                + " wealth; before costs: growth of the same holdings, every trade free.",
+                                + " wealth; before costs: growth of the same holdings, every trade free; cost: of trading."
+                                + " Borrow fee and margin interest are costs of holding: both growths are after them, cost"
+                                + " leaves them out.",
                         0);
     }
 
