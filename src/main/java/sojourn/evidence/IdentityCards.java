@@ -108,7 +108,8 @@ final class IdentityCards {
 
     private WeightedMoments nextBar(int k) {
         int[] bars = Arrays.stream(known)
-                .filter(bar -> bar + 1 < subject.timeline().endBar())
+                .filter(bar -> bar + 1 < subject.timeline().endBar()
+                        && subject.returns().has(bar + 1))
                 .toArray();
         double[] weights = Arrays.stream(bars)
                 .mapToDouble(

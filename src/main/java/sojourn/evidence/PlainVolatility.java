@@ -1,7 +1,7 @@
 package sojourn.evidence;
 
+import java.util.Arrays;
 import java.util.OptionalDouble;
-import java.util.stream.IntStream;
 import sojourn.inference.Moments;
 
 /**
@@ -18,23 +18,29 @@ final class PlainVolatility {
 
     /** v_t = 0.94 v_{t-1} + 0.06 r_t^2, begun with the mean of the first 21 squared returns at the 21st of them. */
     static PerBar exponential(PerBar returns) {
-        double[] after = new double[returns.bars()];
+        double[] before = new double[returns.bars()];
         double variance = 0;
-        for (int bar = 1; bar < after.length; bar++) {
-            double square = square(returns, bar);
-            variance = bar <= BARS ? variance + square / BARS : DECAY * variance + (1 - DECAY) * square;
-            after[bar] = variance;
+        int seen = 0;
+        for (int bar = 0; bar < before.length; bar++) {
+            if (returns.has(bar)) {
+                before[bar] = seen >= BARS ? variance : 0;
+                seen++;
+                double square = square(returns, bar);
+                variance = seen <= BARS ? variance + square / BARS : DECAY * variance + (1 - DECAY) * square;
+            }
         }
-        return PerBar.of(after.length, bar -> positive(bar > BARS ? after[bar - 1] : 0));
+        return PerBar.of(before.length, bar -> positive(before[bar]));
     }
 
     /** s^2 + m^2 of the last 21 returns, s with divisor 20. */
     static PerBar rolling(PerBar returns) {
+        int[] present = returns.present();
         return PerBar.of(returns.bars(), bar -> {
-            if (bar <= BARS) {
+            int at = Arrays.binarySearch(present, bar);
+            if (at < BARS) {
                 return OptionalDouble.empty();
             }
-            double[] last = returns.at(IntStream.range(bar - BARS, bar).toArray());
+            double[] last = returns.at(Arrays.copyOfRange(present, at - BARS, at));
             Moments moments = Moments.of(last);
             double deviation = moments.standardDeviation().number().orElseThrow();
             return positive(deviation * deviation + moments.mean() * moments.mean());

@@ -23,7 +23,7 @@ record ReturnForecasts(PerBar secondMoment, PerBar logScore) {
     }
 
     private static OptionalDouble secondMoment(WalkedRegimes subject, int bar) {
-        if (bar == 0 || !subject.known(bar - 1)) {
+        if (!subject.returns().has(bar) || !subject.known(bar - 1)) {
             return OptionalDouble.empty();
         }
         int asset = subject.asset();
@@ -33,7 +33,7 @@ record ReturnForecasts(PerBar secondMoment, PerBar logScore) {
     }
 
     private static OptionalDouble logScore(WalkedRegimes subject, int bar) {
-        if (bar == 0 || !subject.known(bar - 1)) {
+        if (!subject.returns().has(bar) || !subject.known(bar - 1)) {
             return OptionalDouble.empty();
         }
         Reading before = subject.timeline().reading(bar - 1).orElseThrow();

@@ -51,6 +51,9 @@ public final class WalkedRegimes {
             return OptionalDouble.empty();
         }
         Known known = table.knownAt(bar);
+        if (known.carried(asset, bar)) {
+            return OptionalDouble.empty();
+        }
         return OptionalDouble.of(known.close(asset, bar) / known.close(asset, bar - 1) - 1);
     }
 
@@ -127,7 +130,7 @@ public final class WalkedRegimes {
         return observed.stream().anyMatch(one -> one.has(bar));
     }
 
-    /** Simple return of the asset on each bar but the first. */
+    /** Simple return of the asset on each bar but the first and those on which its close is carried. */
     public PerBar returns() {
         return returns;
     }

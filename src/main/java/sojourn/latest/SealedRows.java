@@ -65,8 +65,11 @@ record SealedRows(List<String> columns, Map<String, String> byDate) {
             int asset = i;
             String name = table.assets().get(i);
             Function<Known, QuotedBar> bar = known -> QuotedBar.of(table, asset, known.bar());
-            sources.add(
-                    new Source(name + ".close", bar.andThen(QuotedBar::close).andThen(OptionalDouble::of)));
+            sources.add(new Source(
+                    name + ".close",
+                    known -> own(known, name).isPresent()
+                            ? OptionalDouble.of(bar.apply(known).close())
+                            : OptionalDouble.empty()));
             sources.add(new Source(name + ".open", bar.andThen(QuotedBar::open)));
             sources.add(new Source(name + ".high", bar.andThen(QuotedBar::high)));
             sources.add(new Source(name + ".low", bar.andThen(QuotedBar::low)));
@@ -75,7 +78,7 @@ record SealedRows(List<String> columns, Map<String, String> byDate) {
             sources.add(new Source(name + ".split", bar.andThen(QuotedBar::split)));
         }
         for (String level : table.levels()) {
-            sources.add(new Source(level + ".close", known -> OptionalDouble.of(known.close(level, known.bar()))));
+            sources.add(new Source(level + ".close", known -> own(known, level)));
         }
         sources.add(new Source("cash.rate_a_bar", known -> OptionalDouble.of(known.expectedCashReturn())));
         for (int k = 0; k < regimes.size(); k++) {
@@ -83,6 +86,12 @@ record SealedRows(List<String> columns, Map<String, String> byDate) {
             sources.add(new Source("given." + regimes.get(k), known -> known.given(regime, known.bar())));
         }
         return sources;
+    }
+
+    /** Empty where a close is only carried. */
+    private static OptionalDouble own(Known known, String series) {
+        int bar = known.bar();
+        return known.carried(series, bar) ? OptionalDouble.empty() : OptionalDouble.of(known.close(series, bar));
     }
 
     private static String text(OptionalDouble value) {

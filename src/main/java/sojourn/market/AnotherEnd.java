@@ -115,7 +115,8 @@ public final class AnotherEnd {
                         table.assets(),
                         columns,
                         cash.countedBy(table.cash().dayCount()))
-                .withLevels(levels);
+                .withLevels(levels)
+                .withCarried(table.carried());
         Optional<GivenByBar> given = table.given();
         return given.isEmpty() ? other : other.withGiven(given.get().over(dates.size()));
     }

@@ -2,9 +2,12 @@ package sojourn.market;
 
 import java.time.LocalDate;
 import java.util.ArrayList;
+import java.util.BitSet;
 import java.util.HashSet;
 import java.util.List;
 import java.util.Set;
+import java.util.SortedMap;
+import java.util.TreeMap;
 import java.util.TreeSet;
 import java.util.stream.Collectors;
 import sojourn.document.InputException;
@@ -12,14 +15,15 @@ import sojourn.document.Problem;
 import sojourn.market.PriceTable.Bars;
 
 /**
- * Several series on the dates that all of them have. Whatever is cut off the end of the series, the bars that remain are the
+ * Several series on the dates that all of them have, or on their {@link UnionDays}. Whatever is cut off the end of the series, the bars that remain are the
  * same as without the cut.
  *
  * @param axis the calendar, at least two bars
  * @param bars one entry a series, in their order
+ * @param carried bars on which a series has no price of its own
  * @param findings dates that fell away, and the unfinished last period
  */
-record CommonBars(TimeAxis axis, List<Bars> bars, List<Finding> findings) {
+record CommonBars(TimeAxis axis, List<Bars> bars, Carried carried, List<Finding> findings) {
     CommonBars {
         bars = List.copyOf(bars);
         findings = List.copyOf(findings);
@@ -27,6 +31,9 @@ record CommonBars(TimeAxis axis, List<Bars> bars, List<Finding> findings) {
 
     /** Puts {@code series}, at least one, on the calendar; refuses those with fewer than two bars in common. */
     static CommonBars of(List<PriceSeries> series, Calendar calendar) {
+        if (calendar.days() == Calendar.Days.UNION) {
+            return union(series, calendar);
+        }
         List<LocalDate> days = commonDates(series);
         if (days.size() < 2) {
             throw new InputException(tooFewInCommon(series, days.size()));
@@ -38,7 +45,7 @@ record CommonBars(TimeAxis axis, List<Bars> bars, List<Finding> findings) {
             daily.add(Distributions.at(one.bars(), rows));
         }
         if (calendar.rowLength() == calendar.bars()) {
-            return new CommonBars(TimeAxis.of(calendar.bars(), days), daily, findings);
+            return new CommonBars(TimeAxis.of(calendar.bars(), days), daily, Carried.NOTHING, findings);
         }
         PeriodBars periods = new PeriodBars(days, calendar.bars());
         if (periods.dates().size() < 2) {
@@ -49,6 +56,25 @@ record CommonBars(TimeAxis axis, List<Bars> bars, List<Finding> findings) {
         return new CommonBars(
                 TimeAxis.of(calendar.bars(), periods.dates()),
                 daily.stream().map(periods::of).toList(),
+                Carried.NOTHING,
+                findings);
+    }
+
+    private static CommonBars union(List<PriceSeries> series, Calendar calendar) {
+        UnionDays union = UnionDays.of(series);
+        if (union.days().size() < 2) {
+            throw new InputException(tooFew(series, union.days().size()));
+        }
+        List<Finding> findings = new ArrayList<>(FallenRows.of(series, union.days()));
+        SortedMap<String, BitSet> carried = new TreeMap<>();
+        for (PriceSeries one : series) {
+            union.finding(one).ifPresent(findings::add);
+            carried.put(one.asset(), union.carried(one));
+        }
+        return new CommonBars(
+                TimeAxis.of(calendar.bars(), union.days()),
+                series.stream().map(union::of).toList(),
+                Carried.of(carried),
                 findings);
     }
 

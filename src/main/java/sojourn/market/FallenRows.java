@@ -49,7 +49,7 @@ final class FallenRows {
         int outside = gone.size() - inside.size();
         List<String> parts = new ArrayList<>();
         if (outside > 0) {
-            parts.add(outside + beyond(one) + ", where another series has none");
+            parts.add(outside + beyond(gone) + ", where another series has none");
         }
         if (!inside.isEmpty()) {
             parts.add(inside.size() + " inside the range of all series, " + span(inside) + " (" + lackedBy(inside, one)
@@ -65,9 +65,9 @@ final class FallenRows {
                         : "use series of the same trading days if the rows inside matter"));
     }
 
-    private String beyond(PriceSeries one) {
-        String before = one.first().isBefore(start) ? " before " + start : "";
-        String after = one.last().isAfter(end) ? " after " + end : "";
+    private String beyond(List<LocalDate> gone) {
+        String before = gone.get(0).isBefore(start) ? " before " + start : "";
+        String after = gone.get(gone.size() - 1).isAfter(end) ? " after " + end : "";
         return before + (before.isEmpty() || after.isEmpty() ? "" : " or") + after;
     }
 

@@ -20,6 +20,11 @@ public final class FillPrices {
         return table.quoted(asset).close().at(bar);
     }
 
+    /** Whether an asset has no price of its own on a bar, so that its close is carried: good for marking, not for trading. */
+    public boolean carried(int asset, int bar) {
+        return table.carried().at(table.assets().get(asset), bar);
+    }
+
     /** Open of a bar; empty where the file has none. */
     public OptionalDouble open(int asset, int bar) {
         return table.quoted(asset)

@@ -1,9 +1,11 @@
 package sojourn.market;
 
 import java.time.LocalDate;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import sojourn.numeric.Check;
 
 /**
  * What was known after the close of one bar: dates, prices and cash returns of that bar and of every bar before it. No method
@@ -57,6 +59,35 @@ public final class Known {
     /** Close of an asset, or of a series that is none, such as a rate, on a known bar; refuses an unknown name. */
     public double close(String series, int knownBar) {
         return table.closes(series).at(known(knownBar));
+    }
+
+    /** Whether an asset has no price of its own on a known bar, so that its close is the last one before, carried. */
+    public boolean carried(int asset, int knownBar) {
+        return table.carried().at(table.assets().get(asset), known(knownBar));
+    }
+
+    /** The same of a series by its name, which may be no asset; refuses an unknown name. */
+    public boolean carried(String series, int knownBar) {
+        Check.that(
+                table.assets().contains(series) || table.levels().contains(series),
+                "no series '" + series + "'; known: " + table.assets() + table.levels());
+        return table.carried().at(series, known(knownBar));
+    }
+
+    /**
+     * The last closes of an asset on bars on which it has a price of its own, up to a known bar, in their order: {@code most} of
+     * them, or all while there are fewer.
+     */
+    public double[] ownCloses(int asset, int most, int lastBar) {
+        double[] closes = new double[most];
+        int found = 0;
+        for (int at = known(lastBar); at >= 0 && found < most; at--) {
+            if (!carried(asset, at)) {
+                found++;
+                closes[most - found] = close(asset, at);
+            }
+        }
+        return Arrays.copyOfRange(closes, most - found, most);
     }
 
     /** Closes from the known bar {@code start} to the last known bar, a copy. */

@@ -56,7 +56,8 @@ public record Market(PriceTable table, List<Finding> findings, List<InputFile> f
             }
         }
         PriceTable table = PriceTable.of(common.axis(), assets, bars, cash.on(common.axis()))
-                .withLevels(others);
+                .withLevels(others)
+                .withCarried(common.carried());
         return new Market(table, findings, List.of());
     }
 }

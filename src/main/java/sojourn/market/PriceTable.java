@@ -21,6 +21,7 @@ public final class PriceTable {
     private final CashReturns cash;
     private final Optional<GivenByBar> given;
     private final SortedMap<String, Column> levels;
+    private final Carried carried;
     private final Known[] known;
 
     /**
@@ -147,7 +148,8 @@ public final class PriceTable {
             Bars[] bars,
             CashReturns cash,
             Optional<GivenByBar> given,
-            SortedMap<String, Column> levels) {
+            SortedMap<String, Column> levels,
+            Carried carried) {
         this.axis = axis;
         this.assets = assets;
         this.bars = bars;
@@ -155,6 +157,7 @@ public final class PriceTable {
         this.cash = cash;
         this.given = given;
         this.levels = Collections.unmodifiableSortedMap(new TreeMap<>(levels));
+        this.carried = carried;
         this.known = new Known[axis.size()];
         Arrays.setAll(known, bar -> new Known(this, bar));
     }
@@ -175,19 +178,30 @@ public final class PriceTable {
             throw new IllegalArgumentException("cash has " + cash.size() + " bars, the calendar " + axis.size());
         }
         return new PriceTable(
-                axis, List.copyOf(assets), bars.toArray(Bars[]::new), cash, Optional.empty(), new TreeMap<>());
+                axis,
+                List.copyOf(assets),
+                bars.toArray(Bars[]::new),
+                cash,
+                Optional.empty(),
+                new TreeMap<>(),
+                Carried.NOTHING);
     }
 
     /** The same with probabilities of regimes that were computed elsewhere, those in force at each close. */
     PriceTable withGiven(GivenByBar probabilities) {
         Check.within(probabilities.bars(), size(), size(), "bars of the given probabilities");
-        return new PriceTable(axis, assets, bars, cash, Optional.of(probabilities), levels);
+        return new PriceTable(axis, assets, bars, cash, Optional.of(probabilities), levels, carried);
     }
 
     /** The same with series that are no assets, of any sign: nobody holds them and no return is taken of them. */
     PriceTable withLevels(SortedMap<String, Column> named) {
         named.values().forEach(one -> Check.within(one.size(), size(), size(), "bars of a level"));
-        return new PriceTable(axis, assets, bars, cash, given, named);
+        return new PriceTable(axis, assets, bars, cash, given, named, carried);
+    }
+
+    /** The same where the last closes of some series are carried over bars on which they have none. */
+    PriceTable withCarried(Carried closes) {
+        return new PriceTable(axis, assets, bars, cash, given, levels, closes);
     }
 
     /** Number of bars. */
@@ -249,6 +263,10 @@ public final class PriceTable {
     /** Dividends and splits put back into the prices: what is observed. The same as quoted where there are none. */
     Bars reinvested(int asset) {
         return reinvested[asset];
+    }
+
+    Carried carried() {
+        return carried;
     }
 
     CashReturns cash() {

@@ -1,6 +1,7 @@
 package sojourn.regime;
 
 import java.util.Arrays;
+import java.util.BitSet;
 import java.util.Optional;
 import sojourn.numeric.Check;
 
@@ -8,8 +9,8 @@ import sojourn.numeric.Check;
 public final class FitRequest {
     private final Observations observations;
     private final double[] orderBy;
-    /** Rows before the end whose return to order by is not known. */
-    private final int withheld;
+    /** Rows whose return to order by is not known. */
+    private final BitSet withheld;
 
     private final Companions companions;
     private final Optional<Fit> previous;
@@ -19,7 +20,7 @@ public final class FitRequest {
     private FitRequest(
             Observations observations,
             double[] orderBy,
-            int withheld,
+            BitSet withheld,
             Companions companions,
             Optional<Fit> previous,
             long masterSeed,
@@ -55,7 +56,7 @@ public final class FitRequest {
         for (int row = 0; row < rows; row++) {
             copy[row] = observations.missing(row) ? 0 : Check.finite(orderBy[row], "return to order by in row", row);
         }
-        return new FitRequest(observations, copy, 0, companions, Optional.empty(), masterSeed, date);
+        return new FitRequest(observations, copy, new BitSet(), companions, Optional.empty(), masterSeed, date);
     }
 
     /** The same request, made after {@code accepted}: it gives one more start, and is what the new states are matched to. */
@@ -66,10 +67,9 @@ public final class FitRequest {
         return new FitRequest(observations, orderBy, withheld, companions, Optional.of(accepted), masterSeed, date);
     }
 
-    /** The same without the returns to order by of the last rows, because they are not known yet: those rows order nothing. */
-    public FitRequest withholding(int lastRows) {
-        Check.within(lastRows, 0, Integer.MAX_VALUE, "rows withheld");
-        return new FitRequest(observations, orderBy, lastRows, companions, previous, masterSeed, date);
+    /** The same without the returns to order by of some rows, because they are not known: those rows order nothing. */
+    public FitRequest withholding(BitSet rows) {
+        return new FitRequest(observations, orderBy, (BitSet) rows.clone(), companions, previous, masterSeed, date);
     }
 
     /** The same of the rows from {@code start} on. */
@@ -77,7 +77,7 @@ public final class FitRequest {
         return new FitRequest(
                 observations.range(start, observations.size()),
                 Arrays.copyOfRange(orderBy, start, orderBy.length),
-                withheld,
+                withheld.get(start, orderBy.length),
                 companions.from(start),
                 previous,
                 masterSeed,
@@ -91,7 +91,7 @@ public final class FitRequest {
 
     /** Whether a row says anything of what orders the regimes: its observation is there and its return is known. */
     boolean orders(int row) {
-        return row < orderBy.length - withheld && !observations.missing(row);
+        return !withheld.get(row) && !observations.missing(row);
     }
 
     /** The return to order by in a row that {@link #orders(int) orders}. */

@@ -15,6 +15,7 @@ import sojourn.latest.RegimeNow;
 import sojourn.latest.Standing;
 import sojourn.latest.TippingReturns;
 import sojourn.latest.WeightWords;
+import sojourn.market.Calendar;
 
 /** What a strategy would do now as a terminal shows it, at most 100 columns wide: the caution first, then question by question. */
 public final class LatestText {
@@ -49,7 +50,7 @@ public final class LatestText {
         String name = latest.ready().file().strategy().name();
         StringBuilder head = new StringBuilder("As of the close of ")
                 .append(standing.asOf())
-                .append(standing.table().assets().size() == 1 ? ", the last bar of " : ", the last common bar of ")
+                .append(common(standing) ? ", the last common bar of " : ", the last bar of ")
                 .append(assets)
                 .append(": '")
                 .append(name)
@@ -59,6 +60,13 @@ public final class LatestText {
                     .append(String.join(", ", latest.ahead()))
                     .append('.');
         }
+        for (String asset : standing.table().assets()) {
+            if (standing.known().carried(asset, standing.bar())) {
+                head.append(
+                        " " + asset + " has no price of that day: its last close is carried, and orders that hold or"
+                                + " trade it wait for its next price.");
+            }
+        }
         if (standing.strategy().regimes().fixed().isPresent()) {
             head.append(" Parameters are an external prior: declared, not fitted.");
         }
@@ -66,6 +74,11 @@ public final class LatestText {
             head.append(" Probabilities were computed elsewhere and are not audited for how.");
         }
         text.append(Lines.wrapped(head.toString(), 0)).append('\n');
+    }
+
+    private static boolean common(Standing standing) {
+        return standing.table().assets().size() > 1
+                && standing.strategy().calendar().days() == Calendar.Days.COMMON;
     }
 
     private void regimes() {

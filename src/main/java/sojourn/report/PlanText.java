@@ -8,6 +8,7 @@ import java.util.stream.Stream;
 import sojourn.archive.Caution;
 import sojourn.compare.Prepared;
 import sojourn.document.Problem;
+import sojourn.market.Calendar;
 import sojourn.market.CashSource;
 import sojourn.market.Finding;
 import sojourn.market.InputFile;
@@ -63,7 +64,7 @@ public final class PlanText {
         Known last = table.knownAt(table.size() - 1);
         line(
                 "Bars",
-                table.size() + " common " + table.barLength().word() + " bars of "
+                table.size() + days(strategy.calendar()) + table.barLength().word() + " bars of "
                         + Stream.concat(table.assets().stream(), table.levels().stream())
                                 .collect(Collectors.joining(", "))
                         + ", " + last.date(0) + " to " + last.date() + "; "
@@ -108,6 +109,10 @@ public final class PlanText {
                             + constant.dayCount().word();
         }
         return "earns the last rate dated at or before the close before, for the calendar days between two bars";
+    }
+
+    private static String days(Calendar calendar) {
+        return calendar.days() == Calendar.Days.UNION ? " joined " : " common ";
     }
 
     private static String judged(Strategy strategy) {

@@ -87,6 +87,11 @@ final class Account {
         return wealth;
     }
 
+    /** What an asset trades at on a bar: a fill rule's price, or for an estimate the last close known. */
+    interface Quote {
+        OptionalDouble price(FillPrices prices, int asset, int bar);
+    }
+
     /** What came of trying to fill an order. */
     enum Outcome {
         /** The order is done with. */
@@ -106,10 +111,10 @@ final class Account {
      *
      * @param before what was known at the close before the bar, from which costs that depend on past trading are taken
      */
-    Outcome fill(Order order, int bar, FillRule rule, Known before) {
+    Outcome fill(Order order, int bar, Quote quote, Known before) {
         double wealth = cash;
         for (int i = 0; i < units.length; i++) {
-            OptionalDouble quoted = rule.price(prices, i, bar);
+            OptionalDouble quoted = quote.price(prices, i, bar);
             if (involved(order, i)) {
                 Optional<Hindrance.Kind> missing =
                         quoted.isEmpty() ? Optional.of(Hindrance.Kind.NO_PRICE) : observe(before, i);

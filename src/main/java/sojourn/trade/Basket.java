@@ -2,8 +2,10 @@ package sojourn.trade;
 
 import java.util.List;
 import java.util.Optional;
+import java.util.OptionalDouble;
 import sojourn.allocate.Because;
 import sojourn.allocate.Weights;
+import sojourn.market.FillPrices;
 import sojourn.market.PriceTable;
 
 /**
@@ -41,12 +43,17 @@ public final class Basket {
     public static Optional<Basket> of(
             PriceTable table, int bar, Quantities held, double cash, Order order, Terms terms) {
         Account account = new Account(table, terms).holding(held, cash);
-        Account.Outcome outcome = account.fill(order, bar, new NextClose(0), table.knownAt(bar));
+        Account.Outcome outcome = account.fill(order, bar, Basket::lastClose, table.knownAt(bar));
         if (outcome == Account.Outcome.RUIN || outcome == Account.Outcome.WORTHLESS) {
             return Optional.empty();
         }
         Quantities after = outcome == Account.Outcome.PART ? account.carried().orElseThrow() : account.units();
         return Optional.of(new Basket(account.fills(), account.hindrances(), after, account.cash()));
+    }
+
+    /** Also one that is carried: an estimate has no better. */
+    private static OptionalDouble lastClose(FillPrices prices, int asset, int bar) {
+        return OptionalDouble.of(prices.close(asset, bar));
     }
 
     /** What would be traded on the first bar, leg by leg, with what it costs; no leg where nothing needs to be traded. */

@@ -21,7 +21,7 @@ public record NextClose(int delay) implements FillRule {
 
     @Override
     public OptionalDouble price(FillPrices prices, int asset, int bar) {
-        return OptionalDouble.of(prices.close(asset, bar));
+        return prices.carried(asset, bar) ? OptionalDouble.empty() : OptionalDouble.of(prices.close(asset, bar));
     }
 
     @Override

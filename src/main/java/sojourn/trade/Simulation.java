@@ -196,7 +196,7 @@ public final class Simulation {
                 continue;
             }
             Known before = table.knownAt(terms.fill().costsKnownOn(bar));
-            Account.Outcome outcome = account.fill(order, bar, terms.fill(), before);
+            Account.Outcome outcome = account.fill(order, bar, terms.fill()::price, before);
             if (outcome == Account.Outcome.RUIN) {
                 dropped.add(order);
                 ruin(bar);

@@ -8,15 +8,14 @@ final class Trailing {
     private Trailing() {}
 
     /**
-     * Standard deviation (divisor n - 1) of the last {@code bars} simple returns, per bar, two passes; 0 for a constant price.
+     * Standard deviation (divisor n - 1) of the last {@code bars} simple returns between closes of its own, per bar, two passes; 0 for a constant price.
      * Empty while there are fewer returns. Cost: two reads of the window.
      */
     static OptionalDouble volatility(Known known, int asset, int bars) {
-        int start = known.bar() - bars;
-        if (start < 0) {
+        double[] closes = known.ownCloses(asset, bars + 1, known.bar());
+        if (closes.length <= bars) {
             return OptionalDouble.empty();
         }
-        double[] closes = known.closes(asset, start);
         double sum = 0;
         for (int i = 1; i <= bars; i++) {
             sum += closes[i] / closes[i - 1] - 1;

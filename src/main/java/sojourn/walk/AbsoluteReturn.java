@@ -5,7 +5,7 @@ import sojourn.document.Shape;
 import sojourn.market.Known;
 
 /**
- * |ln(close_t / close_{t-1})|, the size of the log return; none on the first bar, 0 where the close stands still.
+ * |ln(close_t / close_{t-1})|, the size of the log return; none on the first bar and where its close is carried, 0 where the close stands still.
  *
  * @param asset the asset's name
  */
@@ -20,7 +20,7 @@ public record AbsoluteReturn(String asset) implements Observation {
     @Override
     public OptionalDouble at(Known known) {
         int t = known.bar();
-        if (t == 0) {
+        if (t == 0 || known.carried(asset, t)) {
             return OptionalDouble.empty();
         }
         int index = known.assets().indexOf(asset);

@@ -6,7 +6,7 @@ import sojourn.market.Known;
 
 /**
  * close_t - close_{t-1}, in the unit of the series: for what is quoted in points rather than as a price, like rates and spreads;
- * none on the first bar. A series that nothing else uses may be at or below 0.
+ * none on the first bar and where its close is carried. A series that nothing else uses may be at or below 0.
  *
  * @param asset the series' name
  */
@@ -21,7 +21,7 @@ public record Change(String asset) implements Observation {
     @Override
     public OptionalDouble at(Known known) {
         int t = known.bar();
-        if (t == 0) {
+        if (t == 0 || known.carried(asset, t)) {
             return OptionalDouble.empty();
         }
         return OptionalDouble.of(known.close(asset, t) - known.close(asset, t - 1));

@@ -9,8 +9,8 @@ import sojourn.numeric.Check;
 
 /**
  * ln sqrt((r_t^2 + ... + r_{t-n+1}^2) / n) of the log returns r of the last n bars: the logarithm of their root mean square, per
- * bar, not annualised; no mean is taken off. None on the first n bars, which have fewer than n returns before them, and none
- * where all n returns are 0. Successive numbers share n - 1 returns, more dependence than a regime model allows for: the larger
+ * bar, not annualised; no mean is taken off. None on the first n bars, which have fewer than n returns before them, none where its
+ * close is carried, and none where all n returns are 0. Successive numbers share n - 1 returns, more dependence than a regime model allows for: the larger
  * n, the surer of itself it is, and the later it notices.
  *
  * @param asset the asset's name
@@ -39,14 +39,16 @@ public record LogRealisedVolatility(String asset, int bars) implements Observati
 
     @Override
     public OptionalDouble at(Known known) {
-        int t = known.bar();
-        if (t < bars) {
+        if (known.carried(asset, known.bar())) {
             return OptionalDouble.empty();
         }
-        int index = known.assets().indexOf(asset);
+        double[] closes = known.ownCloses(known.assets().indexOf(asset), bars + 1, known.bar());
+        if (closes.length <= bars) {
+            return OptionalDouble.empty();
+        }
         double sum = 0;
-        for (int bar = t - bars + 1; bar <= t; bar++) {
-            double r = StrictMath.log(known.close(index, bar) / known.close(index, bar - 1));
+        for (int i = 1; i <= bars; i++) {
+            double r = StrictMath.log(closes[i] / closes[i - 1]);
             sum += r * r;
         }
         return sum > 0 ? OptionalDouble.of(0.5 * StrictMath.log(sum / bars)) : OptionalDouble.empty();

@@ -2,6 +2,7 @@ package sojourn.walk;
 
 import java.time.LocalDate;
 import java.util.Arrays;
+import java.util.BitSet;
 import java.util.List;
 import java.util.OptionalDouble;
 import java.util.OptionalInt;
@@ -30,6 +31,8 @@ final class ObservationLog {
     private double[] values;
     private boolean[] missing;
     private double[] returns;
+    /** Rows × assets: no price of its own on that bar. */
+    private boolean[] carried;
 
     ObservationLog(List<Observation> observed, List<String> assets) {
         this.observed = List.copyOf(observed);
@@ -38,6 +41,7 @@ final class ObservationLog {
         this.values = new double[64 * observed.size()];
         this.missing = new boolean[64 * observed.size()];
         this.returns = new double[64 * this.assets];
+        this.carried = new boolean[64 * this.assets];
     }
 
     /** As late as the earliest of the observations of it; an asset that is not observed is not late. */
@@ -71,6 +75,7 @@ final class ObservationLog {
         present += any ? 1 : 0;
         for (int asset = 0; asset < assets; asset++) {
             returns[rows * assets + asset] = known.close(asset, known.bar()) / known.close(asset, known.bar() - 1) - 1;
+            carried[rows * assets + asset] = known.carried(asset, known.bar());
         }
         rows++;
     }
@@ -127,17 +132,24 @@ final class ObservationLog {
         return window(rows - 1);
     }
 
-    /** Simple returns of all assets, rows from {@code start} to now; missing where one is not published yet. */
+    /** Simple returns of all assets, rows from {@code start} to now; missing where one is carried or not published yet. */
     Companions companions(int start) {
         boolean[] withheld = new boolean[rows - start];
         int latest = Arrays.stream(late).max().orElse(0);
         Arrays.fill(withheld, StrictMath.max(0, withheld.length - latest), withheld.length, true);
+        for (int cell = start * assets; cell < rows * assets; cell++) {
+            withheld[cell / assets - start] |= carried[cell];
+        }
         return Companions.of(assets, Arrays.copyOfRange(returns, start * assets, rows * assets), withheld);
     }
 
-    /** Of how many rows before now the return of an asset is not published yet. */
-    int withheld(int asset) {
-        return late[asset];
+    /** The rows from {@code start} to now, counted from there, whose return of an asset is carried or not published yet. */
+    BitSet withheld(int asset, int start) {
+        BitSet withheld = new BitSet();
+        for (int row = start; row < rows; row++) {
+            withheld.set(row - start, carried[row * assets + asset] || row >= rows - late[asset]);
+        }
+        return withheld;
     }
 
     /** Simple returns of one asset, rows from {@code start} to now, those not published yet included. */
@@ -162,6 +174,7 @@ final class ObservationLog {
             values = Arrays.copyOf(values, 2 * values.length);
             missing = Arrays.copyOf(missing, 2 * missing.length);
             returns = Arrays.copyOf(returns, 2 * returns.length);
+            carried = Arrays.copyOf(carried, 2 * carried.length);
         }
     }
 }

@@ -5,7 +5,7 @@ import sojourn.document.Shape;
 import sojourn.market.Known;
 
 /**
- * close_t / close_{t-1} - 1; none on the first bar.
+ * close_t / close_{t-1} - 1; none on the first bar and where its close is carried.
  *
  * @param asset the asset's name
  */
@@ -18,7 +18,7 @@ public record SimpleReturn(String asset) implements Observation {
     @Override
     public OptionalDouble at(Known known) {
         int t = known.bar();
-        if (t == 0) {
+        if (t == 0 || known.carried(asset, t)) {
             return OptionalDouble.empty();
         }
         int index = known.assets().indexOf(asset);

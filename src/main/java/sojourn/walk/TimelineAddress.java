@@ -5,6 +5,8 @@ import java.security.MessageDigest;
 import java.security.NoSuchAlgorithmException;
 import java.util.HexFormat;
 import java.util.List;
+import java.util.Optional;
+import java.util.stream.Stream;
 import sojourn.market.Known;
 import sojourn.market.PriceTable;
 
@@ -58,9 +60,24 @@ public final class TimelineAddress {
             }
             row.putLong(Double.doubleToLongBits(known.expectedCashReturn()));
             digest.update(link);
+            carried(known, table).ifPresent(digest::update);
             link = digest.digest(row.array());
         }
         return HexFormat.of().formatHex(link).substring(0, SHOWN_DIGITS);
+    }
+
+    /** A byte a series, 1 where its close is carried; empty on bars where none is, so that one calendar has one address. */
+    private static Optional<byte[]> carried(Known known, PriceTable table) {
+        byte[] carried = new byte[table.assets().size() + table.levels().size()];
+        int series = 0;
+        boolean any = false;
+        for (String name :
+                Stream.concat(table.assets().stream(), table.levels().stream()).toList()) {
+            boolean here = known.carried(name, known.bar());
+            carried[series++] = (byte) (here ? 1 : 0);
+            any |= here;
+        }
+        return any ? Optional.of(carried) : Optional.empty();
     }
 
     private static MessageDigest sha256() {

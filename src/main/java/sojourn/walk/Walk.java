@@ -137,7 +137,7 @@ public final class Walk {
                         log.companions(start),
                         refit.seed(),
                         known.date().toString())
-                .withholding(log.withheld(orderAsset));
+                .withholding(log.withheld(orderAsset, start));
         List<CandidateFit> made = candidates.fit(cold, runner);
         OptionalInt choice = Candidates.choose(made);
         FitRecord record = record(known, known.date(log.bar(start)), made, choice); // before the filters begin afresh

@@ -19,7 +19,15 @@ class PrefixTest {
     @ParameterizedTest
     @EnumSource(BarLength.class)
     void everyCutGivesAPrefixToTheBit(BarLength length) {
-        Calendar calendar = new Calendar(length, Calendar.Days.COMMON, Calendar.Rows.DAYS);
+        everyCutGivesAPrefix(new Calendar(length, Calendar.Days.COMMON, Calendar.Rows.DAYS));
+    }
+
+    @Test
+    void everyCutOfAUnionGivesAPrefixToTheBit() {
+        everyCutGivesAPrefix(new Calendar(BarLength.DAILY, Calendar.Days.UNION, Calendar.Rows.DAYS));
+    }
+
+    private static void everyCutGivesAPrefix(Calendar calendar) {
         List<List<Long>> whole = bits(Market.of(List.of(STOCKS, BONDS), calendar, rates(STOCKS.last())));
         int tables = 0;
         int bars = 0;
@@ -99,6 +107,7 @@ class PrefixTest {
             row.add(Double.doubleToRawLongBits(table.fillPrices().cashReturn(bar)));
             for (int asset = 0; asset < 2; asset++) {
                 row.add(Double.doubleToRawLongBits(known.close(asset, bar)));
+                row.add(known.carried(asset, bar) ? 1L : 0L);
                 row.add(bits(known.open(asset, bar)));
                 row.add(bits(known.high(asset, bar)));
                 row.add(bits(known.low(asset, bar)));
