@@ -7,11 +7,12 @@ import java.nio.file.Path;
 import java.time.LocalDate;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.stream.IntStream;
 import org.junit.jupiter.api.io.TempDir;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.ValueSource;
 
-/** On files cut at t {@code latest} says what a comparison of the whole files decided at t: target, order and reason. */
+/** On files cut at t {@code latest} says what a comparison of the whole files decided at t: target, order, reason, and which orders wait. */
 class LatestAgainstComparisonTest {
     private static final String PRICES = DrawnPrices.csv(5, 420, LocalDate.of(2010, 1, 4));
 
@@ -31,13 +32,19 @@ class LatestAgainstComparisonTest {
                 .with("stocks.csv", PRICES)
                 .with(
                         "rule.yaml",
-                        StrategyText.named("Rule").with("allocate", rule).with("trade", "{no-trade-band: 0.03}"));
+                        StrategyText.named("Rule")
+                                .with("allocate", rule)
+                                .with("trade", "{no-trade-band: 0.03, delay: 2}"));
         folder.compare("all", "rule.yaml");
         WrittenTable path = folder.table("all/rule/path.csv");
         WrittenTable trades = folder.table("all/rule/trades.csv");
         List<String> decided = trades.texts("decided_on");
         List<Integer> rows = new ArrayList<>(List.of(0, 1, 2, 50, 99, 100, 101, 150, 199, 200));
-        decided.stream().limit(12).forEach(date -> rows.add(path.row("date", date)));
+        decided.stream().limit(12).forEach(date -> {
+            rows.add(path.row("date", date));
+            rows.add(path.row("date", date) + 1);
+        });
+        int waited = 0;
         for (int row : rows) {
             String date = path.text(row, "date");
             folder.with("stocks.csv", upTo(date));
@@ -54,7 +61,31 @@ class LatestAgainstComparisonTest {
             if (decided.contains(date)) {
                 assertThat(decision.get("because").asText()).isEqualTo(trades.text(decided.indexOf(date), "because"));
             }
+            List<String> waiting = waiting(trades, date);
+            JsonNode orders = decision.get("orders");
+            assertThat(orders).as("orders waiting at %s", date).hasSize(waiting.size());
+            for (int i = 0; i < waiting.size(); i++) {
+                JsonNode order = orders.get(i);
+                int at = path.row("date", waiting.get(i));
+                assertThat(order.get("decided_on").asText()).isEqualTo(waiting.get(i));
+                assertThat(order.get("target").get("stocks").asDouble()).isEqualTo(path.number(at, "target.stocks"));
+                assertThat(order.get("bars_to_fill").asInt()).isEqualTo(at + 3 - row); // next close, and two bars more
+                waited += waiting.get(i).equals(date) ? 0 : 1;
+            }
         }
+        assertThat(waited).as("orders found waiting from earlier closes").isPositive();
+    }
+
+    /** When the orders were decided that, by the whole, were decided up to {@code date} and filled after it. */
+    private static List<String> waiting(WrittenTable trades, String date) {
+        List<String> filled = trades.texts("filled_on");
+        List<String> decided = trades.texts("decided_on");
+        return IntStream.range(0, decided.size())
+                .filter(i ->
+                        decided.get(i).compareTo(date) <= 0 && filled.get(i).compareTo(date) > 0)
+                .mapToObj(decided::get)
+                .distinct()
+                .toList();
     }
 
     private static String upTo(String date) {

@@ -134,6 +134,37 @@ class TippingReturnsTest {
         }
     }
 
+    /**
+     * The same far finer than any grid, by Bayes' rule at each return: with declared parameters the posterior of stormy needs what is
+     * predicted and two normal densities alone, and the rule, which is in, leaves from 0.6 on.
+     */
+    @Test
+    void theIntervalsAreThoseOfBayesRuleAtEveryHundredthOfAThousandth() {
+        prepare(350, regimes("declared"), SWITCH);
+        JsonNode before = latest();
+        assertThat(before.at("/decision/because").asText()).contains("stays in");
+        double calm = before.at("/regime/predicted/calm").asDouble();
+        double stormy = before.at("/regime/predicted/stormy").asDouble();
+        JsonNode unchanged = before.at("/tipping/stocks/unchanged");
+        assertThat(unchanged).isNotEmpty();
+        int tipping = 0;
+        for (int i = -24_999; i < 25_000; i++) {
+            double r = i * 1e-5 + 3e-7; // beside round numbers, where a search may have looked
+            double x = Math.log(1 + r);
+            double weightCalm = calm * Math.exp(-x * x / (2 * 0.006 * 0.006)) / 0.006;
+            double weightStormy = stormy * Math.exp(-x * x / (2 * 0.022 * 0.022)) / 0.022;
+            boolean stays = false;
+            for (JsonNode interval : unchanged) {
+                stays |= interval.get("from").asDouble() < r
+                        && r < interval.get("to").asDouble();
+            }
+            boolean tips = weightStormy / (weightCalm + weightStormy) >= 0.6;
+            tipping += tips ? 1 : 0;
+            assertThat(stays).as("at %s", r).isEqualTo(!tips);
+        }
+        assertThat(tipping).as("returns that tip").isBetween(1, 49_998);
+    }
+
     @Test
     void ofTwoSeriesOneMovesAndTheOtherReturnsItsForecast() {
         String stocks = DrawnPrices.csv(3, 350, START);
