@@ -54,6 +54,7 @@ public final class Warnings {
                             one);
                 }
                 one.file().strategy().neverHolds().ifPresent(why -> told(shared, why, one));
+                one.file().strategy().paysForEveryDrift().ifPresent(why -> told(shared, why, one));
                 if (one.file().strategy().hypothesis().isEmpty()) {
                     told(
                             shared,

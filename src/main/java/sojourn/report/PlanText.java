@@ -97,6 +97,7 @@ public final class PlanText {
             found.add(finding.toString());
         }
         ready.file().strategy().neverHolds().ifPresent(found::add);
+        ready.file().strategy().paysForEveryDrift().ifPresent(found::add);
         found.addAll(GaugeText.findings(ready.file().strategy().regimes()));
         return found;
     }

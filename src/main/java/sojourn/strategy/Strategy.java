@@ -150,6 +150,16 @@ public record Strategy(
                 : Optional.empty();
     }
 
+    /** Said if every drift of a weight will be traded, however small, at a fee that does not get smaller with it. */
+    public Optional<String> paysForEveryDrift() {
+        boolean fee = trade.costs().fixedFee() > 0 || trade.costs().minimumFee() > 0;
+        return fee && trade.noTradeBand() == 0
+                ? Optional.of(
+                        "every weight that has drifted from its target is traded, however little, and pays its fee each time:"
+                                + " costs have a fixed or a minimum fee and no-trade-band is 0; set a no-trade-band")
+                : Optional.empty();
+    }
+
     private Set<String> assetsWithReturns() {
         Set<String> named = new LinkedHashSet<>();
         for (Observation observation : regimes.observe()) {
