@@ -20,6 +20,7 @@ final class Account {
     private final Accruals accruals;
     private final Tariff tariff;
     private final Rebalance rebalance;
+    private final Restraint restraint;
     private final double[] units;
     private final double[] price;
     private final double[] value;
@@ -48,6 +49,7 @@ final class Account {
         this.tariff = Tariff.of(costs, assets);
         this.rebalance = new Rebalance(tariff);
         this.lots = terms.lots().of(table.assets());
+        this.restraint = new Restraint(tariff, lots);
         this.whole = Arrays.stream(lots).anyMatch(lot -> lot > 0);
     }
 
@@ -219,33 +221,77 @@ final class Account {
         cash = left;
     }
 
-    /** Trades towards known quantities, as far as each leg may on one bar; cash takes what it comes to. */
+    /**
+     * Trades towards known quantities, as far as each leg may on one bar; cash takes what it comes to. An order that takes several
+     * bars is held to its weights on each of them.
+     */
     private Outcome exchange(Order order, int bar, double before, Quantities wanted) {
-        double after = before;
-        boolean done = true;
+        boolean cut = false;
         for (int i = 0; i < units.length; i++) {
             double all = wanted.at(i) - units[i];
             double most = tariff.within(i, all * price[i]);
-            boolean cut = most != all * price[i];
-            bought[i] = cut ? Lots.whole(lots[i], most / price[i]) : all;
-            if (Math.abs(bought[i] * price[i]) < Rebalance.TINY * before) {
-                bought[i] = 0;
-            } else {
-                after -= tariff.cost(i, bought[i] * price[i]);
-            }
-            if (cut) {
-                done = false;
-                Hindrance.Kind kind =
-                        bought[i] == 0 ? Hindrance.Kind.LOT_BEYOND_PARTICIPATION : Hindrance.Kind.PARTICIPATION;
-                hindrances.add(new Hindrance(bar, order.decidedOn(), i, kind));
-            }
+            boolean here = most != all * price[i];
+            bought[i] = here ? Lots.whole(lots[i], most / price[i]) : all;
+            cut |= here;
+        }
+        dropTiny(before);
+        restraint.none();
+        if (cut || order.stage() == Order.Stage.REST) {
+            restraint.hold(before, cash, value, price, order.target(), bought);
+            dropTiny(before);
+        }
+        double after = before;
+        for (int i = 0; i < units.length; i++) {
+            after -= bought[i] == 0 ? 0 : tariff.cost(i, bought[i] * price[i]);
         }
         if (!(after > 0)) {
             return Outcome.RUIN;
         }
+        carried = rest(order, bar, before, wanted);
         book(order, bar, before, after);
-        carried = done ? Optional.empty() : Optional.of(wanted);
-        return done ? Outcome.FILLED : Outcome.PART;
+        return carried.isEmpty() ? Outcome.FILLED : Outcome.PART;
+    }
+
+    private void dropTiny(double before) {
+        for (int i = 0; i < units.length; i++) {
+            if (Math.abs(bought[i] * price[i]) < Rebalance.TINY * before) {
+                bought[i] = 0;
+            }
+        }
+    }
+
+    /** What is left after this bar's part; a leg that was only held back waits for what is still to be reduced, and else is done. */
+    private Optional<Quantities> rest(Order order, int bar, double before, Quantities wanted) {
+        boolean reducing = false;
+        for (int i = 0; i < units.length; i++) {
+            double left = (wanted.at(i) - units[i] - bought[i]) * price[i];
+            reducing |= Math.abs(left) >= Rebalance.TINY * before && !restraint.reached(i) && reduces(wanted, i);
+        }
+        double[] end = new double[units.length];
+        boolean done = true;
+        for (int i = 0; i < end.length; i++) {
+            double left = (wanted.at(i) - units[i] - bought[i]) * price[i];
+            boolean open = Math.abs(left) >= Rebalance.TINY * before
+                    && !restraint.reached(i)
+                    && (reducing || !restraint.shared());
+            end[i] = open ? wanted.at(i) : units[i] + bought[i];
+            if (open) {
+                done = false;
+                hindrances.add(new Hindrance(bar, order.decidedOn(), i, why(i, wanted)));
+            }
+        }
+        return done ? Optional.empty() : Optional.of(Quantities.of(end));
+    }
+
+    private boolean reduces(Quantities wanted, int asset) {
+        return Math.abs(wanted.at(asset)) < Math.abs(units[asset]);
+    }
+
+    private Hindrance.Kind why(int asset, Quantities wanted) {
+        if (restraint.shared() && !reduces(wanted, asset)) {
+            return Hindrance.Kind.HELD_BACK;
+        }
+        return bought[asset] == 0 ? Hindrance.Kind.LOT_BEYOND_PARTICIPATION : Hindrance.Kind.PARTICIPATION;
     }
 
     private void book(Order order, int bar, double before, double after) {

@@ -12,7 +12,7 @@ public record Hindrance(int bar, int decidedOn, int asset, Kind kind) {
     public boolean waits() {
         return switch (kind) {
             case NO_PRICE, NO_VOLUME, NO_VOLATILITY, NO_WEALTH -> true;
-            case PARTICIPATION, LOT, LOT_BEYOND_PARTICIPATION -> false;
+            case PARTICIPATION, LOT, LOT_BEYOND_PARTICIPATION, HELD_BACK -> false;
         };
     }
 
@@ -31,6 +31,8 @@ public record Hindrance(int bar, int decidedOn, int asset, Kind kind) {
         /** One lot is worth more than may be traded on one bar: the leg waits for a bar on which more is. */
         LOT_BEYOND_PARTICIPATION(
                 "was not traded, because one lot is more than the participation allowed on one bar; it waits for a bar that allows it"),
+        /** What is bought waits for what is still to be sold, so that both together stay within the order's weights. */
+        HELD_BACK("was held back until what is still to be sold leaves room for it"),
         /** Nothing is left at the prices of the fill: the whole order waits, and the close decides whether it is ruin. */
         NO_WEALTH("could not be traded, because wealth was gone at the prices of the fill, so the order waited");
 

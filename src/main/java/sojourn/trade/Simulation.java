@@ -204,7 +204,7 @@ public final class Simulation {
                 pending.addFirst(order);
                 return;
             } else if (outcome == Account.Outcome.PART) {
-                pending.addFirst(order.toHold(account.carried().orElseThrow()));
+                pending.addFirst(order.restToHold(account.carried().orElseThrow()));
                 return;
             }
         }

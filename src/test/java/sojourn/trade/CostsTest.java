@@ -10,6 +10,8 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import org.junit.jupiter.api.Test;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.ValueSource;
 import sojourn.CheckValues;
 import sojourn.GivenPrices;
 import sojourn.GivenProbabilities;
@@ -18,6 +20,9 @@ import sojourn.allocate.Weights;
 /** Each kind of cost, by itself, against what can be worked out by hand. */
 class CostsTest {
     private static final double CAPITAL = 1_000_000;
+    /** Units are settled at the first part; by the last they may be worth less, as random walks of 1 % a bar are after some ten bars. */
+    private static final double MOSTLY = 0.85;
+
     private static final double ROUNDING = 1e-12 * CAPITAL;
 
     @Test
@@ -101,7 +106,7 @@ class CostsTest {
         assertThat(track.units(11, 0)).isEqualTo(450);
     }
 
-    /** A tenth of 100 000 a bar is 100 units, and one lot 150: nothing may be traded until bar 6, when twice as much was traded on bars 4 and 5. */
+    /** A tenth of 100 000 a bar is 100 units, and one lot 150: nothing may be traded until the mean of two bars before is half as much again. */
     @Test
     void aLotThatIsMoreThanOneBarAllowsWaitsForABarThatAllowsIt() {
         double[] volumes = new double[12];
@@ -121,6 +126,49 @@ class CostsTest {
                         new Hindrance(4, 2, 0, Hindrance.Kind.LOT_BEYOND_PARTICIPATION));
         assertThat(track.fills()).extracting(Fill::filledOn).containsExactly(5);
         assertThat(track.fills()).extracting(Fill::units).containsExactly(150.0);
+    }
+
+    /** Costs of later parts and prices that move meanwhile must not take a long-only order without leverage into debt. */
+    @ParameterizedTest
+    @ValueSource(longs = {1, 2, 3, 4, 5, 6})
+    void anOrderOfSeveralBarsStaysWithinItsWeightsOnEachOfThem(long seed) {
+        Costs costs = new Costs(100, 10).withImpact(new Impact(0.5, 4, 4, Optional.of(5.0)));
+        GivenPrices prices = GivenPrices.random(seed, 160, 1).withRandomVolumes(seed, 10_000);
+        for (Lots lots : List.of(Lots.FRACTIONS, new Lots(10, Map.of()))) {
+            Track track = Simulation.run(
+                            prices.table(),
+                            GivenProbabilities.stormy(new double[160]),
+                            Policies.at(Map.of(5, Weights.of(1))),
+                            new Terms(new NextClose(0), costs, CAPITAL, SizeAt.FILL, lots),
+                            0)
+                    .orElseThrow();
+            assertThat(track.fills()).hasSizeGreaterThan(10);
+            for (int bar = 5; bar < 160; bar++) {
+                assertThat(track.cash(bar)).as("%s, bar %d", lots, bar).isGreaterThanOrEqualTo(-ROUNDING);
+            }
+            assertThat(track.unfilled()).isEmpty();
+            assertThat(track.weight(159, 0)).isBetween(MOSTLY, 1 + 1e-12);
+        }
+    }
+
+    /** What is bought waits for what can only be sold over many bars. */
+    @ParameterizedTest
+    @ValueSource(longs = {1, 2, 3, 4, 5, 6})
+    void aSlowSaleHoldsBackWhatIsBoughtForIt(long seed) {
+        Costs costs = new Costs(20, 10).withImpact(new Impact(0.1, 4, 4, Optional.of(5.0)));
+        double[][] volumes = new double[2][160];
+        Arrays.fill(volumes[0], 20_000);
+        Arrays.fill(volumes[1], 20_000_000);
+        GivenPrices prices = GivenPrices.random(seed, 160, 2).withVolumes(volumes);
+        Track track = run(prices, Map.of(5, Weights.of(1, 0), 80, Weights.of(0, 1)), costs);
+        for (int bar = 5; bar < 160; bar++) {
+            assertThat(track.cash(bar)).as("bar %d", bar).isGreaterThanOrEqualTo(-ROUNDING);
+        }
+        assertThat(track.fills()).filteredOn(fill -> fill.asset() == 1).hasSizeGreaterThan(5);
+        assertThat(track.hindrances()).extracting(Hindrance::kind).contains(Hindrance.Kind.HELD_BACK);
+        assertThat(track.unfilled()).isEmpty();
+        assertThat(track.units(159, 0)).isZero();
+        assertThat(track.weight(159, 1)).isBetween(MOSTLY, 1 + 1e-12);
     }
 
     @Test
