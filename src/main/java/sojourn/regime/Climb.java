@@ -3,8 +3,9 @@ package sojourn.regime;
 import java.util.Optional;
 
 /**
- * Climbs to a maximum of the likelihood from one start: ten EM steps and on until one gains less than a nat, of three and more states
- * twenty and a tenth of a nat, so that it is clear which top it is going for; the initial distribution of a chain moved to its best corner; then {@link Ascent}. Where that finds no way up,
+ * Climbs to a maximum of the likelihood from one start: of two states five EM steps, and on while one gains more than a nat and less than
+ * half of what the step before gained; of three and more states twenty, and on while one gains more than a tenth of a nat and less than the step before; from the summit
+ * of an earlier window two instead of five or twenty. So it is clear which top it is going for. Then the initial distribution of a chain moved to its best corner; then {@link Ascent}. Where that finds no way up,
  * EM goes on, sped up by SQUAREM, scheme S3 (Varadhan and Roland 2008, Scand. J. Statistics 35, 335-353): an extrapolated point is kept
  * only if it is at least as likely as the plain step before it; otherwise the stride is halved, in the end to the plain second step.
  * A climb that comes near a {@link Landmark} ends there. With a prior it is the log-likelihood plus the log density of the prior that is

@@ -6,8 +6,9 @@ import java.util.List;
 
 /**
  * A summit that is known before other climbs begin: where the search from the previous fit ended. A climb that comes near it would end
- * there too, and need not go on. Near is what lies within a twentieth of a nat, or whence one Newton step by the summit's own curvature leads
- * within a quarter of a nat, gaining about as much as the summit lies above, at most five nats. Distances are half squares of differences
+ * there too, and need not go on. Near is what lies within a twentieth of a nat; of a chain of two states also that whence one Newton step by the
+ * summit's own curvature leads within a quarter of a nat, gaining about as much as the summit lies above, at most five nats. Of mixtures and of
+ * more states the tops lie too close together for a step to tell them apart. Distances are half squares of differences
  * in {@link Coordinates}, measured by the information that complete data would hold, so that the true loss of likelihood is smaller still.
  */
 final class Landmark {
@@ -56,6 +57,9 @@ final class Landmark {
         if (below < NEAR && distance(there) < NEAR) {
             return true;
         }
+        if (!believesSteps()) {
+            return false;
+        }
         double[] gradient = coordinates.gradient(there, turned, sums.ordered(stateFor));
         double[] step = curvature.step(gradient);
         double promise = 0.5 * Curvature.dot(gradient, step);
@@ -63,6 +67,11 @@ final class Landmark {
             there[i] += step[i];
         }
         return StrictMath.abs(promise - below) < PART * below + NATS && distance(there) < NEAR_BY_A_STEP;
+    }
+
+    private boolean believesSteps() {
+        return summit.parameters().kind() == ModelKind.HIDDEN_MARKOV
+                && summit.parameters().states() == 2;
     }
 
     /** The state of {@code p} that stands for each of the summit's. */

@@ -3,6 +3,7 @@ package sojourn.regime;
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.within;
 
+import java.util.Arrays;
 import java.util.Optional;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
@@ -128,6 +129,26 @@ class ClimbTest {
             saved += alone.evaluations() - led.evaluations();
         }
         assertThat(saved).isPositive();
+    }
+
+    /**
+     * A mixture of three has tops close by: a Newton step by the previous fit's curvature once led five of five starts away from a better one, which
+     * starts without a previous fit reach. Expected: the invariant that knowing more finds no less.
+     */
+    @Test
+    void aPreviousFitHidesNoBetterMaximumOfAMixture() {
+        double[] all = OpenData.column(DAX, "log_return");
+        FitSettings settings = new FitSettings(ModelKind.MIXTURE, 3, EmissionFamily.NORMAL, 5);
+        Fit before = Fitter.fit(settings, requestOf(all, 1104));
+        Fit without = Fitter.fit(settings, requestOf(all, 1167));
+        Fit with = Fitter.fit(settings, requestOf(all, 1167).after(before));
+        assertThat(with.logLikelihood()).isGreaterThan(without.logLikelihood() - AGREEMENT);
+        assertThat(with.startsAgreeing()).isLessThan(with.starts());
+    }
+
+    private static FitRequest requestOf(double[] all, int rows) {
+        double[] x = Arrays.copyOf(all, rows);
+        return FitRequest.of(Observations.univariate(x), x, Companions.of(1, x), 20260101L, "d" + rows);
     }
 
     /** A parabola is believed near its top only, states in any order. */
