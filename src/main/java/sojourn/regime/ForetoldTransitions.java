@@ -1,5 +1,7 @@
 package sojourn.regime;
 
+import java.util.ArrayList;
+import java.util.List;
 import sojourn.numeric.CompensatedSum;
 
 /**
@@ -10,11 +12,14 @@ import sojourn.numeric.CompensatedSum;
  * counted changes. A state without weight is taken to stay. Our own choice, derived here from the tower rule; no source.
  *
  * <p>The minimum is found by moving probability within a row between two states at a time, each time by the exact best amount, until
- * nothing moves: the objective is convex and no bound ties two rows together.
+ * nothing moves: the objective is convex and no bound ties two rows together. Where probabilities hardly vary, or always vary together, many matrices foretell
+ * about as well, and the search stays near where it begins, at regimes that last for ever: an event, as is a search that ran out of sweeps.
  */
 final class ForetoldTransitions {
     private static final int MOST_SWEEPS = 100_000;
     private static final double NOTHING_MOVES = 1e-13;
+    /** Part of a state's mean square probability that the other states' do not tell: a variation of one in a hundred. Our own choice, no source. */
+    private static final double HARDLY = 1e-4;
 
     private final int states;
     /** Sums of w_t(i) w_t(j), and of w_t(i) w_{t+1}(j), over all rows but the last; row-major. */
@@ -22,6 +27,8 @@ final class ForetoldTransitions {
 
     private final double[] next;
     private final double[] transitions;
+    /** The most that the last sweep moved. */
+    private double moved = Double.POSITIVE_INFINITY;
 
     private ForetoldTransitions(RowWeights weights) {
         this.states = weights.states();
@@ -35,12 +42,56 @@ final class ForetoldTransitions {
 
     /** Row-major, each row summing to 1. */
     static double[] of(RowWeights weights) {
+        return search(weights, MOST_SWEEPS).matrix();
+    }
+
+    /** The search, ended. */
+    static ForetoldTransitions search(RowWeights weights) {
+        return search(weights, MOST_SWEEPS);
+    }
+
+    /** The search, ended after at most so many sweeps. */
+    static ForetoldTransitions search(RowWeights weights, int mostSweeps) {
         ForetoldTransitions search = new ForetoldTransitions(weights);
-        double moved = Double.POSITIVE_INFINITY;
-        for (int sweep = 0; sweep < MOST_SWEEPS && moved > NOTHING_MOVES; sweep++) {
-            moved = search.sweep();
+        for (int sweep = 0; sweep < mostSweeps && search.moved > NOTHING_MOVES; sweep++) {
+            search.moved = search.sweep();
         }
-        return search.transitions;
+        return search;
+    }
+
+    /** Row-major, each row summing to 1. */
+    double[] matrix() {
+        return transitions.clone();
+    }
+
+    /** What is amiss with it, if anything. */
+    List<String> events() {
+        List<String> events = new ArrayList<>();
+        if (undetermined()) {
+            events.add("transitions-undetermined");
+        }
+        if (moved > NOTHING_MOVES) {
+            events.add("transitions-unfinished");
+        }
+        return events;
+    }
+
+    /** Whether a Cholesky pivot of the sums of w_t(i) w_t(j), states without weight left out, is hardly anything of its diagonal. */
+    private boolean undetermined() {
+        double[] left = now.clone();
+        boolean hardly = false;
+        for (int k = 0; k < states; k++) {
+            double own = now[k * states + k];
+            double pivot = left[k * states + k];
+            hardly |= own > 0 && pivot <= HARDLY * own;
+            for (int i = k + 1; pivot > 0 && i < states; i++) {
+                double part = left[i * states + k] / pivot;
+                for (int j = k + 1; j < states; j++) {
+                    left[i * states + j] -= part * left[k * states + j];
+                }
+            }
+        }
+        return hardly;
     }
 
     private static double[] products(RowWeights weights, int later) {

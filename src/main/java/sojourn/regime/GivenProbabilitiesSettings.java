@@ -1,5 +1,7 @@
 package sojourn.regime;
 
+import java.util.ArrayList;
+import java.util.List;
 import java.util.Optional;
 import sojourn.numeric.Check;
 
@@ -29,15 +31,17 @@ public record GivenProbabilitiesSettings(int states) implements GaugeSettings {
             return Fit.failed(refusal.get(), Fit.Search.NONE, x.present());
         }
         RowWeights weights = RowWeights.of(states, rows(x));
-        Described described =
-                Described.of(GivenProbabilities.of(states, ForetoldTransitions.of(weights)), weights, request);
+        ForetoldTransitions transitions = ForetoldTransitions.search(weights);
+        Described described = Described.of(GivenProbabilities.of(states, transitions.matrix()), weights, request);
+        List<String> events = new ArrayList<>(transitions.events());
+        events.addAll(StateEvents.ofGauge(described, Optional.empty()));
         return Fit.of(
                 Outcome.GIVEN,
                 "the probabilities were given, computed elsewhere",
                 Fit.Search.NONE,
                 x.present(),
                 described,
-                StateEvents.ofGauge(described, Optional.empty()));
+                events);
     }
 
     /** The probabilities at each row, those of the row before where there are none. */

@@ -1,6 +1,7 @@
 package sojourn.regime;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import java.util.function.Supplier;
@@ -21,6 +22,8 @@ public record JumpSettings(int states, double penalty, int starts) implements Ga
 
     private static final String UNSETTLED =
             "the path was still changing after " + JumpDescent.MOST_ROUNDS + " rounds; the regimes are usable";
+
+    private static final String TOO_DEAR = "; the penalty keeps the path in one regime, lower it";
 
     /** Refuses what cannot be fitted whatever the data. */
     public JumpSettings {
@@ -71,7 +74,7 @@ public record JumpSettings(int states, double penalty, int starts) implements Ga
         Described described = Described.of(gauge, weights.ordered(order), request);
         Optional<Matching> matching = previous.map(before -> matching(before, gauge));
         return best.settled()
-                ? PlainFit.of(described, search, x.dimension(), matching)
+                ? PlainFit.of(described, search, x.dimension(), matching, neverChanges(best) ? TOO_DEAR : "")
                 : PlainFit.unfinished(described, search, x.dimension(), matching, UNSETTLED);
     }
 
@@ -85,6 +88,11 @@ public record JumpSettings(int states, double penalty, int starts) implements Ga
         JumpDescent second = lowest(higher);
         int agreeing = (int) higher.stream().filter(end -> tied(end, second)).count();
         return Optional.of(new RunnerUp(second.objective() - best.objective(), agreeing));
+    }
+
+    private boolean neverChanges(JumpDescent descent) {
+        int[] path = descent.path().states();
+        return states > 1 && Arrays.stream(path).allMatch(state -> state == path[0]);
     }
 
     private Optional<JumpCentres> previous(FitRequest request) {

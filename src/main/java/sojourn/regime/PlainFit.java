@@ -9,13 +9,18 @@ final class PlainFit {
 
     /** Converged, unless a state stands on fewer observations than it needs: then degenerate. */
     static Fit of(Described described, Fit.Search search, int dimension, Optional<Matching> matching) {
-        return ended(Outcome.CONVERGED, "", described, search, dimension, matching);
+        return of(described, search, dimension, matching, "");
+    }
+
+    /** The same; {@code hint} says after a refusal what to do about it. */
+    static Fit of(Described described, Fit.Search search, int dimension, Optional<Matching> matching, String hint) {
+        return ended(Outcome.CONVERGED, "", described, search, dimension, matching, hint);
     }
 
     /** Stopped at the limit of its search, because of {@code explanation}, unless degenerate. */
     static Fit unfinished(
             Described described, Fit.Search search, int dimension, Optional<Matching> matching, String explanation) {
-        return ended(Outcome.ITERATION_LIMIT, explanation, described, search, dimension, matching);
+        return ended(Outcome.ITERATION_LIMIT, explanation, described, search, dimension, matching, "");
     }
 
     private static Fit ended(
@@ -24,7 +29,8 @@ final class PlainFit {
             Described described,
             Fit.Search search,
             int dimension,
-            Optional<Matching> matching) {
+            Optional<Matching> matching,
+            String hint) {
         int observations = described.observations();
         double[] occupancy = described.orderBy().occupancy();
         int least = 0;
@@ -38,11 +44,12 @@ final class PlainFit {
                 ? because
                 : String.format(
                         Locale.ROOT,
-                        "{%d} accounts for %.0f of %d observations, fewer than the %d it needs",
+                        "{%d} accounts for %.0f of %d observations, fewer than the %d it needs%s",
                         least,
                         count,
                         observations,
-                        needed);
+                        needed,
+                        hint);
         return Fit.of(
                 sound ? end : Outcome.DEGENERATE,
                 explanation,

@@ -59,6 +59,29 @@ class ForetoldTransitionsTest {
         }
     }
 
+    /** Probabilities that never move fit every matrix that keeps them where they are: what was found is no finding, and it is told. */
+    @Test
+    void probabilitiesThatHardlyVaryAreAnEvent() {
+        double[] weights = new double[2 * ROWS];
+        for (int t = 0; t < ROWS; t++) {
+            weights[2 * t] = 0.3 + 1e-6 * (t % 7);
+            weights[2 * t + 1] = 1 - weights[2 * t];
+        }
+        assertThat(ForetoldTransitions.search(RowWeights.of(2, weights)).events())
+                .contains("transitions-undetermined");
+        assertThat(ForetoldTransitions.search(RowWeights.of(2, random(2, 3))).events())
+                .isEmpty();
+        int[] path = {0, 0, 2, 2, 0};
+        assertThat(ForetoldTransitions.search(RowWeights.path(3, path)).events())
+                .isEmpty();
+    }
+
+    @Test
+    void aSearchThatRanOutOfSweepsIsAnEvent() {
+        assertThat(ForetoldTransitions.search(RowWeights.of(3, random(3, 7)), 1).events())
+                .containsExactly("transitions-unfinished");
+    }
+
     /** A chain that stays 100 and 25 bars, filtered by its own parameters from observations that overlap. */
     @Test
     void aChainSeenThroughItsFilterIsFoundAndMeanProductsWouldNotFindIt() {

@@ -255,6 +255,9 @@ class JumpSettingsTest {
         Fit degenerate = fit(few, 2);
         assertThat(degenerate.outcome()).isEqualTo(Outcome.DEGENERATE);
         assertThat(degenerate.explanation()).contains("of 100 observations, fewer than the 5 it needs");
+        Fit dear = new JumpSettings(2, 1e6, 3).fit(Fixtures.request(sizes(1, 100, 10)), StartRunner.sequential());
+        assertThat(dear.explanation()).endsWith("; the penalty keeps the path in one regime, lower it");
+        assertThat(degenerate.explanation()).doesNotContain("penalty");
         assertThat(fit(few, 1).outcome()).isEqualTo(Outcome.CONVERGED);
         boolean[] never = {true, false, true, false, true, false, true, false, true, false, true, false};
         double[] two = new double[24];
