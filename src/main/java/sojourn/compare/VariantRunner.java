@@ -1,6 +1,7 @@
 package sojourn.compare;
 
 import java.util.Optional;
+import java.util.stream.IntStream;
 import sojourn.archive.PathFile;
 import sojourn.market.PriceTable;
 import sojourn.measure.Yardstick;
@@ -48,10 +49,19 @@ final class VariantRunner {
         return new Run.Failed(ready.file(), ready.timelineKey(), reason);
     }
 
+    /** Bars on which anything was observed. */
+    private static long observations(PriceTable table, Strategy strategy) {
+        return IntStream.range(1, table.size())
+                .mapToObj(table::knownAt)
+                .filter(known -> strategy.regimes().observe().stream()
+                        .anyMatch(one -> one.at(known).isPresent()))
+                .count();
+    }
+
     private static String noFit(RegimeTimeline timeline, PriceTable table, Strategy strategy) {
         if (timeline.fits().isEmpty()) {
             return "no fit was due: first-fit-after is " + strategy.refit().firstFitAfter()
-                    + " observations and there are " + table.size()
+                    + " observations and there are " + observations(table, strategy) + " on " + table.size()
                     + " common bars; give longer price files or a smaller first-fit-after";
         }
         FitRecord last = timeline.fits().get(timeline.fits().size() - 1);

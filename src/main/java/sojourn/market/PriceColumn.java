@@ -78,12 +78,19 @@ record PriceColumn(String key, OptionalInt index, Bound bound) {
             String remedy = "write prices and volumes between 1e-30 and 1e30, in another unit if need be";
             faults.add(at(row, key + " " + text + " is beyond any price or volume", remedy), kind("size"), remedy);
         } else if (!bound.allows(number.getAsDouble())) {
-            String remedy = "mend it, or leave the cell empty if there is none";
+            String remedy = "mend it, or leave the cell empty if there is none" + ofLevels();
             faults.add(at(row, key + " " + text + " " + bound.fault, remedy), kind("bound"), remedy);
         } else {
             return number;
         }
         return OptionalDouble.empty();
+    }
+
+    /** A series counts as an asset, whose prices are above 0, if anything but its changes is asked for. */
+    private String ofLevels() {
+        return key.equals("close")
+                ? "; a rate or a spread may be at or below 0 where only 'change' of it is observed and 'order-by' names another series"
+                : "";
     }
 
     private Problem at(Row row, String what, String remedy) {

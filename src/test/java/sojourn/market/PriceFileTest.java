@@ -115,7 +115,8 @@ class PriceFileTest {
                 2020-01-09,11,13,10.5,12
                 """))
                 .containsExactly(
-                        "prices.csv:2:20: close -11 is not above 0; mend it, or leave the cell empty if there is none",
+                        "prices.csv:2:20: close -11 is not above 0; mend it, or leave the cell empty if there is none"
+                                + "; a rate or a spread may be at or below 0 where only 'change' of it is observed and 'order-by' names another series",
                         "prices.csv:3:12: open 0 is not above 0; mend it, or leave the cell empty if there is none",
                         "prices.csv:3:26: volume -1 is below 0; mend it, or leave the cell empty if there is none",
                         "prices.csv:4:15: high 9 lies below low 10; mend one of the two",
@@ -154,7 +155,8 @@ class PriceFileTest {
     void zeroIsNoPrice() {
         assertThat(faults(folder, GOOD + "2020-01-06,0.00\n"))
                 .containsExactly(
-                        "prices.csv:4:12: close 0.00 is not above 0; mend it, or leave the cell empty if there is none");
+                        "prices.csv:4:12: close 0.00 is not above 0; mend it, or leave the cell empty if there is none"
+                                + "; a rate or a spread may be at or below 0 where only 'change' of it is observed and 'order-by' names another series");
     }
 
     @Test

@@ -31,8 +31,18 @@ public record OneKeyShape<T>(Map<String, Shape<? extends T>> variants) implement
         for (Map.Entry<String, MapNode.Entry> entry : map.entries().entrySet()) {
             Shape<? extends T> variant = variants.get(entry.getKey());
             if (variant == null) {
-                UnknownKey.tell(
-                        entry.getKey(), entry.getValue().keyPlace(), variants.keySet(), variants.keySet(), problems);
+                MisplacedKey.in(map, entry.getKey(), variants)
+                        .ifPresentOrElse(
+                                remedy -> problems.add(
+                                        entry.getValue().keyPlace(),
+                                        "key '" + entry.getKey() + "' stands beside the key it belongs to",
+                                        remedy),
+                                () -> UnknownKey.tell(
+                                        entry.getKey(),
+                                        entry.getValue().keyPlace(),
+                                        variants.keySet(),
+                                        variants.keySet(),
+                                        problems));
                 continue;
             }
             known.add(entry.getKey());
