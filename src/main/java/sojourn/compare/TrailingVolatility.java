@@ -42,6 +42,16 @@ final class TrailingVolatility {
         return volatility;
     }
 
+    /** The same where closes are known so many bars late: each bar is told what stood so many bars before. */
+    TrailingVolatility knownAfter(int bars) {
+        TrailingVolatility later = new TrailingVolatility(recent.length);
+        for (int bar = 0; bar < recent.length; bar++) {
+            later.recent[bar] = bar < bars ? Double.NaN : recent[bar - bars];
+            later.soFar[bar] = bar < bars ? Double.NaN : soFar[bar - bars];
+        }
+        return later;
+    }
+
     /** The last bar's simple return of the mix; what cash earned is left out. */
     private static double moved(Known known, Weights mix) {
         double moved = 0;

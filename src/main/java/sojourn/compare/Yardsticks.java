@@ -95,8 +95,11 @@ final class Yardsticks {
     }
 
     private Policy gate() {
-        Weights ordering = Weights.named(Map.of(file.regimes().orderedBy(), 1.0), table.assets());
-        return new VolatilityGate(ready.policy(), timeline, table, TrailingVolatility.of(table, ordering));
+        String asset = file.regimes().orderedBy();
+        Weights ordering = Weights.named(Map.of(asset, 1.0), table.assets());
+        TrailingVolatility told =
+                TrailingVolatility.of(table, ordering).knownAfter(file.regimes().barsLate(asset));
+        return new VolatilityGate(ready.policy(), timeline, table, told);
     }
 
     /** The strategy's decision bars, limits and band; nothing is kept back and every step is taken in full. */

@@ -5,8 +5,8 @@ import sojourn.inference.Estimate;
 import sojourn.inference.WeightedMoments;
 
 /**
- * Moments per bar brought to a year: the mean times P bars a year, the deviation times sqrt P, errors alike. Undefined for
- * a series of less than a year of bars: nothing is annualised from less.
+ * Moments per bar brought to a year: the mean times P bars a year, the deviation times sqrt P, errors alike. Undefined
+ * where the weights, which say how many bars of the regime there were, sum to less than a year of bars: nothing is annualised from less.
  *
  * @param mean P m
  * @param meanError its standard error
@@ -17,9 +17,9 @@ public record Annual(Estimate mean, Estimate meanError, Estimate volatility, Est
     /** Of moments of the subject's returns. */
     public static Annual of(WalkedRegimes subject, WeightedMoments moments) {
         double periods = subject.barsPerYear();
-        if (moments.count() < periods && moments.mean() instanceof Estimate.Value) {
-            Estimate none =
-                    new Estimate.Undefined(Estimate.Reason.TOO_FEW_OBSERVATIONS, "there is less than a year of bars");
+        if (moments.weight() < periods && moments.mean() instanceof Estimate.Value) {
+            Estimate none = new Estimate.Undefined(
+                    Estimate.Reason.TOO_FEW_OBSERVATIONS, "there is less than a year of bars of this regime");
             return new Annual(none, none, none, none);
         }
         double root = Math.sqrt(periods);

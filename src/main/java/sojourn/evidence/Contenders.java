@@ -28,9 +28,14 @@ final class Contenders {
             attempt.result()
                     .ifPresentOrElse(rival -> all.enter(rival, own), () -> all.absent.put(gauge, attempt.reason()));
         });
-        all.secondMoments.put(RegimeEvidence.EXPONENTIAL, PlainVolatility.exponential(subject.returns()));
-        all.secondMoments.put(RegimeEvidence.ROLLING, PlainVolatility.rolling(subject.returns()));
+        all.secondMoments.put(
+                RegimeEvidence.EXPONENTIAL, plain(subject, PlainVolatility.exponential(subject.returns())));
+        all.secondMoments.put(RegimeEvidence.ROLLING, plain(subject, PlainVolatility.rolling(subject.returns())));
         return all;
+    }
+
+    private static PerBar plain(WalkedRegimes subject, PerBar forecasts) {
+        return PlainVolatility.knownAfter(subject.barsLate(), forecasts);
     }
 
     private void enter(Rival rival, int own) {

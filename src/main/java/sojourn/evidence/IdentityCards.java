@@ -59,7 +59,7 @@ final class IdentityCards {
         return new IdentityCard.LastFit(OptionalDouble.of(fit.occupancy()[own]), stay, windowReturns(last, own));
     }
 
-    /** On bars with an observation; {@code k} is the fit's own state. */
+    /** On bars with an observation whose return was known at the fit; {@code k} is the fit's own state. */
     private WeightedMoments windowReturns(Stretch last, int k) {
         Fit fit = last.record().fit();
         if (fit.model().isEmpty()) {
@@ -67,7 +67,7 @@ final class IdentityCards {
         }
         int end = last.from() + 1;
         Smoothed smoothed = Smoothed.of(fit.model().get(), subject.rows(last.windowStart(), end));
-        int[] bars = IntStream.range(last.windowStart(), end)
+        int[] bars = IntStream.range(last.windowStart(), Math.max(last.windowStart(), end - subject.barsLate()))
                 .filter(bar -> subject.anyObserved(bar) && subject.returns().has(bar))
                 .toArray();
         double[] weights = Arrays.stream(bars)

@@ -45,6 +45,9 @@ public final class ImpliedMoments {
         this.squares = new double[states];
         this.sizes = new double[states];
         for (int k = 0; k < states; k++) {
+            if (longRun[k] == 0) {
+                continue; // a regime that is left for good adds nothing, not even if its kurtosis is infinite
+            }
             double d = emission.mean(k, 0) - mean;
             double s2 = emission.standardDeviation(k, 0) * emission.standardDeviation(k, 0);
             squares[k] = s2 + d * d;

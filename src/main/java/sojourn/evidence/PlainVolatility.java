@@ -47,6 +47,11 @@ final class PlainVolatility {
         });
     }
 
+    /** The same forecasts where returns are known so many bars late: each says of its bar what an earlier one said of an earlier bar. */
+    static PerBar knownAfter(int bars, PerBar forecasts) {
+        return PerBar.of(forecasts.bars(), bar -> bar < bars ? OptionalDouble.empty() : forecasts.at(bar - bars));
+    }
+
     private static double square(PerBar returns, int bar) {
         double earned = returns.at(bar).orElseThrow();
         return earned * earned;

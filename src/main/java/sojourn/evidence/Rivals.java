@@ -7,6 +7,7 @@ import sojourn.regime.EmissionFamily;
 import sojourn.regime.ModelKind;
 import sojourn.regime.RecentVolatility;
 import sojourn.regime.VolatilityThresholdSettings;
+import sojourn.walk.KnownAfter;
 import sojourn.walk.LogRealisedVolatility;
 import sojourn.walk.LogReturn;
 import sojourn.walk.Observation;
@@ -56,13 +57,19 @@ final class Rivals {
         return own.given().isPresent() ? List.of(new LogReturn(own.orderedBy())) : own.observe();
     }
 
+    /** As late as the strategy itself sees that asset. */
+    private static Observation asKnown(RegimeSettings own, Observation observation) {
+        int bars = own.barsLate(observation.asset());
+        return bars == 0 ? observation : new KnownAfter(observation, bars);
+    }
+
     /** Two regimes told by the recent volatility of the asset itself, as a desk without a model would. */
     private static RegimeSettings threshold(RegimeSettings own) {
         VolatilityThresholdSettings settings =
                 new VolatilityThresholdSettings(new RecentVolatility.Exponential(DECAY), STORM_ABOVE, CALM_BELOW);
         return new RegimeSettings(
                 ModelKind.VOLATILITY_THRESHOLD,
-                List.of(new SimpleReturn(own.orderedBy())),
+                List.of(asKnown(own, new SimpleReturn(own.orderedBy()))),
                 TWO,
                 EmissionFamily.NORMAL,
                 Optional.empty(),
@@ -75,7 +82,7 @@ final class Rivals {
     private static RegimeSettings jump(RegimeSettings own) {
         return new RegimeSettings(
                 ModelKind.JUMP,
-                List.of(new LogRealisedVolatility(own.orderedBy(), JUMP_BARS)),
+                List.of(asKnown(own, new LogRealisedVolatility(own.orderedBy(), JUMP_BARS))),
                 states(ModelKind.JUMP, own),
                 EmissionFamily.NORMAL,
                 Optional.empty(),

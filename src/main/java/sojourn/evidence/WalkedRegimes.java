@@ -113,6 +113,11 @@ public final class WalkedRegimes {
         return asset;
     }
 
+    /** How many bars late that asset's closes are known. */
+    int barsLate() {
+        return regimes.barsLate(regimes.orderedBy());
+    }
+
     /** What the gauge saw at each bar: the first of its observations if there are several. */
     public PerBar observed() {
         return observed.get(0);

@@ -37,7 +37,7 @@ final class ObservationLog {
     ObservationLog(List<Observation> observed, List<String> assets) {
         this.observed = List.copyOf(observed);
         this.assets = assets.size();
-        this.late = assets.stream().mapToInt(this::barsLate).toArray();
+        this.late = assets.stream().mapToInt(asset -> barsLate(observed, asset)).toArray();
         this.values = new double[64 * observed.size()];
         this.missing = new boolean[64 * observed.size()];
         this.returns = new double[64 * this.assets];
@@ -45,7 +45,7 @@ final class ObservationLog {
     }
 
     /** As late as the earliest of the observations of it; an asset that is not observed is not late. */
-    private int barsLate(String asset) {
+    static int barsLate(List<Observation> observed, String asset) {
         return observed.stream()
                 .filter(one -> one.asset().equals(asset))
                 .mapToInt(Observation::barsLate)

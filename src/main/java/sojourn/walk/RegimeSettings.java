@@ -253,6 +253,11 @@ public record RegimeSettings(
                 model, count, emission, initial.orElse(InitialDistribution.FREE), starts, particulars.prior());
     }
 
+    /** How many bars late a close of this asset is known: as late as the earliest observation of it; 0 if it is not observed. */
+    public int barsLate(String asset) {
+        return ObservationLog.barsLate(observe, asset);
+    }
+
     /** The asset whose returns order the regimes. */
     public String orderedBy() {
         return orderBy.orElseGet(() -> observe.get(0).asset());

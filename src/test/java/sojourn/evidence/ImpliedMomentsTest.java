@@ -83,6 +83,19 @@ class ImpliedMomentsTest {
         assertThat(number(implied.skewness())).isZero();
     }
 
+    /** Kurtosis of what remains, 3 (nu - 2) / (nu - 4) = 4.5 for nu = 8, although the regime that is left for good has an infinite one. */
+    @Test
+    void aRegimeThatIsLeftForGoodSaysNothingOfTheLongRun() {
+        ImpliedMoments implied = implied(HiddenMarkov.of(
+                new double[] {0, 1},
+                new double[] {1, 0, 0.1, 0.9},
+                StudentT.of(new double[] {0, 0}, new double[] {1, 3}, new double[] {8, 3})));
+        assertThat(number(implied.kurtosis())).isCloseTo(4.5, within(1e-12));
+        assertThat(number(implied.skewness())).isZero();
+        assertThat(number(implied.ofSquares(1))).isCloseTo(0, within(1e-12));
+        assertThat(number(implied.ofSizes(1))).isCloseTo(0, within(1e-12));
+    }
+
     @Test
     void tailsTooFatHaveNoKurtosisButStillASize() {
         RegimeModel model = HiddenMarkov.of(
