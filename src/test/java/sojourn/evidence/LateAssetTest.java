@@ -72,9 +72,10 @@ class LateAssetTest {
     }
 
     private static OptionalDouble ofLastBar(WalkedRegimes subject, String name) {
-        return Contenders.of(subject, Subjects.attempts(List.of()))
-                .secondMoments()
-                .get(name)
+        return Optional.ofNullable(Contenders.of(subject, Subjects.attempts(List.of()))
+                        .secondMoments()
+                        .get(name))
+                .orElseThrow()
                 .at(BARS - 1);
     }
 
