@@ -133,6 +133,36 @@ class LatestCommandTest {
                 .contains("estimated costs");
     }
 
+    /** Units worked from the closes as the file quotes them. */
+    @Test
+    void ordersAtTheOpenInLotsSettledAtTheDecisionGoByQuotedClosesThoughDividendsArePaid() {
+        List<String> lines = PRICES.lines().toList();
+        List<String> paying = new ArrayList<>(List.of("date,close,open,dividend"));
+        for (int row = 1; row < lines.size(); row++) {
+            String close = lines.get(row).split(",", -1)[1];
+            paying.add(lines.get(row) + "," + close + (row % 60 == 0 ? ",1.5" : ",0"));
+        }
+        double quoted = Double.parseDouble(lines.get(lines.size() - 1).split(",", -1)[1]);
+        folder.with("paying.csv", String.join("\n", paying) + "\n");
+        folder.with("mine.csv", "asset,units\nstocks,10\ncash," + 16.5 * quoted + "\n");
+        folder.with(
+                "paying.yaml",
+                StrategyText.named("Paying")
+                        .with("prices", "{stocks: {csv: paying.csv, dividend: dividend}}")
+                        .with("regimes", DECLARED)
+                        .with("trade", "{fill: next-open, size-at: decision, lots: {stocks: 7}}"));
+        JsonNode found =
+                json("paying.yaml", "--holdings", folder.path("mine.csv").toString());
+        assertThat(found.get("forecast").get("stocks").get("last_close").asDouble())
+                .isEqualTo(quoted);
+        JsonNode leg = found.get("decision").get("orders").get(0).get("legs").get(0);
+        // wealth is 26.5 units: 21 are whole lots of 7
+        assertThat(leg.get("units").asDouble()).isCloseTo(11, within(1e-9));
+        assertThat(latest("paying.yaml", "--holdings", folder.path("mine.csv").toString())
+                        .out())
+                .contains("Quantities are settled at the close of the decision");
+    }
+
     @Test
     void whatIsHeldAsWantedNeedsNoOrder() {
         folder.with("mine.csv", "asset,units\nstocks,10\n");
