@@ -1,7 +1,5 @@
 package sojourn.document.shape;
 
-import com.fasterxml.jackson.databind.JsonNode;
-import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.util.List;
 import java.util.Optional;
 import java.util.function.Function;
@@ -12,7 +10,7 @@ import sojourn.document.Refusal;
 import sojourn.document.Shape;
 
 /** A shape with a rule on its value that its schema does not show. */
-public record RefusingShape<T>(Shape<T> source, Function<? super T, List<Refusal>> rule) implements Shape<T> {
+public record RefusingShape<T>(Shape<T> source, Function<? super T, List<Refusal>> rule) implements Wrapping<T, T> {
     @Override
     public Optional<T> read(Node node, Problems problems) {
         Optional<T> value = source.read(node, problems);
@@ -24,30 +22,5 @@ public record RefusingShape<T>(Shape<T> source, Function<? super T, List<Refusal
             problems.add(at, refusal.what(), refusal.remedy());
         }
         return refusals.isEmpty() ? value : Optional.empty();
-    }
-
-    @Override
-    public JsonNode resolved(Node node) {
-        return source.resolved(node);
-    }
-
-    @Override
-    public ObjectNode schema() {
-        return source.schema();
-    }
-
-    @Override
-    public String expected() {
-        return source.expected();
-    }
-
-    @Override
-    public boolean mayBe(Node node) {
-        return source.mayBe(node);
-    }
-
-    @Override
-    public String hint(Node node) {
-        return source.hint(node);
     }
 }
