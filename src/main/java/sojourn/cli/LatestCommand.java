@@ -1,10 +1,8 @@
 package sojourn.cli;
 
-import java.nio.file.Files;
 import java.nio.file.Path;
 import java.time.Instant;
 import java.time.temporal.ChronoUnit;
-import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.concurrent.Callable;
@@ -14,7 +12,6 @@ import picocli.CommandLine.Mixin;
 import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.Option;
 import picocli.CommandLine.ParameterException;
-import picocli.CommandLine.Parameters;
 import picocli.CommandLine.Spec;
 import sojourn.archive.SealShelf;
 import sojourn.compare.LocalWorkers;
@@ -50,9 +47,8 @@ final class LatestCommand implements Callable<Integer> {
     @SuppressWarnings("NullAway.Init") // set by the command line library
     private CommandSpec spec;
 
-    @Parameters(paramLabel = "FILE", description = "A strategy file.")
-    @SuppressWarnings("NullAway.Init") // set by the command line library
-    private Path given;
+    @Mixin
+    private final OneStrategy strategy = new OneStrategy();
 
     @Option(
             names = "--holdings",
@@ -85,9 +81,9 @@ final class LatestCommand implements Callable<Integer> {
     @Override
     public Integer call() {
         options.refuseNonsense(spec);
+        strategy.refuseFolder(spec);
         refuseContradictions();
-        Prepared.Ready ready =
-                Latest.prepared(StrategyFiles.read(List.of(given)).get(0));
+        Prepared.Ready ready = Latest.prepared(strategy.read());
         try (Workers workers = new LocalWorkers(options.threads())) {
             return verify == null ? tell(ready, workers) : judge(verify, ready, workers);
         }
@@ -115,7 +111,7 @@ final class LatestCommand implements Callable<Integer> {
                                         tipping,
                                         Optional.ofNullable(holdings).map(Path::toString)));
         if (seal) {
-            SealShelf shelf = SealShelf.of(options.results(), StrategyFiles.resultName(List.of(given)));
+            SealShelf shelf = SealShelf.of(options.results(), strategy.resultName());
             String now = Instant.now().truncatedTo(ChronoUnit.SECONDS).toString();
             options.tell(console, Seal.put(shelf, latest, now));
         }
@@ -123,9 +119,6 @@ final class LatestCommand implements Callable<Integer> {
     }
 
     private void refuseContradictions() {
-        if (Files.isDirectory(given)) {
-            throw new ParameterException(spec.commandLine(), given + " is a folder; name one strategy file");
-        }
         if (verify != null && (seal || holdings != null)) {
             throw new ParameterException(
                     spec.commandLine(),

@@ -1,15 +1,11 @@
 package sojourn.cli;
 
-import java.nio.file.Files;
-import java.nio.file.Path;
 import java.time.Instant;
 import java.util.List;
 import java.util.concurrent.Callable;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
 import picocli.CommandLine.Model.CommandSpec;
-import picocli.CommandLine.ParameterException;
-import picocli.CommandLine.Parameters;
 import picocli.CommandLine.Spec;
 import sojourn.archive.ResultFolder;
 import sojourn.compare.LocalWorkers;
@@ -39,9 +35,8 @@ final class RegimesCommand implements Callable<Integer> {
     @SuppressWarnings("NullAway.Init") // set by the command line library
     private CommandSpec spec;
 
-    @Parameters(paramLabel = "FILE", description = "A strategy file.")
-    @SuppressWarnings("NullAway.Init") // set by the command line library
-    private Path given;
+    @Mixin
+    private final OneStrategy strategy = new OneStrategy();
 
     @Mixin
     private final CommonOptions options = new CommonOptions();
@@ -53,15 +48,15 @@ final class RegimesCommand implements Callable<Integer> {
     @Override
     public Integer call() {
         options.refuseNonsense(spec);
-        refuseFolder();
+        strategy.refuseFolder(spec);
         ResultFolder.refuseUnless(options.results());
         Instant started = Instant.now();
-        StrategyFile file = StrategyFiles.read(List.of(given)).get(0);
+        StrategyFile file = strategy.read();
         RegimeInquiry inquiry;
         try (LocalWorkers workers = new LocalWorkers(options.threads())) {
             inquiry = RegimeInquiry.of(file, workers, options.progress(console));
         }
-        String name = StrategyFiles.resultName(List.of(given)) + "-regimes";
+        String name = strategy.resultName() + "-regimes";
         ResultFolder.Published published =
                 RegimesWriter.write(options.results(), name, inquiry, options.facts(spec, started));
         console.out().print(options.json() ? RegimesJson.of(inquiry) : RegimesText.of(inquiry));
@@ -72,11 +67,5 @@ final class RegimesCommand implements Callable<Integer> {
             faults.forEach(fault -> fault.printStackTrace(console.err()));
         }
         return faults.isEmpty() ? 0 : OUR_BUG;
-    }
-
-    private void refuseFolder() {
-        if (Files.isDirectory(given)) {
-            throw new ParameterException(spec.commandLine(), given + " is a folder; name one strategy file");
-        }
     }
 }

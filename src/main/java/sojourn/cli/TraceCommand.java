@@ -1,16 +1,11 @@
 package sojourn.cli;
 
-import java.nio.file.Files;
-import java.nio.file.Path;
 import java.time.LocalDate;
-import java.util.List;
 import java.util.concurrent.Callable;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
 import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.Option;
-import picocli.CommandLine.ParameterException;
-import picocli.CommandLine.Parameters;
 import picocli.CommandLine.Spec;
 import sojourn.compare.LocalWorkers;
 import sojourn.compare.Prepared;
@@ -37,9 +32,8 @@ final class TraceCommand implements Callable<Integer> {
     @SuppressWarnings("NullAway.Init") // set by the command line library
     private CommandSpec spec;
 
-    @Parameters(paramLabel = "FILE", description = "A strategy file.")
-    @SuppressWarnings("NullAway.Init") // set by the command line library
-    private Path given;
+    @Mixin
+    private final OneStrategy strategy = new OneStrategy();
 
     @Option(
             names = "--date",
@@ -60,11 +54,8 @@ final class TraceCommand implements Callable<Integer> {
     @Override
     public Integer call() {
         options.refuseNonsense(spec);
-        if (Files.isDirectory(given)) {
-            throw new ParameterException(spec.commandLine(), given + " is a folder; name one strategy file");
-        }
-        Prepared.Ready ready =
-                Latest.prepared(StrategyFiles.read(List.of(given)).get(0));
+        strategy.refuseFolder(spec);
+        Prepared.Ready ready = Latest.prepared(strategy.read());
         try (Workers workers = new LocalWorkers(options.threads())) {
             Trace trace = Trace.of(ready, date, workers, options.progress(console));
             console.out().print(options.json() ? TraceJson.of(trace) : TraceText.of(trace));
