@@ -122,4 +122,20 @@ final class Fixtures {
         }
         return p;
     }
+
+    /** Means, variances, initial distribution and transitions of two normal states are those that the check expects. */
+    static void assertTwoStates(CheckValues check, RegimeModel after) {
+        double[][] transition = new double[2][2];
+        for (int k = 0; k < 2; k++) {
+            double sd = after.emission().standardDeviation(k, 0);
+            check.assertClose(
+                    "mean", after.emission().mean(k, 0), check.expected("mean").get(k));
+            check.assertClose("variance", sd * sd, check.expected("variance").get(k));
+            check.assertClose("delta", after.initial(k), check.expected("delta").get(k));
+            for (int j = 0; j < 2; j++) {
+                transition[k][j] = after.transition(k, j);
+            }
+        }
+        check.assertExpected("A", transition);
+    }
 }

@@ -40,18 +40,7 @@ class PriorTest {
         check.assertExpected("objective_after", objective.at(next) - unit);
         RegimeModel after = next.toModel(window, EmissionFamily.NORMAL);
         check.assertExpected("loglik_after", FilterState.after(after, x).logLikelihood());
-        double[][] transition = new double[2][2];
-        for (int k = 0; k < 2; k++) {
-            double sd = after.emission().standardDeviation(k, 0);
-            check.assertClose(
-                    "mean", after.emission().mean(k, 0), check.expected("mean").get(k));
-            check.assertClose("variance", sd * sd, check.expected("variance").get(k));
-            check.assertClose("delta", after.initial(k), check.expected("delta").get(k));
-            for (int j = 0; j < 2; j++) {
-                transition[k][j] = after.transition(k, j);
-            }
-        }
-        check.assertExpected("A", transition);
+        Fixtures.assertTwoStates(check, after);
     }
 
     @ParameterizedTest
